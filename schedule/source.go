@@ -1,0 +1,56 @@
+// Package schedule turns the rows of a column schedule into columns to design
+// and results back into columns of the schedule. It knows headings, units and
+// restraint notation, and no clause of any standard. The packages below it
+// read and write the files: workbook (.xlsx, .xlsm) and text (delimited).
+package schedule
+
+import "iter"
+
+// Kind is what a cell of a schedule holds.
+type Kind uint8
+
+// The kinds of cell.
+const (
+	Blank        Kind = iota
+	Text              // Text holds it, trimmed of nothing
+	Number            // Number holds it; Text as the file has it
+	Date              // a number that the spreadsheet shows as a date; Text as it would be shown
+	Bool              // Text is TRUE or FALSE
+	Fault             // an error value such as #VALUE!; Text holds it
+	Uncalculated      // a formula with no cached value that could not be calculated; Text holds the formula
+)
+
+// Cell is one cell as the file holds it, without meaning.
+type Cell struct {
+	Kind     Kind
+	Text     string
+	Number   float64
+	Fraction bool // shown with a fraction format (1/2)
+	Formula  bool // the value is the cached result of a formula
+	Merged   bool // the value is repeated here from the first cell of a merged range
+}
+
+// Row is one row of a sheet or one line of a text schedule.
+type Row struct {
+	Number int // from 1, as the spreadsheet or an editor counts
+	Hidden bool
+	Cells  []Cell // Cells[0] is column A; may be short
+}
+
+// Source is a file that may hold a schedule.
+type Source interface {
+	// Name is the file's name as given, for messages.
+	Name() string
+	// Sheets names the sheets that hold cells, in the order of the workbook;
+	// a text file has one, named "".
+	Sheets() []string
+	// Rows yields the rows of a sheet in order. It may be called again, and
+	// the row and its cells are valid only until the next one. Blank rows may be left out.
+	Rows(sheet string) iter.Seq2[*Row, error]
+	// HiddenColumns gives the columns (0 is A) that the sheet hides.
+	HiddenColumns(sheet string) map[int]bool
+	// Where names a cell in a message and in `cell` of the results:
+	// "Columns!F12" in a workbook, "line 12, column 6" in text.
+	Where(sheet string, row, col int) string
+	Close() error
+}
