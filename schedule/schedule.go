@@ -1,0 +1,108 @@
+package schedule
+
+import (
+	"iter"
+
+	"stanchion/design"
+)
+
+// Options say how a schedule is to be read.
+type Options struct {
+	Sheet    string       // the sheet that holds the schedule; empty: chosen by content
+	Settings []Assignment // from the command line: they beat those of the file
+	// SettingsFile is a two-column file of settings given beside a text
+	// schedule; nil: none. A sheet named Settings in the schedule's own
+	// workbook is read without it.
+	SettingsFile Source
+	// National resolves the name of a national set (ec3.NationalSet, or one
+	// that knows the user's own sets too).
+	National func(name string) (design.National, error)
+	Names    Names
+}
+
+// Names resolve the names that stand in cells. A function that is nil takes
+// every name as it stands.
+type Names struct {
+	Section func(name string) (string, error)    // to the name that the program writes
+	Family  func(names string) ([]string, error) // "UKC, SHS CF" to one entry a family
+	Grade   func(name string) (string, error)    // "s355 jr" to "S355JR"
+}
+
+// Member is what the schedule says of one member, from one row or from several
+// rows of the same mark and level.
+type Member struct {
+	Column   design.Column // of a member that cannot be read: what could be read of mark and place
+	Rows     []int         // rows of the sheet, from 1, the first being where the results stand
+	Problems []*Problem    // why the member cannot be designed; empty: it can
+}
+
+// Plan is a schedule whose header, number format, settings and rows are
+// understood. It holds a few bytes a row, so that schedules too long to hold
+// can be gone through once more.
+type Plan struct {
+	File     string
+	Sheet    string
+	Header   Header
+	Decimal  byte // '.' or ',': decided once per file
+	Settings Settings
+	Summary  Summary
+
+	rows *rows
+}
+
+// Header says where the schedule stands on its sheet.
+type Header struct {
+	First, Last int       // rows of the header, from 1, without the unit row
+	UnitRow     int       // 0: none
+	Columns     []Binding // the columns that are read, by rising column
+	Old         []int     // columns (0 is A) of an earlier run's results
+	// Width is the first column to the right of everything that the header and
+	// the members' rows hold, an earlier run's results left out if they stand
+	// last.
+	Width int
+}
+
+// Summary is what the reading has to say about the file as a whole.
+type Summary struct {
+	Members   int
+	Rows      int    // rows that belong to members
+	Hidden    int    // of which hidden
+	Totals    int    // total, subtotal and average rows passed over
+	Repeated  int    // repeated headers passed over
+	Footnotes int    // footnotes and headings between rows passed over
+	LeftAlone []Seen // headers that name a field and are not read
+	Notes     []string
+}
+
+// Seen is a header and why it is not read.
+type Seen struct {
+	Cell, Heading, Why string
+}
+
+// Schedule is a plan with all its members.
+type Schedule struct {
+	*Plan
+	Members []Member
+}
+
+// Read reads a whole schedule into memory.
+func Read(src Source, opts Options) (*Schedule, error) {
+	plan, err := Scan(src, opts)
+	if err != nil {
+		return nil, err
+	}
+	s := &Schedule{Plan: plan, Members: make([]Member, 0, plan.Summary.Members)}
+	for m, err := range plan.Members() {
+		if err != nil {
+			return nil, err
+		}
+		s.Members = append(s.Members, *m)
+	}
+	return s, nil
+}
+
+// Members yields the members in the order of their first rows. An error ends
+// them: the file could not be read on. It may be called again.
+func (p *Plan) Members() iter.Seq2[*Member, error] {
+	return p.rows.members
+}
