@@ -2,7 +2,6 @@ package stability
 
 import (
 	"math"
-	"slices"
 	"strconv"
 	"strings"
 
@@ -276,18 +275,14 @@ func positive(x float64) bool { return x > 0 && !math.IsInf(x, 1) }
 
 // rising reports whether heights lie strictly between 0 and length and rise.
 func rising(heights []float64, length float64) bool {
-	ordered := slices.IsSortedFunc(heights, func(a, b float64) int {
-		if a < b {
-			return -1
-		}
-		return 1
-	})
+	below := 0.0
 	for _, x := range heights {
-		if !(x > 0 && x < length) {
+		if !(x > below && x < length) {
 			return false
 		}
+		below = x
 	}
-	return ordered
+	return true
 }
 
 func (l *Lengths) swayingBeyond() error {
