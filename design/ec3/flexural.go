@@ -7,74 +7,111 @@ import (
 	"stanchion/design"
 )
 
-// buckle works out the resistance of a segment. EN 1993-1-1:2005 6.3.1.1 and
-// 6.3.1.2.
-func (c *Candidate) buckle(s *Segment, nEd, ncr float64, curve Curve) design.Buckling {
-	b := design.Buckling{From: s.From, To: s.To, Combination: s.Combination, Lcr: s.Lcr, How: s.How,
-		Ncr: ncr, Curve: curve.String(), Alpha: curve.Alpha(), NEd: nEd}
-	b.LambdaBar = math.Sqrt(c.NRk / ncr) // (6.50), class 4 (6.51)
+// Reduce returns the slenderness and resistance to buckling of a member of
+// characteristic resistance NRk (A fy, class 4 A_eff fy, N) with the elastic
+// critical load ncr, N. EN 1993-1-1:2005 6.3.1.1 and 6.3.1.2.
+func Reduce(nRk, ncr, gammaM1 float64, curve Curve) design.Buckling {
+	b := design.Buckling{Ncr: ncr, Curve: curve.String(), Alpha: curve.Alpha()}
+	b.LambdaBar = math.Sqrt(nRk / ncr) // (6.50), class 4 (6.51)
 	b.Phi = Phi(b.Alpha, b.LambdaBar)
 	b.Chi = Chi(b.Alpha, b.LambdaBar)
-	b.NbRd = b.Chi * c.NRk / c.GammaM1 // (6.47), class 4 (6.48)
+	b.NbRd = b.Chi * nRk / gammaM1 // (6.47), class 4 (6.48)
+	return b
+}
+
+// buckle works out the resistance of a segment with the elastic critical load
+// ncr, N, under a force nEd, N.
+func (c *Candidate) buckle(s *Segment, nEd, ncr float64, curve Curve) design.Buckling {
+	b := Reduce(c.NRk, ncr, c.GammaM1, curve)
+	b.From, b.To, b.Combination, b.Lcr, b.NEd = s.From, s.To, s.Combination, s.Lcr, nEd
 	return b
 }
 
 // assessFlexural checks flexural buckling of every segment about both axes.
 func (m *Member) assessFlexural(c *Candidate, a *Assessment) {
 	if c.Section.Shape == catalogue.ShapeAngle {
-		m.assessPrincipal(c, a, design.FlexuralY)
-		m.assessPrincipal(c, a, design.FlexuralZ)
+		m.assessPrincipal(c, a, axisY)
+		m.assessPrincipal(c, a, axisZ)
 		return
 	}
-	for i := range m.Y {
-		s := &m.Y[i]
-		a.keep(&a.Y, design.FlexuralY, c.buckle(s, s.NEd+m.ownWeight(c, s.From), c.EulerY/(s.Lcr*s.Lcr), c.CurveY))
+	m.assessAxis(c, a, a.SegY, axisY)
+	m.assessAxis(c, a, a.SegZ, axisZ)
+}
+
+// buckling axes: the slots of an Assessment that a check about them fills.
+const (
+	axisY = iota
+	axisZ
+	axisT
+)
+
+func (c *Candidate) about(axis int) (euler float64, curve Curve, kind design.Kind) {
+	if axis == axisY {
+		return c.EulerY, c.CurveY, design.FlexuralY
 	}
-	for i := range m.Z {
-		s := &m.Z[i]
-		a.keep(&a.Z, design.FlexuralZ, c.buckle(s, s.NEd+m.ownWeight(c, s.From), c.EulerZ/(s.Lcr*s.Lcr), c.CurveZ))
+	return c.EulerZ, c.CurveZ, design.FlexuralZ
+}
+
+func (m *Member) assessAxis(c *Candidate, a *Assessment, segments []Segment, axis int) {
+	euler, curve, kind := c.about(axis)
+	for i := range segments {
+		s := &segments[i]
+		if s.Lcr > 0 {
+			n := s.NEd + m.ownWeight(c.Section.Mass, s.From)
+			a.keep(axis, kind, s, c.buckle(s, n, euler/(s.Lcr*s.Lcr), curve))
+		}
 	}
 }
 
 // assessPrincipal checks an angle about u-u or v-v: wherever a y-y and a z-z
 // segment overlap, with the longer of their buckling lengths and the greater
 // of their forces.
-func (m *Member) assessPrincipal(c *Candidate, a *Assessment, kind design.Kind) {
-	euler, curve, worst := c.EulerY, c.CurveY, &a.Y
-	if kind == design.FlexuralZ {
-		euler, curve, worst = c.EulerZ, c.CurveZ, &a.Z
-	}
-	for i := range m.Y {
-		for j := range m.Z {
-			y, z := &m.Y[i], &m.Z[j]
+func (m *Member) assessPrincipal(c *Candidate, a *Assessment, axis int) {
+	euler, curve, kind := c.about(axis)
+	for i := range a.SegY {
+		y := &a.SegY[i]
+		for j := range a.SegZ {
+			z := &a.SegZ[j]
 			if y.Combination != z.Combination || y.To <= z.From || z.To <= y.From {
 				continue
 			}
-			s := *y
+			s := y
 			if z.Lcr > y.Lcr {
-				s = *z
+				s = z
 			}
-			n := max(y.NEd+m.ownWeight(c, y.From), z.NEd+m.ownWeight(c, z.From))
-			a.keep(worst, kind, c.buckle(&s, n, euler/(s.Lcr*s.Lcr), curve))
+			if s.Lcr > 0 {
+				n := max(y.NEd+m.ownWeight(c.Section.Mass, y.From), z.NEd+m.ownWeight(c.Section.Mass, z.From))
+				a.keep(axis, kind, s, c.buckle(s, n, euler/(s.Lcr*s.Lcr), curve))
+			}
 		}
 	}
 }
 
 // keep records a buckling check, and the values behind it where it is the
-// worst of its axis so far.
-func (a *Assessment) keep(worst *design.Buckling, kind design.Kind, b design.Buckling) {
-	if b.NEd > 0 || a.noCompression(b.Combination) {
+// worst of its axis so far. It reports whether it is. A segment in tension has
+// no check; its resistance stands where there is no other.
+func (a *Assessment) keep(axis int, kind design.Kind, s *Segment, b design.Buckling) bool {
+	if b.NEd > 0 || a.Member.idle(b.Combination) {
 		a.add(kind, "6.3.1.1(1)", b.Combination, b.From, b.To, max(b.NEd, 0), b.NbRd)
 	}
-	u, least := b.Utilisation(), worst.Utilisation()
-	if worst.NbRd == 0 || u > least || u == least && u == 0 && b.NbRd < worst.NbRd {
-		*worst = b
+	worst, from := &a.Y, &a.segY
+	switch axis {
+	case axisZ:
+		worst, from = &a.Z, &a.segZ
+	case axisT:
+		worst, from = &a.T, &a.segT
 	}
+	u, most := b.Utilisation(), worst.Utilisation()
+	if *from != nil && u <= most && (u > 0 || most > 0 || b.NbRd >= worst.NbRd) {
+		return false
+	}
+	*worst, *from = b, s
+	return true
 }
 
-// noCompression reports whether a combination has neither compression nor
-// tension, so that a check at utilisation 0 stands for it.
-func (a *Assessment) noCompression(combination int) bool {
-	f := &a.Member.Forces[combination]
+// idle reports whether a combination has no axial force at all, so that its
+// checks stand at utilisation 0.
+func (m *Member) idle(combination int) bool {
+	f := &m.Forces[combination]
 	return f.Least == 0 && f.Greatest == 0
 }

@@ -4,25 +4,37 @@ import (
 	"fmt"
 
 	"stanchion/design"
+	"stanchion/design/stability"
 )
 
 // Member is a column reduced to what its checks read: forces multiplied by
 // the growth of the settings, and the segments about each axis with their
-// buckling lengths. It does not change in Assess, so workers may share it.
+// buckling lengths. Nothing changes in it but by Reset; it reads the column
+// that it was made of, which must not change meanwhile.
 type Member struct {
-	Column *design.Column
-	Length float64 // mm
-	Forces []Force // one per combination, in order
+	Column   *design.Column
+	Settings *design.Settings
+	Length   float64 // mm
+	Growth   float64 // factor that the forces below already hold, and moments must still get
+	Forces   []Force // one per combination, in order
 
-	// Segments by combination, then height.
+	// Segments by combination, then height. Where VariesWithEI they are empty:
+	// an Assessment has them, for its candidate.
 	Y, Z []Segment
-	T    []TwistSegment
+	T    []Segment // between torsion restraints; Lcr is the torsional buckling length L_T
+
+	AxialOnly bool // no combination bends it
 
 	Notes []string // what a person must know of how the row was taken
 
-	// WeightPerMass times a section's mass per metre times the height of the
-	// column's own top above a point is the own weight acting there, N.
+	// WeightPerMass times a section's mass per metre, times the height of the
+	// column's top above a point, is the own weight acting there, N.
 	WeightPerMass float64
+
+	y, z  stability.Lengths
+	twist []stability.Segment
+	spare []stability.Segment
+	axial AxialDemand
 }
 
 // Force is the extent of the axial force along the member in one combination,
@@ -35,21 +47,12 @@ type Force struct {
 	FromLow, ToLow float64 // the part under Least, mm
 }
 
-// Segment is a length between restraints about one axis in one combination.
+// Segment is a length between points that hold the member about one axis, in
+// one combination.
 type Segment struct {
+	stability.Segment
 	Combination int
-	From, To    float64 // mm from the bottom
-	Lcr         float64 // buckling length, mm
-	NEd         float64 // greatest compression in it, N; negative where all is tension
-	How         string  // how Lcr was found, for people
-}
-
-// TwistSegment is a length between torsion restraints in one combination; Lcr
-// is the torsional buckling length L_T.
-type TwistSegment struct {
-	Segment
-	LcrY, LcrZ float64 // greatest flexural buckling lengths of the segments that overlap it, mm
-	Enforced   bool    // z-z is held off the shear centre inside the segment, without torsion: it turns about that line
+	NEd         float64 // greatest compression in it, own weight left out, N; negative where all is tension
 }
 
 // NewMember reduces a column. The error says why the row cannot be designed
@@ -64,41 +67,142 @@ func NewMember(col *design.Column, set *design.Settings) (*Member, error) {
 
 // Reset makes m the reduction of another column, reusing its memory.
 func (m *Member) Reset(col *design.Column, set *design.Settings) error {
-	*m = Member{Column: col, Length: col.Length,
-		Forces: m.Forces[:0], Y: m.Y[:0], Z: m.Z[:0], T: m.T[:0], Notes: m.Notes[:0],
-		WeightPerMass: set.SelfWeight * design.Gravity / 1000}
-	if !(col.Length > 0) {
-		return fmt.Errorf("the length is %g mm: give one above 0", col.Length)
+	m.Column, m.Settings, m.Length = col, set, col.Length
+	m.Forces, m.Y, m.Z, m.T, m.Notes = m.Forces[:0], m.Y[:0], m.Z[:0], m.T[:0], m.Notes[:0]
+	m.WeightPerMass = set.SelfWeight * design.Gravity / 1000 // kg/m to N/mm
+	m.Growth = set.Growth
+	if m.Growth == 0 {
+		m.Growth = 1
+	}
+	if err := m.measure(set.Method); err != nil {
+		return err
 	}
 	if len(col.Combinations) == 0 {
 		return fmt.Errorf("there is no axial force: give N_Ed of at least one combination")
 	}
-	growth := set.Growth
-	if growth == 0 {
-		growth = 1
-	}
+	m.AxialOnly = true
 	for i := range col.Combinations {
-		m.Forces = append(m.Forces, extent(&col.Combinations[i], i, col.Length, growth))
+		if err := m.load(i); err != nil {
+			return err
+		}
+		m.AxialOnly = m.AxialOnly && !bends(&col.Combinations[i], set.Moments)
 	}
-	return m.cut(growth)
+	m.note()
+	m.axial.of(m)
+	return nil
+}
+
+// measure finds the segments about both axes and against twist.
+func (m *Member) measure(method design.Method) (err error) {
+	if err := m.y.Find(m.Column, stability.AxisY, method); err != nil {
+		return err
+	}
+	if err := m.z.Find(m.Column, stability.AxisZ, method); err != nil {
+		return err
+	}
+	if t := &m.Column.Torsion; m.eccentric() && !t.Given {
+		// Restraints that hold one flange alone do not hold the twist.
+		col := *m.Column
+		col.Torsion.Given = true
+		m.twist, err = stability.Torsion(m.twist[:0], &col)
+		return err
+	}
+	m.twist, err = stability.Torsion(m.twist[:0], m.Column)
+	return err
+}
+
+// eccentric reports whether z-z is held off the shear centre without the
+// twist being held.
+func (m *Member) eccentric() bool {
+	return m.Column.Torsion.EccentricFlange || m.Column.Torsion.Eccentric != 0
+}
+
+// load adds the forces and segments of a combination.
+func (m *Member) load(index int) error {
+	c := &m.Column.Combinations[index]
+	if err := finite(c); err != nil {
+		return err
+	}
+	m.Forces = append(m.Forces, extent(c, index, m.Length, m.Growth))
+	if !m.y.VariesWithEI() {
+		m.Y = m.cut(m.Y, &m.spare, &m.y, index, 0)
+	}
+	if !m.z.VariesWithEI() {
+		m.Z = m.cut(m.Z, &m.spare, &m.z, index, 0)
+	}
+	for i := range m.twist {
+		m.T = append(m.T, m.loaded(&m.twist[i], index))
+	}
+	return nil
+}
+
+// finite refuses forces that are no numbers, so that nothing later compares
+// with one.
+func finite(c *design.Combination) error {
+	if sum := c.NEd - c.NEd; sum != 0 {
+		return fmt.Errorf("N_Ed of combination %q is not a finite number", c.Name)
+	}
+	for _, s := range c.Steps {
+		if sum := s.NEd - s.NEd + s.Height - s.Height; sum != 0 {
+			return fmt.Errorf("N_Ed of a segment of combination %q is not a finite number", c.Name)
+		}
+	}
+	return nil
+}
+
+// cut appends the segments about an axis in one combination, for a bending
+// stiffness EI where the lengths depend on it. A segment without compression
+// has no length of its own by the elastic method; where own weight may still
+// press on it, it gets the one that it has under a uniform force.
+func (m *Member) cut(dst []Segment, spare *[]stability.Segment, l *stability.Lengths, index int, ei float64) []Segment {
+	n := len(dst)
+	*spare = l.Segments((*spare)[:0], &m.Column.Combinations[index], ei)
+	bare := false
+	for i := range *spare {
+		dst = append(dst, m.loaded(&(*spare)[i], index))
+		bare = bare || (*spare)[i].Lcr == 0
+	}
+	if bare && m.WeightPerMass > 0 {
+		*spare = l.Segments((*spare)[:0], nil, ei)
+		for i := range *spare {
+			if dst[n+i].Lcr == 0 {
+				dst[n+i].Segment = (*spare)[i]
+			}
+		}
+	}
+	return dst
+}
+
+// loaded puts the force of a combination on a segment.
+func (m *Member) loaded(s *stability.Segment, index int) Segment {
+	return Segment{Segment: *s, Combination: index,
+		NEd: m.Growth * stability.MaxNEd(&m.Column.Combinations[index], s.From, s.To)}
+}
+
+// part returns the force in part k of a combination, growth left out, and
+// where it acts: part 0 lies below the first step.
+func part(c *design.Combination, k int, length float64) (n, from, to float64) {
+	n, to = c.NEd, length
+	if k > 0 {
+		n, from = c.Steps[k-1].NEd, c.Steps[k-1].Height
+	}
+	if k < len(c.Steps) {
+		to = c.Steps[k].Height
+	}
+	return n, from, to
 }
 
 // extent finds the greatest and least force of a combination.
 func extent(c *design.Combination, index int, length, growth float64) Force {
-	f := Force{Combination: index, Greatest: c.NEd, Least: c.NEd, To: length, ToLow: length}
-	if len(c.Steps) > 0 {
-		f.To, f.ToLow = c.Steps[0].Height, c.Steps[0].Height
-	}
-	for i, s := range c.Steps {
-		to := length
-		if i+1 < len(c.Steps) {
-			to = c.Steps[i+1].Height
+	n, from, to := part(c, 0, length)
+	f := Force{Combination: index, Greatest: n, Least: n, From: from, To: to, FromLow: from, ToLow: to}
+	for k := 1; k <= len(c.Steps); k++ {
+		n, from, to := part(c, k, length)
+		if n > f.Greatest {
+			f.Greatest, f.From, f.To = n, from, to
 		}
-		if s.NEd > f.Greatest {
-			f.Greatest, f.From, f.To = s.NEd, s.Height, to
-		}
-		if s.NEd < f.Least {
-			f.Least, f.FromLow, f.ToLow = s.NEd, s.Height, to
+		if n < f.Least {
+			f.Least, f.FromLow, f.ToLow = n, from, to
 		}
 	}
 	f.Greatest *= growth
@@ -106,13 +210,35 @@ func extent(c *design.Combination, index int, length, growth float64) Force {
 	return f
 }
 
-// greatest returns the greatest axial force between two heights, N.
-func greatest(c *design.Combination, from, to float64) float64 {
-	n := c.NEdAt(from)
-	for _, s := range c.Steps {
-		if s.Height > from && s.Height < to {
-			n = max(n, s.NEd)
+// press returns the greatest compression in a combination, own weight of a
+// section of this mass per metre included, and the part under it.
+func (m *Member) press(index int, mass float64) (n, from, to float64) {
+	f := &m.Forces[index]
+	if m.WeightPerMass == 0 {
+		return f.Greatest, f.From, f.To
+	}
+	c := &m.Column.Combinations[index]
+	for k := 0; k <= len(c.Steps); k++ {
+		force, low, high := part(c, k, m.Length)
+		force = m.Growth*force + m.ownWeight(mass, low)
+		if k == 0 || force > n {
+			n, from, to = force, low, high
 		}
 	}
-	return n
+	return n, from, to
+}
+
+// VariesWithEI reports whether buckling lengths depend on the section that is
+// tried, because the rotational stiffness of an end is given.
+func (m *Member) VariesWithEI() bool { return m.y.VariesWithEI() || m.z.VariesWithEI() }
+
+// ownWeight returns the weight, N, of a section of this mass per metre above a
+// height, with its load factor; 0 where self-weight is left out.
+func (m *Member) ownWeight(mass, height float64) float64 {
+	return m.WeightPerMass * (m.Length - height) * mass
+}
+
+// bends reports whether a combination bends the member.
+func bends(c *design.Combination, rule design.MomentRule) bool {
+	return !c.My.Zero() || !c.Mz.Zero() || c.HasReactions && rule == design.MomentsSimple
 }

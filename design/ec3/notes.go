@@ -1,0 +1,39 @@
+package ec3
+
+import "strconv"
+
+// note says what a person must know of how the row was taken.
+func (m *Member) note() {
+	for _, text := range []string{m.y.Note(), m.z.Note()} {
+		if text != "" {
+			m.Notes = append(m.Notes, text)
+		}
+	}
+	t := &m.Column.Torsion
+	if t.LT > 0 && len(t.Restraints) > 0 {
+		m.Notes = append(m.Notes, "L_T is given: the torsion restraints do not count")
+	}
+	tension, zero := -1, true
+	for i := range m.Forces {
+		f := &m.Forces[i]
+		if f.Least < 0 && tension < 0 {
+			tension = i
+		}
+		zero = zero && f.Least == 0 && f.Greatest == 0
+	}
+	if tension >= 0 {
+		m.Notes = append(m.Notes, "N_Ed is tension in "+m.combination(tension)+
+			": yielding of the gross section is checked (6.2.3), the net section at holes is not")
+	}
+	if zero {
+		m.Notes = append(m.Notes, "N_Ed is 0")
+	}
+}
+
+// combination names a combination for people.
+func (m *Member) combination(index int) string {
+	if name := m.Column.Combinations[index].Name; name != "" {
+		return name
+	}
+	return "combination " + strconv.Itoa(index+1)
+}
