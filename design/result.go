@@ -107,6 +107,5 @@ type Result struct {
 	Reserve      float64 // factor on the axial force at which the first check fails; 0: not asked for or none
 	ReserveCheck Kind
 
-	CriticalTemperature float64 // C; 0: not asked for or not found
-	FireNote            string
+	Fire FireResult
 }
