@@ -28,6 +28,10 @@ type National struct {
 	LTB      LTBCurves
 	KcFromC1 bool   // kc = 1/sqrt(C1) (UK NA) instead of Table 6.6
 	Source   string // where the values come from, for people
+
+	// Sources says where single values come from, by the name of the
+	// parameter; a value without one comes from Source.
+	Sources map[string]string
 }
 
 // Method is the way effective lengths are found.

@@ -7,24 +7,42 @@ import (
 	"stanchion/design"
 )
 
+// The annexes behind the built-in sets. Everything is from memory.
+const (
+	fromMemory = ", from memory"
+	confirm    = ", from memory: confirm it before use"
+	enSource   = "value recommended in EN 1993-1-1:2005" + fromMemory
+	ukSource   = "UK NA to EN 1993-1-1:2005" + fromMemory
+)
+
 // nationalSets are the built-in sets of nationally determined parameters, the
-// default first. All partial factors are from memory.
+// default first.
 var nationalSets = []design.National{
 	{Name: "UK", GammaM0: 1, GammaM1: 1, GammaMfi: 1,
-		Strength: design.ProductStandard, LTB: design.LTBCurvesUK, KcFromC1: true,
-		Source: "UK NA to EN 1993-1-1:2005 (NA.2.4, NA.2.15, NA.2.17, NA.2.18) and to EN 1993-1-2, from memory"},
-	{Name: "EN", GammaM0: 1, GammaM1: 1, GammaMfi: 1, Strength: design.Table31,
-		Source: "values recommended in EN 1993-1-1:2005 6.1(1) and EN 1993-1-2:2005 2.3(1), from memory"},
-	{Name: "DE", GammaM0: 1, GammaM1: 1.1, GammaMfi: 1, Strength: design.Table31, Source: confirm("DIN EN 1993-1-1/NA")},
-	{Name: "IE", GammaM0: 1, GammaM1: 1, GammaMfi: 1, Strength: design.Table31, Source: confirm("Irish NA to I.S. EN 1993-1-1")},
-	{Name: "IT", GammaM0: 1.05, GammaM1: 1.05, GammaMfi: 1, Strength: design.Table31, Source: confirm("Italian annex to UNI EN 1993-1-1")},
-	{Name: "ES", GammaM0: 1.05, GammaM1: 1.05, GammaMfi: 1, Strength: design.Table31, Source: confirm("Spanish annex to UNE-EN 1993-1-1")},
-	{Name: "NO", GammaM0: 1.05, GammaM1: 1.05, GammaMfi: 1, Strength: design.Table31, Source: confirm("NS-EN 1993-1-1/NA")},
-	{Name: "DK", GammaM0: 1.1, GammaM1: 1.2, GammaMfi: 1, Strength: design.Table31, Source: confirm("DS/EN 1993-1-1 DK NA")},
+		Strength: design.ProductStandard, LTB: design.LTBCurvesUK, KcFromC1: true, Source: ukSource,
+		Sources: map[string]string{
+			"gamma_M0":   "UK NA to EN 1993-1-1:2005, NA.2.15" + fromMemory,
+			"gamma_M1":   "UK NA to EN 1993-1-1:2005, NA.2.15" + fromMemory,
+			"gamma_M,fi": "UK NA to EN 1993-1-2:2005, NA.2.3" + fromMemory,
+			"strength":   "UK NA to EN 1993-1-1:2005, NA.2.4" + fromMemory,
+			"LTB curves": "UK NA to EN 1993-1-1:2005, NA.2.17" + fromMemory,
+			"k_c":        "UK NA to EN 1993-1-1:2005, NA.2.18" + fromMemory,
+		}},
+	{Name: "EN", GammaM0: 1, GammaM1: 1, GammaMfi: 1, Strength: design.Table31, Source: enSource},
+	recommendedBut("DE", 1.00, 1.10, "DIN EN 1993-1-1/NA"),
+	recommendedBut("IE", 1.00, 1.00, "Irish NA to I.S. EN 1993-1-1"),
+	recommendedBut("IT", 1.05, 1.05, "Italian annex to UNI EN 1993-1-1"),
+	recommendedBut("ES", 1.05, 1.05, "Spanish annex to UNE-EN 1993-1-1"),
+	recommendedBut("NO", 1.05, 1.05, "NS-EN 1993-1-1/NA"),
+	recommendedBut("DK", 1.10, 1.20, "DS/EN 1993-1-1 DK NA"),
 }
 
-func confirm(annex string) string {
-	return annex + ", from memory: confirm the partial factors before use; everything else as recommended in EN 1993-1-1"
+// recommendedBut is a set of the recommended values but for the partial
+// factors of an annex.
+func recommendedBut(name string, gammaM0, gammaM1 float64, annex string) design.National {
+	return design.National{Name: name, GammaM0: gammaM0, GammaM1: gammaM1, GammaMfi: 1,
+		Strength: design.Table31, Source: enSource,
+		Sources: map[string]string{"gamma_M0": annex + confirm, "gamma_M1": annex + confirm}}
 }
 
 // NationalSets returns the built-in sets, the default first.
@@ -32,7 +50,7 @@ func NationalSets() []design.National {
 	return append([]design.National(nil), nationalSets...)
 }
 
-// NationalSet returns the set of that name, in any case.
+// NationalSet returns the built-in set of that name, in any case.
 func NationalSet(name string) (design.National, error) {
 	var names []string
 	for _, n := range nationalSets {
@@ -41,5 +59,5 @@ func NationalSet(name string) (design.National, error) {
 		}
 		names = append(names, n.Name)
 	}
-	return design.National{}, fmt.Errorf("unknown national set %q: give one of %s, or your own set", name, strings.Join(names, ", "))
+	return design.National{}, fmt.Errorf("unknown national set %q: give one of %s, or a set of your own", name, strings.Join(names, ", "))
 }

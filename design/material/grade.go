@@ -60,7 +60,7 @@ var conditions = []string{"+AR", "+N", "+M"}
 // delivery condition (+AR, +N, +M), in any case and spacing.
 func Parse(name string) (Grade, error) {
 	text := strings.ToUpper(strings.Join(strings.Fields(name), ""))
-	text = strings.NewReplacer("-", "", "_", "", "/", "").Replace(text)
+	text = strings.NewReplacer("-", "", "_", "", "/", "", "JO", "J0").Replace(text) // the letter for the figure
 	unknown := &UnknownGradeError{Name: name}
 	if len(text) < 4 || text[0] != 'S' {
 		return Grade{}, unknown
@@ -80,7 +80,6 @@ func Parse(name string) (Grade, error) {
 		}
 	}
 	suffix, hollow := strings.CutSuffix(suffix, "H")
-	suffix = strings.Replace(suffix, "JO", "J0", 1) // the letter for the figure
 	delivery, ok := deliveries[suffix]
 	if !ok {
 		return Grade{}, unknown
