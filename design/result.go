@@ -50,8 +50,8 @@ type Check struct {
 	Combination int     // index into Column.Combinations
 	From, To    float64 // the segment, mm from the bottom
 	Ed, Rd      float64 // action and resistance, N or N mm; 0 where the criterion is a sum
-	Utilisation float64
-	Reason      string // of a refusal or a change of rule
+	Utilisation float64 // +Inf of a refusal
+	Reason      string  // of a refusal or a change of rule
 }
 
 // Buckling holds the values behind a buckling resistance about one axis: those
@@ -87,7 +87,7 @@ type Result struct {
 	Grade   string
 	Fixed   bool // the section was given, not chosen
 
-	Utilisation float64
+	Utilisation float64 // +Inf where a rule does not cover the section
 	Governing   Check
 
 	Y, Z, T  Buckling // T: torsional, torsional-flexural or about the restrained axis
@@ -101,11 +101,13 @@ type Result struct {
 
 	// The evidence: the next lighter candidate and the check that it fails.
 	NextLighter            string
+	NextLighterGrade       string
 	NextLighterUtilisation float64
 	NextLighterCheck       Check
 
-	Reserve      float64 // factor on the axial force at which the first check fails; 0: not asked for or none
-	ReserveCheck Kind
+	Reserve      float64 // factor on every axial force at which the first check fails; 0: not asked for or none
+	ReserveN     float64 // N, compression that could be added to every axial force until then; negative where the column fails
+	ReserveCheck Kind    // the check that gives way first under the added compression
 
 	Fire FireResult
 }
