@@ -11,12 +11,19 @@ import (
 // that a shape met before is not analysed again.
 var solvers = sync.Pool{New: func() any { return new(solver) }}
 
+// mostRestraints bounds the work on a list of restraints that no column has.
+const mostRestraints = 100
+
 // findElastic applies method elastic: the lengths follow from the critical
 // load of the whole member, found here for a uniform force.
 func (l *Lengths) findElastic() error {
 	h := l.hold
 	if l.unrestrainedGuide() {
 		return l.guidedBeyond()
+	}
+	if len(h.Restraints) > mostRestraints {
+		return &Error{l.Axis, "there are more than 100 restraints, too many for the elastic method",
+			"use the effective length method 'segment', or give L_cr or k"}
 	}
 	l.split(Elastic)
 	l.elastic = true

@@ -150,6 +150,12 @@ func TestRefusals(t *testing.T) {
 		{"a restraint twice", bad(func(c *design.Column) { c.Z.Restraints = []float64{3000, 3000} }), "restraint", "restraint"},
 		{"negative L_cr", bad(func(c *design.Column) { c.Z.Lcr = -1 }), "buckling length", "buckling length"},
 		{"negative k", bad(func(c *design.Column) { c.Z.K = -1 }), "factor", "factor"},
+		{"a restraint every 50 mm", bad(func(c *design.Column) {
+			c.Z.Restraints = nil
+			for x := 50.0; x < c.Length; x += 50 {
+				c.Z.Restraints = append(c.Z.Restraints, x)
+			}
+		}), "", "more than 100 restraints"},
 		{"eta above 1", bad(func(c *design.Column) { c.Z.Top.Eta = ptr(1.1) }), "distribution factor", "distribution factor"},
 		{"negative stiffness", bad(func(c *design.Column) { c.Z.Bottom.Stiffness = ptr(-1) }), "rotational stiffness", "rotational stiffness"},
 	} {
