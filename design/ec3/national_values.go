@@ -65,7 +65,10 @@ func kcIndex(fromC1 bool) int {
 // factor is a parameter that is a partial factor.
 func factor(name, clause, what string, at func(*design.National) *float64) parameter {
 	return parameter{name, clause, what,
-		func(n *design.National) string { return strconv.FormatFloat(*at(n), 'f', 2, 64) },
+		func(n *design.National) string {
+			text := strconv.FormatFloat(*at(n), 'f', -1, 64)
+			return max(text, strconv.FormatFloat(*at(n), 'f', 2, 64)) // at least two decimals
+		},
 		func(n *design.National, text string) error {
 			v, err := strconv.ParseFloat(strings.Replace(strings.TrimSpace(text), ",", ".", 1), 64)
 			// Outside this range a number is a slip of the pen, not a partial factor.

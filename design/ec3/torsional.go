@@ -69,10 +69,59 @@ func (c *Candidate) NcrTF(ncrY, ncrZ, ncrT float64) float64 {
 }
 
 // ncrSymmetric is the closed form for a section symmetric about y-y, q being
-// (y0/i0)2. Timoshenko and Gere art. 5.6; Access Steel NCCI SN001a.
+// (y0/i0)2 and beta = 1 - q:
+//
+//	N_cr,TF = N_cr,y/(2 beta) (1 + r - sqrt((1 - r)2 + 4 q r)), r = N_cr,T/N_cr,y.
+//
+// Timoshenko and Gere art. 5.6; Access Steel NCCI SN001a. It is multiplied out
+// with the conjugate, so that no figures are lost where r is large.
 func ncrSymmetric(ncrY, ncrT, q float64) float64 {
 	r := ncrT / ncrY
-	return ncrY / (2 * (1 - q)) * (1 + r - math.Sqrt((1-r)*(1-r)+4*q*r))
+	return 2 * ncrT / (1 + r + math.Sqrt((1-r)*(1-r)+4*q*r))
+}
+
+// ncrGeneral returns the least root N of the general equation of
+// torsional-flexural buckling,
+//
+//	(N - Ny)(N - Nz)(N - NT) - N2 qy (N - Nz) - N2 qz (N - Ny) = 0,
+//
+// with qy = (y0/i0)2 and qz = (z0/i0)2: flexure about y-y moves the section
+// along z, as twist does where the shear centre lies off along y, so that Ny
+// couples with y0 and Nz with z0. Timoshenko and Gere, Theory of Elastic
+// Stability, art. 5.6.
+//
+// It is solved for x = 1/N, of which the greatest is wanted: with a = 1/Ny,
+// b = 1/Nz and c = 1/NT,
+//
+//	(x - a)(x - b)(x - c) - a c qy (x - b) - b c qz (x - a) = 0,
+//
+// the characteristic equation of a symmetric matrix. Its three roots are real,
+// and the trigonometric solution of the cubic gives the greatest.
+func ncrGeneral(ny, nz, nt, qy, qz float64) float64 {
+	a, b, c := 1/ny, 1/nz, 1/nt
+	u, v := a*c*qy, b*c*qz // squares of the coupling terms
+	mean := (a + b + c) / 3
+	da, db, dc := a-mean, b-mean, c-mean
+	spread := math.Sqrt((da*da + db*db + dc*dc + 2*(u+v)) / 6)
+	if spread < 1e-12*mean {
+		return 1 / mean
+	}
+	half := (da*db*dc - u*db - v*da) / (2 * spread * spread * spread)
+	angle := math.Acos(max(-1, min(1, half))) / 3
+	x := mean + 2*spread*math.Cos(angle)
+	// Two nearly equal roots cost half the figures: Newton's steps from above
+	// the greatest root, on the equation as it stands, bring them back.
+	x *= 1 + 1e-7
+	for range 12 {
+		f := (x-a)*(x-b)*(x-c) - u*(x-b) - v*(x-a)
+		slope := (x-a)*(x-b) + (x-b)*(x-c) + (x-c)*(x-a) - u - v
+		next := x - f/slope
+		if !(f > 0 && slope > 0 && next < x) {
+			break
+		}
+		x = next
+	}
+	return 1 / x
 }
 
 // NcrD returns the elastic critical load, N, of a doubly symmetric section
