@@ -150,6 +150,8 @@ func TestFireLengths(t *testing.T) {
 
 // Without an answer there is a reason.
 func TestFireWithoutATemperature(t *testing.T) {
+	bent := pressed(3500, 900e3)
+	bent.Combinations = append(bent.Combinations, design.Combination{NEd: 10e3, My: design.EndMoments{Top: 1e6}})
 	for _, c := range []struct {
 		col    *design.Column
 		reason string
@@ -157,6 +159,7 @@ func TestFireWithoutATemperature(t *testing.T) {
 		{pressed(3500, 4000e3), "short already at 20 C"},
 		{pressed(3500, -4000e3), "short already at 20 C"},
 		{pressed(3500, 0), "no axial force"},
+		{bent, "a moment acts"},
 	} {
 		r := inFire(t, hot260(), "S275", c.col, asked)
 		assert.True(t, r.Asked)
