@@ -1,0 +1,76 @@
+package project
+
+import (
+	"context"
+	"math"
+	"slices"
+)
+
+// FewSizes finds the least cost with at most K different sizes, for K = 1 up to
+// most or to the K from which more sizes help no further. The answers are
+// proven optima unless ctx ends first; then the bound says how far they may be
+// off. Where no K sizes can serve every node, Choice is nil.
+//
+// Method: the constraint that a node's size must be among the K is relaxed with
+// multipliers (Lagrangian relaxation of the p-median problem; Cornuejols,
+// Fisher and Nemhauser, Management Science 23 (1977), 789-810), the multipliers
+// are raised by subgradient steps with Polyak's length, sizes whose reduced
+// cost exceeds the gap are settled, and branch and bound on the sizes that are
+// left closes it.
+func (p *Problem) FewSizes(ctx context.Context, most int) ([]Solution, error) {
+	if err := p.Validate(); err != nil {
+		return nil, err
+	}
+	r := p.reduce()
+	s := newSearch(r)
+	free := s.everySize()
+	var out []Solution
+	var warm []int32
+	for k := 1; k <= most; k++ {
+		sol := s.solve(ctx, k, warm)
+		warm = sol.open
+		out = append(out, p.solution(r, k, sol))
+		if sol.cost <= free*(1+tolerance) || ctx.Err() != nil {
+			break
+		}
+	}
+	return out, nil
+}
+
+// tolerance is the relative difference below which two costs are equal: sums of
+// ten thousand float64 terms agree to about 1e-12.
+const tolerance = 1e-9
+
+// solution carries a reduced answer back to the problem's own sizes.
+func (p *Problem) solution(r *reduced, k int, a answer) Solution {
+	sol := Solution{K: k, Cost: a.cost, Bound: a.bound, Proven: a.proven}
+	if math.IsInf(a.cost, 1) {
+		return sol
+	}
+	open := make([]int32, len(a.open))
+	for i, j := range a.open {
+		open[i] = int32(r.sizes[j])
+	}
+	slices.Sort(open)
+	sol.Choice, sol.Cost = p.cheapestOf(newChainSolver(p), open)
+	sol.Bound = min(sol.Bound, sol.Cost)
+	used := map[int]bool{}
+	for _, chain := range sol.Choice {
+		for _, j := range chain {
+			used[j] = true
+		}
+	}
+	for j := range used {
+		sol.Sizes = append(sol.Sizes, j)
+	}
+	slices.Sort(sol.Sizes)
+	return sol
+}
+
+// answer is a solution in the reduced problem's sizes.
+type answer struct {
+	open   []int32
+	cost   float64
+	bound  float64
+	proven bool
+}

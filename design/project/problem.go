@@ -1,0 +1,72 @@
+package project
+
+import (
+	"fmt"
+	"math"
+)
+
+// Node is one decision: a column length, or lengths that must have one section.
+type Node struct {
+	Cost []float64 // by size; +Inf where the size does not pass every check
+}
+
+// Chain is a stack of nodes from the bottom up between which the section may
+// change. A node that stands alone is a chain of one.
+type Chain struct {
+	Nodes []Node
+	// SpliceCost is added where the section of a node differs from the one
+	// below, in the units of Cost.
+	SpliceCost float64
+}
+
+// Problem is a project: its chains, and which size may stand on which.
+type Problem struct {
+	Sizes  int
+	Chains []Chain
+	// MayStand reports whether size above may stand on size below at a splice;
+	// it is not asked for above == below. Nil allows every pair.
+	MayStand func(below, above int) bool
+}
+
+// Choice is a size for every node, chain by chain.
+type Choice [][]int
+
+// Solution is the answer to a problem with at most K sizes.
+type Solution struct {
+	K      int
+	Sizes  []int   // the sizes in use, rising
+	Choice Choice  // nil where no K sizes can serve every node
+	Cost   float64 // +Inf where Choice is nil
+	Bound  float64 // no solution costs less
+	Proven bool    // Cost is the optimum, or it is proven that there is none
+}
+
+// Gap returns what the solution may cost above the optimum, as a part of its cost.
+func (s *Solution) Gap() float64 {
+	if s.Proven || math.IsInf(s.Cost, 1) || s.Cost == 0 {
+		return 0
+	}
+	return (s.Cost - s.Bound) / s.Cost
+}
+
+// Validate reports the first thing that is wrong with the problem's shape: a
+// chain without nodes, a cost list of the wrong length, or a cost that is
+// negative or not a number.
+func (p *Problem) Validate() error {
+	for c, chain := range p.Chains {
+		if len(chain.Nodes) == 0 {
+			return fmt.Errorf("chain %d has no nodes", c)
+		}
+		for n, node := range chain.Nodes {
+			if len(node.Cost) != p.Sizes {
+				return fmt.Errorf("chain %d, node %d: %d costs for %d sizes", c, n, len(node.Cost), p.Sizes)
+			}
+			for j, v := range node.Cost {
+				if math.IsNaN(v) || v < 0 {
+					return fmt.Errorf("chain %d, node %d, size %d: cost %v", c, n, j, v)
+				}
+			}
+		}
+	}
+	return nil
+}
