@@ -221,9 +221,9 @@ func (f *fireAssessment) class4(modes []fireMode) {
 	var most design.Check
 	for i := range modes {
 		b := &modes[i]
-		ambient := c.buckle(b.segment, b.nEd, b.ncr, b.curve)
+		nbRd := c.resistance(b.ncr, b.curve)
 		check := design.Check{Kind: b.kind, Clause: "EN 1993-1-2, 4.2.3.6", Combination: b.segment.Combination,
-			From: b.segment.From, To: b.segment.To, Ed: b.nEd, Rd: ambient.NbRd, Utilisation: b.nEd / ambient.NbRd}
+			From: b.segment.From, To: b.segment.To, Ed: b.nEd, Rd: nbRd, Utilisation: b.nEd / nbRd}
 		if check.Utilisation > most.Utilisation {
 			most = check
 		}

@@ -19,12 +19,10 @@ func Reduce(nRk, ncr, gammaM1 float64, curve Curve) design.Buckling {
 	return b
 }
 
-// buckle works out the resistance of a segment with the elastic critical load
-// ncr, N, under a force nEd, N.
-func (c *Candidate) buckle(s *Segment, nEd, ncr float64, curve Curve) design.Buckling {
-	b := Reduce(c.NRk, ncr, c.GammaM1, curve)
-	b.From, b.To, b.Combination, b.Lcr, b.NEd = s.From, s.To, s.Combination, s.Lcr, nEd
-	return b
+// resistance returns N_b,Rd, N, at the elastic critical load ncr, N: the same
+// value as Reduce, without what leads to it.
+func (c *Candidate) resistance(ncr float64, curve Curve) float64 {
+	return Chi(curve.Alpha(), math.Sqrt(c.NRk/ncr)) * c.NRk / c.GammaM1
 }
 
 // assessFlexural checks flexural buckling of every segment about both axes.
@@ -57,8 +55,7 @@ func (m *Member) assessAxis(c *Candidate, a *Assessment, segments []Segment, axi
 	for i := range segments {
 		s := &segments[i]
 		if s.Lcr > 0 {
-			n := s.NEd + m.ownWeight(c.Section.Mass, s.From)
-			a.keep(axis, kind, s, c.buckle(s, n, euler/(s.Lcr*s.Lcr), curve))
+			a.buckle(axis, kind, s, s.NEd+m.ownWeight(c.Section.Mass, s.From), euler/(s.Lcr*s.Lcr), curve)
 		}
 	}
 }
@@ -81,31 +78,40 @@ func (m *Member) assessPrincipal(c *Candidate, a *Assessment, axis int) {
 			}
 			if s.Lcr > 0 {
 				n := max(y.NEd+m.ownWeight(c.Section.Mass, y.From), z.NEd+m.ownWeight(c.Section.Mass, z.From))
-				a.keep(axis, kind, s, c.buckle(s, n, euler/(s.Lcr*s.Lcr), curve))
+				a.buckle(axis, kind, s, n, euler/(s.Lcr*s.Lcr), curve)
 			}
 		}
 	}
 }
 
-// keep records a buckling check, and the values behind it where it is the
-// worst of its axis so far. It reports whether it is. A segment in tension has
-// no check; its resistance stands where there is no other.
-func (a *Assessment) keep(axis int, kind design.Kind, s *Segment, b design.Buckling) bool {
-	if b.NEd > 0 || a.Member.idle(b.Combination) {
-		a.add(kind, "6.3.1.1(1)", b.Combination, b.From, b.To, max(b.NEd, 0), b.NbRd)
-	}
-	worst, from := &a.Y, &a.segY
+// slot returns where the worst buckling of an axis is kept.
+func (a *Assessment) slot(axis int) (worst *design.Buckling, from **Segment) {
 	switch axis {
+	case axisY:
+		return &a.Y, &a.segY
 	case axisZ:
-		worst, from = &a.Z, &a.segZ
-	case axisT:
-		worst, from = &a.T, &a.segT
+		return &a.Z, &a.segZ
 	}
-	u, most := b.Utilisation(), worst.Utilisation()
-	if *from != nil && u <= most && (u > 0 || most > 0 || b.NbRd >= worst.NbRd) {
+	return &a.T, &a.segT
+}
+
+// buckle checks a segment under a force nEd, N, with the elastic critical load
+// ncr, N, and keeps the values behind it where it is the worst of its axis so
+// far, which it reports. A segment in tension has no check; its resistance
+// stands where there is no other.
+func (a *Assessment) buckle(axis int, kind design.Kind, s *Segment, nEd, ncr float64, curve Curve) bool {
+	c := a.Candidate
+	nbRd := c.resistance(ncr, curve)
+	if nEd > 0 || a.Member.idle(s.Combination) {
+		a.add(kind, "6.3.1.1(1)", s.Combination, s.From, s.To, max(nEd, 0), nbRd)
+	}
+	worst, from := a.slot(axis)
+	u, most := max(nEd, 0)/nbRd, worst.Utilisation()
+	if *from != nil && u <= most && (u > 0 || most > 0 || nbRd >= worst.NbRd) {
 		return false
 	}
-	*worst, *from = b, s
+	*worst, *from = Reduce(c.NRk, ncr, c.GammaM1, curve), s
+	worst.From, worst.To, worst.Combination, worst.Lcr, worst.NEd = s.From, s.To, s.Combination, s.Lcr, nEd
 	return true
 }
 

@@ -124,11 +124,9 @@ func anySection(t *rapid.T) *catalogue.Section {
 
 // anyCandidate draws a candidate that no rule refuses.
 func anyCandidate(t *rapid.T, set *design.Settings) *ec3.Candidate {
-	grade := rapid.SampledFrom([]string{"S235", "S275", "S355", "S420", "S460"})
+	grades := rapid.SampledFrom([]string{"S235", "S275", "S355", "S420", "S460"})
 	for range 100 {
-		g, err := material.Parse(grade.Draw(t, "grade"))
-		require.NoError(t, err)
-		c, err := ec3.NewCandidate(anySection(t), g, set)
+		c, err := ec3.NewCandidate(anySection(t), grade(t, grades.Draw(t, "grade")), set)
 		if err == nil {
 			return c
 		}
@@ -194,11 +192,15 @@ func settings() *design.Settings {
 }
 
 // candidate makes a candidate, or fails the test.
-func candidate(t testing.TB, s *catalogue.Section, grade string, set *design.Settings) *ec3.Candidate {
+func candidate(t testing.TB, s *catalogue.Section, name string, set *design.Settings) *ec3.Candidate {
 	t.Helper()
-	g, err := material.Parse(grade)
-	require.NoError(t, err)
-	c, err := ec3.NewCandidate(s, g, set)
+	c, err := ec3.NewCandidate(s, grade(t, name), set)
 	require.NoError(t, err)
 	return c
+}
+
+func grade(t require.TestingT, name string) material.Grade {
+	g, err := material.Parse(name)
+	require.NoError(t, err)
+	return g
 }

@@ -30,7 +30,7 @@ func (m *Member) assessTwist(c *Candidate, a *Assessment) {
 		s := &a.SegT[i]
 		t, ncr, kind := m.twisting(c, a, s)
 		n := s.NEd + m.ownWeight(c.Section.Mass, s.From)
-		if a.keep(axisT, kind, s, c.buckle(s, n, ncr, c.CurveZ)) {
+		if a.buckle(axisT, kind, s, n, ncr, c.CurveZ) {
 			a.Twist, a.TKind = t, kind
 		}
 	}
