@@ -1,0 +1,243 @@
+package workbook
+
+import (
+	"fmt"
+	"io"
+	"regexp"
+	"strconv"
+	"strings"
+	"time"
+
+	"github.com/xuri/excelize/v2"
+
+	"stanchion/schedule"
+	"stanchion/schedule/workbook/internal/markup"
+)
+
+// calculator finds the values of formulas that no spreadsheet program has
+// calculated yet. It leaves alone what could keep it busy for ever: such a
+// formula is reported, and a person calculates it by opening and saving the
+// workbook.
+type calculator struct {
+	file *excelize.File // nil: this workbook is not calculated
+	left time.Duration  // what may still be spent
+}
+
+// Bounds of calculating.
+const (
+	maxFormulas    = 40_000 // formulas without a value: each can wait for the next, and the stack holds about twice as many
+	maxFormula     = 8_192  // letters, as spreadsheet programs have it
+	maxRangeCells  = 2_000_000
+	calculateFor   = 60 * time.Second
+	maxWorkbookXML = 256 << 20 // a sheet to be calculated is held whole, many times its size
+)
+
+// greedy are functions that can make something huge of something small, or
+// reach for ranges that cannot be seen beforehand.
+var greedy = regexp.MustCompile(`(?i)\b(REPT|SEQUENCE|RANDARRAY|MUNIT|MAKEARRAY|INDIRECT|OFFSET|EXPAND|LAMBDA|WEBSERVICE)\s*\(`)
+
+// restless functions differ from one moment to the next, and the same input is
+// to give the same output.
+var restless = regexp.MustCompile(`(?i)\b(TODAY|NOW|RAND|RANDBETWEEN)\s*\(`)
+
+// calculate returns the value of a formula that has none in the file.
+func (b *Book) calculate(s *sheet, col, row int, f format, formula string) schedule.Cell {
+	if b.calc == nil {
+		b.calc = b.newCalculator()
+	}
+	cell := schedule.Cell{Kind: schedule.Uncalculated, Formula: true, Text: "=" + formula}
+	if restless.MatchString(formula) {
+		return cell
+	}
+	value, fault, ok := b.calc.value(s.name, cellName(col, row))
+	switch {
+	case fault != "":
+		return schedule.Cell{Kind: schedule.Fault, Formula: true, Text: fault}
+	case !ok:
+		return cell
+	}
+	return calculated(value, f)
+}
+
+// calculated turns a calculated value, which comes as text, into a cell.
+func calculated(value string, f format) schedule.Cell {
+	cell := schedule.Cell{Formula: true, Text: value}
+	n, err := strconv.ParseFloat(value, 64)
+	switch {
+	case err == nil && f.date:
+		cell.Kind, cell.Number = schedule.Date, n
+	case err == nil:
+		cell.Kind, cell.Number, cell.Fraction = schedule.Number, n, f.fraction
+	case value == "TRUE" || value == "FALSE":
+		cell.Kind = schedule.Bool
+	case value != "":
+		cell.Kind = schedule.Text
+	}
+	return cell
+}
+
+// newCalculator opens the workbook a second time, for calculating alone.
+func (b *Book) newCalculator() (c *calculator) {
+	c = &calculator{left: calculateFor}
+	defer func() {
+		if recover() != nil {
+			c.file = nil
+		}
+	}()
+	if !b.calculable() {
+		return c
+	}
+	file, err := excelize.OpenReader(io.NewSectionReader(b.data, 0, b.size), excelize.Options{
+		UnzipSizeLimit:    4 * maxWorkbookXML,
+		UnzipXMLSizeLimit: maxWorkbookXML,
+	})
+	if err == nil {
+		c.file = file
+	}
+	return c
+}
+
+func (c *calculator) close() {
+	if c.file != nil {
+		c.file.Close()
+	}
+}
+
+// value calculates one cell. It returns an error value such as #DIV/0! as
+// fault, and false where the formula cannot be calculated.
+func (c *calculator) value(sheet, cell string) (value, fault string, ok bool) {
+	if c.file == nil || c.left <= 0 {
+		return "", "", false
+	}
+	type answer struct {
+		value string
+		err   error
+	}
+	done := make(chan answer, 1)
+	start := time.Now()
+	go func() {
+		defer func() {
+			if p := recover(); p != nil {
+				done <- answer{"", fmt.Errorf("%v", p)}
+			}
+		}()
+		v, err := c.file.CalcCellValue(sheet, cell, excelize.Options{RawCellValue: true})
+		done <- answer{v, err}
+	}()
+	timer := time.NewTimer(c.left)
+	defer timer.Stop()
+	select {
+	case a := <-done:
+		c.left -= time.Since(start)
+		if a.err != nil && strings.HasPrefix(a.err.Error(), "not support") {
+			return "", "", false // a function that the library does not know
+		}
+		if f := faultOf(a.value, a.err); f != "" || a.err != nil {
+			return "", f, false
+		}
+		return a.value, "", true
+	case <-timer.C:
+		// It cannot be stopped; it is left to itself and not asked again.
+		c.file, c.left = nil, 0
+		return "", "", false
+	}
+}
+
+// faultOf returns the error value of a spreadsheet that an answer stands for,
+// if any.
+func faultOf(value string, err error) string {
+	text := value
+	if text == "" && err != nil {
+		text = err.Error()
+	}
+	for _, f := range []string{"#DIV/0!", "#N/A", "#NAME?", "#NULL!", "#NUM!", "#REF!", "#VALUE!", "#SPILL!", "#CALC!"} {
+		if text == f {
+			return f
+		}
+	}
+	return ""
+}
+
+// calculable looks through all formulas of the workbook before any is
+// calculated, since each may lead to every other.
+func (b *Book) calculable() bool {
+	total, waiting := int64(0), 0
+	for _, s := range b.sheets {
+		if !s.grid {
+			continue
+		}
+		total += b.pkg.Size(s.part)
+		if total > maxWorkbookXML || !b.harmless(s, &waiting) {
+			return false
+		}
+	}
+	return true
+}
+
+// harmless looks through the formulas of a sheet and counts those that have no
+// value.
+func (b *Book) harmless(s *sheet, waiting *int) bool {
+	r, err := b.pkg.Stream(s.part)
+	if err != nil {
+		return false
+	}
+	defer r.Close()
+	scan := markup.NewScanner(r)
+	valued, open := false, false
+	for {
+		t, err := scan.Next()
+		if err != nil {
+			return err == io.EOF
+		}
+		local := string(t.Local())
+		switch {
+		case local == "c" && t.Kind == markup.Start:
+			valued, open = false, false
+		case local == "v" && t.Kind == markup.Start:
+			valued = true
+		case local == "f" && t.Kind != markup.End:
+			open = true
+			if t.Kind == markup.Start && !harmlessFormula(scan) {
+				return false
+			}
+		case local == "c" && t.Kind == markup.End && open && !valued:
+			if *waiting++; *waiting > maxFormulas {
+				return false
+			}
+		}
+	}
+}
+
+// harmlessFormula reads the open formula.
+func harmlessFormula(scan *markup.Scanner) bool {
+	var formula []byte
+	for {
+		t, err := scan.Next()
+		if err != nil || len(formula) > maxFormula {
+			return false
+		}
+		switch t.Kind {
+		case markup.Text:
+			formula = markup.AppendText(formula, t.Raw)
+		case markup.End:
+			return !greedy.Match(formula) && smallRanges(string(formula))
+		}
+	}
+}
+
+var ranges = regexp.MustCompile(`\$?[A-Za-z]{1,3}\$?[0-9]{1,7}:\$?[A-Za-z]{1,3}\$?[0-9]{1,7}`)
+
+// smallRanges reports whether no range of a formula is out of proportion.
+// Whole rows and columns are cut to what is used by the library.
+func smallRanges(formula string) bool {
+	if !strings.Contains(formula, ":") {
+		return true
+	}
+	for _, ref := range ranges.FindAllString(formula, -1) {
+		a, ok := parseArea(ref)
+		if !ok || (a.lastRow-a.firstRow+1)*(a.lastCol-a.firstCol+1) > maxRangeCells {
+			return false
+		}
+	}
+	return true
+}
