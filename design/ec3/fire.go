@@ -17,10 +17,11 @@ const DefaultFireRatio = 0.65
 // ask for neither. It is made for the section that was chosen, not for a
 // search: it allocates.
 func (m *Member) AssessFire(c *Candidate) design.FireResult {
-	f := fireAssessment{candidate: c, member: m, result: fireDemand(m.Column, m.Settings)}
-	if !f.result.Asked {
-		return design.FireResult{}
+	result := fireDemand(m.Column, m.Settings)
+	if !result.Asked {
+		return design.FireResult{} // before anything is allocated: a long schedule asks this of every member
 	}
+	f := fireAssessment{candidate: c, member: m, result: result}
 	f.gammaMfi = m.Settings.National.GammaMfi
 	if f.gammaMfi == 0 {
 		f.gammaMfi = 1
