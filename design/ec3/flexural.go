@@ -36,12 +36,16 @@ func (m *Member) assessFlexural(c *Candidate, a *Assessment) {
 	m.assessAxis(c, a, a.SegZ, axisZ)
 }
 
-// buckling axes: the slots of an Assessment that a check about them fills.
+// The buckling axes: the slots of an Assessment that a check about them fills.
 const (
 	axisY = iota
 	axisZ
 	axisT
 )
+
+// clauses of the buckling checks, by axis; the resistance is by 6.3.1.1(1) in
+// every one.
+var clauses = [...]string{axisY: "6.3.1.1(1)", axisZ: "6.3.1.1(1)", axisT: "6.3.1.4"}
 
 func (c *Candidate) about(axis int) (euler float64, curve Curve, kind design.Kind) {
 	if axis == axisY {
@@ -103,7 +107,7 @@ func (a *Assessment) buckle(axis int, kind design.Kind, s *Segment, nEd, ncr flo
 	c := a.Candidate
 	nbRd := c.resistance(ncr, curve)
 	if nEd > 0 || a.Member.idle(s.Combination) {
-		a.add(kind, "6.3.1.1(1)", s.Combination, s.From, s.To, max(nEd, 0), nbRd)
+		a.add(kind, clauses[axis], s.Combination, s.From, s.To, max(nEd, 0), nbRd)
 	}
 	worst, from := a.slot(axis)
 	u, most := max(nEd, 0)/nbRd, worst.Utilisation()

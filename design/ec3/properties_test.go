@@ -74,6 +74,9 @@ func TestQuickCheckAgreesWithAssess(t *testing.T) {
 				d, _ := edge.Axial()
 				var b ec3.Assessment
 				edge.Assess(c, &b)
+				if c.Axial.Passes(d) {
+					assert.LessOrEqual(t, d.Floor(), c.NcRd)
+				}
 				assert.Equal(t, ec3.Passes(b.Utilisation, d.Limit), c.Axial.Passes(d), "near %v: utilisation %v", near, b.Utilisation)
 			}
 		}
