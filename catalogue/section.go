@@ -1,11 +1,3 @@
-// Package catalogue holds the rolled and hollow sections that a column may be
-// made of: their dimensions as the product standards print them, the section
-// properties computed from those dimensions, and the reading of their names as
-// the trade writes them.
-//
-// Lengths are in mm, areas in mm2, second moments in mm4, warping constants in
-// mm6, masses in kg/m. Axes are those of EN 1993-1-1: y-y major, z-z minor
-// (for angles parallel to the legs, with u-u and v-v the principal axes).
 package catalogue
 
 // Shape says which formulas and which rules of the standard a section follows.
@@ -62,12 +54,14 @@ type Properties struct {
 	WplY, WplZ float64 // plastic section moduli, mm3
 	It         float64 // St Venant torsion constant, mm4
 	Iw         float64 // warping constant about the shear centre, mm6 (0 where negligible: hollow sections, angles)
-	Wt         float64 // torsional section modulus of hollow sections, mm3
-	Y0, Z0     float64 // shear centre from the centroid along y and z, mm (channels: Y0; angles: along u and v in U0, V0)
-	Cy, Cz     float64 // centroid from the back of the web or legs, mm: channels: Cz is measured along z-z's normal, see ShapeChannel; angles: from the outer face of each leg
-	Iu, Iv     float64 // principal second moments, mm4 (angles; Iy, Iz otherwise)
+	Wt         float64 // torsional section modulus of hollow sections, EN 10210-2 Annex B, mm3
+	Y0         float64 // channels: shear centre from the centroid along y-y, mm, beyond the web
+	Cz         float64 // channels: z-z from the back of the web, mm; angles: z-z (parallel to the longer leg) from the longer leg's outer face
+	Cy         float64 // angles: y-y (parallel to the shorter leg) from the shorter leg's outer face, mm
+	Iu, Iv     float64 // principal second moments, mm4, Iu >= Iv (Iy, Iz for other shapes)
 	RadU, RadV float64 // principal radii of gyration, mm
-	U0, V0     float64 // shear centre from the centroid along the principal axes, mm (angles)
+	AlphaV     float64 // angles: angle between z-z and v-v, radians
+	U0, V0     float64 // angles: shear centre from the centroid along u-u and v-v, mm
 	Perimeter  float64 // painted surface per length, mm2/mm: the outside only for hollow sections
 }
 
