@@ -76,7 +76,7 @@ func (c *Candidate) stiffnesses() {
 	s := c.Section
 	const euler = math.Pi * math.Pi * design.E
 	c.EulerY, c.EulerZ = euler*s.Iy, euler*s.Iz
-	c.Y0, c.Z0 = s.Y0, s.Z0
+	c.Y0 = s.Y0
 	if s.Shape == catalogue.ShapeAngle {
 		c.EulerY, c.EulerZ = euler*s.Iu, euler*s.Iv
 		c.Y0, c.Z0 = s.U0, s.V0
