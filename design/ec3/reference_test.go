@@ -260,7 +260,7 @@ func (r reference) utilisation(col *design.Column, set *design.Settings) float64
 				}
 				return l
 			}
-			y0, z0, iy, iz, ly, lz := s.Y0, 0, s.Iy, s.Iz, longest(ys), longest(zs)
+			y0, z0, iy, iz, ly, lz := s.Y0, 0.0, s.Iy, s.Iz, longest(ys), longest(zs)
 			if s.Shape == catalogue.ShapeAngle {
 				y0, z0, iy, iz = s.U0, s.V0, s.Iu, s.Iv
 				ly = max(ly, lz)
