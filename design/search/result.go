@@ -1,0 +1,117 @@
+package search
+
+import (
+	"errors"
+	"fmt"
+
+	"stanchion/catalogue"
+	"stanchion/design"
+	"stanchion/design/ec3"
+)
+
+// errNoSection is said of a column that is to be checked and has no section.
+var errNoSection = errors.New("no section is given: give one, or have it sized")
+
+// notRead makes a result that says why a column cannot be designed.
+func notRead(res *design.Result, err error) {
+	res.Status = design.NotRead
+	res.Notes = append(res.Notes, err.Error())
+}
+
+// fill writes what the worker assessed last, and what its member has to say,
+// into a result.
+func (w *worker) fill(res *design.Result) {
+	a := &w.assess
+	c := a.Candidate
+	a.Explain()
+	res.Notes = append(res.Notes, a.Member.Notes...)
+	res.Utilisation = a.Utilisation
+	res.Governing = a.Governing
+	res.Y, res.Z, res.T = a.Y, a.Z, a.T
+	res.HasT, res.TKind = a.HasT, a.TKind
+	res.Class = a.Class
+	res.Fy = c.Fy
+	res.Fire = a.Member.AssessFire(c)
+	weigh(res, c.Section, c.Grade.Name, a.Member.Column)
+	if w.reserves {
+		w.findReserve(a.Member, a, res)
+	}
+}
+
+// weigh names the section of a result and says what a piece of it weighs.
+func weigh(res *design.Result, s *catalogue.Section, grade string, col *design.Column) {
+	res.Section, res.Grade = s.Name(), grade
+	res.MassPerM = s.Mass
+	res.Mass = s.Mass * col.Length / 1000
+}
+
+// evidence writes the assessment of the next lighter candidate into a result:
+// the check that it fails.
+func evidence(res *design.Result, a *ec3.Assessment) {
+	res.NextLighter = a.Candidate.Section.Name()
+	res.NextLighterGrade = a.Candidate.Grade.Name
+	res.NextLighterUtilisation = a.Utilisation
+	res.NextLighterCheck = a.Governing
+}
+
+// noSection names the candidate with the least utilisation where none passes.
+func (w *worker) noSection(l *List, res *design.Result) {
+	res.Status = design.NoSection
+	best := w.best(l)
+	if best < 0 {
+		res.Notes = append(res.Notes, l.empty())
+		return
+	}
+	w.member.Assess(l.Candidates[best], &w.assess)
+	w.fill(res)
+	res.Notes = append(res.Notes, fmt.Sprintf("no section passes: %s has the least utilisation, %.3f, of %d tried%s",
+		nameIn(l.Candidates[best]), res.Utilisation, len(l.Candidates), l.leftOut()))
+}
+
+// best returns the candidate with the least utilisation, the first of equal
+// ones, -1 where there is none.
+func (w *worker) best(l *List) int {
+	best, least := -1, 0.0
+	for i, c := range l.Candidates {
+		w.member.Assess(c, &w.assess)
+		if best < 0 || w.assess.Utilisation < least {
+			best, least = i, w.assess.Utilisation
+		}
+	}
+	return best
+}
+
+// nameIn names a candidate with its grade.
+func nameIn(c *ec3.Candidate) string { return c.Section.Name() + " " + c.Grade.Name }
+
+// empty says why a list has no candidate.
+func (l *List) empty() string {
+	if len(l.Refused) == 0 {
+		return "no section of the catalogue lies within the families, limits and exclusions given"
+	}
+	return "no section can be used" + l.leftOut()
+}
+
+// leftOut says what the rules do not cover, reasons once each in the order in
+// which they first occur.
+func (l *List) leftOut() string {
+	var reasons []string
+	first := map[string]string{}
+	count := map[string]int{}
+	for _, r := range l.Refused {
+		reason := r.Refusal.Error()
+		if count[reason]++; count[reason] == 1 {
+			reasons = append(reasons, reason)
+			first[reason] = r.Section.Name() + " " + r.Grade
+		}
+	}
+	text := ""
+	for _, reason := range reasons {
+		text += "; left out: " + first[reason]
+		if n := count[reason]; n > 1 {
+			text += fmt.Sprintf(" and %d more", n-1)
+		}
+		text += ": " + reason
+	}
+	return text
+}

@@ -1,0 +1,140 @@
+package search
+
+import (
+	"slices"
+
+	"stanchion/design"
+	"stanchion/design/ec3"
+)
+
+// worker holds what one goroutine needs to design columns one after another
+// without allocating for each: the member, the assessment, the demand on the
+// axial table and the list that the last column chose from.
+type worker struct {
+	engine *Engine
+	mode   Mode
+	bugs   *bugs
+
+	member   ec3.Member
+	assess   ec3.Assessment
+	demand   demand
+	reserves bool // the reserve is asked for
+	reserve  reserver
+
+	list   *List
+	choice design.Choice
+	grades []string
+}
+
+func (e *Engine) worker(mode Mode, b *bugs) *worker {
+	return &worker{engine: e, mode: mode, bugs: b, reserves: mode == Check || e.Reserve}
+}
+
+// one designs a column that shares its section with no other.
+func (w *worker) one(col *design.Column, res *design.Result) {
+	defer w.bugs.catch(col, res)
+	*res = design.Result{}
+	if err := w.take(col); err != nil {
+		notRead(res, err)
+		return
+	}
+	switch {
+	case col.Given != "":
+		w.given(col, res)
+	case w.mode == Check:
+		notRead(res, errNoSection)
+	default:
+		w.size(col, res)
+	}
+}
+
+// take makes the worker's member that of a column.
+func (w *worker) take(col *design.Column) error {
+	if err := w.member.Reset(col, &w.engine.settings); err != nil {
+		return err
+	}
+	w.demand.of(&w.member, ec3.Limit(col, &w.engine.settings))
+	return nil
+}
+
+// listOf returns the list that a column chooses from. Neighbouring rows mostly
+// choose from the same.
+func (w *worker) listOf(col *design.Column) (*List, error) {
+	if w.list != nil && sameChoice(&w.choice, &col.Choice) && slices.Equal(w.grades, col.Grades) {
+		return w.list, nil
+	}
+	l, err := w.engine.List(&col.Choice, col.Grades)
+	if err != nil {
+		return nil, err
+	}
+	w.list, w.choice, w.grades = l, col.Choice, col.Grades
+	return l, nil
+}
+
+// sameChoice reports whether two choices allow the same sections.
+func sameChoice(a, b *design.Choice) bool {
+	return a.MinDepth == b.MinDepth && a.MaxDepth == b.MaxDepth &&
+		a.MinWidth == b.MinWidth && a.MaxWidth == b.MaxWidth &&
+		a.MinThickness == b.MinThickness && a.MaxThickness == b.MaxThickness &&
+		slices.Equal(a.Families, b.Families)
+}
+
+// size chooses the section of a column.
+func (w *worker) size(col *design.Column, res *design.Result) {
+	l, err := w.listOf(col)
+	if err != nil {
+		notRead(res, err)
+		return
+	}
+	limit := ec3.Limit(col, &w.engine.settings)
+	i := w.first(l, limit)
+	if i < 0 {
+		w.noSection(l, res)
+		return
+	}
+	w.member.Assess(l.Candidates[i], &w.assess)
+	w.fill(res)
+	res.Status = design.Passes
+	if j := l.lighter(i, w.engine.settings.Rates.Objective); j >= 0 {
+		w.member.Assess(l.Candidates[j], &w.assess)
+		evidence(res, &w.assess)
+	}
+}
+
+// first returns the first candidate of the list that passes every check of the
+// worker's member, -1 if none does.
+func (w *worker) first(l *List, limit float64) int {
+	for i := l.skip.start(&w.demand); i < len(l.rows); i++ {
+		if l.try(i, &w.member, &w.demand, limit, &w.assess) {
+			return i
+		}
+	}
+	return -1
+}
+
+// try reports whether candidate i passes every check of a member. One that the
+// axial table refuses fails a check for certain; the rest is assessed unless
+// the table says all.
+func (l *List) try(i int, m *ec3.Member, d *demand, limit float64, a *ec3.Assessment) bool {
+	switch l.rows[i].axial(d, l.ratio) {
+	case fails:
+		return false
+	case passes:
+		return true
+	}
+	m.Assess(l.Candidates[i], a)
+	return ec3.Passes(a.Utilisation, limit)
+}
+
+// lighter returns the candidate that the choice would have preferred next to
+// candidate i, -1 if there is none: by mass the strongest grade of the section
+// before it, by cost or carbon the candidate before it.
+func (l *List) lighter(i int, by design.Objective) int {
+	j := i - 1
+	if by == design.ByMass {
+		for j >= 0 && l.Candidates[j].Section == l.Candidates[i].Section {
+			j--
+		}
+	}
+	return j
+}
