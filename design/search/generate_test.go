@@ -61,6 +61,8 @@ func column(r *rand.Rand, moments bool) design.Column {
 		col.Torsion.LT = between(r, 1000, 14000)
 	case 2:
 		col.Torsion.EccentricFlange = true
+	case 3: // a stub, where the cross-section governs
+		col.Y, col.Z = design.Hold{Lcr: 300}, design.Hold{Lcr: 300}
 	}
 	if r.IntN(6) == 0 {
 		col.Choice.Limit = between(r, 0.5, 1.1)

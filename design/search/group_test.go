@@ -9,6 +9,7 @@ import (
 	"github.com/stretchr/testify/require"
 	"pgregory.net/rapid"
 
+	"stanchion/catalogue"
 	"stanchion/design"
 	"stanchion/design/ec3"
 )
@@ -119,13 +120,34 @@ func TestGroupTakesTheGivenSection(t *testing.T) {
 
 func TestGroupHonoursEveryMembersLimits(t *testing.T) {
 	e := engineOf(t, settingsOf(t, "UK"))
-	cols := []design.Column{pressed(2e6), pressed(2e6)}
-	free := sizeGroup(t, e, cols)
-	cols[0].Choice.MaxDepth = 250
-	cols[1].Choice.MinDepth = 240
+	cols := []design.Column{pressed(1e6), pressed(1e6)}
+	cols[0].Choice.MaxDepth = 265
+	cols[1].Choice.MinDepth = 255
 	res := sizeGroup(t, e, cols)
-	assert.NotEqual(t, free[0].Section, res[0].Section)
+	require.Equal(t, design.Passes, res[0].Status)
 	assert.Equal(t, res[0].Section, res[1].Section)
+	s, err := catalogue.Default().Find(res[0].Section, catalogue.FindOptions{})
+	require.NoError(t, err)
+	assert.LessOrEqual(t, s.H, 265.0)
+	assert.GreaterOrEqual(t, s.H, 255.0)
+}
+
+// Of two members alike the one with the lower limit decides.
+func TestGroupMembersWithLimitsOfTheirOwn(t *testing.T) {
+	e := engineOf(t, settingsOf(t, "UK"))
+	cols := []design.Column{pressed(1e6), pressed(1e6)}
+	cols[1].Choice.Limit = 0.7
+	res := sizeGroup(t, e, cols)
+	assert.Equal(t, sizeOne(t, e, cols[1]).Section, res[0].Section)
+	assert.LessOrEqual(t, res[0].Utilisation, 0.7)
+	require.Len(t, res[0].Notes, 1)
+	assert.Contains(t, res[0].Notes[0], "fails at B")
+
+	for i := range cols {
+		cols[i].Combinations[0].NEd = 9e7
+	}
+	none := sizeGroup(t, e, cols)
+	assert.Contains(t, none[0].Notes[0], "at B (Columns!B9)")
 }
 
 func TestGroupThatCannotAgree(t *testing.T) {

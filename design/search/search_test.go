@@ -89,6 +89,8 @@ func TestAgainstEveryCandidate(t *testing.T) {
 	elastic.Method = design.MethodElastic
 	weight := settingsOf(t, "UK")
 	weight.SelfWeight, weight.Growth, weight.Limit = 1.35, 1.1, 0.9
+	own := settingsOf(t, "UK") // a set where the cross-section can govern over buckling
+	own.National.GammaM0, own.National.GammaM1 = 1.25, 1
 	hollow := settingsOf(t, "UK")
 	hollow.Families = []string{"CHS", "SHS", "RHS"}
 	angles := settingsOf(t, "UK")
@@ -105,6 +107,7 @@ func TestAgainstEveryCandidate(t *testing.T) {
 		{"three grades", grades, true, 1000},
 		{"elastic, gM0 and gM1 apart", elastic, true, 500},
 		{"own weight, growth and limit", weight, true, 1000},
+		{"gM0 above gM1", own, true, 1000},
 		{"hollow", hollow, true, 1000},
 		{"angles and channels", angles, false, 500},
 	} {
@@ -135,6 +138,29 @@ func TestAgainstEveryCandidate(t *testing.T) {
 			t.Log(count)
 			assert.NotZero(t, count[design.Passes])
 		})
+	}
+}
+
+// The evidence is the strongest grade of the next lighter section, and fails.
+func TestNextLighterIsAnotherSection(t *testing.T) {
+	set := settingsOf(t, "UK")
+	set.Grades = []string{"S275", "S355"}
+	e := engineOf(t, set)
+	p := newPlain(t, set)
+	cols := columns(random(10), 200, false)
+	results, err := e.SizeAll(context.Background(), cols, 1, nil)
+	require.NoError(t, err)
+	for i := range results {
+		r := &results[i]
+		if r.Status != design.Passes || r.NextLighter == "" {
+			continue
+		}
+		k := slices.IndexFunc(p.candidates, func(c *ec3.Candidate) bool { return c.Section.Name() == r.Section })
+		assert.Equal(t, nameIn(p.candidates[k-1]), r.NextLighter+" "+r.NextLighterGrade)
+		assert.Equal(t, "S355", r.NextLighterGrade)
+		limit := ec3.Limit(&cols[i], &set)
+		assert.Greater(t, r.NextLighterUtilisation, limit)
+		assert.Equal(t, r.NextLighterUtilisation, r.NextLighterCheck.Utilisation)
 	}
 }
 

@@ -42,7 +42,9 @@ func TestStrengthIsNotMonotonic(t *testing.T) {
 
 // Whatever is passed over fails a check, for every candidate and member.
 func TestSkippedCandidatesFail(t *testing.T) {
-	e := engineOf(t, settingsOf(t, "DK")) // gM0 and gM1 differ
+	set := settingsOf(t, "UK")
+	set.National.GammaM0, set.National.GammaM1 = 1.25, 1 // the cross-section can govern
+	e := engineOf(t, set)
 	l, err := e.List(&design.Choice{}, nil)
 	require.NoError(t, err)
 	rapid.Check(t, func(rt *rapid.T) {
