@@ -33,3 +33,12 @@ func TestPassAtStockySlenderness(t *testing.T) {
 		assert.Equal(t, fails, pass(1+1e-11, lambdaBar, 0.49))
 	}
 }
+
+// The cross-section has a partial factor of its own, and may govern.
+func TestAxialCrossSection(t *testing.T) {
+	row := axialRow{c: 1, tA: math.Inf(1), known: true}
+	for n, want := range map[float64]verdict{0.79: passes, 0.8: doubt, 0.81: fails} {
+		d := &demand{n: n, y: []point{{n, 0}}, z: []point{{n, 0}}, full: true}
+		assert.Equal(t, want, row.axial(d, 1.25), "%v", n)
+	}
+}

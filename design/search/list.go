@@ -128,10 +128,7 @@ func (e *Engine) entries(sections []*catalogue.Section, grades []material.Grade)
 func compareEntries(a, b entry) int {
 	return cmp.Or(
 		cmp.Compare(a.objective, b.objective),
-		cmp.Compare(a.section.Mass, b.section.Mass),
-		cmp.Compare(a.section.H, b.section.H),
-		cmp.Compare(a.section.B, b.section.B),
-		strings.Compare(a.section.Name(), b.section.Name()),
+		catalogue.Compare(a.section, b.section),
 		compareGrades(a.grade, b.grade),
 	)
 }
