@@ -25,7 +25,7 @@ type Engine struct {
 	grades    []material.Grade // the settings' own
 
 	mu    sync.Mutex
-	lists map[string]*List
+	lists map[string]listOrError
 	made  map[pair]outcome
 }
 
@@ -44,7 +44,7 @@ type outcome struct {
 // New returns an engine that chooses from a catalogue under settings. An
 // unknown family, grade or excluded section in the settings is an error.
 func New(cat *catalogue.Catalogue, set design.Settings) (*Engine, error) {
-	e := &Engine{catalogue: cat, settings: set, lists: map[string]*List{}, made: map[pair]outcome{}}
+	e := &Engine{catalogue: cat, settings: set, lists: map[string]listOrError{}, made: map[pair]outcome{}}
 	grades, err := parseGrades(set.Grades)
 	if err != nil {
 		return nil, err

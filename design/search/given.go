@@ -15,7 +15,7 @@ import (
 // utilisation.
 func (w *worker) given(col *design.Column, res *design.Result) {
 	res.Fixed = true
-	l, err := w.engine.givenIn(col)
+	l, err := w.allowed(col)
 	if err != nil {
 		notRead(res, err)
 		return
@@ -40,12 +40,12 @@ func (w *worker) given(col *design.Column, res *design.Result) {
 // weakest first. The error says what cannot be understood.
 func (e *Engine) givenIn(col *design.Column) (*List, error) {
 	families := or(col.Choice.Families, e.settings.Families)
-	key := fmt.Sprintf("given %q %q %q", col.Given, families, col.Grades)
-	e.mu.Lock()
-	defer e.mu.Unlock()
-	if l, ok := e.lists[key]; ok {
-		return l, nil
-	}
+	return e.listed(fmt.Sprintf("given %q %q %q", col.Given, families, col.Grades), func() (*List, error) {
+		return e.newGiven(col, families)
+	})
+}
+
+func (e *Engine) newGiven(col *design.Column, families []string) (*List, error) {
 	s, err := e.find(col.Given, catalogue.FindOptions{ColdFormed: e.settings.ColdFormed, Families: families})
 	if err != nil {
 		return nil, err
@@ -59,7 +59,6 @@ func (e *Engine) givenIn(col *design.Column) (*List, error) {
 		l.add(s, g.Name, e.candidate(s, g))
 	}
 	l.tabulate(&e.settings.National)
-	e.lists[key] = l
 	return l, nil
 }
 

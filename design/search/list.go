@@ -36,18 +36,25 @@ type Refused struct {
 // the settings' own). An unknown family, grade or exclusion, or a section
 // without a rate where the objective needs one, is an error.
 func (e *Engine) List(ch *design.Choice, grades []string) (*List, error) {
-	key := listKey(ch, grades)
+	return e.listed(listKey(ch, grades), func() (*List, error) { return e.newList(ch, grades) })
+}
+
+// listed returns the list of a key, made once. An error is kept too: a name
+// that is not known stands in many rows, and looking for the nearest is slow.
+func (e *Engine) listed(key string, make func() (*List, error)) (*List, error) {
 	e.mu.Lock()
 	defer e.mu.Unlock()
 	if l, ok := e.lists[key]; ok {
-		return l, nil
+		return l.list, l.err
 	}
-	l, err := e.newList(ch, grades)
-	if err != nil {
-		return nil, err
-	}
-	e.lists[key] = l
-	return l, nil
+	l, err := make()
+	e.lists[key] = listOrError{l, err}
+	return l, err
+}
+
+type listOrError struct {
+	list *List
+	err  error
 }
 
 // listKey spells out a choice; the limit of utilisation is not part of it.

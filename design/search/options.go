@@ -47,14 +47,6 @@ func (w *worker) options(col *design.Column) Options {
 	return o
 }
 
-// allowed returns the candidates that a column may have.
-func (w *worker) allowed(col *design.Column) (*List, error) {
-	if col.Given != "" {
-		return w.engine.givenIn(col)
-	}
-	return w.listOf(col)
-}
-
 // Lightest returns the candidate that SizeAll would choose for each column on
 // its own, without the working: nil where none passes or the column cannot be
 // designed.

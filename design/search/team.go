@@ -77,7 +77,7 @@ func (t *team) candidates() (l *List, given *mate, err error) {
 		if m.col.Given == "" {
 			continue
 		}
-		own, err := t.engine.givenIn(m.col)
+		own, err := t.allowed(m.col)
 		if err != nil {
 			return nil, nil, err
 		}
@@ -123,7 +123,7 @@ func (t *team) agree(what string, of func(*mate) []string) error {
 func (t *team) common() (*List, error) {
 	var l *List
 	for i := range t.mates {
-		own, err := t.listOf(t.mates[i].col)
+		own, err := t.allowed(t.mates[i].col)
 		if err != nil {
 			return nil, err
 		}

@@ -1,8 +1,6 @@
 package search
 
 import (
-	"slices"
-
 	"stanchion/design"
 	"stanchion/design/ec3"
 )
@@ -14,16 +12,13 @@ type worker struct {
 	engine *Engine
 	mode   Mode
 	bugs   *bugs
+	memo   memo
 
 	member   ec3.Member
 	assess   ec3.Assessment
 	demand   demand
 	reserves bool // the reserve is asked for
 	reserve  reserver
-
-	list   *List
-	choice design.Choice
-	grades []string
 }
 
 func (e *Engine) worker(mode Mode, b *bugs) *worker {
@@ -57,31 +52,22 @@ func (w *worker) take(col *design.Column) error {
 	return nil
 }
 
-// listOf returns the list that a column chooses from. Neighbouring rows mostly
-// choose from the same.
-func (w *worker) listOf(col *design.Column) (*List, error) {
-	if w.list != nil && sameChoice(&w.choice, &col.Choice) && slices.Equal(w.grades, col.Grades) {
-		return w.list, nil
-	}
-	l, err := w.engine.List(&col.Choice, col.Grades)
-	if err != nil {
-		return nil, err
-	}
-	w.list, w.choice, w.grades = l, col.Choice, col.Grades
-	return l, nil
+// allowed returns the candidates that a column may have: its given section, or
+// what it chooses from.
+func (w *worker) allowed(col *design.Column) (*List, error) {
+	return w.memo.list(col, w.engine.allowed)
 }
 
-// sameChoice reports whether two choices allow the same sections.
-func sameChoice(a, b *design.Choice) bool {
-	return a.MinDepth == b.MinDepth && a.MaxDepth == b.MaxDepth &&
-		a.MinWidth == b.MinWidth && a.MaxWidth == b.MaxWidth &&
-		a.MinThickness == b.MinThickness && a.MaxThickness == b.MaxThickness &&
-		slices.Equal(a.Families, b.Families)
+func (e *Engine) allowed(col *design.Column) (*List, error) {
+	if col.Given != "" {
+		return e.givenIn(col)
+	}
+	return e.List(&col.Choice, col.Grades)
 }
 
 // size chooses the section of a column.
 func (w *worker) size(col *design.Column, res *design.Result) {
-	l, err := w.listOf(col)
+	l, err := w.allowed(col)
 	if err != nil {
 		notRead(res, err)
 		return
