@@ -15,6 +15,18 @@ const PassTolerance = 1e-9
 // Passes reports whether a utilisation is within a limit.
 func Passes(utilisation, limit float64) bool { return utilisation <= limit*(1+PassTolerance) }
 
+// Limit returns the utilisation limit of a column: its own, else the
+// settings', else 1.
+func Limit(col *design.Column, set *design.Settings) float64 {
+	switch {
+	case col.Choice.Limit > 0:
+		return col.Choice.Limit
+	case set.Limit > 0:
+		return set.Limit
+	}
+	return 1
+}
+
 // Assessment is the outcome of every check of one member in one candidate,
 // with the values that the printed working shows. Its buffers are reused.
 type Assessment struct {
@@ -40,14 +52,13 @@ type Assessment struct {
 	segY, segZ, segT *Segment // behind Y, Z, T
 	bufY, bufZ       []Segment
 	spare            []stability.Segment
-	quiet            bool // keep the utilisation alone
 }
 
 // Assess carries out every check of the member in the candidate. It changes
 // nothing but a, and allocates nothing once a's buffers are large enough.
 func (m *Member) Assess(c *Candidate, a *Assessment) {
 	*a = Assessment{Candidate: c, Member: m, Checks: a.Checks[:0],
-		bufY: a.bufY[:0], bufZ: a.bufZ[:0], spare: a.spare[:0], quiet: a.quiet}
+		bufY: a.bufY[:0], bufZ: a.bufZ[:0], spare: a.spare[:0]}
 	a.Class = c.Class
 	m.segments(c, a)
 	m.assessSection(c, a)
@@ -92,9 +103,7 @@ func (a *Assessment) record(check design.Check, class int) {
 	if a.Governing.Kind == design.KindNone || check.Utilisation > a.Utilisation {
 		a.Governing, a.Utilisation, a.Class = check, check.Utilisation, class
 	}
-	if !a.quiet {
-		a.Checks = append(a.Checks, check)
-	}
+	a.Checks = append(a.Checks, check)
 }
 
 // Explain fills in how the buckling lengths of Y, Z and T were found.

@@ -37,9 +37,6 @@ func TestWorkDoesNotAllocateOnceWarm(t *testing.T) {
 					panic("not a member")
 				}
 				m.Assess(c, &a)
-				d, _ := m.Axial()
-				c.Axial.Passes(d)
-				c.Axial.Utilisation(d)
 			}
 		}
 		work()
@@ -69,18 +66,6 @@ func BenchmarkAssess(b *testing.B) {
 				m.Assess(c, &a)
 			}
 		})
-	}
-}
-
-func BenchmarkAxialPasses(b *testing.B) {
-	set := settings()
-	m, err := ec3.NewMember(usual(), set)
-	require.NoError(b, err)
-	d, _ := m.Axial()
-	c := candidate(b, he260a(), "S275", set)
-	require.True(b, c.Axial.Passes(d))
-	for b.Loop() {
-		c.Axial.Passes(d)
 	}
 }
 

@@ -34,8 +34,6 @@ type Candidate struct {
 	EulerW  float64 // pi2 E Iw, N mm4
 	Y0, Z0  float64 // shear centre from the centroid, along y and z (u and v), mm
 	I0Sq    float64 // iy2 + iz2 + y0^2 + z0^2, mm2
-
-	Axial Axial // the flat values of the quick axial check
 }
 
 // NewCandidate works out what the section in this grade can do under the
@@ -67,7 +65,6 @@ func NewCandidate(s *catalogue.Section, g material.Grade, set *design.Settings) 
 	c.NplRd = s.A * fy / c.GammaM0
 	c.NcRd = c.NRk / c.GammaM0
 	c.stiffnesses()
-	c.Axial = newAxial(c)
 	return c, nil
 }
 

@@ -34,7 +34,6 @@ type Member struct {
 	y, z  stability.Lengths
 	twist []stability.Segment
 	spare []stability.Segment
-	axial AxialDemand
 }
 
 // Segment is a length between points that hold the member about one axis, in
@@ -78,7 +77,6 @@ func (m *Member) Reset(col *design.Column, set *design.Settings) error {
 		m.AxialOnly = m.AxialOnly && !bends(&col.Combinations[i], set.Moments)
 	}
 	m.note()
-	m.axial.of(m)
 	return nil
 }
 
@@ -90,7 +88,7 @@ func (m *Member) measure(method design.Method) (err error) {
 	if err := m.z.Find(m.Column, stability.AxisZ, method); err != nil {
 		return err
 	}
-	if t := &m.Column.Torsion; m.eccentric() && !t.Given {
+	if t := &m.Column.Torsion; m.Eccentric() && !t.Given {
 		// Restraints that hold one flange alone do not hold the twist.
 		col := *m.Column
 		col.Torsion.Given = true
@@ -101,9 +99,9 @@ func (m *Member) measure(method design.Method) (err error) {
 	return err
 }
 
-// eccentric reports whether z-z is held off the shear centre without the
-// twist being held.
-func (m *Member) eccentric() bool {
+// Eccentric reports whether z-z is held off the shear centre without the
+// twist being held, so that twist is not checked by T alone.
+func (m *Member) Eccentric() bool {
 	return m.Column.Torsion.EccentricFlange || m.Column.Torsion.Eccentric != 0
 }
 

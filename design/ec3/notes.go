@@ -13,7 +13,7 @@ func (m *Member) note() {
 	if t.LT > 0 && len(t.Restraints) > 0 {
 		m.Notes = append(m.Notes, "L_T is given: the torsion restraints do not count")
 	}
-	if m.eccentric() {
+	if m.Eccentric() {
 		m.Notes = append(m.Notes, "z-z is held off the shear centre: between torsion restraints an open section turns "+
 			"about the line that holds it (Timoshenko and Gere, art. 5.7)")
 	}

@@ -36,53 +36,6 @@ func anySettings(t *rapid.T) *design.Settings {
 	return set
 }
 
-// The quick check gives the verdict and the utilisation of Assess.
-func TestQuickCheckAgreesWithAssess(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
-		set := anySettings(t)
-		c := anyCandidate(t, set)
-		col := anyColumn(t)
-		m, err := ec3.NewMember(col, set)
-		require.NoError(t, err)
-		d, ok := m.Axial()
-		require.True(t, ok)
-		var a ec3.Assessment
-		m.Assess(c, &a)
-		assert.Equal(t, a.Utilisation, c.Axial.Utilisation(d))
-		assert.Equal(t, ec3.Passes(a.Utilisation, d.Limit), c.Axial.Passes(d), "utilisation %v", a.Utilisation)
-		if c.NcRd < d.Floor() {
-			assert.Greater(t, a.Utilisation, d.Limit)
-		}
-
-		// At the edge: the force that uses the candidate to the limit, and
-		// forces so near that the quick form cannot tell.
-		if a.Utilisation > 0 && set.SelfWeight == 0 {
-			for _, near := range []float64{1, 1 - 1e-6, 1 + 1e-6, 1 - 1e-8, 1 + 1e-8, 1 - 1e-10, 1 + 1e-10, 1 + 3e-9} {
-				scaled := *col
-				scaled.Combinations = nil
-				by := near * d.Limit / a.Utilisation
-				for _, k := range col.Combinations {
-					k.NEd *= by
-					k.Steps = slices.Clone(k.Steps)
-					for i := range k.Steps {
-						k.Steps[i].NEd *= by
-					}
-					scaled.Combinations = append(scaled.Combinations, k)
-				}
-				edge, err := ec3.NewMember(&scaled, set)
-				require.NoError(t, err)
-				d, _ := edge.Axial()
-				var b ec3.Assessment
-				edge.Assess(c, &b)
-				if c.Axial.Passes(d) {
-					assert.LessOrEqual(t, d.Floor(), c.NcRd)
-				}
-				assert.Equal(t, ec3.Passes(b.Utilisation, d.Limit), c.Axial.Passes(d), "near %v: utilisation %v", near, b.Utilisation)
-			}
-		}
-	})
-}
-
 func TestChiLiesBetweenZeroAndOne(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		curve := rapid.SampledFrom([]ec3.Curve{ec3.CurveA0, ec3.CurveA, ec3.CurveB, ec3.CurveC, ec3.CurveD}).Draw(t, "curve")

@@ -22,7 +22,7 @@ func (m *Member) assessTwist(c *Candidate, a *Assessment) {
 	if c.Torsion == TorsionNone {
 		return
 	}
-	if m.eccentric() && c.Torsion != TorsionDoublySymmetric {
+	if m.Eccentric() && c.Torsion != TorsionDoublySymmetric {
 		a.refuse("6.3.1.4", "z-z held off the shear centre without the twist being held is covered for I and H sections alone")
 	}
 	a.HasT = true
@@ -72,7 +72,7 @@ func longest(segments []Segment, of *Segment) float64 {
 // which a length between torsion restraints is made to turn: z-z is held there,
 // inside the length. It returns 0 where nothing holds z-z inside it.
 func (m *Member) enforced(c *Candidate, s *Segment) float64 {
-	if !m.eccentric() {
+	if !m.Eccentric() {
 		return 0
 	}
 	z := &m.Column.Z

@@ -44,7 +44,7 @@ func worst(points []point, n, l float64) []point {
 // axialOnly reports whether the axial checks are all that a member has to
 // pass, with the forces and lengths that it carries whatever the section.
 func axialOnly(m *ec3.Member) bool {
-	if _, quick := m.Axial(); !quick || m.WeightPerMass != 0 {
+	if !m.AxialOnly || m.VariesWithEI() || m.Eccentric() || m.WeightPerMass != 0 {
 		return false
 	}
 	for i := range m.Forces {
