@@ -51,7 +51,7 @@ func readHeading(text string) *meaning {
 	if m.above != nil && (len(m.keys) == 0 || m.keys[0].line().needs&perHeight == 0) {
 		*m = meaning{}
 	}
-	if len(m.keys) > 0 {
+	if len(m.keys) > 0 && m.trouble == "" {
 		m.setUnit(u, odd)
 	}
 	return m

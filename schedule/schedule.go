@@ -18,6 +18,8 @@ type Options struct {
 	// that knows the user's own sets too).
 	National func(name string) (design.National, error)
 	Names    Names
+	// LoadsOptional reads a schedule without N_Ed too: for a take-off.
+	LoadsOptional bool
 }
 
 // Names resolve the names that stand in cells. A function that is nil takes
@@ -34,6 +36,7 @@ type Member struct {
 	Column   design.Column // of a member that cannot be read: what could be read of mark and place
 	Rows     []int         // rows of the sheet, from 1, the first being where the results stand
 	Problems []*Problem    // why the member cannot be designed; empty: it can
+	Earlier  Earlier       // what an earlier run wrote into its first row
 }
 
 // Plan is a schedule whose header, number format, settings and rows are
@@ -47,7 +50,8 @@ type Plan struct {
 	Settings Settings
 	Summary  Summary
 
-	rows *rows
+	rows          *rows
+	loadsOptional bool
 }
 
 // Header says where the schedule stands on its sheet.
@@ -60,6 +64,9 @@ type Header struct {
 	// the members' rows hold, an earlier run's results left out if they stand
 	// last.
 	Width int
+	// Cells is the greatest number of cells of a row of the header or of a
+	// member, blank ones and earlier results included.
+	Cells int
 }
 
 // Summary is what the reading has to say about the file as a whole.
@@ -71,6 +78,7 @@ type Summary struct {
 	Repeated  int    // repeated headers passed over
 	Footnotes int    // footnotes and headings between rows passed over
 	LeftAlone []Seen // headers that name a field and are not read
+	Other     []Seen // headers that say nothing to the program
 	Notes     []string
 }
 
@@ -103,6 +111,4 @@ func Read(src Source, opts Options) (*Schedule, error) {
 
 // Members yields the members in the order of their first rows. An error ends
 // them: the file could not be read on. It may be called again.
-func (p *Plan) Members() iter.Seq2[*Member, error] {
-	return p.rows.members
-}
+func (p *Plan) Members() iter.Seq2[*Member, error] { return p.rows.members }

@@ -35,6 +35,7 @@ type Row struct {
 	Number int // from 1, as the spreadsheet or an editor counts
 	Hidden bool
 	Cells  []Cell // Cells[0] is column A; may be short
+	Pos    int64  // where it stands in the file, for a Seeker; otherwise unused
 }
 
 // Source is a file that may hold a schedule.
@@ -53,4 +54,24 @@ type Source interface {
 	// "Columns!F12" in a workbook, "line 12, column 6" in text.
 	Where(sheet string, row, col int) string
 	Close() error
+}
+
+// Seeker is a Source that can read single rows again. The rows of a source
+// that cannot are held in memory.
+type Seeker interface {
+	// RowAt reads again the row that Rows yielded with this Pos, but for its
+	// number. It is valid until the next call, apart from what Rows yields.
+	RowAt(sheet string, pos int64) (*Row, error)
+}
+
+// RowNamer is a Source that names a row as a whole otherwise than by its
+// first cell: "line 12".
+type RowNamer interface {
+	WhereRow(sheet string, row int) string
+}
+
+// DecimalHinter is a Source whose format makes one decimal mark likely where
+// no number tells: a comma in a text parted by semicolons.
+type DecimalHinter interface {
+	DecimalHint() byte // '.' or ','; 0: none
 }
