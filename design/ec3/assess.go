@@ -49,6 +49,14 @@ type Assessment struct {
 	TKind   design.Kind // Torsional, TorsionalFlexural or RestrainedAxis
 	Twist   Twist       // behind T
 
+	// The values behind the checks of bending with the greatest utilisations;
+	// Class is 0 where there is none.
+	Section     Section629
+	Lateral     Lateral
+	Interaction Interaction
+
+	interactions []Interaction
+
 	segY, segZ, segT *Segment // behind Y, Z, T
 	bufY, bufZ       []Segment
 	spare            []stability.Segment
@@ -58,12 +66,14 @@ type Assessment struct {
 // nothing but a, and allocates nothing once a's buffers are large enough.
 func (m *Member) Assess(c *Candidate, a *Assessment) {
 	*a = Assessment{Candidate: c, Member: m, Checks: a.Checks[:0],
-		bufY: a.bufY[:0], bufZ: a.bufZ[:0], spare: a.spare[:0]}
+		bufY: a.bufY[:0], bufZ: a.bufZ[:0], spare: a.spare[:0], interactions: a.interactions[:0]}
 	a.Class = c.Class
 	m.segments(c, a)
 	m.assessSection(c, a)
+	m.assessBendingSection(c, a)
 	m.assessFlexural(c, a)
 	m.assessTwist(c, a)
+	m.assessBendingBuckling(c, a)
 }
 
 // segments gives a the member's segments in the candidate.

@@ -18,12 +18,13 @@ type Candidate struct {
 	Eps              float64 // sqrt(235/fy)
 	GammaM0, GammaM1 float64
 
-	Elements []Element // in pure compression
-	Class    int       // in pure compression
-	AEff     float64   // mm2: A up to class 3
-	NRk      float64   // AEff fy, N
-	NplRd    float64   // A fy/gammaM0, N: resistance to tension
-	NcRd     float64   // NRk/gammaM0, N
+	Elements     []Element // in pure compression
+	Class        int       // in pure compression
+	AEff         float64   // mm2: A up to class 3
+	WEffY, WEffZ float64   // mm3: effective moduli, each in bending about its axis alone; the elastic ones where nothing is slender
+	NRk          float64   // AEff fy, N
+	NplRd        float64   // A fy/gammaM0, N: resistance to tension
+	NcRd         float64   // NRk/gammaM0, N
 
 	CurveY, CurveZ Curve
 	AlphaY, AlphaZ float64
@@ -55,6 +56,7 @@ func NewCandidate(s *catalogue.Section, g material.Grade, set *design.Settings) 
 		}
 		c.AEff = area
 	}
+	c.WEffY, c.WEffZ = c.effectiveModuli()
 	y, z, refusal := Curves(s, g.Nominal)
 	if refusal != nil {
 		return nil, refusal

@@ -31,6 +31,8 @@ type Member struct {
 	// column's top above a point, is the own weight acting there, N.
 	WeightPerMass float64
 
+	swayY, swayZ bool // the member sways about the axis: C_m 0.9
+
 	y, z  stability.Lengths
 	twist []stability.Segment
 	spare []stability.Segment
@@ -76,6 +78,7 @@ func (m *Member) Reset(col *design.Column, set *design.Settings) error {
 		}
 		m.AxialOnly = m.AxialOnly && !bends(&col.Combinations[i], set.Moments)
 	}
+	m.swayY, m.swayZ = stability.Sways(col, stability.AxisY), stability.Sways(col, stability.AxisZ)
 	m.note()
 	return nil
 }
