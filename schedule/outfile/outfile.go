@@ -27,6 +27,8 @@ type File struct {
 	kept bool // mode is that of a file which stands there
 	file *os.File
 	buf  *bufio.Writer
+
+	settled bool
 }
 
 // Write writes a file whole or not at all. Nothing is left of it where write
@@ -122,39 +124,51 @@ func (f *File) Write(p []byte) (int, error) {
 	return n, err
 }
 
-// Commit finishes the file and puts it at its place.
-func (f *File) Commit() error {
-	if err := f.finish(); err != nil {
+// Settle writes all that is still held back, so that little but the rename can
+// fail in Commit. A run with several files settles them all before it commits
+// the first.
+func (f *File) Settle() error {
+	if f.settled {
+		return nil
+	}
+	if err := f.settle(); err != nil {
 		f.Discard()
 		return f.explain(err)
 	}
+	f.settled = true
 	return nil
 }
 
-func (f *File) finish() error {
+func (f *File) settle() error {
 	if err := f.buf.Flush(); err != nil {
 		return err
 	}
-	if f.temp == "" {
-		file := f.file
-		f.file = nil
-		return file.Close()
-	}
-	if f.kept {
-		if err := f.file.Chmod(f.mode); err != nil {
+	if f.temp != "" {
+		if f.kept {
+			if err := f.file.Chmod(f.mode); err != nil {
+				return err
+			}
+		}
+		if err := f.file.Sync(); err != nil {
 			return err
 		}
 	}
-	if err := f.file.Sync(); err != nil {
-		return err
-	}
 	file := f.file
 	f.file = nil
-	if err := file.Close(); err != nil {
+	return file.Close()
+}
+
+// Commit finishes the file and puts it at its place.
+func (f *File) Commit() error {
+	if err := f.Settle(); err != nil {
 		return err
 	}
+	if f.temp == "" {
+		return nil
+	}
 	if err := os.Rename(f.temp, f.dest); err != nil {
-		return err
+		f.Discard()
+		return f.explain(err)
 	}
 	f.temp = ""
 	syncFolder(filepath.Dir(f.dest))

@@ -169,3 +169,28 @@ func TestDiscardAfterCommitKeepsTheFile(t *testing.T) {
 	f.Discard()
 	assert.FileExists(t, path)
 }
+
+// A run with two files that fails while it settles the second leaves neither.
+func TestSettledFileIsNotInPlace(t *testing.T) {
+	path := filepath.Join(t.TempDir(), "out.txt")
+	f, err := Create(path)
+	require.NoError(t, err)
+	_, err = f.Write([]byte("all of it"))
+	require.NoError(t, err)
+	require.NoError(t, f.Settle())
+	require.NoError(t, f.Settle())
+	assert.NoFileExists(t, path)
+
+	require.NoError(t, f.Commit())
+	data, err := os.ReadFile(path)
+	require.NoError(t, err)
+	assert.Equal(t, "all of it", string(data))
+
+	f, err = Create(path)
+	require.NoError(t, err)
+	require.NoError(t, f.Settle())
+	f.Discard()
+	entries, err := os.ReadDir(filepath.Dir(path))
+	require.NoError(t, err)
+	assert.Len(t, entries, 1)
+}
