@@ -57,7 +57,7 @@ func sectionColumns() []ResultColumn {
 		number("fy", "N/mm2", 0, 7, func(_ *Member, r *design.Result) float64 { return r.Fy }),
 		number("mass per metre", "kg/m", 1, 8, func(_ *Member, r *design.Result) float64 { return r.MassPerM }),
 		number("mass", "kg", 1, 9, func(_ *Member, r *design.Result) float64 { return r.Mass }),
-		text("next lighter", 18, func(_ *Member, r *design.Result) string { return r.NextLighter }),
+		text("next lighter", 18, nextLighter),
 		text("fails in", 22, nextLighterFails),
 		number("its utilisation", "", 3, 10, func(_ *Member, r *design.Result) float64 { return r.NextLighterUtilisation }),
 	}
@@ -66,6 +66,7 @@ func sectionColumns() []ResultColumn {
 func reserveColumns() []ResultColumn {
 	return []ResultColumn{
 		number("reserve factor on N_Ed", "", 3, 9, func(_ *Member, r *design.Result) float64 { return r.Reserve }),
+		number("reserve on N_Ed", "kN", 1, 9, func(_ *Member, r *design.Result) float64 { return r.ReserveN / 1e3 }),
 		text("then fails in", 22, func(_ *Member, r *design.Result) string { return CheckName(r.ReserveCheck) }),
 	}
 }
@@ -106,7 +107,7 @@ func (c ResultColumn) repeated() ResultColumn {
 
 // utilisation is 0 of a member without load, and blank of one without section.
 func utilisation(_ *Member, r *design.Result) Value {
-	if r.Section == "" {
+	if r.Section == "" || !finite(r.Utilisation) {
 		return Value{}
 	}
 	return Value{Kind: Number, Number: r.Utilisation}
@@ -131,6 +132,14 @@ func governingSegment(_ *Member, r *design.Result) string {
 		return ""
 	}
 	return SegmentName(r.Governing.From, r.Governing.To)
+}
+
+// nextLighter names the grade too where it is another one.
+func nextLighter(_ *Member, r *design.Result) string {
+	if r.NextLighterGrade != "" && r.NextLighterGrade != r.Grade {
+		return r.NextLighter + " " + r.NextLighterGrade
+	}
+	return r.NextLighter
 }
 
 func nextLighterFails(_ *Member, r *design.Result) string {

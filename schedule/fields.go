@@ -90,6 +90,7 @@ const (
 	perCombination                   // the heading may name a combination
 	isLabel                          // text that is shown and told apart, never counted with
 	perHeight                        // the heading may name a height: "above 2.5 m"
+	lenient                          // the noun means no other field, whatever stands beside it
 )
 
 // field is one line of the field table.
@@ -120,12 +121,12 @@ var fields = []field{
 	{flangeBField, "Reaction flange B", force, perCombination, "reaction flange b|flange b reaction|beam reaction flange b|r flange b|flange reaction b", "flange b"},
 	{webAField, "Reaction web A", force, perCombination, "reaction web a|web a reaction|beam reaction web a|r web a|web reaction a", "web a"},
 	{webBField, "Reaction web B", force, perCombination, "reaction web b|web b reaction|beam reaction web b|r web b|web reaction b", "web b"},
-	{lcrField, "L_cr,%", length, needsAxis | axisFromBoth, "lcr%|lcr%%|l%cr|lcr|effective length|buckling length|le%|le%%|leff%|leff%%|leff|effective buckling length|critical length|knicklange|longueur de flambement|lunghezza di inflessione|longitud de pandeo|sk%", ""},
-	{ltField, "L_T", length, 0, "lt|lcrt|torsional length|torsional buckling length|torsion length|effective length torsion|effective length torsional|buckling length torsion|ltorsion", ""},
-	{factorField, "k_%", ratio, needsAxis | axisFromBoth, "k%|k%%|effective length factor|buckling length factor|buckling factor|length factor|k factor|keff%|knickbeiwert|effective length factor k%|effective length factor k", ""},
-	{endsField, "Ends %", noQuantity, needsAxis | axisFromBoth | mayHaveEnd, "ends|end|end conditions|end condition|end fixity|end fixities|fixity|supports|end supports|end restraint|lagerung", ""},
-	{restraintsField, "Restraints %", length, needsAxis, "restraints|restraint|restraint heights|restraint height|restrained at|intermediate restraints|lateral restraints|restraint positions|restraints at|held at", ""},
-	{torsionField, "Restraints torsion", length, 0, "torsion restraints|torsional restraints|torsion restraint|torsional restraint|restraints torsion|restraints torsional|restraint torsion|twist restraints|restraints twist|restraint twist|torsion held at|restraints against twist", ""},
+	{lcrField, "L_cr,%", length, needsAxis | axisFromBoth | lenient, "lcr%|lcr%%|l%cr|lcr|effective length|buckling length|le%|le%%|leff%|leff%%|leff|effective buckling length|critical length|knicklange|longueur de flambement|lunghezza di inflessione|longitud de pandeo|sk%", ""},
+	{ltField, "L_T", length, lenient, "lt|lcrt|torsional length|torsional buckling length|torsion length|effective length torsion|effective length torsional|buckling length torsion|ltorsion", ""},
+	{factorField, "k_%", ratio, needsAxis | axisFromBoth | lenient, "k%|k%%|effective length factor|buckling length factor|buckling factor|length factor|k factor|keff%|knickbeiwert|effective length factor k%|effective length factor k", ""},
+	{endsField, "Ends %", noQuantity, needsAxis | axisFromBoth | mayHaveEnd | lenient, "ends|end|end conditions|end condition|end fixity|end fixities|fixity|supports|end supports|end restraint|lagerung", ""},
+	{restraintsField, "Restraints %", length, needsAxis | lenient, "restraints|restraint|restraint heights|restraint height|restrained at|intermediate restraints|lateral restraints|restraint positions|restraints at|held at", ""},
+	{torsionField, "Restraints torsion", length, lenient, "torsion restraints|torsional restraints|torsion restraint|torsional restraint|restraints torsion|restraints torsional|restraint torsion|twist restraints|restraints twist|restraint twist|torsion held at|restraints against twist", ""},
 	{heldAtField, "z-z held at flange", size, 0, "z z held at flange|zz held at flange|flange holds z z|z z restraints at flange|zz restraints at flange", ""},
 	{sectionField, "Section", noQuantity, 0, "section|section size|serial size|size|section name|column section|member section|column size|member size|given section|profile|profil|profile|sezione|perfil|section designation|designation", "existing section|proposed section"},
 	{gradeField, "Grade", noQuantity, 0, "grade|steel grade|steel|stahlsorte|stahlgute|nuance|classe acciaio|acero", "material|section grade"},
@@ -135,7 +136,7 @@ var fields = []field{
 	{thicknessField, "& thickness", size, needsBound, "thickness|flange thickness|wall thickness|wall|flange or wall thickness|t", ""},
 	{etaField, "eta % &", ratio, needsAxis | axisFromBoth | needsEnd | endFromBoth, "eta|distribution factor|eta%|eta%%|joint distribution factor", ""},
 	{stiffnessField, "Stiffness % &", stiffness, needsAxis | needsEnd | endFromBoth, "stiffness|rotational stiffness|end stiffness|joint stiffness|spring stiffness|rotational spring", ""},
-	{fireLengthField, "L_fi,%", length, needsAxis | axisFromBoth, "lfi%|lfi%%|l%fi|lcrfi%|lcr%fi|lfi|fire buckling length|buckling length in fire|buckling length fire|effective length in fire|effective length fire|fire effective length|fire length", ""},
+	{fireLengthField, "L_fi,%", length, needsAxis | axisFromBoth | lenient, "lfi%|lfi%%|l%fi|lcrfi%|lcr%fi|lfi|fire buckling length|buckling length in fire|buckling length fire|effective length in fire|effective length fire|fire effective length|fire length", ""},
 	{fireRatioField, "eta_fi", ratio, 0, "eta fi|etafi|fire load ratio|load ratio in fire|load level in fire|etafit", ""},
 	{firePeriodField, "Fire period", minutes, 0, "fire period|fire resistance|required fire resistance|fire rating|fire resistance period", ""},
 	{fireSidesField, "Sides exposed", count, 0, "sides exposed|exposed sides|fire sides", ""},
@@ -151,6 +152,11 @@ type key struct {
 	axis  axis
 	end   end
 	bound bound
+}
+
+// plain is the field's title without axis, end and bound.
+func (f *field) plain() string {
+	return strings.TrimSpace(strings.NewReplacer("_%,", "_", ",%", "", "_%", "", "%", "", "&", "").Replace(f.title))
 }
 
 var fieldTable = func() (t [fieldCount]*field) {

@@ -58,19 +58,19 @@ func (g *groupScan) number(r *Row, col int) uint32 {
 type groupClashes map[int32]string
 
 // clashes finds the groups with several families or grades.
-func (g *groupScan) clashes(links *rowLinks, set *Settings, names *Names) groupClashes {
+func (g *groupScan) clashes(links *rowLinks, set *Settings) groupClashes {
 	if len(g.rows) == 0 {
 		return nil
 	}
-	families := g.resolve(strings.Join(set.Design.Families, ", "), func(s string) string {
-		list, err := names.families(s)
+	families := g.resolve(sameFamilies(set.Design.Families), func(s string) string {
+		list, err := parseFamilies(s)
 		if err != nil {
 			return strings.ToUpper(s)
 		}
-		return strings.Join(list, ", ")
+		return sameFamilies(list)
 	})
 	grades := g.resolve(strings.Join(set.Design.Grades, " "), func(s string) string {
-		if name, err := names.grade(s); err == nil {
+		if name, err := parseGrade(s); err == nil {
 			return name
 		}
 		return strings.ToUpper(s)

@@ -13,6 +13,7 @@ type meaning struct {
 	above       *height // force in the part above this height
 	unit        *unit   // named in the heading
 	vetoed      bool    // speaks of a field, and of values that are not design values
+	unclear     string  // may speak of this field, and is not understood
 	trouble     string  // it speaks of a field, and cannot be read as it stands
 	remedy      string
 }

@@ -84,7 +84,7 @@ func (j *JSONLines) Write(m *Member, r *design.Result) error {
 		NextLighter: str(r.NextLighter), NextUtil: num(r.NextLighterUtilisation), NextCheck: str(CheckName(r.NextLighterCheck.Kind)),
 		Critical: num(r.Fire.CriticalTemperature),
 	}
-	if r.Section != "" {
+	if r.Section != "" && finite(r.Utilisation) {
 		x := Round(r.Utilisation)
 		l.Utilisation = &x
 	}

@@ -142,6 +142,9 @@ func (h *headerScan) bind(l *layout, c *headerColumn) (vetoed bool) {
 		seen.Why = "it does not speak of design values"
 		l.left = append(l.left, seen)
 		return true
+	case m.unclear != "":
+		seen.Why = "it may speak of " + m.unclear + ", and is not understood: map it if it does"
+		l.left = append(l.left, seen)
 	case m.trouble != "":
 		p := Problem{File: h.src.Name(), Cell: where, Row: c.row, Col: c.col, Heading: heading, What: fmt.Sprintf("heading %q: %s", heading, m.trouble), Do: m.remedy}
 		l.troubles = append(l.troubles, p)
@@ -302,8 +305,10 @@ func (h *headerScan) meaning(c *headerColumn) (heading string, best *meaning, ra
 		}
 		return heading, &m, mapped
 	}
+	unclear := ""
 	for i, text := range c.candidates() {
 		m := h.read(text)
+		unclear = or(unclear, m.unclear)
 		if m.vetoed && (i == 0 || len(c.filled) > 0 && i == 1) {
 			return text, m, 0
 		}
@@ -311,7 +316,17 @@ func (h *headerScan) meaning(c *headerColumn) (heading string, best *meaning, ra
 			heading, best = text, m
 		}
 	}
+	if best == nil && unclear != "" {
+		best = &meaning{unclear: unclear}
+	}
 	return heading, best, best.rank()
+}
+
+func or(a, b string) string {
+	if a != "" {
+		return a
+	}
+	return b
 }
 
 func (h *headerScan) mapped(c *headerColumn) *mapEntry {

@@ -28,6 +28,11 @@ func (r *reader) build(combos *combinationPlan, rows []*rowData) *Member {
 	out := &Member{Earlier: rows[0].old}
 	col := &out.Column
 	for i := range r.bindings {
+		if v := &m.merged[i]; v.set && r.bindings[i].key.field == familyField {
+			m.field(col, i, v)
+		}
+	}
+	for i := range r.bindings {
 		if v := &m.merged[i]; v.set {
 			m.field(col, i, v)
 		}
@@ -232,12 +237,31 @@ func (m *memberData) field(col *design.Column, i int, v *value) {
 		col.Torsion.EccentricFlange = v.text == "flange"
 		col.Torsion.Eccentric = v.num
 	case sectionField:
-		col.Given = v.text
+		m.given(col, i, v)
 	case gradeField:
 		col.Grades = strings.Split(v.text, severalNames)
 	default:
 		setLimits(col, b, v)
 	}
+}
+
+// given resolves the section that the schedule fixes, among the member's
+// families where its name fits several.
+func (m *memberData) given(col *design.Column, i int, v *value) {
+	id := nameCell{sectionField, v.text + severalNames + strings.Join(col.Choice.Families, severalNames)}
+	name, ok := m.r.sections[id]
+	if !ok {
+		var err error
+		if name, err = m.r.names.section(v.text, col.Choice.Families); err != nil {
+			m.problem(v.row, i, err.Error(), "")
+			return
+		}
+		if len(m.r.sections) < remembered {
+			id.text = strings.Clone(id.text)
+			m.r.sections[id] = name
+		}
+	}
+	col.Given = name
 }
 
 // resolved turns a restraint list into heights of this length.

@@ -192,6 +192,7 @@ func (p *phrase) takeLeftovers(f *field, w word, m *meaning) bool {
 			return true
 		}
 		if len(left) > 0 && !w.firm && !namesCombination(left) {
+			m.unclear = f.plain()
 			return false
 		}
 		if len(left) > 0 {
@@ -200,7 +201,15 @@ func (p *phrase) takeLeftovers(f *field, w word, m *meaning) bool {
 		return true
 	}
 	outside := slices.ContainsFunc(left, func(t token) bool { return !t.bracket })
-	return !outside
+	if !outside {
+		return true
+	}
+	if f.needs&lenient == 0 || slices.ContainsFunc(left, func(t token) bool { return otherWords[t.text] }) {
+		m.unclear = f.plain()
+		return false
+	}
+	m.exact = false
+	return true
 }
 
 // namesCombination reports whether the tokens look like a combination's name.
@@ -260,12 +269,12 @@ func (p *phrase) makeKeys(f *field, ax axis, m *meaning) {
 		case f.needs&axisFromBoth != 0:
 			axes, m.exact = []axis{yAxis, zAxis}, false
 		default:
-			if f.name == momentField {
-				m.trouble, m.remedy = "it names no axis", "say y-y or z-z in the heading, or map it"
-				axes = []axis{noAxis}
-			} else {
+			if f.name != momentField {
+				m.unclear = f.plain()
 				return
 			}
+			m.trouble, m.remedy = "it names no axis", "say y-y or z-z in the heading, or map it"
+			axes = []axis{noAxis}
 		}
 	}
 	if f.needs&(needsEnd|mayHaveEnd) != 0 {
@@ -277,7 +286,7 @@ func (p *phrase) makeKeys(f *field, ax axis, m *meaning) {
 			ends = []end{bottomEnd, topEnd}
 			m.exact = m.exact && given == bothEnds
 		}
-	} else if len(p.ends) > 0 && f.name != fromField && f.name != toField {
+	} else if len(p.ends) > 0 && f.name != fromField && f.name != toField && f.needs&lenient == 0 {
 		return // "Top section" is something else
 	}
 	if (f.needs&needsBound != 0) != (p.bound != noBound) && f.needs&perCombination == 0 ||

@@ -35,11 +35,12 @@ type reader struct {
 	plan     *Plan
 	src      Source
 	bindings []Binding
-	names    *Names
+	names    *names
 	old      []oldColumn
 	heights  map[string][]height
 	ends     map[string][2]design.Condition
 	resolved map[nameCell]string
+	sections map[nameCell]string // by name and families
 }
 
 // nameCell is the text of a name in a column of one kind.
@@ -54,7 +55,7 @@ const remembered = 1 << 14
 
 func newReader(r *rows) *reader {
 	return &reader{plan: r.plan, src: r.src, bindings: r.plan.Header.Columns, names: r.names, old: r.old,
-		heights: map[string][]height{}, ends: map[string][2]design.Condition{}, resolved: map[nameCell]string{}}
+		heights: map[string][]height{}, ends: map[string][2]design.Condition{}, resolved: map[nameCell]string{}, sections: map[nameCell]string{}}
 }
 
 // read fills d with what a row says.
@@ -360,9 +361,9 @@ const severalNames = "\x1f"
 func (r *reader) resolve(f fieldName, text string) (string, error) {
 	switch f {
 	case sectionField:
-		return r.names.section(text)
+		return text, nil // resolved with the member's families
 	case familyField:
-		list, err := r.names.families(text)
+		list, err := parseFamilies(text)
 		return strings.Join(list, severalNames), err
 	default:
 		list, err := r.grades(text)
@@ -374,7 +375,7 @@ func (r *reader) resolve(f fieldName, text string) (string, error) {
 func (r *reader) grades(text string) ([]string, error) {
 	var list []string
 	for _, part := range strings.FieldsFunc(text, func(c rune) bool { return c == ',' || c == ';' || c == '/' || c == '|' }) {
-		name, err := r.names.grade(trim(part))
+		name, err := parseGrade(trim(part))
 		if err == nil {
 			list = append(list, name)
 			continue
@@ -384,7 +385,7 @@ func (r *reader) grades(text string) ([]string, error) {
 			return nil, err
 		}
 		for _, w := range words {
-			name, wordErr := r.names.grade(w)
+			name, wordErr := parseGrade(w)
 			if wordErr != nil {
 				return nil, err
 			}

@@ -85,7 +85,9 @@ func Round(x float64) float64 {
 }
 
 // usable reports whether x is a number that says something.
-func usable(x float64) bool { return x != 0 && !math.IsNaN(x) && !math.IsInf(x, 0) }
+func usable(x float64) bool { return x != 0 && finite(x) }
+
+func finite(x float64) bool { return !math.IsNaN(x) && !math.IsInf(x, 0) }
 
 // ResultOptions say which result columns are asked for beyond the usual ones.
 type ResultOptions struct {

@@ -10,7 +10,7 @@ import (
 type rows struct {
 	src    Source
 	plan   *Plan
-	names  *Names
+	names  *names
 	links  *rowLinks
 	keep   *rowStore // nil: src can seek
 	old    []oldColumn

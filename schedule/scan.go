@@ -215,17 +215,21 @@ func (s *scanner) plan(settings *Settings, notes []string) (*Plan, error) {
 	if err := s.refuse(settings); err != nil {
 		return nil, err
 	}
+	names, err := newNames(s.opts, settings)
+	if err != nil {
+		return nil, err
+	}
 	hint := byte(0)
 	if h, ok := s.src.(DecimalHinter); ok {
 		hint = h.DecimalHint()
 	}
-	p := &Plan{File: s.src.Name(), Sheet: s.l.sheet, Decimal: s.vote.mark(hint), Settings: *settings, Summary: s.summary, loadsOptional: s.opts.LoadsOptional}
+	p := &Plan{File: s.src.Name(), Sheet: s.l.sheet, Decimal: s.vote.mark(hint), Settings: *settings, Summary: s.summary, loadsOptional: s.opts.LoadsOptional, Stock: names.stock}
 	p.Header = Header{First: s.l.first, Last: s.l.last, UnitRow: s.l.unitRow, Columns: s.l.bindings, Width: s.freeColumn(), Cells: s.cells}
 	for _, o := range s.l.old {
 		p.Header.Old = append(p.Header.Old, o.col)
 	}
-	p.rows = &rows{src: s.src, plan: p, names: &s.opts.Names, links: link(s.refs), keep: s.keep, old: s.l.old}
-	p.rows.groups = s.groups.clashes(p.rows.links, settings, &s.opts.Names)
+	p.rows = &rows{src: s.src, plan: p, names: names, links: link(s.refs), keep: s.keep, old: s.l.old}
+	p.rows.groups = s.groups.clashes(p.rows.links, settings)
 	sum := &p.Summary
 	sum.Rows, sum.LeftAlone, sum.Other = len(s.refs), s.l.left, s.l.other
 	for _, later := range p.rows.links.later {

@@ -3,6 +3,7 @@ package schedule
 import (
 	"iter"
 
+	"stanchion/catalogue"
 	"stanchion/design"
 )
 
@@ -17,17 +18,12 @@ type Options struct {
 	// National resolves the name of a national set (ec3.NationalSet, or one
 	// that knows the user's own sets too).
 	National func(name string) (design.National, error)
-	Names    Names
+	// Stock reads the list of sections that the setting stock names, so that a
+	// given section may be one of its own. nil: names that the catalogue does
+	// not know are left to the design where a stock list is set.
+	Stock func(file string) (*catalogue.Catalogue, error)
 	// LoadsOptional reads a schedule without N_Ed too: for a take-off.
 	LoadsOptional bool
-}
-
-// Names resolve the names that stand in cells. A function that is nil takes
-// every name as it stands.
-type Names struct {
-	Section func(name string) (string, error)    // to the name that the program writes
-	Family  func(names string) ([]string, error) // "UKC, SHS CF" to one entry a family
-	Grade   func(name string) (string, error)    // "s355 jr" to "S355JR"
 }
 
 // Member is what the schedule says of one member, from one row or from several
@@ -49,6 +45,7 @@ type Plan struct {
 	Decimal  byte // '.' or ',': decided once per file
 	Settings Settings
 	Summary  Summary
+	Stock    *catalogue.Catalogue // of the setting stock; nil: none, or Options.Stock is nil
 
 	rows          *rows
 	loadsOptional bool

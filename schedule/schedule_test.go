@@ -365,7 +365,7 @@ C7 | 4 | 900 |    | HE  |
 	assert.Empty(t, s.Members[0].Problems)
 	assert.Empty(t, s.Members[1].Problems)
 	require.Len(t, s.Members[2].Problems, 1)
-	assert.Equal(t, `loads.xlsx, Columns!D4: group "G2" has more than one family: UKC in row 4; HE in row 5: give a group one family and one grade`, s.Members[2].Problems[0].Error())
+	assert.Equal(t, `loads.xlsx, Columns!D4: group "G2" has more than one family: UKC in row 4; HEA, HEB, HEM in row 5: give a group one family and one grade`, s.Members[2].Problems[0].Error())
 	assert.Contains(t, s.Members[5].Problems[0].Error(), "more than one grade: S275 in row 6; S355 in row 7")
 	assert.Empty(t, s.Members[6].Problems)
 }

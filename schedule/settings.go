@@ -58,12 +58,11 @@ type settingsReader struct {
 	maps     mapping
 	mapLines []Assignment
 	rates    []Assignment
-	names    *Names
 	national func(string) (design.National, error)
 }
 
-func newSettingsReader(names *Names, national func(string) (design.National, error)) (*settingsReader, error) {
-	r := &settingsReader{set: &Settings{}, from: map[string]string{}, names: names, national: national}
+func newSettingsReader(national func(string) (design.National, error)) (*settingsReader, error) {
+	r := &settingsReader{set: &Settings{}, from: map[string]string{}, national: national}
 	for i := range settingTable {
 		if s := &settingTable[i]; s.initial != "" {
 			if err := r.apply(Assignment{s.name, s.initial, "default"}); err != nil {

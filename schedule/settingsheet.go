@@ -39,7 +39,7 @@ func readSettings(src Source, sheet string) ([]Assignment, error) {
 // readAllSettings applies the settings in their layers and returns notes about
 // those that the file names and nothing answers to.
 func readAllSettings(src Source, opts *Options) (*settingsReader, []string, error) {
-	r, err := newSettingsReader(&opts.Names, opts.National)
+	r, err := newSettingsReader(opts.National)
 	if err != nil {
 		return nil, nil, err
 	}
@@ -75,7 +75,7 @@ type settingPlace struct {
 // settingPlaces are the places that hold settings, the stronger last.
 func settingPlaces(src Source, opts *Options) []settingPlace {
 	var places []settingPlace
-	for _, s := range src.Sheets() {
+	for _, s := range allSheets(src) {
 		if IsSettingsSheet(s) {
 			places = append(places, settingPlace{src, s})
 		}

@@ -172,7 +172,7 @@ func applyNational(r *settingsReader, v string) error {
 func applyGrades(r *settingsReader, v string) error {
 	var grades []string
 	for _, g := range strings.FieldsFunc(v, func(c rune) bool { return isSpace(c) || c == ',' || c == ';' }) {
-		name, err := r.names.grade(g)
+		name, err := parseGrade(g)
 		if err != nil {
 			return err
 		}
@@ -186,7 +186,7 @@ func applyGrades(r *settingsReader, v string) error {
 }
 
 func applyFamilies(r *settingsReader, v string) error {
-	families, err := r.names.families(v)
+	families, err := parseFamilies(v)
 	if err == nil && len(families) == 0 {
 		err = fmt.Errorf("give a family, such as UKC")
 	}
@@ -218,11 +218,9 @@ func showFinish(s *Settings) string {
 func applyExclude(r *settingsReader, v string) error {
 	r.set.Design.Exclude = nil
 	for _, s := range strings.FieldsFunc(v, func(c rune) bool { return c == ';' || c == ',' || c == '\n' }) {
-		name, err := r.names.section(strings.TrimSpace(s))
-		if err != nil {
-			return err
+		if s = trim(s); s != "" {
+			r.set.Design.Exclude = append(r.set.Design.Exclude, s)
 		}
-		r.set.Design.Exclude = append(r.set.Design.Exclude, name)
 	}
 	return nil
 }

@@ -2,6 +2,7 @@ package schedule
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 )
 
@@ -52,12 +53,21 @@ func quoted(names []string) string {
 	return strings.Join(list, " and ")
 }
 
+// allSheets are the sheets of a source, hidden ones last.
+func allSheets(src Source) []string {
+	all := src.Sheets()
+	if h, ok := src.(SheetHider); ok {
+		all = slices.Concat(all, h.HiddenSheets())
+	}
+	return all
+}
+
 // candidateSheets are the sheets that may hold the schedule.
 func candidateSheets(src Source, name string) ([]string, error) {
-	all := src.Sheets()
+	all := allSheets(src)
 	if name == "" {
 		var list []string
-		for _, s := range all {
+		for _, s := range src.Sheets() {
 			if !IsSettingsSheet(s) {
 				list = append(list, s)
 			}

@@ -70,6 +70,12 @@ type RowNamer interface {
 	WhereRow(sheet string, row int) string
 }
 
+// SheetHider is a Source with hidden sheets, which Sheets leaves out: they are
+// read when they are named, and for settings.
+type SheetHider interface {
+	HiddenSheets() []string
+}
+
 // DecimalHinter is a Source whose format makes one decimal mark likely where
 // no number tells: a comma in a text parted by semicolons.
 type DecimalHinter interface {

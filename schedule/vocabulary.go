@@ -97,7 +97,10 @@ func compactSet(list string) map[string]bool {
 }
 
 // noiseWords say nothing about the field.
-const noiseWords = "the|of|at|for|in|on|and|or|a|an|as|design|designed|factored|ultimate|value|values|applied|acting|given|input|required|ed|d|per|each|about|axis|axes|direction|dir|loads|forces|actions|geometry|data|project|schedule|details|text|info"
+const noiseWords = "the|of|at|for|in|on|and|or|a|an|as|design|designed|factored|ultimate|value|values|applied|acting|given|input|required|ed|d|per|each|about|axis|axes|direction|dir|loads|forces|actions|geometry|data|project|schedule|details|text|info|between|along|within|intermediate"
+
+// otherWords make something else even of a heading whose noun is plain.
+var otherWords = compactSet("capacity|resistance|rd|ratio|utilisation|utilization|modulus|area|inertia|radius|slenderness|curve|beam|beams|bolt|bolts|weld|plate|check|remarks|remark|comment|comments|notes|note")
 
 // vetoWords turn a heading into something else: an action that is not a
 // design value, or one no longer valid.
