@@ -70,18 +70,37 @@ func (l *rowLinks) join(rows []int32) {
 	}
 }
 
-// hash64 is FNV-1a over the folded parts, with its bits mixed once more. It
-// is the same on every machine and in every run.
-func hash64(parts ...string) uint64 {
-	h := uint64(14695981039346656037)
-	for _, p := range parts {
-		for i := range len(p) {
-			h = (h ^ uint64(p[i])) * 1099511628211
+// hasher is FNV-1a, with its bits mixed once more at the end. It is the same
+// on every machine and in every run.
+type hasher uint64
+
+const newHasher hasher = 14695981039346656037
+
+func (h *hasher) byte(b byte) { *h = (*h ^ hasher(b)) * 1099511628211 }
+
+// name adds a name, so that names that are the same for people add the same.
+func (h *hasher) name(s string) {
+	s = trim(s)
+	for i := range len(s) {
+		if s[i] >= 0x80 || s[i] < ' ' || s[i] == ' ' && s[i-1] == ' ' {
+			s = foldName(s)
+			break
 		}
-		h = (h ^ 0xff) * 1099511628211
 	}
-	h ^= h >> 33
-	h *= 0xff51afd7ed558ccd
-	h ^= h >> 33
-	return max(h, 1)
+	for i := range len(s) {
+		b := s[i]
+		if b >= 'A' && b <= 'Z' {
+			b += 'a' - 'A'
+		}
+		h.byte(b)
+	}
+	h.byte(0xff) // stands in no name: parts what follows
+}
+
+func (h hasher) sum() uint64 {
+	x := uint64(h)
+	x ^= x >> 33
+	x *= 0xff51afd7ed558ccd
+	x ^= x >> 33
+	return max(x, 1)
 }

@@ -127,17 +127,24 @@ func (s *scanner) run() error {
 // member takes a row of a member.
 func (s *scanner) member(r *Row) {
 	ref := rowRef{number: int32(r.Number), pos: r.Pos}
-	var who [5]string
+	who := newHasher
 	for i, col := range s.marks {
 		if cell := r.at(col); !cell.empty() {
-			who[i] = foldName(cell.text())
+			who.name(cell.text())
+			if i < 2 {
+				ref.key = 1 // mark or stack
+			}
+			continue
 		}
+		who.byte(0xfe)
 	}
-	if who[0] != "" || who[1] != "" {
-		ref.key = hash64(who[:]...)
+	if ref.key != 0 {
+		ref.key = who.sum()
 	}
 	if cell := r.at(s.comb); !cell.empty() {
-		ref.comb = uint32(hash64(foldName(cell.text())))
+		h := newHasher
+		h.name(cell.text())
+		ref.comb = uint32(h.sum())
 	}
 	s.refs = append(s.refs, ref)
 	s.groups.add(r)
