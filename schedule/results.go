@@ -19,7 +19,8 @@ type ResultColumn struct {
 	Unit     string // "kN"; empty: none
 	Decimals int    // shown
 	Numeric  bool
-	Width    int // characters that its values usually need
+	Width    int    // characters that its values usually need
+	Group    string // heading over neighbouring columns of one subject; empty: none
 	// Repeated columns are shown on the further rows of a member too. The
 	// others (mass) stand on its first row alone, so that sums stay right.
 	Repeated bool

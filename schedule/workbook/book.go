@@ -174,6 +174,3 @@ func (b *Book) HiddenColumns(name string) map[int]bool {
 	}
 	return l.hidden
 }
-
-// findOwn is filled in by the writer.
-func (b *Book) findOwn() {}

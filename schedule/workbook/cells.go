@@ -77,10 +77,12 @@ func (c *cellReader) read(t *markup.Token, next int) (int, error) {
 			return 0, err
 		}
 	}
-	if s.valued || s.formula || s.style != 0 {
-		c.extent.note(c.row.Number, s.cell)
+	if s.style != 0 {
+		c.extent.styled = note(c.extent.styled, c.row.Number, s.cell)
 	}
+	c.extent.formulas = c.extent.formulas || s.formula
 	if s.valued || s.formula {
+		c.extent.valued = note(c.extent.valued, c.row.Number, s.cell)
 		c.spans = append(c.spans, s)
 	}
 	return s.cell + 1, nil

@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"io"
 	"iter"
+	"strconv"
 
 	"stanchion/schedule"
 	"stanchion/schedule/workbook/internal/markup"
@@ -36,17 +37,43 @@ func (b *Book) Rows(name string) iter.Seq2[*schedule.Row, error] {
 	}
 }
 
-// extent is how far the rows of a sheet reach to the right.
+// extent is how far the rows of a sheet reach to the right: by row from 1, the
+// column behind the last cell.
 type extent struct {
 	complete bool
-	right    []uint16 // by row from 1: the column behind the last cell that has a value or a style
+	valued   []uint16        // that has a value or a formula
+	styled   []uint16        // that has a style of its own
+	formulas bool            // there is a formula
+	heights  map[int]float64 // of the first rows, where the file gives them, in points
 }
 
-func (e *extent) note(row, col int) {
-	for len(e.right) <= row {
-		e.right = append(e.right, 0)
+func note(in []uint16, row, col int) []uint16 {
+	for len(in) <= row {
+		in = append(in, 0)
 	}
-	e.right[row] = max(e.right[row], uint16(col+1))
+	in[row] = max(in[row], uint16(col+1))
+	return in
+}
+
+// furthest returns the greatest of the rows from first to last.
+func furthest(in []uint16, first, last int) int {
+	right := uint16(0)
+	for row := first; row <= last && row < len(in); row++ {
+		right = max(right, in[row])
+	}
+	return int(right)
+}
+
+// extentOf reads a sheet through where that has not been done.
+func (b *Book) extentOf(s *sheet) (*extent, error) {
+	if !s.extent.complete {
+		for _, err := range b.Rows(s.name) {
+			if err != nil {
+				return nil, err
+			}
+		}
+	}
+	return &s.extent, nil
 }
 
 // reader reads the rows of one sheet.
@@ -92,7 +119,7 @@ func (b *Book) reader(name string) (r *reader, err error) {
 	}
 	r = &reader{book: b, sheet: s, merged: merging{all: l.merged}, stream: stream, scan: markup.NewScanner(stream)}
 	r.cell.reader = r
-	r.extent.complete = true
+	r.extent = extent{complete: true, heights: map[int]float64{}}
 	return r, nil
 }
 
@@ -170,6 +197,8 @@ func (r *reader) readRow(t *markup.Token) error {
 			number = n
 		case "hidden":
 			hidden = isTrue(string(a.Value))
+		case "ht":
+			r.noteHeight(number, a.Value)
 		}
 	}
 	r.rowNo = number
@@ -184,6 +213,15 @@ func (r *reader) readRow(t *markup.Token) error {
 	}
 	r.merged.apply(&r.row, r.filled)
 	return nil
+}
+
+// maxHeights is how far down heights are kept: as far as headers stand.
+const maxHeights = 200
+
+func (r *reader) noteHeight(row int, value []byte) {
+	if h, err := strconv.ParseFloat(string(value), 64); err == nil && row <= maxHeights {
+		r.extent.heights[row] = h
+	}
 }
 
 // parseInt reads a whole number without allocating.

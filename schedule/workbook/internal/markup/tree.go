@@ -92,6 +92,9 @@ func (e *Element) Tag() []byte { return e.doc[e.From:e.Inner] }
 // Raw returns the whole element as it stands.
 func (e *Element) Raw() []byte { return e.doc[e.From:e.To] }
 
+// Rest returns what stands behind the start tag, the end tag with it.
+func (e *Element) Rest() []byte { return e.doc[e.Inner:e.To] }
+
 // Content returns what stands between the tags.
 func (e *Element) Content() []byte { return e.doc[e.Inner:e.Close] }
 
@@ -122,6 +125,9 @@ func (e *Element) Attr(name string) string {
 	v, _ := e.token().Attr(name)
 	return v
 }
+
+// Attrs returns the attributes of the element.
+func (e *Element) Attrs() Attrs { return e.token().Attrs() }
 
 // HasAttr reports whether the element has an attribute of that name.
 func (e *Element) HasAttr(name string) bool {
