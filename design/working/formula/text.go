@@ -1,0 +1,201 @@
+package formula
+
+import (
+	"strconv"
+	"strings"
+)
+
+// String returns the symbol as plain text: "N_cr,y".
+func (s Symbol) String() string {
+	if s.Sub == "" {
+		return s.Base
+	}
+	return s.Base + "_" + s.Sub
+}
+
+// String returns the number as plain text: "6122.9×10⁴".
+func (n Number) String() string {
+	figures := strings.Replace(n.Figures, "-", "−", 1)
+	if n.Exponent == 0 {
+		return figures
+	}
+	power := "10" + Raise(strconv.Itoa(n.Exponent))
+	if figures == "1" {
+		return power
+	}
+	return figures + "×" + power
+}
+
+// Raise writes an integer in raised figures.
+func Raise(figures string) string {
+	raised := []rune(superscripts)
+	var b strings.Builder
+	for _, r := range figures {
+		if r == '-' {
+			b.WriteRune('⁻')
+		} else if r >= '0' && r <= '9' {
+			b.WriteRune(raised[r-'0'])
+		}
+	}
+	return b.String()
+}
+
+// How tightly the parts of a formula bind.
+const (
+	bindSum = iota
+	bindProduct
+	bindPower
+	bindAtom
+)
+
+// Binding returns how tightly a formula binds: brackets go about it where its
+// place asks for more.
+func binding(e Expr) int {
+	switch e := e.(type) {
+	case Sum:
+		return bindSum
+	case Product, Quotient:
+		return bindProduct
+	case Power:
+		return bindPower
+	case Number:
+		if strings.HasPrefix(e.Figures, "-") {
+			return bindSum
+		}
+		if e.Exponent != 0 {
+			return bindProduct
+		}
+	}
+	return bindAtom
+}
+
+// Bracketed reports whether a factor of a product needs brackets. A quotient
+// needs them behind another factor alone.
+func Bracketed(factor Expr, first bool) bool {
+	if _, quotient := factor.(Quotient); quotient && first {
+		return false
+	}
+	if n, number := factor.(Number); number {
+		return strings.HasPrefix(n.Figures, "-")
+	}
+	return binding(factor) <= bindProduct
+}
+
+// BaseBracketed reports whether the base of a power needs brackets.
+func BaseBracketed(e Expr) bool { return binding(e) < bindAtom }
+
+// TermBracketed reports whether a term of a sum needs brackets.
+func TermBracketed(e Expr, first, minus bool) bool {
+	return binding(e) == bindSum && (!first || minus)
+}
+
+// Times reports whether the factors of a product stand with a × between them:
+// where more than one is a number.
+func Times(p Product) bool {
+	numbers := 0
+	for _, f := range p.Factors {
+		if numeric(f) {
+			numbers++
+		}
+	}
+	return numbers > 1
+}
+
+// numeric reports whether a formula opens or closes with a figure, so that it
+// cannot stand beside another one.
+func numeric(e Expr) bool {
+	switch e := e.(type) {
+	case Number:
+		return true
+	case Power:
+		return numeric(e.Base)
+	case Quotient:
+		return numeric(e.Above) || numeric(e.Below)
+	case Product:
+		return Times(e)
+	case Sum:
+		for _, t := range e.Terms {
+			if !numeric(t.Of) {
+				return false
+			}
+		}
+		return true
+	case Root:
+		return numeric(e.Of)
+	}
+	return false
+}
+
+// Text returns a formula as plain text.
+func Text(e Expr) string {
+	switch e := e.(type) {
+	case Symbol:
+		return e.String()
+	case Number:
+		return e.String()
+	case Sum:
+		return sumText(e)
+	case Product:
+		return productText(e)
+	case Quotient:
+		above := Text(e.Above)
+		if binding(e.Above) == bindSum {
+			above = "(" + above + ")"
+		}
+		return above + " / " + bracketed(e.Below, binding(e.Below) <= bindProduct)
+	case Power:
+		return powerText(e)
+	case Root:
+		return "√(" + Text(e.Of) + ")"
+	case Call:
+		args := make([]string, len(e.Args))
+		for i, a := range e.Args {
+			args[i] = Text(a)
+		}
+		return e.Name + "(" + strings.Join(args, ", ") + ")"
+	}
+	return ""
+}
+
+func bracketed(e Expr, brackets bool) string {
+	if brackets {
+		return "(" + Text(e) + ")"
+	}
+	return Text(e)
+}
+
+func sumText(e Sum) string {
+	var b strings.Builder
+	for i, t := range e.Terms {
+		switch {
+		case i == 0 && t.Minus:
+			b.WriteString("−")
+		case i > 0 && t.Minus:
+			b.WriteString(" − ")
+		case i > 0:
+			b.WriteString(" + ")
+		}
+		b.WriteString(bracketed(t.Of, TermBracketed(t.Of, i == 0, t.Minus)))
+	}
+	return b.String()
+}
+
+func productText(e Product) string {
+	between := " "
+	if Times(e) {
+		between = " × "
+	}
+	parts := make([]string, len(e.Factors))
+	for i, f := range e.Factors {
+		parts[i] = bracketed(f, Bracketed(f, i == 0))
+	}
+	return strings.Join(parts, between)
+}
+
+func powerText(e Power) string {
+	base := bracketed(e.Base, BaseBracketed(e.Base))
+	if n, ok := e.Exponent.(Number); ok && n.Exponent == 0 && !strings.Contains(n.Figures, ".") {
+		return base + Raise(n.Figures)
+	}
+	return base + "^" + bracketed(e.Exponent, binding(e.Exponent) < bindAtom)
+}
