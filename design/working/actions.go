@@ -11,7 +11,7 @@ import (
 func (w *writer) actions() {
 	w.start("Actions")
 	m := w.m
-	t := Table{Head: []string{"combination", "N_Ed kN"}, Right: []bool{false, true}}
+	t := Table{Head: []string{"combination", "N_Ed kN"}, Right: []bool{false, false}}
 	for i := range m.Column.Combinations {
 		c := &m.Column.Combinations[i]
 		name := w.combination(i)

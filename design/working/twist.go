@@ -76,5 +76,5 @@ func (w *writer) coupled(t *ec3.Twist, ncr float64) {
 	}
 	w.find("β", "1 - ("+offset+"/i_0)^2", 1-w.c.Y0*w.c.Y0/w.c.I0Sq, None, "")
 	w.derive("r_T", "N_cr,T/N_cr,"+first, None, "")
-	w.find("N_cr,TF", w.fill("N_cr,#/(2 β) (1 + r_T - √((1 - r_T)^2 + 4 (1 - β) r_T))", first), ncr, KN, "6.3.1.4(2)")
+	w.find("N_cr,TF", w.fill("2 N_cr,T/(1 + r_T + √((1 - r_T)^2 + 4 (1 - β) r_T))", first), ncr, KN, "6.3.1.4(2)")
 }

@@ -42,7 +42,7 @@ const most = 5
 
 // print returns a value, N, mm, MPa, as a number in a unit.
 func print(exact float64, u Unit, figures int) formula.Number {
-	return formula.Number{Figures: formula.Figures(exact/math.Pow10(u.Exponent), figures)}
+	return formula.Round(exact/math.Pow10(u.Exponent), figures)
 }
 
 // know remembers what a symbol stands for and how it is printed.
@@ -100,7 +100,9 @@ func (w *writer) derive(symbol, source string, u Unit, clause string) *Step {
 func (w *writer) ratio(source string, exact float64, clause string) *Step {
 	s := w.step(formula.Must(source), source, exact, None, clause)
 	s.Formula = nil
-	s.Result = formula.Number{Figures: Utilisation(exact)}
+	if s.Result.Step() < 1e-3 {
+		s.Result = formula.Number{Figures: Utilisation(exact)}
+	}
 	s.Limit, s.Within = "≤ "+fixed(w.sheet.Limit, 2), ec3.Passes(exact, w.sheet.Limit)
 	return s
 }

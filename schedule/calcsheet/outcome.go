@@ -7,6 +7,7 @@ import (
 	"stanchion/design"
 	"stanchion/design/working"
 	"stanchion/design/working/formula"
+	"stanchion/schedule"
 )
 
 // caution stands on every sheet.
@@ -20,7 +21,7 @@ func verdict(s *working.Sheet) string {
 		" against " + fmt.Sprintf("%.2f", s.Limit)
 	if s.Governing >= 0 {
 		g := &s.Checks[s.Governing]
-		text += ", " + checkName(g.Kind) + " governs (" + g.Clause + ")"
+		text += ", " + schedule.CheckName(g.Kind) + " governs (" + g.Clause + ")"
 	}
 	return text
 }
@@ -41,7 +42,7 @@ func checkTable(s *working.Sheet, checks []design.Check, governing int) working.
 		if c.Kind == design.Refused {
 			mark = strings.TrimSpace(mark + " " + c.Reason)
 		}
-		t.Rows = append(t.Rows, []string{c.Clause, checkName(c.Kind), segment(c.From, c.To), combination(s.Column, c.Combination),
+		t.Rows = append(t.Rows, []string{c.Clause, schedule.CheckName(c.Kind), segment(c.From, c.To), combination(s.Column, c.Combination),
 			ed, rd, unit, working.Utilisation(c.Utilisation), mark})
 	}
 	return t
@@ -88,18 +89,13 @@ func closing(s *working.Sheet) []string {
 	r := s.Result
 	lines := []string{fmt.Sprintf("Mass: %s kg/m × %s m = %.1f kg a piece.", formula.Figures(s.Section.Mass, 5), metres(s.Column.Length), r.Mass)}
 	if r.Reserve > 0 {
-		lines = append(lines, fmt.Sprintf("Reserve: every axial force may grow by the factor %.3f (%s gives way first).", r.Reserve, checkName(r.ReserveCheck)))
+		lines = append(lines, fmt.Sprintf("Reserve: every axial force may grow by the factor %.3f (%s gives way first).", r.Reserve, schedule.CheckName(r.ReserveCheck)))
 	}
 	if r.NextLighter != "" {
 		lines = append(lines, fmt.Sprintf("Next lighter: %s %s, utilisation %s in %s.", r.NextLighter, r.NextLighterGrade,
-			working.Utilisation(r.NextLighterUtilisation), checkName(r.NextLighterCheck.Kind)))
+			working.Utilisation(r.NextLighterUtilisation), schedule.CheckName(r.NextLighterCheck.Kind)))
 	}
 	return append(lines,
 		"Numbers stand to as many figures as those before them support: worked out with the printed numbers, a line gives the printed result, "+
 			"but for one step of its last figure.", caution)
-}
-
-// checkName names a check for people.
-func checkName(k design.Kind) string {
-	return map[design.Kind]string{design.FlexuralY: "flexural buckling y-y"}[k]
 }

@@ -12,6 +12,8 @@ type (
 	Number struct {
 		Figures  string // "6122.9"; a minus sign is "-"
 		Exponent int
+
+		filler int // noughts at its end that stand for figures left out
 	}
 
 	// Sum adds its terms.

@@ -34,7 +34,8 @@ func TestText(t *testing.T) {
 }
 
 func TestNumbersPutIn(t *testing.T) {
-	numbers := map[string]Number{"E": {"210000", 0}, "I_y": {"6122.9", 4}, "L": {"3500", 0}, "N": {"10365", 3}, "A": {"7637.1", 0}, "ψ": {"-0.5", 0}}
+	numbers := map[string]Number{"E": {Figures: "210000"}, "I_y": {Figures: "6122.9", Exponent: 4}, "L": {Figures: "3500"}, "N": {Figures: "10365", Exponent: 3},
+		"A": {Figures: "7637.1"}, "ψ": {Figures: "-0.5"}}
 	number := func(s Symbol) (Number, bool) { n, ok := numbers[s.String()]; return n, ok }
 	for source, want := range map[string]string{
 		"π^2 E I_y/L^2":   "π² × 210000 × 6122.9×10⁴ / 3500²",
@@ -68,7 +69,7 @@ func anyExpr(t *rapid.T, depth int) Expr {
 	sub := func() Expr { return anyExpr(t, depth-1) }
 	switch kind {
 	case 0:
-		return Number{Figures(rapid.Float64Range(-20, 20).Draw(t, "x"), 4), rapid.SampledFrom([]int{0, 0, 3, -2}).Draw(t, "e")}
+		return Number{Figures: Figures(rapid.Float64Range(-20, 20).Draw(t, "x"), 4), Exponent: rapid.SampledFrom([]int{0, 0, 3, -2}).Draw(t, "e")}
 	case 1:
 		return Sym(rapid.SampledFrom([]string{"a", "λ̄_y", "N_b,z,Rd", "C_1"}).Draw(t, "s"))
 	case 2:
@@ -121,9 +122,11 @@ func TestFigures(t *testing.T) {
 		v    float64
 		want string
 	}{{3500, "3500"}, {345, "345"}, {0.34, "0.34"}, {210000, "210000"}, {7637.1234, "7637.1"}, {10365.123, "10365.1"},
-		{0.504321, "0.50432"}, {0.13578123, "0.135781"}, {3127.00004, "3127.0"}, {1036512.7, "1036513"}, {-0.1122334, "-0.112233"}, {0, "0"}} {
+		{0.504321, "0.50432"}, {0.13578123, "0.135781"}, {3127.00004, "3127.0"}, {1036512.7, "1036510"}, {841023.4, "841020"}, {209.6 - 28.4 - 20.4, "160.8"}, {-0.1122334, "-0.112233"}, {0, "0"}} {
 		assert.Equal(t, c.want, Figures(c.v, 5))
 	}
-	assert.Equal(t, 1e2, Number{"6122.9", 3}.Step())
-	assert.Equal(t, 10.0, Number{"3500", 1}.Step())
+	assert.Equal(t, 1e2, Number{Figures: "6122.9", Exponent: 3}.Step())
+	assert.Equal(t, 10.0, Number{Figures: "3500", Exponent: 1}.Step())
+	assert.Equal(t, 10.0, Round(841023.4, 5).Step())
+	assert.Equal(t, 1.0, Round(84102, 5).Step())
 }

@@ -90,38 +90,50 @@ func TermBracketed(e Expr, first, minus bool) bool {
 }
 
 // Times reports whether the factors of a product stand with a × between them:
-// where more than one is a number.
+// where they are numbers, and where two numbers would stand side by side.
 func Times(p Product) bool {
-	numbers := 0
-	for _, f := range p.Factors {
-		if numeric(f) {
-			numbers++
+	symbols, beside := false, false
+	for i, f := range p.Factors {
+		symbols = symbols || hasSymbol(f)
+		if i > 0 {
+			_, before := p.Factors[i-1].(Number)
+			_, this := f.(Number)
+			beside = beside || before && this
 		}
 	}
-	return numbers > 1
+	return beside || !symbols
 }
 
-// numeric reports whether a formula opens or closes with a figure, so that it
-// cannot stand beside another one.
-func numeric(e Expr) bool {
+// hasSymbol reports whether a symbol other than π is left in a formula.
+func hasSymbol(e Expr) bool {
 	switch e := e.(type) {
-	case Number:
-		return true
-	case Power:
-		return numeric(e.Base)
-	case Quotient:
-		return numeric(e.Above) || numeric(e.Below)
-	case Product:
-		return Times(e)
+	case Symbol:
+		return e.Base != "π"
 	case Sum:
 		for _, t := range e.Terms {
-			if !numeric(t.Of) {
-				return false
+			if hasSymbol(t.Of) {
+				return true
 			}
 		}
-		return true
+	case Product:
+		return anySymbol(e.Factors)
+	case Quotient:
+		return hasSymbol(e.Above) || hasSymbol(e.Below)
+	case Power:
+		return hasSymbol(e.Base) || hasSymbol(e.Exponent)
 	case Root:
-		return numeric(e.Of)
+		return hasSymbol(e.Of)
+	case Call:
+		return anySymbol(e.Args)
+	}
+	return false
+}
+
+func anySymbol(list []Expr) bool {
+	for _, e := range list {
+		if hasSymbol(e) {
+			return true
+		}
 	}
 	return false
 }

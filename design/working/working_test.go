@@ -1,0 +1,128 @@
+package working_test
+
+import (
+	"math"
+	"testing"
+
+	"github.com/stretchr/testify/assert"
+	"github.com/stretchr/testify/require"
+	"pgregory.net/rapid"
+
+	"stanchion/catalogue"
+	"stanchion/design"
+	"stanchion/design/ec3"
+	"stanchion/design/material"
+	"stanchion/design/working"
+	"stanchion/design/working/formula"
+)
+
+func settings(t require.TestingT) design.Settings {
+	uk, err := ec3.NationalSet("UK")
+	require.NoError(t, err)
+	return design.Settings{National: uk, Grades: []string{"S355"}, Families: []string{"UKC"}, Limit: 1, Growth: 1}
+}
+
+func section(t require.TestingT, name string) *catalogue.Section {
+	s, err := catalogue.Default().Find(name, catalogue.FindOptions{})
+	require.NoError(t, err)
+	return s
+}
+
+// sheetOf works a column out in a section, as a run would.
+func sheetOf(t require.TestingT, col *design.Column, s *catalogue.Section, grade string, set *design.Settings) *working.Sheet {
+	g, err := material.Parse(grade)
+	require.NoError(t, err)
+	c, err := ec3.NewCandidate(s, g, set)
+	require.NoError(t, err)
+	m, err := ec3.NewMember(col, set)
+	require.NoError(t, err)
+	var a ec3.Assessment
+	m.Assess(c, &a)
+	a.Explain()
+	r := &design.Result{Section: s.Name(), Grade: g.Name, Utilisation: a.Utilisation, Governing: a.Governing,
+		Y: a.Y, Z: a.Z, T: a.T, HasT: a.HasT, TKind: a.TKind, Class: a.Class, Fy: c.Fy,
+		MassPerM: s.Mass, Mass: s.Mass * col.Length / 1000, Fire: m.AssessFire(c)}
+	if !ec3.Passes(a.Utilisation, set.Limit) {
+		r.Status = design.Fails
+	}
+	return working.Of(&a, r)
+}
+
+// followed works every line of a sheet out from its printed numbers, and
+// compares with the printed result.
+func followed(t assert.TestingT, s *working.Sheet) (steps int) {
+	assert.Empty(t, s.Off)
+	for _, b := range s.Blocks {
+		for _, item := range b.Items {
+			step, ok := item.(*working.Step)
+			if !ok || step.Numbers == nil {
+				continue
+			}
+			steps++
+			printed := formula.Text(step.Numbers)
+			read, err := formula.Parse(printed)
+			assert.NoError(t, err, printed)
+			got, err := formula.Eval(read, nil)
+			assert.NoError(t, err, printed)
+			// One step of the last figure is the promise of the sheet; a
+			// utilisation has three decimals whatever it is worked out from.
+			assert.LessOrEqual(t, math.Abs(got-step.Result.Value()), step.Result.Step()*1.001,
+				"%s: %s = %s = %s", b.Title, formula.Text(step.Left), printed, step.Result)
+		}
+	}
+	return steps
+}
+
+// anyColumn draws a column that the rules can take.
+func anyColumn(t *rapid.T) *design.Column {
+	L := rapid.Float64Range(1500, 12000).Draw(t, "L")
+	col := &design.Column{Mark: "C1", Quantity: 1, Length: L}
+	for _, h := range []*design.Hold{&col.Y, &col.Z} {
+		h.Bottom.Condition = rapid.SampledFrom([]design.Condition{design.Pinned, design.PartlyFixed, design.Fixed}).Draw(t, "bottom")
+		h.Top.Condition = rapid.SampledFrom([]design.Condition{design.Pinned, design.PartlyFixed, design.Fixed}).Draw(t, "top")
+		switch rapid.IntRange(0, 4).Draw(t, "hold") {
+		case 0:
+			h.Restraints = []float64{0.4 * L}
+		case 1:
+			h.Restraints = []float64{0.3 * L, 0.7 * L}
+		case 2:
+			h.Lcr = rapid.Float64Range(1000, 15000).Draw(t, "Lcr")
+		}
+	}
+	if rapid.Bool().Draw(t, "torsion") {
+		col.Torsion.Given = true
+	}
+	n := rapid.IntRange(1, 2).Draw(t, "combinations")
+	for range n {
+		c := design.Combination{NEd: rapid.Float64Range(-500e3, 4000e3).Draw(t, "N")}
+		if rapid.Bool().Draw(t, "steps") {
+			c.Steps = []design.Step{{Height: 0.5 * L, NEd: c.NEd * 0.6}}
+		}
+		col.Combinations = append(col.Combinations, c)
+	}
+	return col
+}
+
+func TestEveryLineCanBeFollowed(t *testing.T) {
+	sections := catalogue.Default().Sections()
+	rapid.Check(t, func(t *rapid.T) {
+		set := settings(t)
+		set.National = rapid.SampledFrom(ec3.NationalSets()).Draw(t, "national")
+		if rapid.Bool().Draw(t, "weight") {
+			set.SelfWeight = 1.35
+		}
+		if rapid.Bool().Draw(t, "fire") {
+			set.FireRatio = 0.6
+		}
+		if rapid.Bool().Draw(t, "elastic") {
+			set.Method = design.MethodElastic
+		}
+		s := rapid.SampledFrom(sections).Draw(t, "section")
+		g, err := material.Parse(rapid.SampledFrom([]string{"S235", "S355", "S460"}).Draw(t, "grade"))
+		require.NoError(t, err)
+		if _, err := ec3.NewCandidate(s, g, &set); err != nil {
+			t.Skip(err)
+		}
+		followed(t, sheetOf(t, anyColumn(t), s, g.Name, &set))
+	})
+}
