@@ -7,102 +7,136 @@ import (
 )
 
 // chainSolver finds the cheapest sizes of a chain by dynamic programming over
-// its nodes from the bottom up. The state is the size of the node; the work is
-// nodes x sizes^2, and the answer exact.
+// its nodes, each before the one that it hands its cost on to. The state is the
+// size of the node; the work is nodes x sizes^2, and the answer exact.
 type chainSolver struct {
 	sizes int
-	stand []bool // stand[above*sizes+below]
-	cost  []float64
-	next  []float64
-	from  [][]int32 // from[n][j]: size below in the best choice with j at node n
-	order []int32   // the open sizes, by their cost up to the node below
+	fits  [2][]bool   // fits[0][above*sizes+below]: one may stand on the other; fits[1][below*sizes+above] likewise
+	cost  [][]float64 // by node and size: the part of the chain that ends there
+	from  [][]int32   // from[n][j]: size of n in the best choice with j where n hands on to
+	order []int32     // the open sizes, by their cost at the node at hand
 	picks []int
+	paths []visit
+	trees map[*Chain][]visit
 }
 
 func newChainSolver(p *Problem) *chainSolver {
-	s := &chainSolver{
-		sizes: p.Sizes,
-		cost:  make([]float64, p.Sizes),
-		next:  make([]float64, p.Sizes),
-	}
+	s := &chainSolver{sizes: p.Sizes, trees: map[*Chain][]visit{}}
 	deepest := 0
-	for _, c := range p.Chains {
+	for i := range p.Chains {
+		c := &p.Chains[i]
 		deepest = max(deepest, len(c.Nodes))
-	}
-	if deepest > 1 {
-		s.stand = make([]bool, p.Sizes*p.Sizes)
-		for above := range p.Sizes {
-			for below := range p.Sizes {
-				s.stand[above*p.Sizes+below] = above == below || p.MayStand == nil || p.MayStand(below, above)
-			}
+		if c.Links != nil {
+			s.trees[c] = c.visits()
 		}
 	}
-	s.from = make([][]int32, deepest)
-	for n := range s.from {
+	if deepest > 1 {
+		s.fits = fits(p)
+	}
+	s.cost, s.from = make([][]float64, deepest), make([][]int32, deepest)
+	for n := range deepest {
+		s.cost[n] = make([]float64, p.Sizes)
 		s.from[n] = make([]int32, p.Sizes)
+		s.paths = append(s.paths, visit{node: n, to: n + 1})
 	}
 	s.picks = make([]int, deepest)
 	return s
+}
+
+// fits tabulates which size may stand on which, by the size above and by the
+// one below.
+func fits(p *Problem) (table [2][]bool) {
+	table[0], table[1] = make([]bool, p.Sizes*p.Sizes), make([]bool, p.Sizes*p.Sizes)
+	for above := range p.Sizes {
+		for below := range p.Sizes {
+			ok := above == below || p.MayStand == nil || p.MayStand(below, above)
+			table[0][above*p.Sizes+below] = ok
+			table[1][below*p.Sizes+above] = ok
+		}
+	}
+	return table
+}
+
+// visitsOf returns the nodes of a chain in the order of the work.
+func (s *chainSolver) visitsOf(c *Chain) []visit {
+	if c.Links != nil {
+		return s.trees[c]
+	}
+	return s.paths[:len(c.Nodes)]
 }
 
 // solve returns the least cost of the chain with the open sizes only, price
 // added to each node's cost (nil: none), and the sizes chosen; the slice is
 // valid until the next call. The cost is +Inf where no choice serves.
 func (s *chainSolver) solve(c *Chain, open []int32, price [][]float64) (float64, []int) {
+	visits := s.visitsOf(c)
 	for n := range c.Nodes {
-		node := c.Nodes[n].Cost
-		if n > 0 {
-			s.order = append(s.order[:0], open...)
-			slices.SortFunc(s.order, func(a, b int32) int {
-				return cmp.Or(cmp.Compare(s.cost[a], s.cost[b]), cmp.Compare(a, b))
-			})
-		}
 		for _, j := range open {
-			v := node[j]
-			if math.IsInf(v, 1) {
-				s.next[j] = v
-				continue
-			}
+			s.cost[n][j] = c.Nodes[n].Cost[j]
 			if price != nil {
-				v += price[n][j]
+				s.cost[n][j] += price[n][j]
 			}
-			if n > 0 {
-				best, from := s.cheapestBelow(c, j)
-				v += best
-				s.from[n][j] = from
-			}
-			s.next[j] = v
 		}
-		s.cost, s.next = s.next, s.cost
 	}
-	last, best := int32(-1), math.Inf(1)
+	last := len(visits) - 1
+	for _, v := range visits[:last] {
+		if c.Links == nil {
+			v.splice = c.SpliceCost
+		}
+		s.handOn(v, open)
+	}
+	root := visits[last].node
+	pick, best := int32(-1), math.Inf(1)
 	for _, j := range open {
-		if s.cost[j] < best {
-			last, best = j, s.cost[j]
+		if s.cost[root][j] < best {
+			pick, best = j, s.cost[root][j]
 		}
 	}
-	if last < 0 {
+	if pick < 0 {
 		return best, nil
 	}
 	picks := s.picks[:len(c.Nodes)]
-	for n := len(picks) - 1; n >= 0; n-- {
-		picks[n] = int(last)
-		last = s.from[n][last]
+	picks[root] = int(pick)
+	for i := last - 1; i >= 0; i-- {
+		v := visits[i]
+		picks[v.node] = int(s.from[v.node][picks[v.to]])
 	}
 	return best, picks
 }
 
-// cheapestBelow finds the size below j that makes the chain so far cheapest; on
-// equal cost the section runs through.
-func (s *chainSolver) cheapestBelow(c *Chain, j int32) (float64, int32) {
-	through := s.cost[j]
-	row := s.stand[int(j)*s.sizes:]
+// handOn adds, for every size of the node that v hands on to, the cost of the
+// best size of v that goes with it.
+func (s *chainSolver) handOn(v visit, open []int32) {
+	cost, to, from := s.cost[v.node], s.cost[v.to], s.from[v.node]
+	s.order = append(s.order[:0], open...)
+	slices.SortFunc(s.order, func(a, b int32) int {
+		return cmp.Or(cmp.Compare(cost[a], cost[b]), cmp.Compare(a, b))
+	})
+	table := s.fits[0]
+	if v.down {
+		table = s.fits[1]
+	}
+	for _, j := range open {
+		if math.IsInf(to[j], 1) {
+			continue
+		}
+		var best float64
+		best, from[j] = s.cheapest(cost, table[int(j)*s.sizes:], j, v.splice)
+		to[j] += best
+	}
+}
+
+// cheapest finds the size that makes the chain so far cheapest where the next
+// node has size j, among those that fit with j; on equal cost the section runs
+// through.
+func (s *chainSolver) cheapest(cost []float64, fits []bool, j int32, splice float64) (float64, int32) {
+	through := cost[j]
 	for _, i := range s.order {
-		w := s.cost[i] + c.SpliceCost
+		w := cost[i] + splice
 		if !(w < through) {
 			break
 		}
-		if row[i] {
+		if fits[i] {
 			return w, i
 		}
 	}

@@ -11,12 +11,23 @@ type Node struct {
 }
 
 // Chain is a stack of nodes from the bottom up between which the section may
-// change. A node that stands alone is a chain of one.
+// change. A node that stands alone is a chain of one. Where groups tie several
+// stacks together, Links say which node stands on which.
 type Chain struct {
 	Nodes []Node
 	// SpliceCost is added where the section of a node differs from the one
 	// below, in the units of Cost.
 	SpliceCost float64
+	// Links, if not nil, replace the order of the nodes and SpliceCost. They
+	// join all nodes and close no ring.
+	Links []Link
+}
+
+// Link says that one node of a chain stands on another, and what a change of
+// section between them costs.
+type Link struct {
+	Below, Above int
+	SpliceCost   float64
 }
 
 // Problem is a project: its chains, and which size may stand on which.
@@ -51,11 +62,15 @@ func (s *Solution) Gap() float64 {
 
 // Validate reports the first thing that is wrong with the problem's shape: a
 // chain without nodes, a cost list of the wrong length, or a cost that is
-// negative or not a number.
+// negative or not a number, or links
+// that are no tree.
 func (p *Problem) Validate() error {
 	for c, chain := range p.Chains {
 		if len(chain.Nodes) == 0 {
 			return fmt.Errorf("chain %d has no nodes", c)
+		}
+		if chain.Links != nil && !chain.isTree() {
+			return fmt.Errorf("chain %d: its links do not join its nodes without closing a ring", c)
 		}
 		for n, node := range chain.Nodes {
 			if len(node.Cost) != p.Sizes {

@@ -35,7 +35,7 @@ func (p *Problem) reduce() *reduced {
 		for n := range nodes {
 			nodes[n].Cost = keep(c.Nodes[n].Cost)
 		}
-		r.chains = append(r.chains, Chain{Nodes: nodes, SpliceCost: c.SpliceCost})
+		r.chains = append(r.chains, Chain{Nodes: nodes, SpliceCost: c.SpliceCost, Links: c.Links})
 	}
 	if p.MayStand != nil {
 		r.stand = func(below, above int) bool { return p.MayStand(live[below], live[above]) }
