@@ -16,6 +16,9 @@ const caution = "Results are design aids, to be checked by a qualified engineer 
 const notCovered = "Not covered: built-up and tapered members, seismic, fatigue, connections, base plates, second-order " +
 	"frame effects (the forces given must include them where they matter)."
 
+// cautionHelp is the caution as the help has it.
+var cautionHelp = wrap(caution, 92, "") + "\n" + wrap(notCovered, 92, "")
+
 // execute runs one command line and returns the exit status.
 func execute(ctx context.Context, con *console, args []string) int {
 	root := rootCommand(con)
@@ -40,7 +43,7 @@ func rootCommand(con *console) *cobra.Command {
 		Long: "stanchion sizes and checks steel columns to EN 1993-1-1. It reads a column schedule as a design\n" +
 			"office keeps it (.xlsx, .xlsm, .csv), finds the lightest section that passes for every column,\n" +
 			"and returns the schedule annotated.\n\n" +
-			wrap(caution, 92, "") + "\n" + wrap(notCovered, 92, ""),
+			cautionHelp,
 		Example: `  stanchion size examples/ottermere-depot.xlsx
   stanchion check examples/ottermere-depot-ordered.csv
   stanchion sections 203x203 UKC`,
@@ -49,7 +52,7 @@ func rootCommand(con *console) *cobra.Command {
 	}
 	root.CompletionOptions.HiddenDefaultCmd = true
 	root.SetFlagErrorFunc(func(c *cobra.Command, err error) error { return usage(c, "%v", err) })
-	root.AddCommand(sectionsCommand(con), nationalCommand(con), versionCommand(con))
+	root.AddCommand(sizeCommand(con), checkCommand(con), sectionsCommand(con), nationalCommand(con), versionCommand(con))
 	return root
 }
 

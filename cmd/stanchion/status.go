@@ -54,7 +54,7 @@ func exitStatus(err error) int {
 }
 
 // verdict returns how a run ends whose members have these outcomes.
-func verdict(count map[design.Status]int) error {
+func verdict(count *[4]int) error {
 	switch {
 	case count[design.NotRead] > 0:
 		return &finished{statusNotRead}

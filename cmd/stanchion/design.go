@@ -1,0 +1,90 @@
+package main
+
+import (
+	"context"
+	"iter"
+
+	"stanchion/design"
+	"stanchion/design/search"
+	"stanchion/schedule"
+)
+
+// design designs the members in their order and hands each to the outputs. The
+// schedule streams through, unless a decision needs all members at once.
+func (r *run) design(ctx context.Context) error {
+	bar := newProgress(r.con, r.plan.Summary.Members)
+	defer bar.done()
+	put := func(m *schedule.Member, res *design.Result) error {
+		r.tally.Add(m, res)
+		bar.add()
+		return r.out.put(m, res)
+	}
+	if r.mode == search.Size && r.hasField("Group") {
+		return r.designTogether(ctx, put)
+	}
+	return search.Stream(ctx, r.engine, r.mode, r.flags.workers, r.jobs(), func(j *search.Job[*schedule.Member]) error {
+		return put(j.Tag, &j.Result)
+	})
+}
+
+// jobs yields the members as jobs of the search.
+func (r *run) jobs() iter.Seq2[*search.Job[*schedule.Member], error] {
+	return func(yield func(*search.Job[*schedule.Member], error) bool) {
+		for m, err := range r.plan.Members() {
+			if err != nil {
+				yield(nil, err)
+				return
+			}
+			r.names.resolve(m)
+			j := &search.Job[*schedule.Member]{Column: m.Column, Tag: m}
+			if len(m.Problems) > 0 {
+				j.Skip, j.Result = true, schedule.NotReadResult(m)
+			}
+			if !yield(j, nil) {
+				return
+			}
+		}
+	}
+}
+
+// designTogether holds all members: those of a group share a section, and may
+// stand anywhere.
+func (r *run) designTogether(ctx context.Context, put func(*schedule.Member, *design.Result) error) error {
+	var members []*schedule.Member
+	var cols []design.Column
+	for j, err := range r.jobs() {
+		if err != nil {
+			return err
+		}
+		members = append(members, j.Tag)
+		if !j.Skip {
+			cols = append(cols, j.Column)
+		}
+	}
+	results, defects := r.engine.SizeAll(ctx, cols, r.flags.workers, nil)
+	if results == nil && defects != nil {
+		return defects
+	}
+	next := 0
+	for _, m := range members {
+		res := schedule.NotReadResult(m)
+		if len(m.Problems) == 0 {
+			res = results[next]
+			next++
+		}
+		if err := put(m, &res); err != nil {
+			return err
+		}
+	}
+	return defects
+}
+
+// hasField reports whether the schedule has a column for a field.
+func (r *run) hasField(name string) bool {
+	for i := range r.plan.Header.Columns {
+		if r.plan.Header.Columns[i].Field == name {
+			return true
+		}
+	}
+	return false
+}

@@ -1,0 +1,246 @@
+package main
+
+import (
+	"context"
+	"fmt"
+	"math"
+	"strconv"
+	"strings"
+
+	"stanchion/catalogue"
+	"stanchion/design"
+	"stanchion/schedule"
+	"stanchion/schedule/summary"
+)
+
+const (
+	shownFailing = 20 // members that fail, on one screen
+	shownNotRead = 12
+)
+
+func newTally(r *run) *summary.Tally {
+	return summary.NewTally(max(shownFailing, shownNotRead), r.names.familyOf())
+}
+
+// familyOf returns what names the family of a section, with its finish.
+func (n *names) familyOf() func(string) string {
+	known := map[string]string{}
+	return func(section string) string {
+		family, ok := known[section]
+		if !ok {
+			if s, err := n.find(section, catalogue.FindOptions{}); err == nil {
+				family = s.Family
+				if s.Finish == catalogue.ColdFormed {
+					family += finishMark(s.Finish)
+				}
+			}
+			known[section] = family
+		}
+		return family
+	}
+}
+
+// report says what came of a run: the outcome, the steel, what needs looking
+// at, and where the results are.
+func (r *run) report(ctx context.Context) {
+	if r.con.quiet {
+		return
+	}
+	r.sayRead()
+	r.sayOutcome()
+	r.saySteel()
+	r.sayFailing(ctx)
+	r.sayNotRead()
+	r.sayWritten()
+}
+
+func (r *run) print(lines ...string) {
+	for _, l := range lines {
+		fmt.Fprintln(r.con.err, l)
+	}
+}
+
+// sayRead says what was read, and what was not.
+func (r *run) sayRead() {
+	s := &r.plan.Summary
+	where := r.plan.File
+	if r.plan.Sheet != "" {
+		where += ", sheet " + r.plan.Sheet
+	}
+	r.paragraph("", where+": "+plural(s.Members, "member")+" in "+plural(s.Rows, "row"))
+	r.paragraph("", "Settings: "+r.settingsLine())
+	var over []string
+	for _, c := range []struct {
+		n    int
+		what string
+	}{{s.Totals, "total row"}, {s.Repeated, "repeated header"}, {s.Footnotes, "footnote"}} {
+		if c.n > 0 {
+			over = append(over, plural(c.n, c.what))
+		}
+	}
+	if len(over) > 0 {
+		r.paragraph("", "Passed over: "+strings.Join(over, ", "))
+	}
+	if s.Hidden > 0 {
+		r.paragraph("", "Hidden rows, designed too: "+strconv.Itoa(s.Hidden))
+	}
+	for _, h := range s.LeftAlone {
+		r.paragraph("", fmt.Sprintf("Left alone: %s %q: %s", h.Cell, h.Heading, h.Why))
+	}
+	if len(s.Other) > 0 {
+		var headings []string
+		for _, h := range s.Other {
+			headings = append(headings, fmt.Sprintf("%s %q", h.Cell, h.Heading))
+		}
+		r.paragraph("", "Headings that say nothing to the program: "+strings.Join(headings, ", "))
+	}
+	for _, n := range s.Notes {
+		r.paragraph("", "Note: "+n)
+	}
+}
+
+// settingsLine names the settings that every reader asks for, and those that
+// somebody gave.
+func (r *run) settingsLine() string {
+	var list []string
+	for _, s := range r.plan.Settings.Used() {
+		always := s.Name == "national" || s.Name == "grade" || s.Name == "families" || s.Name == "limit"
+		given := s.From != "default" && !strings.HasPrefix(s.From, "national set")
+		if s.Value != "" && (always || given) && !strings.HasPrefix(s.Name, "map ") {
+			list = append(list, s.Name+" "+s.Value)
+		}
+	}
+	return strings.Join(list, "; ")
+}
+
+func (r *run) sayOutcome() {
+	c := &r.tally.Count
+	parts := []string{fmt.Sprintf("%d pass", c[design.Passes])}
+	for _, p := range []struct {
+		status design.Status
+		word   string
+	}{{design.Fails, "fail"}, {design.NoSection, "without a section that passes"}, {design.NotRead, "not read"}} {
+		if n := c[p.status]; n > 0 {
+			parts = append(parts, r.con.strong(fmt.Sprintf("%d %s", n, p.word)))
+		}
+	}
+	r.print("", fmt.Sprintf("Outcome: %s", strings.Join(parts, ", ")))
+}
+
+func (r *run) saySteel() {
+	list := r.tally.Steel()
+	if len(list) == 0 {
+		return
+	}
+	t := newTable("  Steel", ">pieces", ">length m", ">tonnes")
+	row := func(s summary.Steel) {
+		t.add("  "+s.Family, strconv.Itoa(s.Pieces), strconv.FormatFloat(s.Length, 'f', 1, 64), strconv.FormatFloat(s.Mass/1000, 'f', 2, 64))
+	}
+	for _, s := range list {
+		row(s)
+	}
+	if len(list) > 1 {
+		row(summary.Total(list))
+	}
+	r.print("")
+	r.print(t.lines()...)
+}
+
+// sayFailing lists the members that fail, with what would pass in their place.
+func (r *run) sayFailing(ctx context.Context) {
+	lines := r.tally.Worst[:min(shownFailing, len(r.tally.Worst))]
+	if len(lines) == 0 {
+		return
+	}
+	instead := r.lightest(ctx, lines)
+	t := newTable("  Mark", "Level", "Section", ">util.", "Governing check", "Lightest that passes")
+	t.limit(0, 14)
+	t.limit(1, 12)
+	t.limit(4, 26)
+	for i := range lines {
+		l := &lines[i]
+		t.add("  "+l.Member.Column.Mark, summary.Level(&l.Member.Column), l.Result.Section, utilisation(l.Result.Utilisation), schedule.CheckName(l.Result.Governing.Kind), instead[i])
+	}
+	r.print("", "Members that fail:")
+	r.print(t.lines()...)
+	if more := r.tally.Count[design.Fails] + r.tally.Count[design.NoSection] - len(lines); more > 0 {
+		r.print(fmt.Sprintf("  and %d more: see the result column \"status\"", more))
+	}
+}
+
+func utilisation(u float64) string {
+	if math.IsInf(u, 0) {
+		return "-"
+	}
+	return strconv.FormatFloat(u, 'f', 3, 64)
+}
+
+// lightest names, for members that fail, the lightest section that passes: of
+// the family of the one that is given, or of the member's own choice.
+func (r *run) lightest(ctx context.Context, lines []summary.Line) []string {
+	names := make([]string, len(lines))
+	cols := make([]design.Column, len(lines))
+	familyOf := r.names.familyOf()
+	for i := range lines {
+		cols[i] = lines[i].Member.Column
+		cols[i].Given = ""
+		if family := familyOf(lines[i].Result.Section); lines[i].Result.Fixed && family != "" {
+			cols[i].Choice.Families = []string{family}
+		}
+	}
+	found, err := r.engine.Lightest(ctx, cols, r.flags.workers)
+	for i := range names {
+		switch {
+		case err != nil:
+		case found[i] == nil:
+			names[i] = "none"
+		default:
+			names[i] = found[i].Section.Name()
+		}
+	}
+	return names
+}
+
+// sayNotRead lists why members could not be read.
+func (r *run) sayNotRead() {
+	lines := r.tally.NotRead[:min(shownNotRead, len(r.tally.NotRead))]
+	if len(lines) == 0 {
+		return
+	}
+	r.print("", "Not read:")
+	for i := range lines {
+		l := &lines[i]
+		for _, p := range l.Member.Problems {
+			r.paragraph("  ", p.Cell+": "+p.Message())
+		}
+		if len(l.Member.Problems) == 0 {
+			r.paragraph("  ", l.Member.Column.Cell+": "+strings.Join(l.Result.Notes, "; "))
+		}
+	}
+	if more := r.tally.Count[design.NotRead] - len(lines); more > 0 {
+		r.print(fmt.Sprintf("  and %d more: see the result column \"note\"", more))
+	}
+}
+
+func (r *run) sayWritten() {
+	r.print("")
+	if r.out.path != stdio {
+		r.paragraph("", "Written: "+r.con.strong(r.out.path))
+	}
+	if r.flags.json != "" && r.flags.json != stdio {
+		r.paragraph("", "Written: "+r.flags.json)
+	}
+	r.paragraph("", caution)
+}
+
+// paragraph prints words within the width of the screen.
+func (r *run) paragraph(indent, words string) {
+	r.print(indent + wrap(words, screenWidth-2, indent+"  "))
+}
+
+func plural(n int, what string) string {
+	if n == 1 {
+		return "1 " + what
+	}
+	return strconv.Itoa(n) + " " + what + "s"
+}

@@ -1,0 +1,129 @@
+package main
+
+import (
+	"context"
+	"errors"
+	"fmt"
+
+	"github.com/spf13/cobra"
+
+	"stanchion/catalogue"
+	"stanchion/design/search"
+	"stanchion/schedule"
+	"stanchion/schedule/summary"
+)
+
+// run is one run of size or check over a schedule.
+type run struct {
+	con   *console
+	cmd   *cobra.Command
+	flags *runFlags
+	input string
+	mode  search.Mode
+
+	source schedule.Source
+	plan   *schedule.Plan
+	cat    *catalogue.Catalogue
+	engine *search.Engine
+	names  *names
+	out    *outputs
+	tally  *summary.Tally
+}
+
+func newRun(con *console, c *cobra.Command, f *runFlags, input string, mode search.Mode) *run {
+	con.quiet = f.quiet
+	return &run{con: con, cmd: c, flags: f, input: input, mode: mode}
+}
+
+// suffix ends the name of the output.
+func (r *run) suffix() string {
+	if r.mode == search.Check {
+		return checkedSuffix
+	}
+	return sizedSuffix
+}
+
+// do reads the schedule, designs its members, writes the results and says what
+// came of it. Nothing stands at the outputs' places before all is done.
+func (r *run) do(ctx context.Context) error {
+	if err := r.flags.check(r.cmd); err != nil {
+		return err
+	}
+	if err := r.read(ctx); err != nil {
+		return err
+	}
+	defer r.source.Close()
+	if err := r.openOutputs(); err != nil {
+		return err
+	}
+	defer r.out.discard()
+	defects := r.design(ctx)
+	var defect *search.BugError
+	if defects != nil && !errors.As(defects, &defect) {
+		return defects
+	}
+	if err := r.out.commit(ctx); err != nil {
+		return err
+	}
+	if defects != nil {
+		r.con.fail(defects)
+	}
+	r.report(ctx)
+	return verdict(&r.tally.Count)
+}
+
+// read opens the schedule and understands it, its settings and the sections
+// that may be used.
+func (r *run) read(ctx context.Context) error {
+	assignments, err := r.flags.assignments(r.cmd)
+	if err != nil {
+		return err
+	}
+	if r.source, err = openSource(ctx, r.con, r.input); err != nil {
+		return err
+	}
+	if err := r.scan(ctx, assignments); err != nil {
+		r.source.Close()
+		return err
+	}
+	return nil
+}
+
+func (r *run) scan(ctx context.Context, assignments []schedule.Assignment) error {
+	opts := schedule.Options{
+		Sheet:    r.flags.sheet,
+		Settings: assignments,
+		National: r.national,
+		Names:    schedule.Names{Family: familyNames},
+	}
+	if r.flags.settings != "" {
+		s, err := openSource(ctx, r.con, r.flags.settings)
+		if err != nil {
+			return err
+		}
+		defer s.Close()
+		opts.SettingsFile = s
+	}
+	var err error
+	if r.plan, err = schedule.Scan(r.source, opts); err != nil {
+		return err
+	}
+	set := &r.plan.Settings
+	r.cat = catalogue.Default()
+	if set.Stock != "" {
+		if r.cat, err = readStock(findFile(set.Stock, r.input)); err != nil {
+			return err
+		}
+	}
+	r.names = newNames(r.cat, r.source, r.plan)
+	if r.engine, err = search.New(r.cat, set.Design); err != nil {
+		return fmt.Errorf("settings: %w", err)
+	}
+	return nil
+}
+
+// isText reports whether the schedule is delimited text.
+func (r *run) isText() bool {
+	_, ok := r.source.(*textSource)
+	return ok
+}

@@ -1,0 +1,126 @@
+// Package summary adds up what a run found over a whole schedule, and lays it
+// out as the project's own sheets of an annotated workbook.
+package summary
+
+import (
+	"cmp"
+	"slices"
+
+	"stanchion/design"
+	"stanchion/schedule"
+)
+
+// Tally adds up the results of a run. It holds little, however many members
+// there are.
+type Tally struct {
+	Count [4]int // of members, by design.Status
+
+	// Worst are members that fail or have no section, the greatest utilisation
+	// first, and NotRead those that could not be read, in their order: as many
+	// of each as were asked for.
+	Worst, NotRead []Line
+
+	keep     int
+	familyOf func(section string) string
+	steel    map[string]*Steel
+}
+
+// Line is one member with its result.
+type Line struct {
+	Member *schedule.Member
+	Result design.Result
+}
+
+// Steel is the steel of one family that the members need.
+type Steel struct {
+	Family string
+	Pieces int
+	Length float64 // m
+	Mass   float64 // kg
+}
+
+// NewTally starts a tally that keeps so many members of each kind that a
+// person must look at. familyOf names the family of a section.
+func NewTally(keep int, familyOf func(section string) string) *Tally {
+	return &Tally{keep: keep, familyOf: familyOf, steel: map[string]*Steel{}}
+}
+
+// Add adds one member. The steel of members without a section that passes, or
+// that is given, does not count.
+func (t *Tally) Add(m *schedule.Member, r *design.Result) {
+	t.Count[r.Status]++
+	switch r.Status {
+	case design.Passes:
+		t.addSteel(m, r)
+	case design.Fails:
+		t.addSteel(m, r)
+		t.addWorst(m, r)
+	case design.NoSection:
+		t.addWorst(m, r)
+	case design.NotRead:
+		if len(t.NotRead) < t.keep {
+			t.NotRead = append(t.NotRead, Line{m, *r})
+		}
+	}
+}
+
+func (t *Tally) addSteel(m *schedule.Member, r *design.Result) {
+	family := t.familyOf(r.Section)
+	s := t.steel[family]
+	if s == nil {
+		s = &Steel{Family: family}
+		t.steel[family] = s
+	}
+	n := float64(m.Column.Quantity)
+	s.Pieces += m.Column.Quantity
+	s.Length += n * m.Column.Length / 1000
+	s.Mass += n * r.Mass
+}
+
+// addWorst keeps the members with the greatest utilisations; the earlier of
+// two equal ones goes before.
+func (t *Tally) addWorst(m *schedule.Member, r *design.Result) {
+	at, _ := slices.BinarySearchFunc(t.Worst, r.Utilisation, func(l Line, u float64) int {
+		if l.Result.Utilisation >= u {
+			return -1
+		}
+		return 1
+	})
+	if at >= t.keep {
+		return
+	}
+	t.Worst = slices.Insert(t.Worst, at, Line{m, *r})
+	t.Worst = t.Worst[:min(len(t.Worst), t.keep)]
+}
+
+// Members returns the number of members.
+func (t *Tally) Members() int { return t.Count[0] + t.Count[1] + t.Count[2] + t.Count[3] }
+
+// Steel returns the steel by family, in alphabetical order.
+func (t *Tally) Steel() []Steel {
+	var list []Steel
+	for _, s := range t.steel {
+		list = append(list, *s)
+	}
+	slices.SortFunc(list, func(a, b Steel) int { return cmp.Compare(a.Family, b.Family) })
+	return list
+}
+
+// Total returns the steel of all families.
+func Total(list []Steel) Steel {
+	all := Steel{Family: "all"}
+	for _, s := range list {
+		all.Pieces += s.Pieces
+		all.Length += s.Length
+		all.Mass += s.Mass
+	}
+	return all
+}
+
+// Level names the levels between which a member stands: "L1-L2".
+func Level(c *design.Column) string {
+	if c.From == "" || c.To == "" {
+		return c.From + c.To
+	}
+	return c.From + "-" + c.To
+}

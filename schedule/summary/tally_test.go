@@ -1,0 +1,50 @@
+package summary
+
+import (
+	"math"
+	"testing"
+
+	"github.com/stretchr/testify/assert"
+
+	"stanchion/design"
+	"stanchion/schedule"
+)
+
+func add(t *Tally, mark string, status design.Status, utilisation float64) {
+	m := &schedule.Member{Column: design.Column{Mark: mark, Quantity: 2, Length: 3500}}
+	t.Add(m, &design.Result{Status: status, Section: "203x203x46 UKC", Utilisation: utilisation, Mass: 161})
+}
+
+func TestTallyKeepsTheWorst(t *testing.T) {
+	y := NewTally(3, func(string) string { return "UKC" })
+	add(y, "a", design.Fails, 1.2)
+	add(y, "b", design.NoSection, 3)
+	add(y, "c", design.Passes, 0.9)
+	add(y, "d", design.Fails, math.Inf(1))
+	add(y, "e", design.Fails, 1.2)
+	add(y, "f", design.Fails, 1.1)
+	add(y, "g", design.NotRead, 0)
+	var marks []string
+	for _, l := range y.Worst {
+		marks = append(marks, l.Member.Column.Mark)
+	}
+	assert.Equal(t, []string{"d", "b", "a"}, marks)
+	assert.Equal(t, [4]int{1, 4, 1, 1}, y.Count)
+	assert.Equal(t, 7, y.Members())
+	assert.Equal(t, "g", y.NotRead[0].Member.Column.Mark)
+}
+
+func TestTallyCountsSteelThatIsBought(t *testing.T) {
+	y := NewTally(3, func(string) string { return "UKC" })
+	add(y, "a", design.Passes, 0.9)
+	add(y, "b", design.Fails, 1.9)
+	add(y, "c", design.NoSection, 3) // the best tried is not bought
+	add(y, "d", design.NotRead, 0)
+	assert.Equal(t, []Steel{{"UKC", 4, 14, 644}}, y.Steel())
+	assert.Equal(t, Steel{"all", 4, 14, 644}, Total(y.Steel()))
+}
+
+func TestLevel(t *testing.T) {
+	assert.Equal(t, "L1-L2", Level(&design.Column{From: "L1", To: "L2"}))
+	assert.Equal(t, "L1", Level(&design.Column{From: "L1"}))
+}
