@@ -35,7 +35,6 @@ func (r *run) jobs() iter.Seq2[*search.Job[*schedule.Member], error] {
 				yield(nil, err)
 				return
 			}
-			r.names.resolve(m)
 			j := &search.Job[*schedule.Member]{Column: m.Column, Tag: m}
 			if len(m.Problems) > 0 {
 				j.Skip, j.Result = true, schedule.NotReadResult(m)

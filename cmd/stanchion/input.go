@@ -82,26 +82,23 @@ func stoppable(ctx context.Context, rows iter.Seq2[*schedule.Row, error]) iter.S
 	}
 }
 
-// writtenEarlier reports whether an earlier run wrote a schedule: its results
+// textEarlier reports whether an earlier run wrote a text schedule: results
 // stand in it.
-func writtenEarlier(path string) bool {
-	src, err := openSource(context.Background(), nil, path)
+func textEarlier(path string) bool {
+	f, err := text.Open(path)
 	if err != nil {
 		return false
 	}
-	defer src.Close()
-	const deep = 200 // rows in which a header can stand
-	for _, sheet := range src.Sheets() {
-		seen := 0
-		for row, err := range src.Rows(sheet) {
-			if err != nil || seen == deep {
-				break
-			}
-			seen++
-			for i := range row.Cells {
-				if schedule.IsResultHeading(row.Cells[i].Text) {
-					return true
-				}
+	defer f.Close()
+	rows := 200 // in which a header can stand
+	for row, err := range f.Rows("") {
+		if err != nil || rows == 0 {
+			break
+		}
+		rows--
+		for i := range row.Cells {
+			if schedule.IsResultHeading(row.Cells[i].Text) {
+				return true
 			}
 		}
 	}

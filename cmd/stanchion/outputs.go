@@ -15,6 +15,7 @@ import (
 	"stanchion/design/search"
 	"stanchion/schedule"
 	"stanchion/schedule/outfile"
+	"stanchion/schedule/workbook"
 )
 
 // sink takes the members in their order, and is told when all have come.
@@ -158,7 +159,7 @@ func (r *run) guard(path string) error {
 		return fmt.Errorf("-o and --json both name %s: name two files", json)
 	}
 	if path != stdio {
-		if err := mayReplace(path, r.flags.force, writtenEarlier); err != nil {
+		if err := mayReplace(path, r.flags.force, r.earlier()); err != nil {
 			return err
 		}
 	}
@@ -166,6 +167,14 @@ func (r *run) guard(path string) error {
 		return mayReplace(json, r.flags.force, jsonEarlier)
 	}
 	return nil
+}
+
+// earlier tells whether an earlier run wrote a file of the input's form.
+func (r *run) earlier() func(path string) bool {
+	if r.isText() {
+		return textEarlier
+	}
+	return workbook.WrittenByUs
 }
 
 func (r *run) openSinks(path string) error {

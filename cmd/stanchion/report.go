@@ -7,7 +7,6 @@ import (
 	"strconv"
 	"strings"
 
-	"stanchion/catalogue"
 	"stanchion/design"
 	"stanchion/schedule"
 	"stanchion/schedule/summary"
@@ -19,25 +18,7 @@ const (
 )
 
 func newTally(r *run) *summary.Tally {
-	return summary.NewTally(max(shownFailing, shownNotRead), r.names.familyOf())
-}
-
-// familyOf returns what names the family of a section, with its finish.
-func (n *names) familyOf() func(string) string {
-	known := map[string]string{}
-	return func(section string) string {
-		family, ok := known[section]
-		if !ok {
-			if s, err := n.find(section, catalogue.FindOptions{}); err == nil {
-				family = s.Family
-				if s.Finish == catalogue.ColdFormed {
-					family += finishMark(s.Finish)
-				}
-			}
-			known[section] = family
-		}
-		return family
-	}
+	return summary.NewTally(max(shownFailing, shownNotRead), r.familyOf)
 }
 
 // report says what came of a run: the outcome, the steel, what needs looking
@@ -90,9 +71,9 @@ func (r *run) sayRead() {
 	if len(s.Other) > 0 {
 		var headings []string
 		for _, h := range s.Other {
-			headings = append(headings, fmt.Sprintf("%s %q", h.Cell, h.Heading))
+			headings = append(headings, fmt.Sprintf("%q (%s)", h.Heading, h.Cell))
 		}
-		r.paragraph("", "Headings that say nothing to the program: "+strings.Join(headings, ", "))
+		r.paragraph("", "Not used: "+strings.Join(headings, ", "))
 	}
 	for _, n := range s.Notes {
 		r.paragraph("", "Note: "+n)
@@ -180,11 +161,10 @@ func utilisation(u float64) string {
 func (r *run) lightest(ctx context.Context, lines []summary.Line) []string {
 	names := make([]string, len(lines))
 	cols := make([]design.Column, len(lines))
-	familyOf := r.names.familyOf()
 	for i := range lines {
 		cols[i] = lines[i].Member.Column
 		cols[i].Given = ""
-		if family := familyOf(lines[i].Result.Section); lines[i].Result.Fixed && family != "" {
+		if family := r.familyOf(lines[i].Result.Section); lines[i].Result.Fixed && family != "" {
 			cols[i].Choice.Families = []string{family}
 		}
 	}

@@ -21,18 +21,18 @@ type run struct {
 	input string
 	mode  search.Mode
 
-	source schedule.Source
-	plan   *schedule.Plan
-	cat    *catalogue.Catalogue
-	engine *search.Engine
-	names  *names
-	out    *outputs
-	tally  *summary.Tally
+	source   schedule.Source
+	plan     *schedule.Plan
+	cat      *catalogue.Catalogue
+	engine   *search.Engine
+	families map[string]string // of sections, by name
+	out      *outputs
+	tally    *summary.Tally
 }
 
 func newRun(con *console, c *cobra.Command, f *runFlags, input string, mode search.Mode) *run {
 	con.quiet = f.quiet
-	return &run{con: con, cmd: c, flags: f, input: input, mode: mode}
+	return &run{con: con, cmd: c, flags: f, input: input, mode: mode, families: map[string]string{}}
 }
 
 // suffix ends the name of the output.
@@ -94,7 +94,7 @@ func (r *run) scan(ctx context.Context, assignments []schedule.Assignment) error
 		Sheet:    r.flags.sheet,
 		Settings: assignments,
 		National: r.national,
-		Names:    schedule.Names{Family: familyNames},
+		Stock:    r.stock,
 	}
 	if r.flags.settings != "" {
 		s, err := openSource(ctx, r.con, r.flags.settings)
@@ -110,12 +110,9 @@ func (r *run) scan(ctx context.Context, assignments []schedule.Assignment) error
 	}
 	set := &r.plan.Settings
 	r.cat = catalogue.Default()
-	if set.Stock != "" {
-		if r.cat, err = readStock(findFile(set.Stock, r.input)); err != nil {
-			return err
-		}
+	if r.plan.Stock != nil {
+		r.cat = r.plan.Stock
 	}
-	r.names = newNames(r.cat, r.source, r.plan)
 	if r.engine, err = search.New(r.cat, set.Design); err != nil {
 		return fmt.Errorf("settings: %w", err)
 	}

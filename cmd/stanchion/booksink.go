@@ -1,0 +1,133 @@
+package main
+
+import (
+	"context"
+	"crypto/sha256"
+	"encoding/hex"
+	"io"
+	"os"
+	"path/filepath"
+
+	"stanchion/design"
+	"stanchion/schedule"
+	"stanchion/schedule/summary"
+	"stanchion/schedule/workbook"
+)
+
+// standard is what the results rest on.
+const standard = "EN 1993-1-1:2005 + A1:2014"
+
+// bookSink writes a workbook: the results stand beside the schedule's rows, and
+// the project's own sheets behind the user's.
+type bookSink struct {
+	run   *run
+	book  *workbook.Book
+	w     io.Writer
+	cols  []schedule.ResultColumn
+	lines []summary.Line
+	rows  map[int]int // of the sheet, to the member
+}
+
+func newBookSink(r *run, src *bookSource, w io.Writer, cols []schedule.ResultColumn) *bookSink {
+	return &bookSink{run: r, book: src.Book, w: w, cols: cols, rows: map[int]int{}}
+}
+
+func (s *bookSink) put(m *schedule.Member, res *design.Result) error {
+	for _, row := range m.Rows {
+		s.rows[row] = len(s.lines)
+	}
+	s.lines = append(s.lines, summary.Line{Member: m, Result: *res})
+	return nil
+}
+
+func (s *bookSink) finish(ctx context.Context) error {
+	last := 0
+	for row := range s.rows {
+		last = max(last, row)
+	}
+	plan := s.run.plan
+	place, err := s.book.Plan(workbook.Block{
+		Sheet: plan.Sheet, Header: plan.Header, LastRow: last, Title: s.run.blockTitle(), Columns: s.cols, Cells: s.cells(),
+	})
+	if err != nil {
+		return err
+	}
+	for _, w := range place.Warnings() {
+		s.run.con.say("note: %s", w)
+	}
+	info, err := s.run.info()
+	if err != nil {
+		return err
+	}
+	return place.WriteTo(&stopper{ctx, s.w}, summary.Sheets(info, s.run.tally, s.lines))
+}
+
+// cells returns the results of a row: all of a member's on its first.
+func (s *bookSink) cells() func(row int) []schedule.Value {
+	var values []schedule.Value
+	return func(row int) []schedule.Value {
+		i, ok := s.rows[row]
+		if !ok {
+			return nil
+		}
+		l := &s.lines[i]
+		if row == l.Member.Rows[0] {
+			values = schedule.Cells(values[:0], s.cols, l.Member, &l.Result)
+		} else {
+			values = schedule.ContinuedCells(values[:0], s.cols, l.Member, &l.Result)
+		}
+		return values
+	}
+}
+
+// blockTitle stands over the results.
+func (r *run) blockTitle() string {
+	return "Results: " + standard + ", national set " + r.plan.Settings.Design.National.Name
+}
+
+// info gathers what the project's own sheets say of the run.
+func (r *run) info() (*summary.Info, error) {
+	sum, err := fileSum(r.input)
+	if err != nil {
+		return nil, err
+	}
+	return &summary.Info{
+		Program:  "stanchion " + versionText(),
+		Standard: standard,
+		National: &r.plan.Settings.Design.National,
+		Sheet:    r.plan.Sheet,
+		File:     filepath.Base(r.input),
+		SHA256:   sum,
+		Settings: r.plan.Settings.Used(),
+		Reading:  &r.plan.Summary,
+		Cautions: []string{caution, notCovered},
+	}, nil
+}
+
+// fileSum returns the SHA-256 of a file, so that a reader can tell from which
+// issue of a schedule the results come.
+func fileSum(path string) (string, error) {
+	f, err := os.Open(path)
+	if err != nil {
+		return "", err
+	}
+	defer f.Close()
+	h := sha256.New()
+	if _, err := io.Copy(h, f); err != nil {
+		return "", err
+	}
+	return hex.EncodeToString(h.Sum(nil)), nil
+}
+
+// stopper ends a long write with its context.
+type stopper struct {
+	ctx context.Context
+	w   io.Writer
+}
+
+func (s *stopper) Write(p []byte) (int, error) {
+	if err := s.ctx.Err(); err != nil {
+		return 0, err
+	}
+	return s.w.Write(p)
+}
