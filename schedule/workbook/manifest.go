@@ -17,6 +17,7 @@ type manifest struct {
 	overrides map[string]*markup.Element // by lower-case name without leading slash
 	defaults  map[string]string          // by lower-case extension
 	added     map[string]string          // part to type
+	gone      map[string]*markup.Element // overrides of parts that are left out
 	order     []string
 	edits     markup.Edits
 }
@@ -26,7 +27,7 @@ func openManifest(pkg *opc.Package) (*manifest, error) {
 	if err != nil {
 		return nil, err
 	}
-	m := &manifest{doc: doc, root: root, overrides: map[string]*markup.Element{}, defaults: map[string]string{}, added: map[string]string{}}
+	m := &manifest{doc: doc, root: root, overrides: map[string]*markup.Element{}, defaults: map[string]string{}, added: map[string]string{}, gone: map[string]*markup.Element{}}
 	for _, e := range root.All("Override") {
 		m.overrides[partKey(e.Attr("PartName"))] = e
 	}
@@ -48,6 +49,10 @@ func (m *manifest) typeOf(part string) string {
 
 // set gives a part a type.
 func (m *manifest) set(part, kind string) {
+	if e := m.gone[partKey(part)]; e != nil { // back in its place
+		m.overrides[partKey(part)] = e
+		delete(m.gone, partKey(part))
+	}
 	if m.added[part] == "" && m.typeOf(part) == kind {
 		return
 	}
@@ -64,7 +69,7 @@ func (m *manifest) set(part, kind string) {
 // remove forgets a part.
 func (m *manifest) remove(part string) {
 	if e := m.overrides[partKey(part)]; e != nil {
-		m.edits.Remove(e)
+		m.gone[partKey(part)] = e
 		delete(m.overrides, partKey(part))
 	}
 }
@@ -75,6 +80,9 @@ func (m *manifest) apply() []byte {
 		fmt.Fprintf(&b, `<%sOverride PartName="/%s" ContentType="%s"/>`, m.root.Prefix, markup.Escaped(part), markup.Escaped(m.added[part]))
 	}
 	edits := append(markup.Edits(nil), m.edits...)
+	for _, part := range sortedKeys(m.gone) {
+		edits.Remove(m.gone[part])
+	}
 	if b.Len() > 0 {
 		edits.Append(m.root, b.String())
 	}

@@ -336,7 +336,7 @@ func (w *rowWriter) tall(tag string, row int) string {
 	if _, given := p.sheet.extent.heights[row]; given || row != p.place.heading {
 		return tag
 	}
-	height := headingLines * lineHeight * p.letters.size
+	height := math.Ceil(headingLines * lineHeight * p.letters.size)
 	return markup.SetAttrs([]byte(tag), "ht", strconv.FormatFloat(height, 'f', -1, 64))
 }
 
