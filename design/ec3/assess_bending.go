@@ -60,12 +60,12 @@ func (b *bending) forces(length float64) (vz, vy float64) {
 
 func (m *Member) shear(c *Candidate, a *Assessment, b *bending) {
 	vz, vy := b.forces(m.Length)
-	avZ, avY := ShearAreas(c.Section)
+	vzRd, vyRd := c.VcRd()
 	if vz > 0 {
-		a.add(design.ShearZ, "6.2.6(1)", b.combination, 0, m.Length, vz, VplRd(avZ, c.Fy, c.GammaM0))
+		a.add(design.ShearZ, "6.2.6(1)", b.combination, 0, m.Length, vz, vzRd)
 	}
 	if vy > 0 {
-		a.add(design.ShearY, "6.2.6(1)", b.combination, 0, m.Length, vy, VplRd(avY, c.Fy, c.GammaM0))
+		a.add(design.ShearY, "6.2.6(1)", b.combination, 0, m.Length, vy, vyRd)
 	}
 }
 
@@ -100,6 +100,8 @@ func (m *Member) sections(c *Candidate, a *Assessment, b *bending) {
 // clause names the paragraph whose criterion was used.
 func (x *Section629) clause(shape catalogue.Shape) string {
 	switch {
+	case x.RhoZ > 0 || x.RhoY > 0:
+		return "6.2.10(3)"
 	case x.Class == 3:
 		return "6.2.9.2(1)"
 	case x.Class == 4:
@@ -116,11 +118,9 @@ func (m *Member) assessBendingBuckling(c *Candidate, a *Assessment) {
 	if m.AxialOnly || !bendable(c.Section) {
 		return
 	}
-	if c.Section.Shape == catalogue.ShapeI || bucklesLaterally(c.Section) {
-		for i := range m.Forces {
-			if b, bends := m.moments(c, i); bends {
-				m.lateralChecks(c, a, &b)
-			}
+	for i := range m.Forces {
+		if b, bends := m.moments(c, i); bends {
+			m.lateralChecks(c, a, &b)
 		}
 	}
 	m.interactions(c, a)
@@ -138,6 +138,8 @@ func (m *Member) assessBendingBuckling(c *Candidate, a *Assessment) {
 
 // lateralChecks checks bending about y-y alone in every lateral-torsional
 // segment, by the class that the section has under the force and moments there.
+// A section whose chi_LT is 1 by rule has M_b,Rd and no such check: its
+// cross-section says as much.
 func (m *Member) lateralChecks(c *Candidate, a *Assessment, b *bending) {
 	for i := range a.SegT {
 		s := &a.SegT[i]
@@ -159,8 +161,10 @@ func (m *Member) lateralChecks(c *Candidate, a *Assessment, b *bending) {
 		if a.Lateral.Class == 0 || lt.Utilisation > a.Lateral.Utilisation {
 			a.Lateral = lt
 		}
-		a.record(design.Check{Kind: design.LateralTorsional, Clause: "6.3.2.1(1)", Combination: s.Combination,
-			From: s.From, To: s.To, Ed: lt.MyEd, Rd: lt.MbRd, Utilisation: lt.Utilisation}, class)
+		if bucklesLaterally(c.Section) {
+			a.record(design.Check{Kind: design.LateralTorsional, Clause: "6.3.2.1(1)", Combination: s.Combination,
+				From: s.From, To: s.To, Ed: lt.MyEd, Rd: lt.MbRd, Utilisation: lt.Utilisation}, class)
+		}
 	}
 }
 
@@ -192,13 +196,15 @@ func overlap(a, b *Segment) bool {
 }
 
 // interaction keeps one set of overlapping segments. Where all of it is in
-// tension, 6.2.9 and 6.3.2 stand alone.
+// tension, 6.2.9 and 6.3.2 stand alone. Without axial force the criteria stand
+// for bending about both axes, so that the first newton changes nothing.
 func (m *Member) interaction(c *Candidate, a *Assessment, y, z, t *Segment, b *bending) {
-	if y.Lcr == 0 || z.Lcr == 0 {
+	w := c.Section.Mass
+	if y.NEd+m.ownWeight(w, y.From) < 0 && z.NEd+m.ownWeight(w, z.From) < 0 {
 		return
 	}
 	x := m.interact(c, y, z, t, b)
-	if x.NY <= 0 && x.NZ <= 0 || x.Undefined {
+	if x.Undefined {
 		return
 	}
 	a.interactions = append(a.interactions, x)

@@ -13,13 +13,13 @@ type Section629 struct {
 	Class             int
 	Web               Element // as classified under these actions
 	WY, WZ            float64 // mm3, reduced for shear
-	NplRd, MplY, MplZ float64 // N, N mm: of the class
+	NplRd, MplY, MplZ float64 // N, N mm: of the class, reduced for shear
 	N                 float64 // |N_Ed|/N_Rd
 	Aw, Af            float64 // a of I and H, a_w and a_f of RHS
 	MNY, MNZ          float64 // reduced for axial force, N mm
 	Alpha, Beta       float64 // exponents of (6.41); 0: not used
 	VzEd, VyEd        float64 // N
-	VzRd, VyRd        float64 // N
+	VzRd, VyRd        float64 // V_pl,Rd, N
 	RhoZ, RhoY        float64 // reductions for shear
 	Utilisation       float64
 	Linear            bool // (6.42) or (6.44): a sum
@@ -36,16 +36,18 @@ func (c *Candidate) bendSection(nEd, my, mz, vz, vy float64) (x Section629) {
 	avZ, avY := ShearAreas(c.Section)
 	x.VzRd, x.VyRd = VplRd(avZ, c.Fy, c.GammaM0), VplRd(avY, c.Fy, c.GammaM0)
 	x.RhoZ, x.RhoY = shearRho(vz, x.VzRd), shearRho(vy, x.VyRd)
-	wy, wz := c.modulus(x.Class)
-	if x.RhoZ > 0 || x.RhoY > 0 {
-		wy, wz = c.shearedModuli(wy, wz, x.RhoZ, x.RhoY)
+	if c.Section.Shape == catalogue.ShapeCHS { // the resultant shears a tube
+		x.RhoZ, x.RhoY = shearRho(math.Hypot(vz, vy), x.VzRd), 0
 	}
-	x.WY, x.WZ = wy, wz
-	x.MplY, x.MplZ = wy*c.Fy/c.GammaM0, wz*c.Fy/c.GammaM0
+	x.WY, x.WZ = c.modulus(x.Class)
 	x.NplRd = c.resistanceNRk(x.Class) / c.GammaM0
 	if nEd < 0 {
 		x.NplRd = c.NplRd // tension: the gross section
 	}
+	if x.RhoZ > 0 || x.RhoY > 0 {
+		c.sheared(&x)
+	}
+	x.MplY, x.MplZ = x.WY*c.Fy/c.GammaM0, x.WZ*c.Fy/c.GammaM0
 	x.N = math.Abs(nEd) / x.NplRd
 	linear := x.N + my/x.MplY + mz/x.MplZ
 	if x.Class > 2 || x.N >= 1 {

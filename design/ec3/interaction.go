@@ -49,6 +49,15 @@ func susceptible(s *catalogue.Section) bool {
 	return s.Shape != catalogue.ShapeCHS && s.Shape != catalogue.ShapeRHS
 }
 
+// ncrOf returns pi2 EI/L_cr2, N. A length without compression has none by the
+// elastic method, and no critical load.
+func ncrOf(euler, lcr float64) float64 {
+	if lcr == 0 {
+		return math.Inf(1)
+	}
+	return euler / (lcr * lcr)
+}
+
 // interact works out (6.61) and (6.62) of overlapping segments in a
 // combination. (6.61) takes the greatest M_y, its psi and N_Ed of the y-y
 // segment; (6.62) N_Ed of the z-z segment and the greatest M_y, M_b and C_mLT
@@ -67,7 +76,7 @@ func (m *Member) interact(c *Candidate, y, z, t *Segment, actions *bending) (x I
 	x.Class, x.Web = c.CombinedClass(max(x.NY, x.NZ), x.My661 > 0 || x.My662 > 0, x.Mz > 0)
 	wy, wz := c.modulus(x.Class)
 	x.NRk, x.MyRk, x.MzRk = c.resistanceNRk(x.Class), wy*c.Fy, wz*c.Fy
-	x.NcrY, x.NcrZ = c.EulerY/(y.Lcr*y.Lcr), c.EulerZ/(z.Lcr*z.Lcr)
+	x.NcrY, x.NcrZ = ncrOf(c.EulerY, y.Lcr), ncrOf(c.EulerZ, z.Lcr)
 	x.LambdaY, x.LambdaZ = math.Sqrt(x.NRk/x.NcrY), math.Sqrt(x.NRk/x.NcrZ)
 	x.ChiY, x.ChiZ = Chi(c.AlphaY, x.LambdaY), Chi(c.AlphaZ, x.LambdaZ)
 	x.RatioY, x.RatioZ = x.NY*c.GammaM1/(x.ChiY*x.NRk), x.NZ*c.GammaM1/(x.ChiZ*x.NRk)

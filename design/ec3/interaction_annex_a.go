@@ -18,8 +18,11 @@ type AnnexAValues struct {
 }
 
 // annexA fills in the interaction factors of Annex A, method 1, Tables A.1 and
-// A.2 (from memory, with the corrections of AC:2009). Where N_Ed reaches a
-// critical load it has no factors: the buckling check alone has failed before.
+// A.2 (from memory, with the corrections of AC:2009; in C_zz, e_LT stands with
+// n_pl). Where N_Ed reaches a critical load it has no factors: the buckling
+// check alone has failed before. Table A.2 knows no axis about which the member
+// sways; its C_mi,0, which falls far below 1 in double curvature, is not taken
+// below the 0.9 of Table B.3 there.
 func (c *Candidate) annexA(x *Interaction, lt *Lateral) {
 	s, v := c.Section, &x.AnnexA
 	ry, rz, rt := x.NY/x.NcrY, x.NZ/x.NcrZ, x.NZ/x.NcrT
@@ -39,6 +42,12 @@ func (c *Candidate) annexA(x *Interaction, lt *Lateral) {
 	v.CmY0 = 0.79 + 0.21*x.PsiY + 0.36*(x.PsiY-0.33)*ry // Table A.2, linear
 	v.CmZ0 = 0.79 + 0.21*x.PsiZ + 0.36*(x.PsiZ-0.33)*rz
 	v.Lambda0Lim = 0.2 * math.Sqrt(lt.C1) * math.Pow((1-rz)*(1-rt), 0.25)
+	if x.SwayY {
+		v.CmY0 = max(v.CmY0, cmSway)
+	}
+	if x.SwayZ {
+		v.CmZ0 = max(v.CmZ0, cmSway)
+	}
 	x.CmY, x.CmZ, x.CmLT = v.CmY0, v.CmZ0, 1
 	if v.Lambda0 > v.Lambda0Lim {
 		c.annexATorsion(x, rz, rt)

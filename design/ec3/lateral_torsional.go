@@ -68,12 +68,14 @@ func bucklesLaterally(s *catalogue.Section) bool {
 
 // CurveLT returns the lateral-torsional buckling curve. EN: Table 6.5 with the
 // rolled sections' method, Table 6.4 with the general case. UK: NA.2.17 to
-// 6.3.2.3(1) (hollow sections above h/b = 2: c hot finished, d cold formed),
-// and Table 6.4 with the general case (NA.2.16, from memory).
+// 6.3.2.3(1), and Table 6.4 with the general case (NA.2.16, from memory).
+// Hollow sections above h/b = 2 are in no row of Table 6.5: they take the UK
+// curves, c hot finished and d cold formed, in every set, and "other
+// cross-sections" of Table 6.4 with the general case.
 func CurveLT(s *catalogue.Section, curves design.LTBCurves, method design.LTBMethod) Curve {
 	ratio := s.H / s.B
 	if s.Shape == catalogue.ShapeRHS {
-		if method == design.LTBGeneral || s.Finish == catalogue.ColdFormed || curves == design.LTBCurvesEN {
+		if method == design.LTBGeneral || s.Finish == catalogue.ColdFormed {
 			return CurveD
 		}
 		return CurveC

@@ -29,6 +29,7 @@ func (w *worker) fill(res *design.Result) {
 	res.Governing = a.Governing
 	res.Y, res.Z, res.T = a.Y, a.Z, a.T
 	res.HasT, res.TKind = a.HasT, a.TKind
+	res.MbRd = a.Lateral.MbRd
 	res.Class = a.Class
 	res.Fy = c.Fy
 	res.Fire = a.Member.AssessFire(c)
