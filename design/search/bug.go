@@ -36,18 +36,12 @@ func (b *bugs) catch(col *design.Column, res *design.Result) {
 }
 
 // catchAll does so for columns that are designed together.
-func (b *bugs) catchAll(cols []*design.Column, results []*design.Result) {
+func (b *bugs) catchAll(which []int, cols []design.Column, results []design.Result) {
 	if v := recover(); v != nil {
-		for i, col := range cols {
-			b.keep(v, col, results[i])
+		for _, i := range which {
+			b.keep(v, &cols[i], &results[i])
 		}
 	}
-}
-
-// guarded calls do, and keeps a panic over a column that has no result.
-func (w *worker) guarded(col *design.Column, do func()) {
-	defer w.bugs.catch(col, new(design.Result))
-	do()
 }
 
 func (b *bugs) keep(v any, col *design.Column, res *design.Result) {

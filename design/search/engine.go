@@ -102,7 +102,7 @@ func (e *Engine) all(ctx context.Context, mode Mode, cols []design.Column, worke
 	}
 	// Groups are few and large: one unit each.
 	err = spread(ctx, workers, len(groups), 1, start, func(w *worker, i int) {
-		w.group(groups[i].of(cols, results))
+		w.together(&groups[i], cols, results, (*team).size)
 	}, nil)
 	if err != nil {
 		return nil, err

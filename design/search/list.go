@@ -120,18 +120,39 @@ func (e *Engine) entries(sections []*catalogue.Section, grades []material.Grade)
 	entries := make([]entry, 0, len(sections)*len(grades))
 	for _, s := range sections {
 		for _, g := range grades {
-			rate, ok := e.settings.Rates.Rate(s.Family, g.Name)
+			objective, ok := e.objective(s, g)
 			if !ok {
 				return nil, fmt.Errorf("no rate for %s in %s: give one, or one for all others, or choose by mass", s.Family, g.Name)
 			}
-			entries = append(entries, entry{e.candidate(s, g), s, g, rate * s.Mass})
+			entries = append(entries, entry{e.candidate(s, g), s, g, objective})
 		}
 	}
 	return entries, nil
 }
 
-// compareEntries is the total order of candidates: the objective, then mass,
-// depth, width and designation, and of one section the weaker grade first.
+// objective returns what the choice makes least, per metre, and whether there
+// is a rate for it.
+func (e *Engine) objective(s *catalogue.Section, g material.Grade) (float64, bool) {
+	rate, ok := e.settings.Rates.Rate(s.Family, g.Name)
+	return rate * s.Mass, ok
+}
+
+// Objective returns what the choice of a section makes least, per metre of a
+// candidate: kg, cost or carbon. Without a rate (a given section need not have
+// one) it is 0.
+func (e *Engine) Objective(c *ec3.Candidate) float64 {
+	v, _ := e.objective(c.Section, c.Grade)
+	return v
+}
+
+// Compare is the total order of candidates: the objective, then mass, depth,
+// width and designation, and of one section the weaker grade first.
+func (e *Engine) Compare(a, b *ec3.Candidate) int {
+	return compareEntries(
+		entry{section: a.Section, grade: a.Grade, objective: e.Objective(a)},
+		entry{section: b.Section, grade: b.Grade, objective: e.Objective(b)})
+}
+
 func compareEntries(a, b entry) int {
 	return cmp.Or(
 		cmp.Compare(a.objective, b.objective),

@@ -2,112 +2,103 @@ package search
 
 import (
 	"context"
+	"errors"
+	"fmt"
 
 	"stanchion/design"
 	"stanchion/design/ec3"
 )
 
-// Options is what a column may have: the candidates of its list, or the given
-// section in each of its grades, and which of them pass.
+// Options is what a set of columns may have: the candidates that every one
+// allows, or the given section in each grade, and which of them pass for all.
 type Options struct {
 	List  *List
 	Pass  []bool // by candidate of the list
 	Given bool   // the section is given: the list has no other
-	Err   error  // why the column cannot be designed; List is nil
+	Err   error  // why the set cannot be designed; List is nil then
 }
 
-// Options finds every candidate that passes for every column on its own, for
-// decisions over many columns. Groups are the caller's: a group may have what
-// every member may.
-func (e *Engine) Options(ctx context.Context, cols []design.Column, workers int) ([]Options, error) {
-	all := make([]Options, len(cols))
-	var bugs bugs
-	err := spread(ctx, workers, len(cols), 1, func() *worker { return e.worker(Size, &bugs) }, func(w *worker, i int) {
-		w.guarded(&cols[i], func() { all[i] = w.options(&cols[i]) })
-	}, nil)
-	if err != nil {
-		return nil, err
-	}
-	return all, bugs.err()
+// Options finds every candidate that passes for every set, for decisions over
+// many columns. A column that cannot be designed has no say in its set.
+func (e *Engine) Options(ctx context.Context, cols []design.Column, sets []Set, workers int) ([]Options, error) {
+	all := make([]Options, len(sets))
+	scratch := make([]design.Result, len(cols))
+	err := e.each(ctx, workers, len(sets), nil, func(w *worker, i int) {
+		all[i].Err = errUndesigned
+		w.together(&sets[i], cols, scratch, func(t *team) { all[i] = t.options() })
+	})
+	return all, err
 }
 
-func (w *worker) options(col *design.Column) Options {
-	if err := w.take(col); err != nil {
-		return Options{Err: err}
-	}
-	l, err := w.allowed(col)
+// errUndesigned is the error of a set of which no column can be designed: the
+// columns' own results say why.
+var errUndesigned = errors.New("no column of it can be designed")
+
+func (t *team) options() Options {
+	l, given, err := t.candidates()
 	if err != nil {
 		return Options{Err: err}
 	}
-	limit := ec3.Limit(col, &w.engine.settings)
-	o := Options{List: l, Pass: make([]bool, len(l.rows)), Given: col.Given != ""}
+	o := Options{List: l, Pass: make([]bool, len(l.rows)), Given: given != nil}
 	for i := range l.rows {
-		o.Pass[i] = l.try(i, &w.member, &w.demand, limit, &w.assess)
+		o.Pass[i] = t.allPass(l, i)
 	}
 	return o
 }
 
-// Lightest returns the candidate that SizeAll would choose for each column on
-// its own, without the working: nil where none passes or the column cannot be
-// designed.
-func (e *Engine) Lightest(ctx context.Context, cols []design.Column, workers int) ([]*ec3.Candidate, error) {
-	chosen := make([]*ec3.Candidate, len(cols))
-	var bugs bugs
-	err := spread(ctx, workers, len(cols), chunk, func() *worker { return e.worker(Size, &bugs) }, func(w *worker, i int) {
-		w.guarded(&cols[i], func() { chosen[i] = w.lightest(&cols[i]) })
-	}, nil)
-	if err != nil {
-		return nil, err
-	}
-	return chosen, bugs.err()
+// Chosen is a set and the candidate that was decided on for it.
+type Chosen struct {
+	Set
+	Candidate *ec3.Candidate // nil: the set is sized by itself
+	Lighter   *ec3.Candidate // the next lighter one, as evidence; nil: none
+	Why       string         // why a lighter one that passes was not taken
 }
 
-func (w *worker) lightest(col *design.Column) *ec3.Candidate {
-	if w.take(col) != nil {
-		return nil
-	}
-	l, err := w.allowed(col)
-	if err != nil {
-		return nil
-	}
-	if i := w.first(l, ec3.Limit(col, &w.engine.settings)); i >= 0 {
-		return l.Candidates[i]
-	}
-	return nil
-}
-
-// Assign makes the result of every column in a candidate that was decided on
-// elsewhere: it passes or fails there. A column without one (nil) is sized on
-// its own. The errors are those of SizeAll.
-func (e *Engine) Assign(ctx context.Context, cols []design.Column, to []*ec3.Candidate, workers int, progress func(done int)) ([]design.Result, error) {
-	if len(to) != len(cols) {
-		panic("search: one candidate for each column")
-	}
-	results := make([]design.Result, len(cols))
-	var bugs bugs
-	err := spread(ctx, workers, len(cols), chunk, func() *worker { return e.worker(Size, &bugs) }, func(w *worker, i int) {
-		if to[i] == nil {
-			w.one(&cols[i], &results[i])
+// Assign makes the results of columns whose sections were decided on elsewhere:
+// each passes or fails there. Columns in no set are left as they are in
+// results. progress and the errors are those of SizeAll.
+func (e *Engine) Assign(ctx context.Context, cols []design.Column, chosen []Chosen, results []design.Result, workers int, progress func(done int)) error {
+	return e.each(ctx, workers, len(chosen), progress, func(w *worker, i int) {
+		c := &chosen[i]
+		if c.Candidate == nil && len(c.Columns) == 1 {
+			w.one(&cols[c.Columns[0]], &results[c.Columns[0]])
 			return
 		}
-		w.assign(&cols[i], to[i], &results[i])
-	}, progress)
-	if err != nil {
-		return nil, err
-	}
-	return results, bugs.err()
+		w.together(&c.Set, cols, results, func(t *team) {
+			if c.Candidate == nil {
+				t.size()
+				return
+			}
+			t.assign(c)
+		})
+	})
 }
 
-func (w *worker) assign(col *design.Column, c *ec3.Candidate, res *design.Result) {
-	defer w.bugs.catch(col, res)
-	*res = design.Result{Fixed: col.Given != ""}
-	if err := w.take(col); err != nil {
-		notRead(res, err)
+func (t *team) assign(c *Chosen) {
+	t.fillAll(c.Candidate, design.Passes)
+	for _, m := range t.mates {
+		m.res.Fixed = m.col.Given != ""
+		if !ec3.Passes(m.res.Utilisation, m.limit) {
+			m.res.Status = design.Fails
+		}
+	}
+	if c.Lighter == nil {
 		return
 	}
-	w.member.Assess(c, &w.assess)
-	w.fill(res)
-	if !ec3.Passes(res.Utilisation, ec3.Limit(col, &w.engine.settings)) {
-		res.Status = design.Fails
+	if !t.evidence(c.Lighter) {
+		return
 	}
+	for _, m := range t.mates {
+		m.res.Notes = append(m.res.Notes, fmt.Sprintf("%s passes too, and is not taken: %s", nameIn(c.Lighter), c.Why))
+	}
+}
+
+// each calls do for every unit on the pool.
+func (e *Engine) each(ctx context.Context, workers int, n int, progress func(int), do func(w *worker, i int)) error {
+	var bugs bugs
+	err := spread(ctx, workers, n, 1, func() *worker { return e.worker(Size, &bugs) }, do, progress)
+	if err != nil {
+		return err
+	}
+	return bugs.err()
 }

@@ -2,6 +2,7 @@ package search
 
 import (
 	"context"
+	"slices"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
@@ -10,6 +11,15 @@ import (
 	"stanchion/design"
 	"stanchion/design/ec3"
 )
+
+// alone makes a set of every column.
+func alone(cols []design.Column) []Set {
+	sets := make([]Set, len(cols))
+	for i := range sets {
+		sets[i].Columns = []int{i}
+	}
+	return sets
+}
 
 // What the options say of every candidate is what the full assessment says,
 // and the first that passes is what is chosen.
@@ -20,7 +30,7 @@ func TestOptionsAgainstAssess(t *testing.T) {
 	cols := columns(random(8), 60, true)
 	cols[3].Given = "203x203x60 UKC"
 	cols[4].Length = 0
-	options, err := e.Options(context.Background(), cols, 2)
+	options, err := e.Options(context.Background(), cols, alone(cols), 2)
 	require.NoError(t, err)
 	chosen, err := e.Lightest(context.Background(), cols, 2)
 	require.NoError(t, err)
@@ -53,27 +63,58 @@ func TestOptionsAgainstAssess(t *testing.T) {
 	}
 }
 
-// A column assigned what it would choose has the result of the search but for
-// the evidence.
+// The options of a set are what every column of it may have.
+func TestOptionsOfASet(t *testing.T) {
+	e := engineOf(t, settingsOf(t, "UK"))
+	cols := columns(random(8), 6, true)
+	own, err := e.Options(context.Background(), cols, alone(cols), 1)
+	require.NoError(t, err)
+	both, err := e.Options(context.Background(), cols, []Set{{"stack", []int{0, 1, 2}}}, 1)
+	require.NoError(t, err)
+	for k := range both[0].Pass {
+		assert.Equal(t, own[0].Pass[k] && own[1].Pass[k] && own[2].Pass[k], both[0].Pass[k])
+	}
+}
+
+// Columns assigned what they would choose have the results of the search.
 func TestAssign(t *testing.T) {
 	e := engineOf(t, settingsOf(t, "UK"))
 	cols := columns(random(9), 40, true)
 	want, err := e.SizeAll(context.Background(), cols, 1, nil)
 	require.NoError(t, err)
-	chosen, err := e.Lightest(context.Background(), cols, 1)
+	lightest, err := e.Lightest(context.Background(), cols, 1)
 	require.NoError(t, err)
-	got, err := e.Assign(context.Background(), cols, chosen, 2, nil)
-	require.NoError(t, err)
-	for i := range want {
-		if want[i].Status == design.Passes {
-			want[i].NextLighter, want[i].NextLighterGrade, want[i].NextLighterUtilisation, want[i].NextLighterCheck = "", "", 0, design.Check{}
-		}
-		assert.Equal(t, want[i], got[i])
-	}
-
 	l, err := e.List(&design.Choice{}, nil)
 	require.NoError(t, err)
-	small, err := e.Assign(context.Background(), []design.Column{pressed(9e6)}, l.Candidates[:1], 1, nil)
+	var chosen []Chosen
+	for i, set := range alone(cols) {
+		c := Chosen{Set: set, Candidate: lightest[i]}
+		if k := slices.Index(l.Candidates, lightest[i]); k > 0 {
+			c.Lighter = l.Candidates[k-1]
+		}
+		chosen = append(chosen, c)
+	}
+	got := make([]design.Result, len(cols))
+	require.NoError(t, e.Assign(context.Background(), cols, chosen, got, 2, nil))
+	assert.Equal(t, want, got)
+}
+
+// A section that is too small fails, and one that is larger than needed says
+// why the lighter one was not taken.
+func TestAssignWhatIsDecidedElsewhere(t *testing.T) {
+	e := engineOf(t, settingsOf(t, "UK"))
+	l, err := e.List(&design.Choice{}, nil)
 	require.NoError(t, err)
-	assert.Equal(t, design.Fails, small[0].Status)
+	cols := []design.Column{pressed(9e6), pressed(1e5)}
+	last := len(l.Candidates) - 1
+	res := make([]design.Result, 2)
+	require.NoError(t, e.Assign(context.Background(), cols, []Chosen{
+		{Set: Set{Columns: []int{0}}, Candidate: l.Candidates[0]},
+		{Set: Set{Columns: []int{1}}, Candidate: l.Candidates[last], Lighter: l.Candidates[last-1], Why: "few sizes"},
+	}, res, 1, nil))
+	assert.Equal(t, design.Fails, res[0].Status)
+	assert.Equal(t, design.Passes, res[1].Status)
+	assert.Less(t, res[1].NextLighterUtilisation, 1.0)
+	require.Len(t, res[1].Notes, 1)
+	assert.Contains(t, res[1].Notes[0], "not taken: few sizes")
 }

@@ -89,7 +89,7 @@ func TestDefectInAGroup(t *testing.T) {
 	w.engine = nil
 	cols := columns(random(4), 2, false)
 	var res [2]design.Result
-	w.group("G", []*design.Column{&cols[0], &cols[1]}, []*design.Result{&res[0], &res[1]})
+	w.together(&Set{"a group", []int{0, 1}}, cols, res[:], (*team).size)
 	assert.Error(t, b.err())
 	assert.Equal(t, design.NotRead, res[0].Status)
 	assert.Equal(t, design.NotRead, res[1].Status)

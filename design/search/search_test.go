@@ -196,7 +196,7 @@ func TestOrderAndWorkersDecideNothing(t *testing.T) {
 	e := engineOf(t, settingsOf(t, "UK"))
 	rapid.Check(t, func(rt *rapid.T) {
 		r := drawn(rt)
-		cols := columns(r, r.IntN(3*chunk), true)
+		cols := columns(r, r.IntN(2*chunk), true)
 		for i := range cols {
 			cols[i].Group = [...]string{"", "", "", "G1", "G2"}[r.IntN(5)]
 		}

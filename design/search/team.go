@@ -10,15 +10,15 @@ import (
 	"stanchion/design/ec3"
 )
 
-// team is a group whose section is being chosen.
+// team is the columns of a set at work: their section is being chosen.
 type team struct {
 	*worker
 	name  string
-	mates []mate
-	left  []string // where the members stand that cannot be designed
+	mates []*mate
+	left  []string // where the columns stand that cannot be designed
 }
 
-// mate is a member of a group that can be designed.
+// mate is a column of a set that can be designed.
 type mate struct {
 	col    *design.Column
 	res    *design.Result
@@ -27,35 +27,39 @@ type mate struct {
 	limit  float64
 }
 
-// group chooses the section of the columns of a group: the first candidate
-// that passes for every one. Where one has a given section, the group has it.
-func (w *worker) group(name string, cols []*design.Column, results []*design.Result) {
-	defer w.bugs.catchAll(cols, results)
-	t := &team{worker: w, name: name, mates: make([]mate, 0, len(cols))}
-	for i, col := range cols {
-		t.join(col, results[i])
+// together calls do with the team of a set. Columns that cannot be designed
+// have their result already, and there is no call where none can.
+func (w *worker) together(set *Set, cols []design.Column, results []design.Result, do func(*team)) {
+	defer w.bugs.catchAll(set.Columns, cols, results)
+	t := &team{worker: w, name: set.Name, mates: make([]*mate, 0, len(set.Columns))}
+	for _, i := range set.Columns {
+		t.join(&cols[i], &results[i])
 	}
-	if len(t.mates) == 0 {
-		return
+	if len(t.mates) > 0 {
+		do(t)
 	}
+}
+
+// size chooses the section of a set: the first candidate that passes for every
+// column. Where one has a given section, the set has it.
+func (t *team) size() {
 	l, given, err := t.candidates()
-	if err != nil {
-		for i := range t.mates {
-			notRead(t.mates[i].res, err)
+	switch {
+	case err != nil:
+		for _, m := range t.mates {
+			notRead(m.res, err)
 		}
-		return
-	}
-	if given != nil {
+	case given != nil:
 		t.keep(l, given)
-		return
+	default:
+		t.choose(l)
 	}
-	t.choose(l)
 }
 
 // join adds a column to the team.
 func (t *team) join(col *design.Column, res *design.Result) {
 	*res = design.Result{}
-	m := mate{col: col, res: res, limit: ec3.Limit(col, &t.engine.settings)}
+	m := &mate{col: col, res: res, limit: ec3.Limit(col, &t.engine.settings)}
 	if err := m.member.Reset(col, &t.engine.settings); err != nil {
 		notRead(res, err)
 		t.left = append(t.left, col.Cell)
@@ -65,15 +69,14 @@ func (t *team) join(col *design.Column, res *design.Result) {
 	t.mates = append(t.mates, m)
 }
 
-// candidates returns what the group may have: the candidates that every member
-// allows, or the section that a member gives, in the group's grades, and that
-// member.
+// candidates returns what the set may have: the candidates that every column
+// allows, or the section that one gives, and that column.
 func (t *team) candidates() (l *List, given *mate, err error) {
-	if err := t.agree("grades", func(m *mate) []string { return or(m.col.Grades, t.engine.settings.Grades) }); err != nil {
+	set := &t.engine.settings
+	if err := t.agree("grades", func(m *mate) []string { return or(m.col.Grades, set.Grades) }); err != nil {
 		return nil, nil, err
 	}
-	for i := range t.mates {
-		m := &t.mates[i]
+	for _, m := range t.mates {
 		if m.col.Given == "" {
 			continue
 		}
@@ -82,7 +85,7 @@ func (t *team) candidates() (l *List, given *mate, err error) {
 			return nil, nil, err
 		}
 		if given != nil && own.section() != l.section() {
-			return nil, nil, fmt.Errorf("group %q is given two sections, %s at %s and %s at %s: give it one",
+			return nil, nil, fmt.Errorf("%s is given two sections, %s at %s and %s at %s: give it one",
 				t.name, given.col.Given, given.col.Cell, m.col.Given, m.col.Cell)
 		}
 		l, given = own, m
@@ -90,7 +93,7 @@ func (t *team) candidates() (l *List, given *mate, err error) {
 	if given != nil {
 		return l, given, nil
 	}
-	if err := t.agree("families", func(m *mate) []string { return or(m.col.Choice.Families, t.engine.settings.Families) }); err != nil {
+	if err := t.agree("families", func(m *mate) []string { return or(m.col.Choice.Families, set.Families) }); err != nil {
 		return nil, nil, err
 	}
 	l, err = t.common()
@@ -105,25 +108,33 @@ func or(own, others []string) []string {
 	return others
 }
 
-// agree returns an error that names two rows unless every member has the same
-// of something.
+// agree returns an error that names two rows unless the columns of every group
+// have the same of something.
 func (t *team) agree(what string, of func(*mate) []string) error {
-	first := &t.mates[0]
-	for i := range t.mates {
-		m := &t.mates[i]
-		if a, b := of(first), of(m); !slices.Equal(a, b) {
-			return fmt.Errorf("group %q has one section, but its members have different %s (%s at %s, %s at %s): give them the same",
-				t.name, what, strings.Join(a, " "), first.col.Cell, strings.Join(b, " "), m.col.Cell)
+	first := map[string]*mate{}
+	for _, m := range t.mates {
+		group := m.col.Group
+		if group == "" {
+			continue
+		}
+		f := first[group]
+		if f == nil {
+			first[group] = m
+			continue
+		}
+		if a, b := of(f), of(m); !slices.Equal(a, b) {
+			return fmt.Errorf("%s has one section, but its members have different %s (%s at %s, %s at %s): give them the same",
+				GroupName(group), what, strings.Join(a, " "), f.col.Cell, strings.Join(b, " "), m.col.Cell)
 		}
 	}
 	return nil
 }
 
-// common returns the candidates that the limits of size of every member allow.
+// common returns the candidates that the choices of every column allow.
 func (t *team) common() (*List, error) {
 	var l *List
-	for i := range t.mates {
-		own, err := t.allowed(t.mates[i].col)
+	for _, m := range t.mates {
+		own, err := t.allowed(m.col)
 		if err != nil {
 			return nil, err
 		}
@@ -159,150 +170,4 @@ func (l *List) section() *catalogue.Section {
 		return l.Candidates[0].Section
 	}
 	return l.Refused[0].Section
-}
-
-// choose gives every member the first candidate that passes for all, or, if
-// none does, the one with the least utilisation.
-func (t *team) choose(l *List) {
-	i := t.first(l)
-	if i < 0 {
-		t.noSection(l)
-		return
-	}
-	t.fillAll(l.Candidates[i], design.Passes)
-	if j := l.lighter(i, t.engine.settings.Rates.Objective); j >= 0 {
-		t.evidence(l.Candidates[j])
-	}
-}
-
-// first returns the first candidate that passes for every member, -1 if none
-// does.
-func (t *team) first(l *List) int {
-	i := 0
-	for k := range t.mates {
-		i = max(i, l.skip.start(&t.mates[k].demand))
-	}
-	for ; i < len(l.rows); i++ {
-		if t.allPass(l, i) {
-			return i
-		}
-	}
-	return -1
-}
-
-// allPass reports whether candidate i passes for every member. The last one
-// that it failed for is asked first: it mostly fails the next one too.
-func (t *team) allPass(l *List, i int) bool {
-	for k := range t.mates {
-		m := &t.mates[k]
-		if t.passesFor(m, l, i) {
-			continue
-		}
-		t.mates[0], t.mates[k] = t.mates[k], t.mates[0]
-		return false
-	}
-	return true
-}
-
-// passesFor reports whether candidate i passes for a member.
-func (t *team) passesFor(m *mate, l *List, i int) bool {
-	return l.try(i, &m.member, &m.demand, m.limit, &t.assess)
-}
-
-// worst returns the greatest of the members' utilisations in a candidate, each
-// as a part of its limit, and the first member that has it.
-func (t *team) worst(c *ec3.Candidate) (most float64, who *mate) {
-	for i := range t.mates {
-		m := &t.mates[i]
-		m.member.Assess(c, &t.assess)
-		if u := t.assess.Utilisation / m.limit; who == nil || u > most {
-			most, who = u, m
-		}
-	}
-	return most, who
-}
-
-// best returns the candidate whose worst utilisation is least, the first of
-// equal ones.
-func (t *team) best(l *List) (best *ec3.Candidate, least float64, who *mate) {
-	for _, c := range l.Candidates {
-		if u, m := t.worst(c); best == nil || u < least {
-			best, least, who = c, u, m
-		}
-	}
-	return best, least, who
-}
-
-// fillAll gives every member a section with a status.
-func (t *team) fillAll(c *ec3.Candidate, status design.Status) {
-	for i := range t.mates {
-		m := &t.mates[i]
-		m.member.Assess(c, &t.assess)
-		t.fill(m.res)
-		m.res.Status = status
-		if len(t.left) > 0 {
-			m.res.Notes = append(m.res.Notes, fmt.Sprintf("group %q is sized without what could not be read: %s", t.name, strings.Join(t.left, ", ")))
-		}
-	}
-}
-
-// evidence gives every member the next lighter candidate and the check that it
-// fails, which may be another member's.
-func (t *team) evidence(c *ec3.Candidate) {
-	_, who := t.worst(c)
-	who.member.Assess(c, &t.assess)
-	for i := range t.mates {
-		m := &t.mates[i]
-		evidence(m.res, &t.assess)
-		if m != who {
-			m.res.Notes = append(m.res.Notes, fmt.Sprintf("group %q: the next lighter section fails at %s", t.name, who.place()))
-		}
-	}
-}
-
-// place names a member for people.
-func (m *mate) place() string { return fmt.Sprintf("%s (%s)", m.col.Mark, m.col.Cell) }
-
-// noSection names the section with the least utilisation where none passes.
-func (t *team) noSection(l *List) {
-	best, least, who := t.best(l)
-	if best == nil {
-		for i := range t.mates {
-			t.mates[i].res.Status = design.NoSection
-			t.mates[i].res.Notes = append(t.mates[i].res.Notes, l.empty())
-		}
-		return
-	}
-	t.fillAll(best, design.NoSection)
-	for i := range t.mates {
-		m := &t.mates[i]
-		m.res.Notes = append(m.res.Notes, fmt.Sprintf("no section passes for group %q: %s has the least utilisation, %.3f of the limit at %s, of %d tried%s",
-			t.name, nameIn(best), least, who.place(), len(l.Candidates), l.leftOut()))
-	}
-}
-
-// keep gives every member the section that one of them gives, in the first
-// grade that passes for all.
-func (t *team) keep(l *List, given *mate) {
-	var c *ec3.Candidate
-	if i := t.first(l); i >= 0 {
-		c = l.Candidates[i]
-	} else if c, _, _ = t.best(l); c == nil {
-		for i := range t.mates {
-			refuse(t.mates[i].res, &l.Refused[0], t.mates[i].col)
-		}
-	}
-	if c != nil {
-		t.fillAll(c, design.Passes)
-	}
-	for i := range t.mates {
-		m := &t.mates[i]
-		if c != nil && !ec3.Passes(m.res.Utilisation, m.limit) {
-			m.res.Status = design.Fails
-		}
-		m.res.Fixed = m.col.Given != ""
-		if !m.res.Fixed {
-			m.res.Notes = append(m.res.Notes, fmt.Sprintf("group %q has the section given at %s", t.name, given.place()))
-		}
-	}
 }
