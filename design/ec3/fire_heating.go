@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"math"
 
+	"stanchion/catalogue"
 	"stanchion/design"
 )
 
@@ -68,7 +69,7 @@ func TimeToReach(theta, AmV, ksh float64) (float64, bool) {
 // box: its heating follows the profile.
 func (f *fireAssessment) time() {
 	r := &f.result
-	AmV := SectionFactor(f.candidate.Section, f.member.Column.Fire.Sides == 3, false)
+	AmV := f.candidate.Section.SectionFactor(catalogue.Exposure{ThreeSides: f.member.Column.Fire.Sides == 3})
 	seconds, ok := TimeToReach(r.CriticalTemperature, AmV, r.ShadowFactor)
 	r.TimeToCritical = seconds / 60
 	r.PeriodMet = r.Period > 0 && (!ok || r.TimeToCritical >= r.Period)

@@ -20,15 +20,15 @@ func TestPublishedSectionFactors(t *testing.T) {
 			Properties: catalogue.Properties{A: r.must(t, "A_cm2") * 100, Perimeter: r.must(t, "surface_m2_per_m") * 1000}}
 		boxed := strings.HasPrefix(r["exposure"], "box")
 		require.Contains(t, r["exposure"], "4 sides")
-		r.near(t, "A_m_over_V_per_m", ec3.SectionFactor(s, false, boxed))
+		r.near(t, "A_m_over_V_per_m", s.SectionFactor(catalogue.Exposure{Boxed: boxed}))
 	}
 }
 
 // Three sides: the outside of one flange is covered (EN 1993-1-2 Table 4.2).
 func TestSectionFactorOnThreeSides(t *testing.T) {
 	s := hot260()
-	assert.InEpsilon(t, (1484.0-260)/8.68, ec3.SectionFactor(s, true, false), 1e-12)
-	assert.InEpsilon(t, (2*250.0+260)/8.68, ec3.SectionFactor(s, true, true), 1e-12)
+	assert.InEpsilon(t, (1484.0-260)/8.68, s.SectionFactor(catalogue.Exposure{ThreeSides: true}), 1e-12)
+	assert.InEpsilon(t, (2*250.0+260)/8.68, s.SectionFactor(catalogue.Exposure{ThreeSides: true, Boxed: true}), 1e-12)
 	assert.InEpsilon(t, 0.9*(2*250.0+260)/(1484-260), ec3.ShadowFactor(s, true), 1e-12)
 	assert.InEpsilon(t, 0.9*1020/1484, ec3.ShadowFactor(s, false), 1e-12)
 
@@ -36,7 +36,7 @@ func TestSectionFactorOnThreeSides(t *testing.T) {
 		Properties: catalogue.Properties{A: 5969, Perimeter: math.Pi * 200}}
 	for _, three := range []bool{false, true} {
 		for _, boxed := range []bool{false, true} {
-			assert.InEpsilon(t, math.Pi*200/5.969, ec3.SectionFactor(round, three, boxed), 1e-12)
+			assert.InEpsilon(t, math.Pi*200/5.969, round.SectionFactor(catalogue.Exposure{ThreeSides: three, Boxed: boxed}), 1e-12)
 		}
 	}
 	assert.Equal(t, 1.0, ec3.ShadowFactor(round, false))
