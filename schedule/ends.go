@@ -31,6 +31,7 @@ func conditionWords(by map[design.Condition]string) map[string]design.Condition 
 var (
 	partlyGap = regexp.MustCompile(`(?i)\b(part(?:ly|ially)?|partial|semi|fully|nominally|built)[\s-]+(fixed|guided|rigid|pinned|in)\b`)
 	endMark   = regexp.MustCompile(`(?i)\b(top|bottom|base|btm|upper|lower)\b`)
+	idleWords = regexp.MustCompile(`\b(?:at|the|end|ends|both|support|supported|is)\b`)
 	endsSplit = regexp.MustCompile(`[-–—/,;+&|\n]|\bto\b|\band\b`)
 )
 
@@ -43,12 +44,13 @@ func parseEnds(s string) (bottom, top design.Condition, err error) {
 		return design.Fixed, design.Free, nil
 	}
 	var parts []string
-	for _, p := range endsSplit.Split(folded, -1) {
+	split := endsSplit.Split(folded, -1)
+	for _, p := range split {
 		if p = strings.TrimFunc(p, isSpace); p != "" {
 			parts = append(parts, p)
 		}
 	}
-	if len(parts) == 1 {
+	if len(parts) == 1 && len(split) == 1 {
 		if c, err := parseCondition(parts[0]); err == nil {
 			if c.Sways() {
 				return 0, 0, fmt.Errorf("%q says nothing of the end that is held", s)
@@ -97,7 +99,7 @@ func parseCondition(s string) (design.Condition, error) {
 			return 'e'
 		}
 		return -1
-	}, endMark.ReplaceAllString(strings.ToLower(s), ""))
+	}, idleWords.ReplaceAllString(endMark.ReplaceAllString(strings.ToLower(s), ""), ""))
 	if c, ok := conditions[word]; ok {
 		return c, nil
 	}

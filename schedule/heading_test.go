@@ -80,6 +80,7 @@ func TestReadHeading(t *testing.T) {
 		"Remarks": "", "Comments": "", "": "", "m": "", "Rev": "", "3.5": "", "Project": "", "Drawing no": "", "Utilisation limit (%)": "Utilisation limit [%]",
 		"Restraints between the ends y-y": "Restraints y-y", "Restraint heights from bottom z-z (m)": "Restraints z-z [m]", "Restraints y-y by floor beams": "",
 		"Restraints z-z, steelwork only": "Restraints z-z ?", "Effective length y-y braced": "L_cr,y ?", "Effective length check y-y": "",
+		"\u0301": "", "N_Ed \u0301": "N_Ed",
 		"N": "N_Ed ?", "N (kN)": "N_Ed ? [kN]", "Load": "N_Ed ?",
 	} {
 		assert.Equal(t, want, say(readHeading(heading)), heading)

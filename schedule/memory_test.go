@@ -46,6 +46,8 @@ func cellOf(s string, row, above *Row, col int) Cell {
 	switch {
 	case s == "":
 		return Cell{}
+	case s == "^" && col == 0, s == `"` && above == nil:
+		return Cell{}
 	case s == "^":
 		c := row.Cells[col-1]
 		c.Merged = true

@@ -175,7 +175,7 @@ func resolveHeights(list []height, L float64) (heights []float64, notes []string
 			x *= L
 		}
 		if x < -heightTolerance || x > L+heightTolerance || math.IsNaN(x) {
-			return nil, nil, fmt.Errorf("the height %s m is outside the length %s m", metres(x), metres(L))
+			return nil, nil, outside(x, L)
 		}
 		if x < heightTolerance || x > L-heightTolerance {
 			notes = append(notes, fmt.Sprintf("the height %s m is an end, which its end condition describes", metres(x)))
@@ -202,6 +202,14 @@ func resolveHeights(list []height, L float64) (heights []float64, notes []string
 		}
 	}
 	return heights, notes, nil
+}
+
+func outside(x, L float64) error {
+	hint := ""
+	if x > 0 && x/1000 < L {
+		hint = fmt.Sprintf(" (if it is in mm, write %s mm)", metres(x))
+	}
+	return fmt.Errorf("the height %s m is outside the length %s m%s", metres(x), metres(L), hint)
 }
 
 func appendEvery(heights []float64, spacing, L float64) ([]float64, error) {

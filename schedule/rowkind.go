@@ -128,10 +128,10 @@ func (c *classifier) plainMark(r *Row) bool {
 }
 
 // totalWords open a row of totals or averages.
-var totalWords = compactSet("total|totals|sub total|sub totals|subtotal|subtotals|grand total|sum|sums|average|averages|mean|avg|carried forward|brought forward|summe|gesamt|gesamtsumme|zwischensumme|mittelwert|durchschnitt|sous total|totale|subtotale|somma|media|suma|promedio|moyenne|somme|totaal|subtotaal")
+var totalWords = compactSet("total|totals|sub total|sub totals|subtotal|subtotals|grand total|sum|sums|average|averages|mean|avg|max|min|maximum|minimum|carried forward|brought forward|summe|gesamt|gesamtsumme|zwischensumme|mittelwert|durchschnitt|sous total|totale|subtotale|somma|media|suma|promedio|moyenne|somme|totaal|subtotaal")
 
 // isTotal reports whether the row is one of totals or averages: a label to the
-// left of its numbers says so, or it holds nothing but the results of formulas.
+// left of its numbers says so, or it has neither mark nor length and holds sums.
 func (c *classifier) isTotal(r *Row, labels int) bool {
 	for i := range min(len(r.Cells), c.first) {
 		if cell := r.at(i); cell.Kind == Text && opensWithTotal(cell.Text) {
@@ -141,15 +141,24 @@ func (c *classifier) isTotal(r *Row, labels int) bool {
 	if c.mark >= 0 && r.at(c.mark).Kind == Text && opensWithTotal(r.at(c.mark).Text) {
 		return true
 	}
-	if labels > 0 || !r.at(c.length).empty() {
-		return false
-	}
+	return labels == 0 && r.at(c.length).empty() && c.sums(r)
+}
+
+// sums reports whether a row without mark and length is one of sums: all its
+// cells are formulas, or one says so.
+func (c *classifier) sums(r *Row) bool {
+	formulas := true
 	for i := range r.Cells {
-		if cell := &r.Cells[i]; !c.old[i] && !cell.empty() && !cell.Merged && !cell.Formula {
-			return false
+		cell := &r.Cells[i]
+		if c.old[i] || cell.Merged || cell.empty() {
+			continue
 		}
+		if cell.Kind == Text && opensWithTotal(cell.Text) {
+			return true
+		}
+		formulas = formulas && cell.Formula
 	}
-	return true
+	return formulas
 }
 
 func opensWithTotal(s string) bool {

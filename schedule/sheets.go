@@ -81,6 +81,9 @@ func candidateSheets(src Source, name string) ([]string, error) {
 			}
 		}
 	}
+	if len(all) == 1 && all[0] == "" {
+		return nil, &Refusal{Problem: Problem{File: src.Name(), What: "a text schedule has no sheets", Do: "leave out --sheet"}}
+	}
 	return nil, &Refusal{Problem: Problem{File: src.Name(), What: fmt.Sprintf("there is no sheet %q", name), Do: "the sheets are " + quoted(all)}}
 }
 

@@ -66,7 +66,9 @@ func tokens(s string) []token {
 	var last rune
 	flush := func(end int) {
 		if start >= 0 {
-			list = append(list, token{fold(s[start:end]), start, end, depth > 0})
+			if text := fold(s[start:end]); text != "" { // a lone accent is nothing
+				list = append(list, token{text, start, end, depth > 0})
+			}
 		}
 		start = -1
 	}

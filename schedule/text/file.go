@@ -48,22 +48,27 @@ func Open(name string) (*File, error) {
 	}
 	file, err := os.Open(name)
 	if err != nil {
-		return nil, fmt.Errorf("%s: %w", name, cause(err))
+		return nil, refusal(name, cause(err))
 	}
 	info, err := file.Stat()
 	switch {
 	case err != nil:
 		file.Close()
-		return nil, fmt.Errorf("%s: %w", name, cause(err))
+		return nil, refusal(name, cause(err))
 	case info.IsDir():
 		file.Close()
-		return nil, fmt.Errorf("%s is a folder: give a file", name)
+		return nil, refusal(name, errors.New("it is a folder: give a file"))
 	case !info.Mode().IsRegular():
 		defer file.Close()
 		return OpenReader(file, name)
 	}
 	f := &File{name: name, file: file, end: info.Size()}
 	return f.opened()
+}
+
+// refusal says that a file cannot be read.
+func refusal(name string, err error) error {
+	return &schedule.Refusal{Problem: schedule.Problem{File: name, What: err.Error(), Col: -1}}
 }
 
 // cause takes the path, which the message names already, off an error.
@@ -80,7 +85,7 @@ func cause(err error) error {
 func OpenReader(r io.Reader, name string) (*File, error) {
 	f := &File{name: name}
 	if err := f.spool(r); err != nil {
-		return nil, fmt.Errorf("%s: %w", name, err)
+		return nil, refusal(name, err)
 	}
 	return f.opened()
 }
@@ -106,7 +111,7 @@ func (f *File) spool(r io.Reader) error {
 func (f *File) opened() (*File, error) {
 	if err := f.learn(); err != nil {
 		f.Close()
-		return nil, fmt.Errorf("%s: %w", f.name, err)
+		return nil, refusal(f.name, err)
 	}
 	return f, nil
 }
@@ -176,7 +181,7 @@ func (f *File) Rows(string) iter.Seq2[*schedule.Row, error] {
 				return
 			}
 			if err != nil {
-				yield(nil, fmt.Errorf("%s: %w", f.name, err))
+				yield(nil, refusal(f.name, err))
 				return
 			}
 			if f.sepLine && rec.pos == 0 || len(bytes.TrimSpace(rec.raw)) == 0 {
@@ -214,7 +219,7 @@ func (f *File) RowAt(_ string, pos int64) (*schedule.Row, error) {
 	r.r, r.at, r.end, r.pos, r.line, r.eof = f.section(pos), 0, 0, pos, 0, false
 	rec, err := r.next()
 	if err != nil {
-		return nil, fmt.Errorf("%s: %w", f.name, err)
+		return nil, refusal(f.name, err)
 	}
 	f.fields = f.fill(&f.row, &rec, f.fields)
 	return &f.row, nil

@@ -173,7 +173,7 @@ func TestFilesThatAreNone(t *testing.T) {
 	_, err := Open(filepath.Join(dir, "nothing.csv"))
 	assert.ErrorContains(t, err, "nothing.csv: no such file")
 	_, err = Open(dir)
-	assert.ErrorContains(t, err, "is a folder")
+	assert.ErrorContains(t, err, "it is a folder")
 	for content, want := range map[string]string{
 		"":                      "the file is empty",
 		"  \n \n":               "not a text file",
