@@ -54,8 +54,10 @@ type Assessment struct {
 	Section     Section629
 	Lateral     Lateral
 	Interaction Interaction
+	Simple      Simple
 
 	interactions []Interaction
+	scopes       []simpleScope // by combination
 
 	segY, segZ, segT *Segment // behind Y, Z, T
 	bufY, bufZ       []Segment
@@ -66,7 +68,7 @@ type Assessment struct {
 // nothing but a, and allocates nothing once a's buffers are large enough.
 func (m *Member) Assess(c *Candidate, a *Assessment) {
 	*a = Assessment{Candidate: c, Member: m, Checks: a.Checks[:0],
-		bufY: a.bufY[:0], bufZ: a.bufZ[:0], spare: a.spare[:0], interactions: a.interactions[:0]}
+		bufY: a.bufY[:0], bufZ: a.bufZ[:0], spare: a.spare[:0], interactions: a.interactions[:0], scopes: a.scopes[:0]}
 	a.Class = c.Class
 	m.segments(c, a)
 	m.assessSection(c, a)

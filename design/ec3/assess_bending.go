@@ -15,13 +15,17 @@ type bending struct {
 }
 
 // moments returns what bends the member in a combination, and whether
-// anything does.
+// anything does: the end moments given, and where the settings ask for them the
+// nominal moments of beam reactions.
 func (m *Member) moments(c *Candidate, index int) (b bending, bends bool) {
 	comb := &m.Column.Combinations[index]
 	grow := func(e design.EndMoments) design.EndMoments {
 		return design.EndMoments{Bottom: m.Growth * e.Bottom, Top: m.Growth * e.Top}
 	}
 	b = bending{index, grow(comb.My), grow(comb.Mz)}
+	if m.Settings.Moments == design.MomentsSimple {
+		m.nominal(c, index, &b)
+	}
 	return b, !b.my.Zero() || !b.mz.Zero()
 }
 
@@ -123,17 +127,19 @@ func (m *Member) assessBendingBuckling(c *Candidate, a *Assessment) {
 			m.lateralChecks(c, a, &b)
 		}
 	}
+	m.simpleScopes(c, a)
 	m.interactions(c, a)
 	for i := range a.interactions {
 		x := &a.interactions[i]
 		a.record(design.Check{Kind: design.Interaction661, Clause: "6.3.3 (6.61)", Combination: x.Combination,
-			From: x.FromY, To: x.ToY, Utilisation: x.U661}, x.Class)
+			From: x.FromY, To: x.ToY, Utilisation: x.U661, Reason: a.scopes[x.Combination].reason}, x.Class)
 	}
 	for i := range a.interactions {
 		x := &a.interactions[i]
 		a.record(design.Check{Kind: design.Interaction662, Clause: "6.3.3 (6.62)", Combination: x.Combination,
-			From: x.FromZ, To: x.ToZ, Utilisation: x.U662}, x.Class)
+			From: x.FromZ, To: x.ToZ, Utilisation: x.U662, Reason: a.scopes[x.Combination].reason}, x.Class)
 	}
+	m.assessSimple(c, a)
 }
 
 // lateralChecks checks bending about y-y alone in every lateral-torsional
@@ -169,12 +175,13 @@ func (m *Member) lateralChecks(c *Candidate, a *Assessment, b *bending) {
 }
 
 // interactions works out (6.61) and (6.62) of every set of overlapping segments
-// of a combination that compresses and bends the member.
+// of a combination that compresses and bends the member, unless the rule of
+// simple construction stands for it.
 func (m *Member) interactions(c *Candidate, a *Assessment) {
 	for i := range a.SegY {
 		y := &a.SegY[i]
 		b, bends := m.moments(c, y.Combination)
-		if !bends {
+		if !bends || a.scopes[y.Combination].covers {
 			continue
 		}
 		for j := range a.SegZ {

@@ -91,6 +91,7 @@ func (f *fireAssessment) lengths() error {
 	if err := f.hot.Reset(&col, &set); err != nil {
 		return err
 	}
+	f.hot.StandLike(f.member)
 	f.hot.Assess(f.candidate, &f.segment)
 	return nil
 }

@@ -17,7 +17,7 @@ type Force struct {
 	FromLow, ToLow float64 // the part under Least, mm
 }
 
-// finite refuses forces that are no numbers, so that nothing later compares
+// finite refuses actions that are no numbers, so that nothing later compares
 // with one.
 func finite(c *design.Combination) error {
 	if !isFinite(c.NEd) {
@@ -26,6 +26,11 @@ func finite(c *design.Combination) error {
 	for _, s := range c.Steps {
 		if !isFinite(s.NEd) || !isFinite(s.Height) {
 			return fmt.Errorf("N_Ed of a segment of combination %q is not a finite number", c.Name)
+		}
+	}
+	for _, v := range [...]float64{c.My.Bottom, c.My.Top, c.Mz.Bottom, c.Mz.Top, c.FlangeA, c.FlangeB, c.WebA, c.WebB} {
+		if !isFinite(v) {
+			return fmt.Errorf("a moment or reaction of combination %q is not a finite number", c.Name)
 		}
 	}
 	return nil
@@ -83,7 +88,12 @@ func (m *Member) press(index int, mass float64) (n, from, to float64) {
 }
 
 // ownWeight returns the weight, N, of a section of this mass per metre above a
-// height, with its load factor; 0 where self-weight is left out.
+// height and of the lengths that stand on it, with its load factor; 0 where
+// self-weight is left out.
 func (m *Member) ownWeight(mass, height float64) float64 {
-	return m.WeightPerMass * (m.Length - height) * mass
+	return m.WeightPerMass*(m.Length-height)*mass + m.Carried
 }
+
+// Weight returns the own weight, N, that the member in a section of this mass
+// per metre hands to what it stands on: its own and what it carries.
+func (m *Member) Weight(mass float64) float64 { return m.ownWeight(mass, 0) }

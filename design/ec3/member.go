@@ -31,6 +31,15 @@ type Member struct {
 	// column's top above a point, is the own weight acting there, N.
 	WeightPerMass float64
 
+	// What stands below and above, by Between: nil for nothing.
+	Below, Above *Neighbour
+
+	// Carried is the own weight of the lengths above, with its load factor, N;
+	// 0 after Reset.
+	Carried float64
+
+	bottoms []int // by combination: the one of the length below that goes with it, -1 if none
+
 	swayY, swayZ bool // the member sways about the axis: C_m 0.9
 
 	y, z  stability.Lengths
@@ -71,13 +80,13 @@ func (m *Member) Reset(col *design.Column, set *design.Settings) error {
 	if len(col.Combinations) == 0 {
 		return fmt.Errorf("there is no axial force: give N_Ed of at least one combination")
 	}
-	m.AxialOnly = true
 	for i := range col.Combinations {
 		if err := m.load(i); err != nil {
 			return err
 		}
-		m.AxialOnly = m.AxialOnly && !bends(&col.Combinations[i], set.Moments)
 	}
+	m.Carried = 0
+	m.Between(nil, nil)
 	m.swayY, m.swayZ = stability.Sways(col, stability.AxisY), stability.Sways(col, stability.AxisZ)
 	m.note()
 	return nil
@@ -159,8 +168,3 @@ func (m *Member) loaded(s *stability.Segment, index int) Segment {
 // VariesWithEI reports whether buckling lengths depend on the section that is
 // tried, because the rotational stiffness of an end is given.
 func (m *Member) VariesWithEI() bool { return m.y.VariesWithEI() || m.z.VariesWithEI() }
-
-// bends reports whether a combination bends the member.
-func bends(c *design.Combination, rule design.MomentRule) bool {
-	return !c.My.Zero() || !c.Mz.Zero() || c.HasReactions && rule == design.MomentsSimple
-}

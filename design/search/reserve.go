@@ -96,6 +96,7 @@ func (r *reserver) utilisation(f, n float64) float64 {
 	if r.member.Reset(&r.col, r.base.Settings) != nil {
 		return math.Inf(1)
 	}
+	r.member.StandLike(r.base)
 	r.member.Assess(r.candidate, &r.assess)
 	return r.assess.Utilisation
 }
