@@ -82,6 +82,10 @@ func (r *run) read(ctx context.Context) error {
 	if r.source, err = openSource(ctx, r.con, r.input); err != nil {
 		return err
 	}
+	if r.isText() && r.flags.sheet != "" {
+		r.source.Close()
+		return usage(r.cmd, "--sheet %q: a text schedule has no sheets", r.flags.sheet)
+	}
 	if err := r.scan(ctx, assignments); err != nil {
 		r.source.Close()
 		return err

@@ -28,7 +28,7 @@ type revision struct {
 
 var (
 	firstIssue  = revision{name: "P01", plant: 1}
-	secondIssue = revision{name: "P02", plant: 2.2, ordered: true}
+	secondIssue = revision{name: "P02", plant: 1.6, ordered: true}
 )
 
 // issue returns the rows of an issue of the schedule.
@@ -41,7 +41,7 @@ func issue(r revision) []line {
 	if r.ordered {
 		for i := range lines {
 			lines[i].section = orderedSection(&lines[i])
-			lines[i].family, lines[i].remark = "", ""
+			lines[i].family, lines[i].maxWidth = "", 0
 		}
 	}
 	return lines
@@ -128,17 +128,24 @@ func canopy() []line {
 	}
 }
 
-// ordered are the sections bought for the first issue: one through two
-// storeys, few sizes.
-var ordered = map[string][3]string{ // L0 and L1, L2 and L3, L4
-	"corner":   {"254x254x89 UKC", "203x203x52 UKC", "152x152x37 UKC"},
-	"edge":     {"305x305x118 UKC", "254x254x73 UKC", "203x203x46 UKC"},
-	"interior": {"356x368x177 UKC", "254x254x107 UKC", "203x203x60 UKC"},
+// ordered are the sections bought for the first issue: few sizes, one through
+// two storeys.
+var ordered = map[string][3]string{ // L0 to L2, L2 to L4, above
+	"corner":   {"203x203x71 UKC", "152x152x37 UKC", "152x152x23 UKC"},
+	"edge":     {"254x254x89 UKC", "203x203x60 UKC", "152x152x30 UKC"},
+	"interior": {"356x368x129 UKC", "254x254x89 UKC", "152x152x37 UKC"},
 }
 
 func orderedSection(l *line) string {
-	if l.grid == "Canopy" {
-		return map[string]string{"P-01": "CHS 139.7x6.3", "P-02": "CHS 168.3x8.0"}[l.mark]
+	switch {
+	case l.section != "":
+		return l.section // existing or from stock
+	case l.mark == "P-01":
+		return "CHS 139.7x3.6"
+	case l.mark == "P-02":
+		return "CHS 168.3x5.0"
+	case l.family == "SHS":
+		return "SHS 300x300x8.8"
 	}
 	kind := "edge"
 	switch corner := l.grid[0] == 'A' || l.grid[0] == 'D'; {

@@ -31,7 +31,11 @@ func (p *page) outcomes(t *Tally) {
 	p.blank()
 	p.headings("Outcome", ">Members")
 	for _, s := range []design.Status{design.Passes, design.Fails, design.NoSection, design.NotRead} {
-		p.row(outcome(s), number(float64(t.Count[s]), 0))
+		name := text(s.String())
+		if t.Count[s] > 0 {
+			name = outcome(s) // a colour is for what there is
+		}
+		p.row(name, number(float64(t.Count[s]), 0))
 	}
 	p.row(total(text("all")), total(number(float64(t.Members()), 0)))
 }
