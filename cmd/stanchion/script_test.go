@@ -42,6 +42,7 @@ func TestScripts(t *testing.T) {
 			"dump":  scriptDump,
 			"rows":  scriptRows,
 			"parts": scriptParts,
+			"same":  scriptSame,
 		},
 	})
 }
@@ -124,6 +125,16 @@ func scriptDump(ts *testscript.TestScript, neg bool, args []string) {
 				}
 			}
 		}
+	}
+}
+
+// scriptSame wants two files to have the same bytes, and prints neither.
+func scriptSame(ts *testscript.TestScript, neg bool, args []string) {
+	if neg || len(args) != 2 {
+		ts.Fatalf("usage: same FILE FILE")
+	}
+	if ts.ReadFile(args[0]) != ts.ReadFile(args[1]) {
+		ts.Fatalf("%s and %s differ", args[0], args[1])
 	}
 }
 
