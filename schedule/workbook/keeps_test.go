@@ -158,11 +158,7 @@ func TestTextsOfOwnSheetsComeThrough(t *testing.T) {
 func TestSameInputSameBytes(t *testing.T) {
 	in := rich(t)
 	first, second := annotate(t, in, richBlock(), ownSheets()...), annotate(t, in, richBlock(), ownSheets()...)
-	a, b := unpack(t, first), unpack(t, second)
-	for _, name := range sortedKeys(a) {
-		assert.Equal(t, a[name], b[name], name)
-	}
-	assert.True(t, bytes.Equal(first, second))
+	requireSame(t, first, second)
 }
 
 func TestAnnotatingAgainChangesNothing(t *testing.T) {
@@ -170,12 +166,26 @@ func TestAnnotatingAgainChangesNothing(t *testing.T) {
 	again := richBlock()
 	again.Header.Old = []int{5, 6, 7, 8, 9, 10}
 	twice := annotate(t, once, again, ownSheets()...)
-	a, b := unpack(t, once), unpack(t, twice)
-	for _, name := range sortedKeys(a) {
-		assert.Equal(t, a[name], b[name], name)
-	}
+	requireSame(t, once, twice)
+}
+
+// requireSame requires that two workbooks are the same to the byte, and says
+// which parts are not.
+func requireSame(t *testing.T, first, second []byte) {
+	t.Helper()
+	a, b := unpack(t, first), unpack(t, second)
 	assert.Equal(t, sortedKeys(a), sortedKeys(b))
-	assert.True(t, bytes.Equal(once, twice), "to the byte")
+	for _, name := range sortedKeys(a) {
+		if a[name] != b[name] {
+			i := 0
+			for i < len(a[name]) && i < len(b[name]) && a[name][i] == b[name][i] {
+				i++
+			}
+			from := max(0, i-200)
+			assert.Fail(t, "parts differ", "%s:\n%.400s\n%.400s", name, a[name][from:], b[name][from:])
+		}
+	}
+	assert.True(t, bytes.Equal(first, second), "to the byte")
 }
 
 func TestEveryPartHasATypeAndEveryRelationATarget(t *testing.T) {

@@ -154,7 +154,7 @@ func (p *Plan) sheetIndex() int { return slices.Index(p.book.sheets, p.sheet) }
 // askForCalculation has spreadsheet programs calculate formulas on opening
 // where some may depend on what is written. The other settings stay.
 func (p *Plan) askForCalculation(edits *markup.Edits, g *grafting) {
-	if !g.formulas && !p.book.hasFormulas() && len(p.place.old.columns) == 0 {
+	if !g.formulas && !p.book.hasFormulas() {
 		return
 	}
 	root := p.book.root

@@ -111,6 +111,7 @@ func read(t *testing.T, data []byte) {
 	var refusal *schedule.Refusal
 	if err != nil {
 		require.ErrorAs(t, err, &refusal)
+		requireForeseen(t, err)
 		return
 	}
 	defer b.Close()
@@ -120,6 +121,7 @@ func read(t *testing.T, data []byte) {
 		for row, err := range b.Rows(sheet) {
 			if err != nil {
 				require.ErrorAs(t, err, &refusal)
+				requireForeseen(t, err)
 				break
 			}
 			require.Greater(t, row.Number, last)

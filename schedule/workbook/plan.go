@@ -135,8 +135,12 @@ func (p *Plan) start(e *extent, obstacles []area, first, last int) int {
 			return o.area.firstCol
 		}
 	}
-	start := max(width, furthest(e.valued, first, last))
-	if styled := furthest(e.styled, first, last); styled > start && styled <= start+maxStyledGap {
+	start := width
+	// What reaches no further than the results of an earlier run is those.
+	if valued := furthest(e.valued, first, last); len(o.columns) == 0 || valued > o.area.lastCol+1 {
+		start = max(start, valued)
+	}
+	if styled := furthest(e.styled, first, last); len(o.columns) == 0 && styled > start && styled <= start+maxStyledGap {
 		start = styled
 	}
 	return clear(obstacles, area{first, last, start, start + n - 1})

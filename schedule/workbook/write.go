@@ -8,6 +8,7 @@ import (
 	"strings"
 
 	"stanchion/schedule/outfile"
+	"stanchion/schedule/workbook/internal/markup"
 )
 
 // Types of the workbook part, by the extension of the file.
@@ -115,11 +116,36 @@ func (d *draft) dropCalculationOrder(p *Plan) {
 	d.rels.remove(rel.ID)
 }
 
+// hasFormulas reports whether a sheet of the user's holds formulas.
 func (b *Book) hasFormulas() bool {
+	if b.relOf("calcChain") != nil {
+		return true
+	}
 	for _, s := range b.sheets {
-		if s.extent.formulas {
+		if s.grid && s.own == "" && b.formulasOn(s) {
 			return true
 		}
 	}
-	return b.relOf("calcChain") != nil
+	return false
+}
+
+func (b *Book) formulasOn(s *sheet) bool {
+	if s.extent.complete {
+		return s.extent.formulas
+	}
+	r, err := b.pkg.Stream(s.part)
+	if err != nil {
+		return false
+	}
+	defer r.Close()
+	scan := markup.NewScanner(r)
+	for {
+		t, err := scan.Next()
+		if err != nil {
+			return false
+		}
+		if t.Kind != markup.End && string(t.Local()) == "f" && scan.Depth() >= 4 {
+			return true
+		}
+	}
 }

@@ -3,10 +3,8 @@ package workbook
 import (
 	"bytes"
 	"fmt"
-	"os"
 	"testing"
 
-	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 	"github.com/xuri/excelize/v2"
 
@@ -94,10 +92,6 @@ func annotate(t testing.TB, data []byte, block Block, sheets ...Sheet) []byte {
 	return out.Bytes()
 }
 
-func TestAnnotateSimple(t *testing.T) {
-	in := packed(t, simple(t, 14))
-	out := annotate(t, in, simpleBlock(14), Sheet{Name: "Summary", Rows: [][]Cell{{{Value: "Summary", Look: Look{Role: Title}}}, {{Value: 1.5}}}})
-	os.WriteFile("/tmp/wb/out.xlsx", out, 0o644)
-	fmt.Println(dump(t, out))
-	assert.NotEmpty(t, out)
+func TestAnnotatedSchedule(t *testing.T) {
+	golden(t, "simple", dump(t, annotate(t, packed(t, simple(t, 9)), simpleBlock(9), ownSheets()...)))
 }
