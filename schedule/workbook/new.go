@@ -1,0 +1,47 @@
+package workbook
+
+import (
+	"io"
+	"slices"
+
+	"stanchion/schedule/workbook/internal/opc"
+)
+
+// plainLetters is the font of a workbook that holds the project's own sheets
+// alone.
+var plainLetters = lettering{family: "Calibri", size: 11}
+
+// WriteNew writes a workbook of these sheets alone. The same sheets give the
+// same bytes.
+func WriteNew(w io.Writer, sheets []Sheet) error {
+	own := newOwn(plainLetters)
+	taken := map[string]bool{}
+	for i := range sheets {
+		name := cutName(sheets[i].Name, "")
+		if taken[name] {
+			panic("workbook: two sheets named " + name)
+		}
+		taken[name] = true
+		if err := own.add(&sheets[i], name, i == 0); err != nil {
+			return err
+		}
+	}
+	data, err := own.bytes()
+	if err != nil {
+		return err
+	}
+	return marked(w, data)
+}
+
+// marked writes a workbook with the mark of the program in it.
+func marked(w io.Writer, data []byte) error {
+	b, err := OpenBytes("", data)
+	if err != nil {
+		return err
+	}
+	defer b.Close()
+	at := b.root.From
+	out := opc.NewRewrite(b.pkg)
+	out.Set(b.main, slices.Concat(b.doc[:at:at], []byte(mark), b.doc[at:]))
+	return out.Write(w)
+}
