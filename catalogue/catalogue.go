@@ -35,7 +35,7 @@ func (c *Catalogue) Sections() []*Section { return c.sections }
 // Filter says which sections may be chosen. Zero values do not limit; lengths
 // are in mm and inclusive.
 type Filter struct {
-	// Families as ParseFamilies reads them; none: every family.
+	// Families as ParseFamilies reads them; none: every family, hot and cold.
 	Families []string
 	// ColdFormed: hollow families without a stated finish are cold formed;
 	// otherwise they are hot finished.
@@ -49,13 +49,9 @@ type Filter struct {
 // Filter returns the sections that a filter lets through, in order. An error
 // names a family or an excluded section that is not known.
 func (c *Catalogue) Filter(f Filter) ([]*Section, error) {
-	var specs []FamilySpec
-	for _, text := range f.Families {
-		found, err := ParseFamilies(text)
-		if err != nil {
-			return nil, err
-		}
-		specs = append(specs, found...)
+	specs, err := parseAll(f.Families)
+	if err != nil {
+		return nil, err
 	}
 	excluded := map[*Section]bool{}
 	for _, name := range f.Exclude {

@@ -47,6 +47,7 @@ var collective = map[string][]string{
 	"L":             {"L equal", "L unequal"},
 	"ANGLE":         {"L equal", "L unequal"},
 	"RSA":           {"L equal", "L unequal"},
+	"UKA":           {"L equal", "L unequal"},
 	"ROLLEDANGLE":   {"L equal", "L unequal"},
 	"CHANNEL":       {"UKPFC", "UPE"},
 	"HOLLOW":        {"CHS", "SHS", "RHS"},
@@ -57,7 +58,8 @@ var collective = map[string][]string{
 var finishWords = map[string]Finish{
 	"CF": ColdFormed, "COLD": ColdFormed, "COLDFORMED": ColdFormed, "CFHS": ColdFormed,
 	"HF": HotFinished, "HOT": HotFinished, "HOTFINISHED": HotFinished, "HFHS": HotFinished, "HOTFORMED": HotFinished,
-	"EN10219": ColdFormed, "EN10210": HotFinished,
+	"EN10219": ColdFormed, "EN10210": HotFinished, "EN102192": ColdFormed, "EN102102": HotFinished,
+	"BSEN10219": ColdFormed, "BSEN10210": HotFinished, "BSEN102192": ColdFormed, "BSEN102102": HotFinished,
 }
 
 // familyByWord is families and collective, by word.
@@ -84,12 +86,14 @@ func FamilyNames() []string {
 	return names
 }
 
-// ParseFamilies reads the families that a schedule or a setting names, several
-// separated by comma, semicolon, slash, plus, "and", "or" or blanks: "UKC", "HE", "CHS, SHS CF",
-// "Universal columns". An error lists the families there are.
+// ParseFamilies reads the families that a schedule or a setting names: "UKC",
+// "HE", "CHS, SHS CF", "Universal columns". Comma, semicolon and line end part
+// items; within an item blanks, slash, plus, ampersand, "and" and "or" part
+// families, and a finish behind several holds for all of them: "CHS/SHS CF".
+// An error lists the families there are.
 func ParseFamilies(text string) ([]FamilySpec, error) {
 	var specs []FamilySpec
-	for _, item := range strings.FieldsFunc(text, func(r rune) bool { return strings.ContainsRune(",;/+|&\n", r) }) {
+	for _, item := range strings.FieldsFunc(text, func(r rune) bool { return strings.ContainsRune(",;\n", r) }) {
 		found, err := parseFamilyItem(item)
 		if err != nil {
 			return nil, err
@@ -107,14 +111,14 @@ func ParseFamilies(text string) ([]FamilySpec, error) {
 }
 
 func unknownFamily(text string) error {
-	return fmt.Errorf("section family %q is not known: give one or more of %s", strings.TrimSpace(text), strings.Join(FamilyNames(), ", "))
+	return fmt.Errorf("section family %q is not known: give one or more of %s", shortened(strings.TrimSpace(text)), strings.Join(FamilyNames(), ", "))
 }
 
-// parseFamilyItem reads blank-separated words, taking the longest run of them
-// that names a family; a finish belongs to the families before it, or to those
-// behind it where none stands before.
+// parseFamilyItem takes the longest run of words that names a family; a finish
+// belongs to the families before it, or to those behind it where none stands
+// before.
 func parseFamilyItem(item string) ([]FamilySpec, error) {
-	words := strings.Fields(plainUpper(item))
+	words := strings.FieldsFunc(plainUpper(item), func(r rune) bool { return strings.ContainsRune(" /+|&", r) })
 	var specs []FamilySpec
 	finish, open := FinishNone, 0
 	for i := 0; i < len(words); {
@@ -122,7 +126,7 @@ func parseFamilyItem(item string) ([]FamilySpec, error) {
 		switch {
 		case n == 0:
 			if words[i] != "AND" && words[i] != "OR" {
-				return nil, unknownFamily(item)
+				return nil, unknownFamily(words[i])
 			}
 			n = 1
 		case f != FinishNone && names == nil:
@@ -153,7 +157,7 @@ func applyFinish(specs []FamilySpec, f Finish) {
 
 // hollowFinish is f for the hollow families, none for the others.
 func hollowFinish(name string, f Finish) Finish {
-	if s := families[name].shape; s == ShapeCHS || s == ShapeRHS {
+	if s := families[name].shape; s.hollow() {
 		return f
 	}
 	return FinishNone
@@ -170,10 +174,8 @@ func takeFamily(words []string) (n int, names []string, f Finish) {
 			if f, ok := finishWords[w]; ok {
 				return n, nil, f
 			}
-			for _, prefix := range []string{"CF", "HF"} {
-				if names, ok := familyByWord[strings.TrimPrefix(w, prefix)]; ok && strings.HasPrefix(w, prefix) {
-					return n, names, finishWords[prefix]
-				}
+			if rest, f := cutFinish(w); n == 1 && f != FinishNone {
+				return n, familyByWord[rest], f
 			}
 		}
 	}

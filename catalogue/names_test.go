@@ -1,6 +1,7 @@
 package catalogue
 
 import (
+	"errors"
 	"strings"
 	"testing"
 
@@ -28,6 +29,10 @@ func TestFindReadsTheTradesSpellings(t *testing.T) {
 		"PFC 200x90x30": "200x90x30 UKPFC", "200x90 PFC": "200x90x30 UKPFC", "UPE 200": "UPE 200",
 		"L 100x100x10": "L 100x100x10", "100x100x10 L": "L 100x100x10", "Equal angle 100x100x10": "L 100x100x10", "L100x10": "L 100x100x10",
 		"UA 150x90x10": "L 150x90x10", "UBP 305x305x79": "305x305x79 UKBP", "305x165x40 UB": "305x165x40 UKB",
+		"203x203xUC60": "203x203x60 UKC", "203 x 203 x 60 kg/m UC": "203x203x60 UKC", "UC203x203x60kg": "203x203x60 UKC",
+		"Ø168.3x8": "CHS 168.3x8.0", "CHS ø168,3 x 8": "CHS 168.3x8.0", "CHS 168x8": "CHS 168.3x8.0", "CHS 140x5": "CHS 139.7x5.0", "139x5 CHS": "CHS 139.7x5.0",
+		"150x150x10mm SHS": "SHS 150x150x10.0", "RHS 150x150x10": "SHS 150x150x10.0", "RHSCF 200x100x8": "RHS 200x100x8.0 CF", "SHS 150x150x10 (CF)": "SHS 150x150x10.0 CF",
+		"∟100x100x10": "L 100x100x10", "RSA 100x100x10": "L 100x100x10", "HE 300-B": "HE 300 B", "UPE200": "UPE 200",
 	} {
 		s, err := Default().Find(name, FindOptions{})
 		if assert.NoError(t, err, name) {
@@ -50,6 +55,20 @@ func TestFindNamesEveryFit(t *testing.T) {
 	require.NoError(t, err, "the families of the schedule do not shut out a name that states its own")
 	assert.Equal(t, "HE 200 A", s.Name())
 
+	for _, name := range []string{"150x150x10", "SHS 150x150x10"} {
+		s, err = Default().Find(name, FindOptions{Families: []string{"SHS CF"}})
+		require.NoError(t, err)
+		assert.Equal(t, "SHS 150x150x10.0 CF", s.Name(), "a family says the finish, too: %s", name)
+	}
+	s, err = Default().Find("SHS 150x150x10", FindOptions{Families: []string{"SHS HF", "SHS CF"}, ColdFormed: true})
+	require.NoError(t, err)
+	assert.Equal(t, "SHS 150x150x10.0 CF", s.Name(), "where both are allowed the setting decides")
+	s, err = Default().Find("SHS 150x150x10 HF", FindOptions{Families: []string{"SHS CF"}})
+	require.NoError(t, err)
+	assert.Equal(t, "SHS 150x150x10.0", s.Name(), "a name's own finish stands")
+	_, err = Default().Find("150x150x10", FindOptions{Families: []string{"XYZ"}})
+	require.ErrorContains(t, err, "XYZ")
+
 	_, err = Default().Find("203x203 UKC", FindOptions{})
 	require.ErrorAs(t, err, &amb)
 	assert.Contains(t, amb.Candidates, "203x203x60 UKC")
@@ -57,7 +76,7 @@ func TestFindNamesEveryFit(t *testing.T) {
 
 func TestFindNamesTheNearest(t *testing.T) {
 	for name, near := range map[string]string{
-		"203x203x61 UKC": "203x203x60 UKC", "HE 205 A": "HE 200 A", "UKC 203x230x60": "203x203x60 UKC", "IPE 310": "IPE 300", "SHS 150x150x10.5": "SHS 150x150x10.0",
+		"RHS 100x200x8": "RHS 200x100x8.0", "UA 90x150x10": "L 150x90x10", "UPN 200": "UPE 200", "203x203x61 UKC": "203x203x60 UKC", "HE 205 A": "HE 200 A", "UKC 203x230x60": "203x203x60 UKC", "IPE 310": "IPE 300", "SHS 150x150x10.5": "SHS 150x150x10.0",
 	} {
 		_, err := Default().Find(name, FindOptions{})
 		var unknown *UnknownSectionError
@@ -65,7 +84,11 @@ func TestFindNamesTheNearest(t *testing.T) {
 			assert.Contains(t, unknown.Nearest, near, name)
 		}
 	}
-	for _, name := range []string{"", "steel", "UKC", "203x203x60 UKC S355", "203x203x60 XYZ", strings.Repeat("9", 4000)} {
+	_, err := Default().Find("RHS 100x200x8", FindOptions{})
+	require.ErrorContains(t, err, "the greater dimension comes first")
+	_, err = Default().Find("SHS 150x150x10 CF hot finished", FindOptions{})
+	require.ErrorContains(t, err, "both hot finished and cold formed")
+	for _, name := range []string{"", "steel", "SHS 200x100x8", "L 20x20", "RHS 150x10", "UKC", "203x203x60 UKC S355", "203x203x60 XYZ", strings.Repeat("9", 4000)} {
 		_, err := Default().Find(name, FindOptions{})
 		var unknown *UnknownSectionError
 		assert.ErrorAs(t, err, &unknown, name)
@@ -89,7 +112,7 @@ func TestFindNeverSwitchesTheFinish(t *testing.T) {
 		}
 		tried++
 		_, err := Default().Find(d, FindOptions{})
-		require.ErrorContains(t, err, "cold formed only", d)
+		require.ErrorContains(t, err, "cold formed only: add CF", d)
 	}
 	require.Positive(t, tried)
 }
@@ -102,14 +125,44 @@ func TestEveryNameIsReadBack(t *testing.T) {
 	}
 }
 
+// otherWords are words of the trade for a family, and where they may stand.
+var otherWords = map[string][]string{
+	"UKC": {"UC", "ukc", "Universal Column", "Uc"}, "UKB": {"UB", "ukb", "universal beam"}, "UKBP": {"UBP", "bearing pile"}, "UKPFC": {"PFC", "pfc"},
+	"CHS": {"chs", "Circular Hollow Section"}, "SHS": {"shs", "square hollow section"}, "RHS": {"rhs", "Rectangular hollow"},
+	"L equal": {"L", "Equal angle", "EA", "RSA"}, "L unequal": {"L", "Unequal angle", "UA", "angle"}, "HD": {"HD", "hd"},
+}
+
 func TestSpellingsVaryFreely(t *testing.T) {
 	all := Default().Sections()
 	rapid.Check(t, func(t *rapid.T) {
 		s := all[rapid.IntRange(0, len(all)-1).Draw(t, "section")]
 		name := s.Name()
-		name = strings.ReplaceAll(name, "x", rapid.SampledFrom([]string{"x", "X", "×", " x ", "*"}).Draw(t, "by"))
-		if rapid.Bool().Draw(t, "lower") {
+		if words := otherWords[s.Family]; words != nil {
+			dimensions := strings.Trim(strings.Map(func(r rune) rune {
+				if r >= '0' && r <= '9' || r == 'x' || r == '.' {
+					return r
+				}
+				return ' '
+			}, s.Designation), " ")
+			if rapid.Bool().Draw(t, "bare decimals") {
+				dimensions = strings.TrimSuffix(dimensions, ".0")
+			}
+			word := rapid.SampledFrom(words).Draw(t, "word")
+			gap := rapid.SampledFrom([]string{"", " ", "  ", "\u00a0", "-"}).Draw(t, "gap")
+			name = word + gap + dimensions
+			if rapid.Bool().Draw(t, "behind") {
+				name = dimensions + gap + word
+			}
+			if s.Finish == ColdFormed {
+				name += rapid.SampledFrom([]string{" CF", " cold formed", " cold-formed", " (CF)", " EN 10219-2", ", cold"}).Draw(t, "finish")
+			}
+		}
+		name = strings.ReplaceAll(name, "x", rapid.SampledFrom([]string{"x", "X", "×", " x ", "*", " × ", "\u00a0x\u00a0"}).Draw(t, "by"))
+		switch rapid.IntRange(0, 2).Draw(t, "case") {
+		case 1:
 			name = strings.ToLower(name)
+		case 2:
+			name = strings.ToUpper(name)
 		}
 		if rapid.Bool().Draw(t, "spaces") {
 			name = "  " + strings.ReplaceAll(name, " ", "\u00a0 ") + " "
@@ -122,6 +175,26 @@ func TestSpellingsVaryFreely(t *testing.T) {
 			t.Fatalf("%q: %v", name, err)
 		}
 	})
+}
+
+// A shorter form never settles on one section where another has the name too.
+func TestShortFormsAreOnesOwn(t *testing.T) {
+	for _, s := range Default().Sections() {
+		for _, form := range shortForms(s, readSpelling(s.Designation).numbers) {
+			name := key(form)
+			if s.Finish == ColdFormed {
+				name += " CF"
+			}
+			got, err := Default().Find(strings.Fields(s.Family)[0]+" "+name, FindOptions{})
+			var amb *AmbiguousSectionError
+			if errors.As(err, &amb) {
+				assert.Contains(t, amb.Candidates, s.Name())
+				continue
+			}
+			require.NoError(t, err, name)
+			assert.Same(t, s, got, "%s is read as %s", s.Name()+" shortened to "+name, got.Name())
+		}
+	}
 }
 
 func FuzzFind(f *testing.F) {
@@ -140,7 +213,9 @@ func TestParseFamilies(t *testing.T) {
 	for text, want := range map[string][]FamilySpec{
 		"UKC": {{Family: "UKC"}}, "uc": {{Family: "UKC"}}, "Universal Columns": {{Family: "UKC"}}, "UKC UKB": {{Family: "UKC"}, {Family: "UKB"}},
 		"HE": {{Family: "HEA"}, {Family: "HEB"}, {Family: "HEM"}}, "SHS CF": {{"SHS", ColdFormed}}, "cold formed SHS": {{"SHS", ColdFormed}},
-		"CHS, SHS": {{Family: "CHS"}, {Family: "SHS"}}, "CHS/RHS hot finished": {{Family: "CHS"}, {"RHS", HotFinished}},
+		"CHS, SHS": {{Family: "CHS"}, {Family: "SHS"}}, "CHS/RHS hot finished": {{"CHS", HotFinished}, {"RHS", HotFinished}},
+		"CHS & SHS CF": {{"CHS", ColdFormed}, {"SHS", ColdFormed}}, "CFSHS": {{"SHS", ColdFormed}}, "RHSCF; CHS": {{"RHS", ColdFormed}, {Family: "CHS"}},
+		"EN 10219-2 square hollow sections": {{"SHS", ColdFormed}}, "HE-A, HE-B": {{Family: "HEA"}, {Family: "HEB"}},
 		"UKC and HEB": {{Family: "UKC"}, {Family: "HEB"}}, "IPE A": nil, "L": {{Family: "L equal"}, {Family: "L unequal"}}, "Equal angles": {{Family: "L equal"}},
 		"L unequal": {{Family: "L unequal"}},
 	} {
@@ -153,10 +228,37 @@ func TestParseFamilies(t *testing.T) {
 		require.NoError(t, err, text)
 		assert.Equal(t, want, got, text)
 	}
-	_, err := ParseFamilies("XYZ")
-	require.ErrorContains(t, err, "UKC")
+	_, err := ParseFamilies("UKC, XYZ")
+	require.ErrorContains(t, err, `"XYZ" is not known`)
+	require.ErrorContains(t, err, "UKPFC")
 	_, err = ParseFamilies(" ")
 	require.Error(t, err)
+}
+
+func FuzzParseFamilies(f *testing.F) {
+	for _, s := range []string{"UKC", "HE, SHS CF", "CHS/SHS", "Universal columns and UKB", "cold formed", "EN 10219-2", ";"} {
+		f.Add(s)
+	}
+	f.Fuzz(func(t *testing.T, text string) {
+		specs, err := ParseFamilies(text)
+		if (len(specs) == 0) == (err == nil) {
+			t.Fatal("neither families nor an error, or both")
+		}
+	})
+}
+
+func BenchmarkFindUnknown(b *testing.B) {
+	c := Default()
+	for b.Loop() {
+		sp := readSpelling("203x203x61 UKZ")
+		c.newUnknown("203x203x61 UKZ", &sp, "")
+	}
+}
+
+func BenchmarkBuild(b *testing.B) {
+	for b.Loop() {
+		read()
+	}
 }
 
 func BenchmarkFind(b *testing.B) {

@@ -12,6 +12,8 @@ const (
 	ShapeAngle                // equal and unequal angle
 )
 
+func (s Shape) hollow() bool { return s == ShapeCHS || s == ShapeRHS }
+
 // Finish tells how a hollow section was formed; other shapes have none.
 type Finish uint8
 
@@ -51,7 +53,7 @@ type Properties struct {
 	Iy, Iz     float64 // second moments of area, mm4
 	RadY, RadZ float64 // radii of gyration i_y, i_z, mm
 	WelY, WelZ float64 // least elastic section moduli, mm3
-	WplY, WplZ float64 // plastic section moduli, mm3
+	WplY, WplZ float64 // plastic section moduli, mm3 (angles: 0, moments on them being refused)
 	It         float64 // St Venant torsion constant, mm4
 	Iw         float64 // warping constant about the shear centre, mm6 (0 where negligible: hollow sections, angles)
 	Wt         float64 // torsional section modulus of hollow sections, EN 10210-2 Annex B, mm3

@@ -32,7 +32,9 @@ type row struct {
 }
 
 // Default returns the embedded catalogue, read and computed once.
-var Default = sync.OnceValue(func() *Catalogue {
+var Default = sync.OnceValue(read)
+
+func read() *Catalogue {
 	var sections []*Section
 	for _, file := range []string{"i_sections", "channels", "hollow_circular", "hollow_square", "hollow_rectangular", "angles"} {
 		data, err := tables.ReadFile("tables/" + file + ".csv")
@@ -48,7 +50,7 @@ var Default = sync.OnceValue(func() *Catalogue {
 		}
 	}
 	return newCatalogue(sections)
-})
+}
 
 // section builds a section of the family's shape with its properties.
 func (r *row) section() *Section {
