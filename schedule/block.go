@@ -8,25 +8,45 @@ import (
 
 // ResultColumns returns the result columns in their order.
 func ResultColumns(o ResultOptions) []ResultColumn {
-	cols := governingColumns()
-	cols = append(cols, bucklingColumns()...)
-	cols = append(cols, sectionColumns()...)
+	cols := underGroup("Section", chosenColumns())
+	cols = append(cols, underGroup("Governing check", governingColumns())...)
+	cols = append(cols, underGroup("Buckling", bucklingColumns())...)
+	cols = append(cols, underGroup("Steel", sectionColumns())...)
+	cols = append(cols, underGroup("Next lighter section", lighterColumns())...)
 	if o.Reserve {
-		cols = append(cols, reserveColumns()...)
+		cols = append(cols, underGroup("Reserve", reserveColumns())...)
 	}
 	if o.Fire {
-		cols = append(cols, fireColumns()...)
+		cols = append(cols, underGroup("Fire", fireColumns())...)
 	}
-	return append(cols,
-		text("status", 11, func(_ *Member, r *design.Result) string { return r.Status.String() }).repeated(),
-		text("note", 40, func(m *Member, r *design.Result) string { return Note(m, r) }))
+	return append(cols, underGroup("Outcome", outcomeColumns())...)
 }
 
-func governingColumns() []ResultColumn {
+// underGroup puts columns under one heading.
+func underGroup(group string, cols []ResultColumn) []ResultColumn {
+	for i := range cols {
+		cols[i].Group = group
+	}
+	return cols
+}
+
+func outcomeColumns() []ResultColumn {
+	return []ResultColumn{
+		text("status", 11, func(_ *Member, r *design.Result) string { return r.Status.String() }).repeated(),
+		text("note", 40, func(m *Member, r *design.Result) string { return Note(m, r) }),
+	}
+}
+
+func chosenColumns() []ResultColumn {
 	return []ResultColumn{
 		text("section", 18, func(_ *Member, r *design.Result) string { return r.Section }).repeated(),
 		text("grade", 8, func(_ *Member, r *design.Result) string { return r.Grade }).repeated(),
 		{Name: "utilisation", Decimals: 3, Numeric: true, Width: 10, Repeated: true, value: utilisation},
+	}
+}
+
+func governingColumns() []ResultColumn {
+	return []ResultColumn{
 		text("governing axis", 14, func(_ *Member, r *design.Result) string { return AxisName(r.Governing.Kind) }),
 		text("governing check", 22, func(_ *Member, r *design.Result) string { return CheckName(r.Governing.Kind) }),
 		text("clause", 11, func(_ *Member, r *design.Result) string { return r.Governing.Clause }),
@@ -57,6 +77,11 @@ func sectionColumns() []ResultColumn {
 		number("fy", "N/mm2", 0, 7, func(_ *Member, r *design.Result) float64 { return r.Fy }),
 		number("mass per metre", "kg/m", 1, 8, func(_ *Member, r *design.Result) float64 { return r.MassPerM }),
 		number("mass", "kg", 1, 9, func(_ *Member, r *design.Result) float64 { return r.Mass }),
+	}
+}
+
+func lighterColumns() []ResultColumn {
+	return []ResultColumn{
 		text("next lighter", 18, nextLighter),
 		text("fails in", 22, nextLighterFails),
 		number("its utilisation", "", 3, 10, func(_ *Member, r *design.Result) float64 { return r.NextLighterUtilisation }),
