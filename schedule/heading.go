@@ -35,20 +35,14 @@ var aboveHeight = regexp.MustCompile(`(?i)\babove\s+(\d+(?:[.,]\d+)?(?:\s*(?:mm|
 // has neither keys nor trouble.
 func readHeading(text string) *meaning {
 	m := &meaning{}
-	rest := tidy(text)
+	rest := yesNo.ReplaceAllString(tidy(text), "")
 	if at := aboveHeight.FindStringSubmatchIndex(rest); at != nil {
 		if m.above = readAbove(rest[at[2]:at[3]]); m.above != nil {
 			rest = rest[:at[0]] + rest[at[1]:]
 		}
 	}
 	bare, u, odd := splitUnit(rest)
-	p := parsePhrase(bare)
-	if bare != rest && odd == "" && len(p.nouns) == 0 {
-		if whole := parsePhrase(rest); len(whole.nouns) > 0 {
-			p, u = whole, nil // the heading N, or m
-		}
-	}
-	p.resolve(m)
+	parsePhrase(bare).resolve(m)
 	if m.above != nil && (len(m.keys) == 0 || m.keys[0].line().needs&perHeight == 0) {
 		*m = meaning{}
 	}
@@ -86,12 +80,14 @@ func (m *meaning) setUnit(u *unit, odd string) {
 
 var (
 	brackets  = regexp.MustCompile(`[(\[]\s*([^()\[\]]*?)\s*[)\]]`)
-	trailing  = regexp.MustCompile(`(?i)^(.*?\S)(?:\s*[,/]\s*|\s+in\s+|\s+)(kN[ .·*-]?m/rad|MN[ .·*-]?m/rad|N[ .·*-]?mm/rad|kN[ .·*-]?m|MN[ .·*-]?m|N[ .·*-]?mm|N[ .·*-]?m|kN|MN|mm|cm|m)$`)
+	trailing  = regexp.MustCompile(`(?i)^(.*?\S)(?:\s*[,/_]\s*|\s+in\s+|\s+)(kN[ .·*-]?m/rad|MN[ .·*-]?m/rad|N[ .·*-]?mm/rad|kN[ .·*-]?m|MN[ .·*-]?m|N[ .·*-]?mm|N[ .·*-]?m|kN|MN|mm|cm|m)$`)
+	inside    = regexp.MustCompile(`(?i)[\s,/_](kNm|kN|MNm|MN|mm)[\s,/_]`)
+	yesNo     = regexp.MustCompile(`(?i)[(\[]\s*y(?:es)?\s*/\s*no?\s*[)\]]`)
 	trailingN = regexp.MustCompile(`^(.*?\S)(?:\s*[,/]\s*|\s+in\s+)(N|min)$`)
 )
 
 // splitUnit takes the unit out of a heading: in brackets, or behind a comma, a
-// stroke, "in" or a space. odd is a unit that is not read here.
+// stroke, "in", a space or an underscore. odd is a unit that is not read here.
 func splitUnit(s string) (rest string, u *unit, odd string) {
 	for _, at := range brackets.FindAllStringSubmatchIndex(s, -1) {
 		text := s[at[2]:at[3]]
@@ -112,6 +108,11 @@ func splitUnit(s string) (rest string, u *unit, odd string) {
 			if known, ok, _ := findUnit(at[2]); ok {
 				return at[1], &known, ""
 			}
+		}
+	}
+	if at := inside.FindStringSubmatchIndex(s); at != nil && at[0] > 0 {
+		if known, ok, _ := findUnit(s[at[2]:at[3]]); ok {
+			return s[:at[2]] + s[at[3]:], &known, ""
 		}
 	}
 	return s, nil, ""

@@ -80,6 +80,9 @@ func TestReadHeading(t *testing.T) {
 		"Remarks": "", "Comments": "", "": "", "m": "", "Rev": "", "3.5": "", "Project": "", "Drawing no": "", "Utilisation limit (%)": "Utilisation limit [%]",
 		"Restraints between the ends y-y": "Restraints y-y", "Restraint heights from bottom z-z (m)": "Restraints z-z [m]", "Restraints y-y by floor beams": "",
 		"Restraints z-z, steelwork only": "Restraints z-z ?", "Effective length y-y braced": "L_cr,y ?", "Effective length check y-y": "",
+		"N_Ed_kN": "N_Ed [kN]", "length_m": "Length [m]", "My_top_kNm": "M_y,Ed top [kNm]", "N_Ed_kN_ULS1": "N_Ed {ULS1} [kN]", "L_cr_y_m": "L_cr,y [m]", "restraints_zz_mm": "Restraints z-z [mm]",
+		"N_Ed 6.10a": "N_Ed {6.10a}", "N_Ed - 6.10b": "N_Ed {6.10b}", "ULS1 (kN)": "", "P (kN)": "", "Level from / to": "Level ?", "Storey ht (m)": "Length ? [m]", "Eff. length y-y": "L_cr,y",
+		"Eff. length factor z-z": "k_z", "Splice (Y/N)": "Splice", "z-z braced at": "Restraints z-z", "Section class": "", "Fy": "",
 		"\u0301": "", "N_Ed \u0301": "N_Ed",
 		"N": "N_Ed ?", "N (kN)": "N_Ed ? [kN]", "Load": "N_Ed ?",
 	} {

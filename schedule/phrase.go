@@ -50,6 +50,9 @@ func longestWord(toks []token) (word, int) {
 }
 
 func (p *phrase) take(w word, toks []token) {
+	if n := len(p.left); n > 0 && len(toks) == 1 && len(toks[0].text) == 1 && p.left[n-1].end == toks[0].start {
+		w = word{} // the b of 6.10b
+	}
 	span := [2]int{toks[0].start, toks[len(toks)-1].end}
 	switch w.kind {
 	case noun:
@@ -103,6 +106,9 @@ func (p *phrase) resolve(m *meaning) {
 // or several.
 func (p *phrase) field() (*field, word) {
 	var found word
+	if p.names(fromField) && p.names(toField) {
+		return fieldTable[levelField], word{} // Level from / to
+	}
 	for _, weak := range []bool{false, true} {
 		for _, w := range p.nouns {
 			if w.weak != weak || w.field == combinationField && p.hasOther() {
@@ -127,6 +133,10 @@ func (p *phrase) field() (*field, word) {
 		}
 	}
 	return fieldTable[found.field], found
+}
+
+func (p *phrase) names(f fieldName) bool {
+	return slices.ContainsFunc(p.nouns, func(w word) bool { return w.field == f })
 }
 
 // hasOther reports whether a noun that can be given per combination stands

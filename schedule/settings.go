@@ -57,7 +57,6 @@ type settingsReader struct {
 	from     map[string]string
 	maps     mapping
 	mapLines []Assignment
-	rates    []Assignment
 	national func(string) (design.National, error)
 }
 

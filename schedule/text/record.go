@@ -217,10 +217,7 @@ func unquote(s string) string {
 		return s
 	}
 	end := closing(s)
-	inner := s[1:end]
-	if strings.HasSuffix(inner, `"`) {
-		inner = inner[:len(inner)-1]
-	}
+	inner := strings.TrimSuffix(s[1:end], `"`)
 	return strings.ReplaceAll(inner, `""`, `"`) + s[end:]
 }
 
