@@ -29,6 +29,7 @@ type Settings struct {
 	Design      design.Settings
 	Compression string // positive, negative; empty: not said
 	Stock       string // file of the sections that may be used; empty: the whole catalogue
+	TakeOff     TakeOff
 	lines       []SettingLine
 }
 
