@@ -58,11 +58,16 @@ func (p *combinationPlan) index(name string) int {
 // row appends the combinations that one row gives.
 func (p *combinationPlan) row(m *memberData, d *rowData) {
 	rowName := m.rowCombination(d)
+	before := len(m.combinations)
 	if p.bare {
 		p.one(m, d, -1, rowName)
 	}
 	for g, name := range p.names {
 		p.one(m, d, g, join(", ", rowName, name))
+	}
+	nothing := len(m.combinations) == before && !m.saidNoAxial && !m.failedField(axialField)
+	if len(m.rows) > 1 && nothing && !m.r.plan.loadsOptional {
+		m.noAxial(d, rowName)
 	}
 }
 
@@ -95,20 +100,22 @@ func (p *combinationPlan) one(m *memberData, d *rowData, g int, name string) {
 		return // reported with its cell
 	}
 	if own && (ok || g >= 0) {
-		m.noAxial(d, axial, ok, name)
+		m.noAxial(d, name)
 	}
 }
 
-// noAxial says that a combination has actions and no N_Ed.
-func (m *memberData) noAxial(d *rowData, axial int, ok bool, name string) {
+// noAxial says that a row, or one combination of it, has no N_Ed.
+func (m *memberData) noAxial(d *rowData, name string) {
 	what := "N_Ed is missing"
 	if name != "" {
 		what = fmt.Sprintf("N_Ed of combination %q is missing", name)
 	}
-	if !ok {
-		axial = 0
+	for i := range m.r.bindings {
+		if b := &m.r.bindings[i]; b.key.field == axialField && (b.Combination == "" || sameName(b.Combination, name)) {
+			m.problem(d.number, i, what, "give it (0 where there is none), or clear what stands beside it")
+			break
+		}
 	}
-	m.problem(d.number, axial, what, "give it beside the other actions (0 where there is none), or clear them")
 	m.saidNoAxial = true
 }
 

@@ -236,6 +236,18 @@ C2   | GF         | ULS2        | 3.9    | 500  |
 	assert.Equal(t, "loads.xlsx, Columns!D6: Length differs from row 3 of the same member: make the rows of one mark and level agree", s.Members[1].Problems[0].Error())
 	assert.Equal(t, 3, s.Summary.Members)
 	assert.Equal(t, 5, s.Summary.Rows)
+
+	header := "Mark | Combination | Length | N_Ed | Section\n"
+	c = *good(t, header+"C1 | ULS1 | 4 | 900 | UC 203x203x60\nC1 | ULS2 | | 700 | 203x203x60 UKC")
+	assert.Len(t, c.Combinations, 2)
+	p := problem(t, header+"C1 | ULS1 | 4 | 900 |\nC1 | ULS2 | 4 | |")
+	assert.Contains(t, p.Error(), `Columns!D3: N_Ed of combination "ULS2" is missing`)
+	// The second appearance of a combination is another member.
+	s = readAll(t, sheetOf(header+"C1 | ULS1 | 4 | 900 |\nC1 | ULS2 | 4 | 800 |\nC1 | ULS1 | 4 | 700 |\nC1 | ULS2 | 4 | 600 |"))
+	require.Len(t, s.Members, 2)
+	assert.Equal(t, []int{4, 5}, s.Members[1].Rows)
+	assert.Len(t, s.Members[1].Column.Combinations, 2)
+	assert.Contains(t, s.Members[0].Column.Notes[0], "row 4")
 }
 
 func TestTwins(t *testing.T) {
