@@ -28,6 +28,7 @@ type Interaction struct {
 	SwayY, SwayZ       bool    // C_m 0.9 about a sway axis
 	CmY, CmZ, CmLT     float64
 	Kyy, Kyz, Kzy, Kzz float64
+	LT                 Lateral // behind ChiLT
 	AnnexA             AnnexAValues
 	U661, U662         float64
 	Undefined          bool // Annex A beyond a critical load: no factors
@@ -82,7 +83,8 @@ func (m *Member) interact(c *Candidate, y, z, t *Segment, actions *bending) (x I
 	x.RatioY, x.RatioZ = x.NY*c.GammaM1/(x.ChiY*x.NRk), x.NZ*c.GammaM1/(x.ChiZ*x.NRk)
 
 	lt := c.lateral(inLT, t.Lcr, x.Class, m.Settings)
-	x.ChiLT = lt.ChiMod
+	lt.From, lt.To, lt.Combination = t.From, t.To, t.Combination
+	x.LT, x.ChiLT = lt, lt.ChiMod
 	if m.Settings.Interaction == design.AnnexA {
 		x.NcrT = math.Inf(1)
 		if c.Torsion != TorsionNone {

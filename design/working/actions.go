@@ -33,9 +33,9 @@ func (w *writer) actions() {
 
 // axial writes the force of a combination, part by part.
 func (w *writer) axial(c *design.Combination) string {
-	parts := []string{print(w.m.Growth*c.NEd, KN, most).String()}
+	parts := []string{print(w.m.Growth*c.NEd, KN, w.most).String()}
 	for _, s := range c.Steps {
-		parts = append(parts, fmt.Sprintf("%s above %s m", print(w.m.Growth*s.NEd, KN, most), metres(s.Height)))
+		parts = append(parts, fmt.Sprintf("%s above %s m", print(w.m.Growth*s.NEd, KN, w.most), metres(s.Height)))
 	}
 	return strings.Join(parts, ", ")
 }

@@ -16,7 +16,7 @@ func (w *writer) lengths() {
 			if s.Combination != b.Combination || s.Lcr == 0 {
 				continue
 			}
-			t.Rows = append(t.Rows, []string{name, metres(s.From) + "-" + metres(s.To), trimmed(s.Length()), s.How(), print(s.Lcr, Mm, most).Figures})
+			t.Rows = append(t.Rows, []string{name, metres(s.From) + "-" + metres(s.To), trimmed(s.Length()), s.How(), print(s.Lcr, Mm, w.most).Figures})
 			w.sheet.Lengths = append(w.sheet.Lengths, Length{axis, s.From, s.To, s.Lcr, s.From == b.From && s.To == b.To})
 		}
 	}

@@ -15,19 +15,30 @@ import (
 // assessment may be used again afterwards: the sheet keeps nothing of it.
 func Of(a *ec3.Assessment, result *design.Result) *Sheet {
 	a.Explain()
+	for figures := usual; ; figures++ {
+		w := write(a, result, figures)
+		if !w.weak || figures == ever {
+			return w.sheet
+		}
+	}
+}
+
+// write writes the working with values of a number of figures.
+func write(a *ec3.Assessment, result *design.Result, figures int) *writer {
 	m := a.Member
 	s := &Sheet{Column: m.Column, Settings: m.Settings, Section: a.Candidate.Section, Grade: a.Candidate.Grade.Name,
 		Result: result, Limit: ec3.Limit(m.Column, m.Settings), Governing: -1}
-	w := &writer{sheet: s, known: map[formula.Symbol]known{}, c: a.Candidate, m: m, a: a}
+	w := &writer{sheet: s, known: map[formula.Symbol]known{}, most: figures, c: a.Candidate, m: m, a: a}
 	w.section()
 	w.actions()
 	w.classification()
 	w.crossSection()
 	w.lengths()
 	w.buckling()
+	w.bending()
 	w.fire()
 	w.outcome()
-	return s
+	return w
 }
 
 // ErrNoSection is said of a result that names no section: there is nothing to

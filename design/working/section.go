@@ -62,4 +62,4 @@ func (w *writer) strength() {
 	w.find("ε", "√(235/f_y)", c.Eps, None, "Table 5.2")
 }
 
-func trimmed(v float64) string { return print(v, None, most).Figures }
+func trimmed(v float64) string { return print(v, None, usual).Figures }

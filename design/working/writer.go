@@ -17,6 +17,9 @@ type writer struct {
 	block *Block
 	known map[formula.Symbol]known
 
+	most int  // the greatest number of figures of a value
+	weak bool // a result has fewer figures than enough
+
 	c *ec3.Candidate
 	m *ec3.Member
 	a *ec3.Assessment
@@ -37,8 +40,14 @@ func (w *writer) add(i Item) { w.block.Items = append(w.block.Items, i) }
 
 func (w *writer) say(format string, args ...any) { w.add(Words(fmt.Sprintf(format, args...))) }
 
-// most is the greatest number of figures of a value.
-const most = 5
+// A value has five figures. Where a result is left with fewer than enough of
+// them by the numbers before it, the whole sheet is written with more, and no
+// more than ever.
+const (
+	usual  = 5
+	enough = 4
+	ever   = 9
+)
 
 // print returns a value, N, mm, MPa, as a number in a unit.
 func print(exact float64, u Unit, figures int) formula.Number {
@@ -57,7 +66,7 @@ func (w *writer) value(symbol string, exact float64, u Unit) Value {
 }
 
 func (w *writer) noted(symbol string, exact float64, u Unit, note string) Value {
-	v := Value{formula.Must(symbol), print(exact, u, most), u, note}
+	v := Value{formula.Must(symbol), print(exact, u, w.most), u, note}
 	if s, ok := v.Left.(formula.Symbol); ok {
 		w.know(s, exact, v.Number, u)
 	}
@@ -100,17 +109,23 @@ func (w *writer) derive(symbol, source string, u Unit, clause string) *Step {
 func (w *writer) ratio(source string, exact float64, clause string) *Step {
 	s := w.step(formula.Must(source), source, exact, None, clause)
 	s.Formula = nil
-	if s.Result.Step() < 1e-3 {
-		s.Result = formula.Number{Figures: Utilisation(exact)}
-	}
+	s.Result = shortest(s, exact)
 	s.Limit, s.Within = "≤ "+fixed(w.sheet.Limit, 2), ec3.Passes(exact, w.sheet.Limit)
 	return s
+}
+
+// shortest returns the result of a utilisation with three decimals at most.
+func shortest(s *Step, exact float64) formula.Number {
+	if s.Result.Step() < 1e-3 {
+		return formula.Number{Figures: Utilisation(exact)}
+	}
+	return s.Result
 }
 
 // Utilisation writes a utilisation to three decimals.
 func Utilisation(u float64) string {
 	if math.IsInf(u, 1) {
-		return "none"
+		return "∞"
 	}
 	return fixed(u, 3)
 }
@@ -170,12 +185,13 @@ func (w *writer) numbers(f formula.Expr, exact float64, u Unit) formula.Expr {
 }
 
 // supported prints a result to as many figures as the printed numbers give
-// back within one step of the last, at least three.
+// back within one step of the last.
 func (w *writer) supported(numbers formula.Expr, exact float64, u Unit) formula.Number {
 	again, err := formula.Eval(numbers, nil)
-	for figures := most; ; figures-- {
+	for figures := w.most; ; figures-- {
 		n := print(exact, u, figures)
-		if err != nil || figures <= 3 || math.Abs(again-n.Value()) <= n.Step()*1.0001 {
+		if err != nil || figures <= 1 || !(math.Abs(again-n.Value()) > n.Step()*1.0001) {
+			w.weak = w.weak || figures < enough
 			return n
 		}
 	}

@@ -11,8 +11,13 @@ import (
 // every value. A value that needs fewer figures is written with as few as it
 // needs.
 func Round(v float64, most int) Number {
-	if v == 0 || math.IsNaN(v) || math.IsInf(v, 0) {
-		return Number{Figures: strconv.FormatFloat(v, 'f', -1, 64)}
+	switch {
+	case math.IsInf(v, 0):
+		return Number{Figures: "∞"}
+	case math.IsNaN(v):
+		return Number{Figures: "?"}
+	case v == 0:
+		return Number{Figures: "0"}
 	}
 	v = clean(v)
 	exact := strconv.FormatFloat(v, 'f', -1, 64)
