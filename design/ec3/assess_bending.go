@@ -29,6 +29,14 @@ func (m *Member) moments(c *Candidate, index int) (b bending, bends bool) {
 	return b, !b.my.Zero() || !b.mz.Zero()
 }
 
+// EndMoments returns the ordinates of the diagrams that the checks of a
+// combination in a candidate read, N mm: given and nominal moments, growth
+// included.
+func (m *Member) EndMoments(c *Candidate, combination int) (my, mz design.EndMoments) {
+	b, _ := m.moments(c, combination)
+	return b.my, b.mz
+}
+
 // bendable refuses the shapes for which no rule of bending is implemented.
 func bendable(s *catalogue.Section) bool {
 	return s.Shape != catalogue.ShapeChannel && s.Shape != catalogue.ShapeAngle

@@ -17,6 +17,7 @@ type Simple struct {
 	MyEd, MzEd          float64 // greatest, N mm
 	PsiY, PsiZ          float64
 	MbRd, MczRd         float64 // N mm
+	LT                  Lateral // behind MbRd
 	TermN, TermY, TermZ float64
 	PinnedBase          bool // psi = 0 about an axis: N_Ed/N_b,y,Rd is limited too
 	Utilisation         float64
@@ -113,7 +114,8 @@ func (m *Member) simplified(c *Candidate, a *Assessment, b *bending) Simple {
 		if s := &a.SegT[i]; s.Combination == b.combination {
 			lt := c.lateral(between(b.my, s.From, s.To, m.Length), s.Lcr, x.Class, m.Settings)
 			if x.MbRd == 0 || lt.Utilisation > x.TermY {
-				x.TermY, x.MbRd = lt.Utilisation, lt.MbRd
+				lt.From, lt.To, lt.Combination = s.From, s.To, s.Combination
+				x.TermY, x.MbRd, x.LT = lt.Utilisation, lt.MbRd, lt
 			}
 		}
 	}

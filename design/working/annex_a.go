@@ -9,17 +9,15 @@ import (
 // annexA writes the interaction factors of Annex A, Tables A.1 and A.2.
 func (w *writer) annexA(bentY, bentZ bool) {
 	x, v := &w.a.Interaction, &w.a.Interaction.AnnexA
-	w.add(Values{w.noted("N_y", x.NY, KN, "N_Ed in the y-y segment"), w.noted("N_z", x.NZ, KN, "in the z-z segment"),
-		w.value("N_cr,y", x.NcrY, KN), w.value("N_cr,z", x.NcrZ, KN)})
-	w.find("μ_y", "(1 - N_y/N_cr,y)/(1 - χ_y N_y/N_cr,y)", v.MuY, None, "Table A.1")
-	w.find("μ_z", "(1 - N_z/N_cr,z)/(1 - χ_z N_z/N_cr,z)", v.MuZ, None, "Table A.1")
+	w.critical("y", x.NY, x.NcrY)
+	w.critical("z", x.NZ, x.NcrZ)
+	w.find("μ_y", "(1 - r_y)/(1 - χ_y r_y)", v.MuY, None, "Table A.1")
+	w.find("μ_z", "(1 - r_z)/(1 - χ_z r_z)", v.MuZ, None, "Table A.1")
 	if bentY {
-		w.add(Values{w.noted("ψ_y", x.PsiY, None, "in its segment")})
-		w.find("C_my,0", "0.79 + 0.21 ψ_y + 0.36 (ψ_y - 0.33) N_y/N_cr,y", v.CmY0, None, "Table A.2")
+		w.uniform("y", "C_my,0", x.PsiY, v.CmY0, x.SwayY)
 	}
 	if bentZ {
-		w.add(Values{w.noted("ψ_z", x.PsiZ, None, "in its segment")})
-		w.find("C_mz", "0.79 + 0.21 ψ_z + 0.36 (ψ_z - 0.33) N_z/N_cr,z", x.CmZ, None, "Table A.2")
+		w.uniform("z", "C_mz", x.PsiZ, x.CmZ, x.SwayZ)
 	}
 	if bentY {
 		w.annexATorsion(x)
@@ -28,6 +26,27 @@ func (w *writer) annexA(bentY, bentZ bool) {
 		w.annexAPlastic(bentY, bentZ)
 	}
 	w.annexAFactors(bentY, bentZ)
+}
+
+// critical writes N_Ed over an elastic critical load.
+func (w *writer) critical(axis string, n, ncr float64) {
+	if n == 0 || math.IsInf(ncr, 1) {
+		w.add(Values{w.noted("r_"+axis, 0, None, "N_Ed/N_cr,"+axis+": no compression")})
+		return
+	}
+	w.add(Values{w.value("N_Ed", n, KN), w.value("N_cr,"+axis, ncr, KN)})
+	w.find("r_"+axis, "N_Ed/N_cr,"+axis, n/ncr, None, "")
+}
+
+// uniform writes C_mi,0 of a linear diagram. Table A.2 knows no sway axis: the
+// 0.9 of Table B.3 is the least there.
+func (w *writer) uniform(axis, symbol string, psi, cm float64, sway bool) {
+	w.add(Values{w.noted("ψ_"+axis, psi, None, "in its segment")})
+	source := w.fill("0.79 + 0.21 ψ_# + 0.36 (ψ_# - 0.33) r_#", axis)
+	if sway {
+		source = "max(" + source + ", 0.9)"
+	}
+	w.find(symbol, source, cm, None, "Table A.2")
 }
 
 // annexATorsion writes C_my and C_mLT.
@@ -43,11 +62,11 @@ func (w *writer) annexATorsion(x *ec3.Interaction) {
 	w.find("λ̄_0", lambda0, v.Lambda0, None, "Table A.1")
 	third := ""
 	if !math.IsInf(x.NcrT, 1) {
-		w.add(Values{w.noted("N_cr,T", x.NcrT, KN, "over the lateral-torsional segment")})
-		third = " (1 - N_z/N_cr,T)"
+		w.critical("T", x.NZ, x.NcrT)
+		third = " (1 - r_T)"
 	}
 	w.add(Values{w.value("C_1", x.LT.C1, None)})
-	w.find("λ̄_0,lim", "0.2 √(C_1) ((1 - N_z/N_cr,z)"+third+")^0.25", v.Lambda0Lim, None, "Table A.1")
+	w.find("λ̄_0,lim", "0.2 √(C_1) ((1 - r_z)"+third+")^0.25", v.Lambda0Lim, None, "Table A.1")
 	if v.Lambda0 <= v.Lambda0Lim {
 		w.say("λ̄_0 is not above its limit: twist does not count.")
 		w.find("C_my", "C_my,0", x.CmY, None, "Table A.1")
@@ -73,13 +92,13 @@ func (w *writer) twistCounts(x *ec3.Interaction, third string) {
 		if x.Class == 4 {
 			area, modulus, value = w.areaOf(4), "W_eff,y", w.c.WEffY
 		}
-		w.add(Values{w.noted("M_y,Ed", x.My661, KNm, "y-y segment"), w.value(modulus, value, Cm3)})
-		w.find("ε_y", "M_y,Ed "+area+"/(N_y "+modulus+")", v.EpsY, None, "Table A.1")
+		w.add(Values{w.noted("M_y,Ed", x.My661, KNm, "y-y segment"), w.value("N_Ed", x.NY, KN), w.value(modulus, value, Cm3)})
+		w.find("ε_y", "M_y,Ed "+area+"/(N_Ed "+modulus+")", v.EpsY, None, "Table A.1")
 		w.find("C_my", "C_my,0 + (1 - C_my,0) √(ε_y) a_LT/(1 + √(ε_y) a_LT)", x.CmY, None, "Table A.1")
 	} else {
 		w.add(Values{w.value("C_my", x.CmY, None)})
 	}
-	w.find("C_mLT", "max(C_my^2 a_LT/√((1 - N_z/N_cr,z)"+third+"), 1)", x.CmLT, None, "Table A.1")
+	w.find("C_mLT", "max(C_my^2 a_LT/√((1 - r_z)"+third+"), 1)", x.CmLT, None, "Table A.1")
 }
 
 // annexAPlastic writes the plasticity factors of class 1 and 2.
@@ -128,11 +147,11 @@ func (w *writer) annexAFactors(bentY, bentZ bool) {
 		w.find(symbol, source, value, None, "Table A.1")
 	}
 	if bentY {
-		factor("k_yy", "C_my C_mLT μ_y", "N_y/N_cr,y", "C_yy", "", x.Kyy)
-		factor("k_zy", "C_my C_mLT μ_z", "N_y/N_cr,y", "C_zy", " 0.6 √(w_y/w_z)", x.Kzy)
+		factor("k_yy", "C_my C_mLT μ_y", "r_y", "C_yy", "", x.Kyy)
+		factor("k_zy", "C_my C_mLT μ_z", "r_y", "C_zy", " 0.6 √(w_y/w_z)", x.Kzy)
 	}
 	if bentZ {
-		factor("k_yz", "C_mz μ_y", "N_z/N_cr,z", "C_yz", " 0.6 √(w_z/w_y)", x.Kyz)
-		factor("k_zz", "C_mz μ_z", "N_z/N_cr,z", "C_zz", "", x.Kzz)
+		factor("k_yz", "C_mz μ_y", "r_z", "C_yz", " 0.6 √(w_z/w_y)", x.Kyz)
+		factor("k_zz", "C_mz μ_z", "r_z", "C_zz", "", x.Kzz)
 	}
 }

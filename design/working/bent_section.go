@@ -7,24 +7,6 @@ import (
 	"stanchion/design"
 )
 
-// shearArea returns the formula of the shear area along an axis.
-// EN 1993-1-1:2005 6.2.6(3), eta = 1.0.
-func (w *writer) shearArea(axis string) string {
-	switch w.c.Section.Shape {
-	case catalogue.ShapeI:
-		if axis == "z" {
-			return "max(A - 2 b t_f + (t_w + 2 r) t_f, (h - 2 t_f) t_w)"
-		}
-		return "A - (h - 2 t_f) t_w"
-	case catalogue.ShapeRHS:
-		if axis == "z" {
-			return "A h/(b + h)"
-		}
-		return "A b/(b + h)"
-	}
-	return "2 A/π"
-}
-
 // bentSection writes 6.2.9 where its utilisation is the greatest.
 func (w *writer) bentSection() {
 	x := &w.a.Section
@@ -67,63 +49,6 @@ func (w *writer) acts(n, my, mz float64, where string) {
 	w.add(list)
 }
 
-// sheared writes the moduli reduced for shear, where it is above half of its
-// resistance, and returns the symbols of those that are left.
-func (w *writer) sheared() (wy, wz string) {
-	x := &w.a.Section
-	wy, wz = moduli(x.Class)
-	if x.RhoZ == 0 && x.RhoY == 0 {
-		return wy, wz
-	}
-	if w.c.Section.Shape == catalogue.ShapeCHS {
-		return w.shearedTube()
-	}
-	reduce := func(axis string, v, rd, rho float64) {
-		if rho > 0 {
-			w.add(Values{w.value("V_"+axis+",Ed", v, KN), w.value("V_pl,"+axis+",Rd", rd, KN)})
-			w.find("ρ_"+axis, "(2 min(V_"+axis+",Ed, V_pl,"+axis+",Rd)/V_pl,"+axis+",Rd - 1)^2", rho, None, "6.2.8(3)")
-		} else {
-			w.add(Values{w.noted("ρ_"+axis, 0, None, "V_Ed up to half of V_pl,Rd")})
-		}
-	}
-	reduce("z", x.VzEd, x.VzRd, x.RhoZ)
-	reduce("y", x.VyEd, x.VyRd, x.RhoY)
-	sourceY, sourceZ := wy+" (1 - ρ_z)", wz+" (1 - ρ_y)"
-	switch w.c.Section.Shape {
-	case catalogue.ShapeI:
-		sourceY = wy + " - ρ_z ((h - 2 t_f) t_w)^2/(4 t_w)"
-	case catalogue.ShapeRHS:
-		sourceY = wy + " - ρ_z (A h/(b + h))^2/(8 t)"
-		sourceZ = wz + " - ρ_y (A b/(b + h))^2/(8 t)"
-	}
-	if x.MyEd > 0 {
-		w.find("W_V,y", sourceY, x.WY, Cm3, "(6.30)")
-		wy = "W_V,y"
-	}
-	if x.MzEd > 0 {
-		w.find("W_V,z", sourceZ, x.WZ, Cm3, "6.2.8(3)")
-		wz = "W_V,z"
-	}
-	return wy, wz
-}
-
-// shearedTube reduces the modulus of a tube for the resultant shear.
-func (w *writer) shearedTube() (wy, wz string) {
-	x := &w.a.Section
-	symbol, from := "W_V", "W_pl,y"
-	if x.Class > 2 {
-		from = "W_el,y"
-	}
-	if x.MyEd == 0 {
-		from = from[:5] + "z"
-	}
-	w.add(Values{w.value("V_z,Ed", x.VzEd, KN), w.value("V_y,Ed", x.VyEd, KN), w.value("V_pl,Rd", x.VzRd, KN)})
-	w.derive("V_Ed", "√(V_z,Ed^2 + V_y,Ed^2)", KN, "")
-	w.find("ρ", "(2 min(V_Ed, V_pl,Rd)/V_pl,Rd - 1)^2", x.RhoZ, None, "6.2.8(3)")
-	w.find(symbol, from+" (1 - ρ)", x.WY, Cm3, "6.2.8(3)")
-	return symbol, symbol
-}
-
 // axialOf writes the resistance to the axial force, and n.
 func (w *writer) axialOf() {
 	x := &w.a.Section
@@ -131,7 +56,11 @@ func (w *writer) axialOf() {
 	if x.Class == 4 && x.NEd >= 0 {
 		area = w.areaOf(x.Class)
 	}
-	w.find(symbol, area+" f_y/γ_M0", x.NplRd, KN, "6.2.9")
+	source := area + " f_y/γ_M0"
+	if x.RhoZ > 0 || x.RhoY > 0 {
+		source = "max(" + source + " - (ρ_z A_v,z + ρ_y A_v,y) f_y/γ_M0, " + source + "/1000)"
+	}
+	w.find(symbol, source, x.NplRd, KN, "6.2.9")
 	w.find("n", "abs(N_Ed)/N_Rd", x.N, None, "")
 }
 

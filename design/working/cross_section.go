@@ -43,7 +43,13 @@ func (w *writer) pressed(n, from, to float64, combination int) {
 		w.force(n, where)
 		return
 	}
-	weight := w.m.WeightPerMass * (w.m.Length - from) * w.c.Section.Mass
-	w.add(Values{w.noted("N", n-weight, KN, where), w.value("x", from, Mm)})
-	w.find("N_Ed", "N + γ_G 9.81 m (L - x)/1000", n, KN, "").Note = "own weight above x"
+	weight := w.m.WeightPerMass*(w.m.Length-from)*w.c.Section.Mass + w.m.Carried
+	list := Values{w.noted("N", n-weight, KN, where), w.value("x", from, Mm)}
+	source := "N + γ_G 9.81 m (L - x)/1000"
+	if w.m.Carried > 0 {
+		list = append(list, w.noted("G_above", w.m.Carried, KN, "own weight of the lengths above"))
+		source += " + G_above"
+	}
+	w.add(list)
+	w.find("N_Ed", source, n, KN, "").Note = "own weight above x"
 }

@@ -17,7 +17,7 @@ func (w *writer) fire() {
 		w.say("No critical temperature: %s.", f.Reason)
 	}
 	if f.CriticalTemperature > 0 {
-		w.critical(f)
+		w.atCritical(f)
 	}
 	w.exposure(f)
 	for _, note := range f.Notes {
@@ -25,8 +25,8 @@ func (w *writer) fire() {
 	}
 }
 
-// critical writes the resistance at the critical temperature.
-func (w *writer) critical(f *design.FireResult) {
+// atCritical writes the resistance at the critical temperature.
+func (w *writer) atCritical(f *design.FireResult) {
 	g := &f.Governing
 	gamma := w.m.Settings.National.GammaMfi
 	if gamma == 0 {

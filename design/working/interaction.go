@@ -57,22 +57,26 @@ func (w *writer) ratioOf(axis string, ncr, lambda, chi, nEd, n float64) {
 	if axis == "z" {
 		first, alpha = &w.a.Z, w.c.AlphaZ
 	}
-	above := first.Curve != "" && same(first.LambdaBar, lambda)
-	note := "as above"
-	if !above {
-		note = ""
-	}
-	if above {
-		w.add(Values{w.noted("λ̄_"+axis, lambda, None, note), w.value("χ_"+axis, chi, None)})
-	} else {
-		w.add(Values{w.value("L_cr,"+axis, math.Sqrt(math.Pi*math.Pi*design.E*w.inertia(axis)/ncr), Mm), w.value("α_"+axis, alpha, None)})
-		w.find("N_cr,"+axis, w.fill("π^2 E I_#/L_cr,#^2", axis), ncr, KN, "6.3.1.2(1)")
-		w.find("λ̄_"+axis, "√(N_Rk/N_cr,"+axis+")", lambda, None, "(6.50)")
-		w.derive("Φ_"+axis, w.fill("0.5 (1 + α_# (λ̄_# - 0.2) + λ̄_#^2)", axis), None, "6.3.1.2(1)")
-		w.find("χ_"+axis, w.fill("min(1/(Φ_# + √(Φ_#^2 - λ̄_#^2)), 1)", axis), chi, None, "(6.49)")
+	switch {
+	case math.IsInf(ncr, 1):
+		w.add(Values{w.noted("λ̄_"+axis, 0, None, "no compression"), w.value("χ_"+axis, 1, None)})
+	case first.Curve != "" && same(first.LambdaBar, lambda):
+		w.add(Values{w.noted("λ̄_"+axis, lambda, None, "as above"), w.value("χ_"+axis, chi, None)})
+	default:
+		w.chain(axis, ncr, alpha, lambda, chi)
 	}
 	w.force(nEd, fmt.Sprintf("greatest in the %s-%s segment", axis, axis))
 	w.find("n_"+axis, w.fill("N_Ed/(χ_# N_Rk/γ_M1)", axis), n, None, "")
+}
+
+// chain writes the way from the length to the reduction factor, with N_Rk of
+// the class under the moments.
+func (w *writer) chain(axis string, ncr, alpha, lambda, chi float64) {
+	w.add(Values{w.value("L_cr,"+axis, math.Sqrt(math.Pi*math.Pi*design.E*w.inertia(axis)/ncr), Mm), w.value("α_"+axis, alpha, None)})
+	w.find("N_cr,"+axis, w.fill("π^2 E I_#/L_cr,#^2", axis), ncr, KN, "6.3.1.2(1)")
+	w.find("λ̄_"+axis, "√(N_Rk/N_cr,"+axis+")", lambda, None, "(6.50)")
+	w.derive("Φ_"+axis, w.fill("0.5 (1 + α_# (λ̄_# - 0.2) + λ̄_#^2)", axis), None, "6.3.1.2(1)")
+	w.find("χ_"+axis, w.fill("min(1/(Φ_# + √(Φ_#^2 - λ̄_#^2)), 1)", axis), chi, None, "(6.49)")
 }
 
 func (w *writer) inertia(axis string) float64 {
@@ -85,12 +89,18 @@ func (w *writer) inertia(axis string) float64 {
 // chiOfInteraction writes the reduction factor of the lateral-torsional
 // segment, in full where it is not that of the check of bending alone.
 func (w *writer) chiOfInteraction() {
-	x := &w.a.Interaction
-	if l := &w.a.Lateral; l.Class == x.Class && l.From == x.FromLT && l.To == x.ToLT && l.Combination == x.Combination {
-		w.add(Values{w.noted(w.reducedBy(&x.LT), x.ChiLT, None, "as above")})
+	w.chiLTOnce(&w.a.Interaction.LT)
+}
+
+// chiLTOnce writes the reduction factor of a lateral-torsional segment, in full
+// where it is not that of the check of bending alone.
+func (w *writer) chiLTOnce(x *ec3.Lateral) {
+	l := &w.a.Lateral
+	if x.Alpha > 0 && l.Class == x.Class && l.From == x.From && l.To == x.To && l.Combination == x.Combination {
+		w.add(Values{w.noted(w.reducedBy(x), x.ChiMod, None, "as above")})
 		return
 	}
-	w.chiLT(&x.LT)
+	w.chiLT(x)
 }
 
 // equivalent writes C_m of a linear diagram. EN 1993-1-1:2005 Table B.3.

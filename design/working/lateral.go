@@ -8,7 +8,7 @@ import (
 // lateral writes lateral-torsional buckling where its utilisation is greatest.
 func (w *writer) lateral() {
 	x := &w.a.Lateral
-	if x.Class == 0 {
+	if x.Class == 0 || w.worst(design.LateralTorsional) == nil {
 		return
 	}
 	w.start("Lateral-torsional buckling")

@@ -3,7 +3,6 @@ package working
 import (
 	"math"
 
-	"stanchion/design"
 	"stanchion/design/ec3"
 	"stanchion/design/working/formula"
 )
@@ -14,10 +13,12 @@ func (w *writer) bending() {
 		return
 	}
 	w.moments()
+	w.nominal()
 	w.shear()
 	w.bentSection()
 	w.lateral()
 	w.interaction()
+	w.simple()
 }
 
 // moments writes the end moments of every combination.
@@ -25,14 +26,14 @@ func (w *writer) moments() {
 	w.start("Bending moments")
 	t := Table{Head: []string{"combination", "M_y bottom kNm", "M_y top", "M_z bottom", "M_z top"}, Right: []bool{false, true, true, true, true}}
 	for i := range w.m.Column.Combinations {
-		c := &w.m.Column.Combinations[i]
 		name := w.combination(i)
 		if name == "" {
 			name = "as given"
 		}
 		row := []string{name}
-		for _, m := range [...]float64{c.My.Bottom, c.My.Top, c.Mz.Bottom, c.Mz.Top} {
-			row = append(row, print(w.m.Growth*m, KNm, w.most).String())
+		my, mz := w.m.EndMoments(w.c, i)
+		for _, m := range [...]float64{my.Bottom, my.Top, mz.Bottom, mz.Top} {
+			row = append(row, print(m, KNm, w.most).String())
 		}
 		t.Rows = append(t.Rows, row)
 	}
@@ -136,41 +137,5 @@ func (w *writer) webClass(web *ec3.Element, nEd float64) {
 }
 
 func count3(class int) string { return string(rune('0' + class)) }
-
-// shear writes the shear that the moments bring.
-func (w *writer) shear() {
-	z, y := w.worst(design.ShearZ), w.worst(design.ShearY)
-	if z == nil && y == nil {
-		return
-	}
-	w.start("Shear from the moments")
-	avZ, avY := ec3.ShearAreas(w.c.Section)
-	if z != nil {
-		w.shearAlong("z", "A_v,z", avZ, z)
-	}
-	if y != nil {
-		w.shearAlong("y", "A_v,y", avY, y)
-	}
-}
-
-// shearAlong writes the shear along an axis. The area is by 6.2.6(3).
-func (w *writer) shearAlong(axis, symbol string, av float64, c *design.Check) {
-	w.find(symbol, w.shearArea(axis), av, Mm2, "6.2.6(3)")
-	w.find("V_pl,"+axis+",Rd", symbol+" (f_y/√(3))/γ_M0", c.Rd, KN, "(6.18)")
-	about := map[string]string{"z": "y", "y": "z"}[axis]
-	bottom, top := w.ends(about, c.Combination)
-	w.add(Values{w.noted("M_bottom", bottom, KNm, w.combination(c.Combination)), w.value("M_top", top, KNm)})
-	w.find("V_"+axis+",Ed", "abs(M_top - M_bottom)/L", c.Ed, KN, "")
-	w.ratio("V_"+axis+",Ed/V_pl,"+axis+",Rd", c.Utilisation, "(6.17)")
-}
-
-// ends returns the moments at the ends about an axis, N mm, growth included.
-func (w *writer) ends(axis string, combination int) (bottom, top float64) {
-	m := w.m.Column.Combinations[combination].My
-	if axis == "z" {
-		m = w.m.Column.Combinations[combination].Mz
-	}
-	return w.m.Growth * m.Bottom, w.m.Growth * m.Top
-}
 
 func same(a, b float64) bool { return math.Abs(a-b) <= 1e-12*math.Max(math.Abs(a), math.Abs(b)) }

@@ -120,6 +120,53 @@ func bent(t *rapid.T, col *design.Column) *design.Column {
 	return col
 }
 
+// A column that beams load is followed too, with what stands above and below.
+func TestEveryLineOfSimpleConstructionCanBeFollowed(t *testing.T) {
+	var sections []*catalogue.Section
+	for _, s := range catalogue.Default().Sections() {
+		if s.Shape == catalogue.ShapeI || s.Shape == catalogue.ShapeRHS {
+			sections = append(sections, s)
+		}
+	}
+	reaction := rapid.Custom(func(t *rapid.T) float64 {
+		return math.Round(rapid.Float64Range(0, 300e3).Draw(t, "R"))
+	})
+	column := func(t *rapid.T) *design.Column {
+		c := design.Combination{NEd: math.Round(rapid.Float64Range(50e3, 3000e3).Draw(t, "N")), HasReactions: true}
+		c.FlangeA, c.FlangeB, c.WebA, c.WebB = reaction.Draw(t, "A"), reaction.Draw(t, "B"), reaction.Draw(t, "C"), reaction.Draw(t, "D")
+		return &design.Column{Length: rapid.Float64Range(2500, 6000).Draw(t, "L"), Combinations: []design.Combination{c}}
+	}
+	simple := 0
+	rapid.Check(t, func(t *rapid.T) {
+		set := settings(t)
+		set.Moments, set.Interaction = design.MomentsSimple, design.SimpleInteraction
+		set.Growth = rapid.SampledFrom([]float64{1, 1.2}).Draw(t, "growth")
+		s := rapid.SampledFrom(sections).Draw(t, "section")
+		g, err := material.Parse("S355")
+		require.NoError(t, err)
+		c, err := ec3.NewCandidate(s, g, &set)
+		if err != nil {
+			t.Skip(err)
+		}
+		m, err := ec3.NewMember(column(t), &set)
+		require.NoError(t, err)
+		var neighbours [2]*ec3.Neighbour
+		for i := range neighbours {
+			if rapid.Bool().Draw(t, "neighbour") {
+				neighbours[i] = &ec3.Neighbour{Column: column(t), Section: rapid.SampledFrom(sections).Draw(t, "its section")}
+			}
+		}
+		m.Between(neighbours[0], neighbours[1])
+		var a ec3.Assessment
+		m.Assess(c, &a)
+		if a.Simple.Class > 0 {
+			simple++
+		}
+		followed(t, working.Of(&a, &design.Result{Section: s.Name(), Grade: g.Name, Utilisation: a.Utilisation}))
+	})
+	assert.Positive(t, simple)
+}
+
 func TestEveryLineOfBendingCanBeFollowed(t *testing.T) {
 	var sections []*catalogue.Section
 	for _, s := range catalogue.Default().Sections() {
