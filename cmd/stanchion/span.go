@@ -30,7 +30,7 @@ func parseSpan(text string) (span, error) {
 		}
 		v, err := strconv.ParseFloat(part.text, 64)
 		if err != nil || !(v > 0 && v < 1e6) {
-			return span{}, errors.New("give a range such as 200..260, ..260 or 200..")
+			return span{}, errors.New("give a range: 200..260, or one end alone (..260)")
 		}
 		*part.to = v
 	}

@@ -31,9 +31,6 @@ func (t *table) limit(column, width int) { t.most[column] = width }
 // add adds a row.
 func (t *table) add(cells ...string) { t.rows = append(t.rows, cells) }
 
-// len returns the number of rows below the headings.
-func (t *table) len() int { return len(t.rows) - 1 }
-
 // lines returns the rows as lines of equal columns, two spaces apart, or one
 // where the screen would be too narrow. Columns that are blank in every row are
 // left out.
