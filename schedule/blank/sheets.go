@@ -1,0 +1,127 @@
+package blank
+
+import (
+	"fmt"
+	"strings"
+
+	"stanchion/schedule"
+	"stanchion/schedule/workbook"
+)
+
+// The rows of the empty schedule.
+const (
+	headingRow = 4
+	unitRow    = 5
+	firstRow   = 6
+	lastRow    = 205 // to be filled in
+)
+
+// columnsSheet is the schedule to be filled in.
+func columnsSheet(list []heading) workbook.Sheet {
+	s := workbook.Sheet{Name: "Columns", FreezeRows: unitRow, FreezeCols: 1, RepeatRows: unitRow, Landscape: true, A3: true, PagesWide: 1, Footer: "Column schedule"}
+	title := []workbook.Cell{{Value: "Column schedule", Look: workbook.Look{Role: workbook.Title}}}
+	hint := []workbook.Cell{{Value: "One row a column length. Axial force is factored and positive in compression. Blank cells take the default; " +
+		"the sheet Headings explains every heading. Columns may be left out, moved and added to.", Look: workbook.Look{Role: workbook.Remark}}}
+	names, units, blank := make([]workbook.Cell, len(list)), make([]workbook.Cell, len(list)), make([]workbook.Cell, len(list))
+	for i := range list {
+		h := &list[i]
+		names[i] = workbook.Cell{Value: h.name, Look: workbook.Look{Role: workbook.Heading, Align: workbook.Centre}}
+		units[i] = workbook.Cell{Value: h.field.Unit, Look: workbook.Look{Role: workbook.Unit, Align: workbook.Centre}}
+		blank[i] = workbook.Cell{Look: workbook.Look{Role: workbook.Input, Align: align(&h.field)}}
+		s.Widths = append(s.Widths, width(h))
+		s.Validations = append(s.Validations, validation(h, i))
+	}
+	s.Rows = [][]workbook.Cell{title, hint, nil, names, units}
+	for range lastRow - firstRow + 1 {
+		s.Rows = append(s.Rows, blank)
+	}
+	s.Heights = map[int]float64{headingRow: 32}
+	return s
+}
+
+func align(f *schedule.FieldInfo) workbook.Align {
+	if f.Unit == "" && f.Name != "Mark" && f.Name != "Section" && f.Name != "Family" {
+		return workbook.Centre
+	}
+	return workbook.Usual
+}
+
+func width(h *heading) float64 {
+	switch {
+	case strings.HasPrefix(h.name, "Restraints"), strings.HasPrefix(h.name, "Ends"), h.name == "Section":
+		return 18
+	case len(h.name) > 14:
+		return 13
+	}
+	return 11
+}
+
+// validation explains a heading at its cells, and offers the values where
+// there are few. Other values are warned of and not refused: the schedule is
+// read in any of the trade's notations.
+func validation(h *heading, col int) workbook.Validation {
+	name := columnName(col)
+	v := workbook.Validation{Range: fmt.Sprintf("%s%d:%s%d", name, firstRow, name, lastRow), Loose: true, PromptTitle: h.name, Prompt: h.field.Meaning}
+	// A list within the rule itself may take 255 characters.
+	if list := allowed(&h.field); len(strings.Join(list, ",")) <= 255 {
+		v.Allowed = list
+	}
+	return v
+}
+
+// columnName names a column; columns count from 0.
+func columnName(col int) string {
+	if col < 26 {
+		return string(rune('A' + col))
+	}
+	return columnName(col/26-1) + columnName(col%26)
+}
+
+// headingsSheet explains every field.
+func headingsSheet() workbook.Sheet {
+	s := workbook.Sheet{Name: "Headings", FreezeRows: 3, RepeatRows: 3, Landscape: true, PagesWide: 1, Widths: []float64{22, 10, 9, 62, 46, 60}}
+	head := func(texts ...string) (row []workbook.Cell) {
+		for _, t := range texts {
+			row = append(row, workbook.Cell{Value: t, Look: workbook.Look{Role: workbook.Heading}})
+		}
+		return row
+	}
+	s.Rows = [][]workbook.Cell{
+		{{Value: "Headings that the program knows", Look: workbook.Look{Role: workbook.Title}}},
+		nil,
+		head("Heading", "Unit", "Needed", "Meaning", "Values", "Other spellings, among others"),
+	}
+	cell := func(text string) workbook.Cell {
+		return workbook.Cell{Value: text, Look: workbook.Look{Role: workbook.Result, Wrap: true}}
+	}
+	for _, f := range schedule.Fields() {
+		needed := ""
+		if f.Needed {
+			needed = "yes"
+		}
+		s.Rows = append(s.Rows, []workbook.Cell{cell(f.Name), cell(f.Unit), cell(needed), cell(f.Meaning), cell(values(&f)), cell(strings.Join(f.Spellings[:min(6, len(f.Spellings))], ", "))})
+	}
+	return s
+}
+
+// settingsSheet holds the settings of a run, blank where the default holds.
+func settingsSheet() workbook.Sheet {
+	s := workbook.Sheet{Name: "Settings", FreezeRows: 1, Widths: []float64{24, 24, 70}}
+	for i, text := range []string{"Name", "Value", "Values, the default first"} {
+		if i == 0 {
+			s.Rows = append(s.Rows, nil)
+		}
+		s.Rows[0] = append(s.Rows[0], workbook.Cell{Value: text, Look: workbook.Look{Role: workbook.Heading}})
+	}
+	for _, info := range schedule.SettingInfos() {
+		if strings.ContainsAny(info.Name, "[") || strings.HasPrefix(info.Name, "map ") {
+			continue // given for a heading or a kind of steel
+		}
+		s.Rows = append(s.Rows, []workbook.Cell{
+			{Value: info.Name, Look: workbook.Look{Role: workbook.Label}},
+			{Look: workbook.Look{Role: workbook.Input}},
+			{Value: info.Values, Look: workbook.Look{Role: workbook.Remark}},
+		})
+	}
+	return s
+}
