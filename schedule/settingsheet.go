@@ -10,30 +10,46 @@ func IsSettingsSheet(name string) bool {
 	return strings.EqualFold(strings.TrimSpace(name), settingsSheet)
 }
 
-// readSettings reads a sheet of name and value: the first two cells of each
-// row that hold something. A row without a value says nothing.
+// readSettings reads a sheet of name and value: the columns that are headed so
+// or, without such a heading, the first two cells of each row that hold
+// something. A row without a value says nothing.
 func readSettings(src Source, sheet string) ([]Assignment, error) {
 	var list []Assignment
+	headed := false
+	name, value := 0, 0
 	for r, err := range src.Rows(sheet) {
 		if err != nil {
 			return nil, err
 		}
-		var pair []string
-		col := 0
-		for i := range r.Cells {
-			if text := r.Cells[i].text(); text != "" && len(pair) < 2 {
-				if len(pair) == 0 {
-					col = i
-				}
-				pair = append(pair, strings.Clone(text))
-			}
+		if !headed {
+			name, value = firstTwo(r)
 		}
-		if len(pair) < 2 || oneOf(foldSetting(pair[0]), "name", "setting", "settings") && oneOf(foldSetting(pair[1]), "value", "values") {
-			continue
+		n, v := strings.Clone(r.at(name).text()), strings.Clone(r.at(value).text())
+		switch {
+		case n == "" || v == "":
+		case oneOf(foldSetting(n), "name", "setting", "settings") && oneOf(foldSetting(v), "value", "values"):
+			headed = true
+		default:
+			list = append(list, Assignment{n, v, src.Where(sheet, r.Number, value)})
 		}
-		list = append(list, Assignment{pair[0], pair[1], src.Where(sheet, r.Number, col+1)})
 	}
 	return list, nil
+}
+
+// firstTwo returns the columns of the first two cells of a row that hold
+// something.
+func firstTwo(r *Row) (first, second int) {
+	first, second = -1, -1
+	for i := range r.Cells {
+		switch {
+		case r.Cells[i].text() == "":
+		case first < 0:
+			first = i
+		default:
+			return first, i
+		}
+	}
+	return first, second
 }
 
 // readAllSettings applies the settings in their layers and returns notes about

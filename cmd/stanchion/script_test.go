@@ -43,6 +43,7 @@ func TestScripts(t *testing.T) {
 			"rows":  scriptRows,
 			"parts": scriptParts,
 			"same":  scriptSame,
+			"type":  scriptType,
 		},
 	})
 }
@@ -136,6 +137,26 @@ func scriptSame(ts *testscript.TestScript, neg bool, args []string) {
 	if ts.ReadFile(args[0]) != ts.ReadFile(args[1]) {
 		ts.Fatalf("%s and %s differ", args[0], args[1])
 	}
+}
+
+// scriptType fills in cells of a workbook, as a person does: type FILE SHEET
+// CELL=VALUE...
+func scriptType(ts *testscript.TestScript, neg bool, args []string) {
+	if neg || len(args) < 3 {
+		ts.Fatalf("usage: type FILE SHEET CELL=VALUE...")
+	}
+	f, err := excelize.OpenFile(ts.MkAbs(args[0]))
+	ts.Check(err)
+	defer f.Close()
+	for _, a := range args[2:] {
+		cell, text, _ := strings.Cut(a, "=")
+		var value any = text
+		if x, err := strconv.ParseFloat(text, 64); err == nil {
+			value = x
+		}
+		ts.Check(f.SetCellValue(args[1], cell, value))
+	}
+	ts.Check(f.Save())
 }
 
 // scriptRows writes a schedule of many rows: rows OUT NUMBER.
