@@ -79,7 +79,7 @@ func columnName(col int) string {
 
 // headingsSheet explains every field.
 func headingsSheet() workbook.Sheet {
-	s := workbook.Sheet{Name: "Headings", FreezeRows: 3, RepeatRows: 3, Landscape: true, PagesWide: 1, Widths: []float64{22, 10, 9, 62, 46, 60}}
+	s := workbook.Sheet{Name: "Headings", FreezeRows: 3, RepeatRows: 3, Landscape: true, PagesWide: 1, Widths: []float64{22, 10, 9, 62, 46, 60}, Heights: map[int]float64{}}
 	head := func(texts ...string) (row []workbook.Cell) {
 		for _, t := range texts {
 			row = append(row, workbook.Cell{Value: t, Look: workbook.Look{Role: workbook.Heading}})
@@ -100,13 +100,27 @@ func headingsSheet() workbook.Sheet {
 			needed = "yes"
 		}
 		s.Rows = append(s.Rows, []workbook.Cell{cell(f.Name), cell(f.Unit), cell(needed), cell(f.Meaning), cell(values(&f)), cell(strings.Join(f.Spellings[:min(6, len(f.Spellings))], ", "))})
+		s.Heights[len(s.Rows)] = lineHeight * float64(lines(s.Rows[len(s.Rows)-1], s.Widths))
 	}
 	return s
 }
 
+const lineHeight = 15 // points, of the usual letters
+
+// lines is how many lines the fullest cell of a row needs. A column's width is
+// in characters of the widest figure; words are set a little closer.
+func lines(row []workbook.Cell, widths []float64) int {
+	most := 1
+	for i := range row {
+		text, _ := row[i].Value.(string)
+		most = max(most, 1+int(float64(len(text))/widths[i]))
+	}
+	return most
+}
+
 // settingsSheet holds the settings of a run, blank where the default holds.
 func settingsSheet() workbook.Sheet {
-	s := workbook.Sheet{Name: "Settings", FreezeRows: 1, Widths: []float64{24, 24, 70}}
+	s := workbook.Sheet{Name: "Settings", FreezeRows: 1, PagesWide: 1, Widths: []float64{24, 24, 70}}
 	for i, text := range []string{"Name", "Value", "Values, the default first"} {
 		if i == 0 {
 			s.Rows = append(s.Rows, nil)
