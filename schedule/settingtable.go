@@ -51,19 +51,22 @@ func init() {
 }
 
 // SettingInfo describes one setting for people.
-type SettingInfo struct{ Name, Values string }
+type SettingInfo struct {
+	Name, Values string
+	Initial      string // the default; empty: from the national set, or none
+}
 
 // SettingInfos returns the settings in their order, those that are given for a
 // heading or a kind of steel last.
 func SettingInfos() []SettingInfo {
 	var list []SettingInfo
 	for i := range settingTable {
-		list = append(list, SettingInfo{settingTable[i].name, settingTable[i].values})
+		list = append(list, SettingInfo{settingTable[i].name, settingTable[i].values, settingTable[i].initial})
 	}
 	return append(list,
-		SettingInfo{"cost [FAMILY] [GRADE]", "cost per tonne"},
-		SettingInfo{"carbon [FAMILY] [GRADE]", "embodied carbon, kg per kg"},
-		SettingInfo{"map HEADING", "the field that a heading of the user's stands for, or " + ignored})
+		SettingInfo{Name: "cost [FAMILY] [GRADE]", Values: "cost per tonne"},
+		SettingInfo{Name: "carbon [FAMILY] [GRADE]", Values: "embodied carbon, kg per kg"},
+		SettingInfo{Name: "map HEADING", Values: "the field that a heading of the user's stands for, or " + ignored})
 }
 
 func settingNames() []string {

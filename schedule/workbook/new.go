@@ -4,17 +4,15 @@ import (
 	"io"
 	"slices"
 
+	"github.com/xuri/excelize/v2"
+
 	"stanchion/schedule/workbook/internal/opc"
 )
-
-// plainLetters is the font of a workbook that holds the project's own sheets
-// alone.
-var plainLetters = lettering{family: "Calibri", size: 11}
 
 // WriteNew writes a workbook of these sheets alone. The same sheets give the
 // same bytes.
 func WriteNew(w io.Writer, sheets []Sheet) error {
-	own := newOwn(plainLetters)
+	own := newOwn(usualLettering)
 	taken := map[string]bool{}
 	for i := range sheets {
 		name := cutName(sheets[i].Name, "")
@@ -25,6 +23,11 @@ func WriteNew(w io.Writer, sheets []Sheet) error {
 		if err := own.add(&sheets[i], name, i == 0); err != nil {
 			return err
 		}
+	}
+	// The library would name its author.
+	err := own.file.SetDocProps(&excelize.DocProperties{Creator: "stanchion", LastModifiedBy: "stanchion"})
+	if err != nil {
+		return err
 	}
 	data, err := own.bytes()
 	if err != nil {

@@ -29,7 +29,7 @@ type Sheet struct {
 	Validations []Validation
 	Rules       []Rule
 	TabColour   string // of the tab; empty: none
-	Protect     bool
+	Hidden      bool
 }
 
 // Cell is one cell of a Sheet.
@@ -251,6 +251,11 @@ func (o *own) view(s *Sheet, name string) error {
 	}
 	if s.Filter != "" {
 		if err := o.file.AutoFilter(name, s.Filter, nil); err != nil {
+			return err
+		}
+	}
+	if s.Hidden {
+		if err := o.file.SetSheetVisible(name, false); err != nil {
 			return err
 		}
 	}

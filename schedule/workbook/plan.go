@@ -351,10 +351,14 @@ func (p *Plan) widths(lines int) []float64 {
 	out := make([]float64, len(p.block.Columns))
 	for i := range p.block.Columns {
 		c := &p.block.Columns[i]
-		out[i] = float64(max(c.Width, wrapped(p.headingText(i), lines))) + 2
+		out[i] = float64(max(c.Width, boldWidth(wrapped(p.headingText(i), lines)))) + 2
 	}
 	return out
 }
+
+// boldWidth returns the width, in characters of usual text, of characters in
+// bold.
+func boldWidth(n int) int { return (n*9 + 7) / 8 }
 
 // wrapped returns the least width at which a text takes so many lines.
 func wrapped(text string, lines int) int {
