@@ -26,7 +26,7 @@ func newChainSolver(p *Problem) *chainSolver {
 	for i := range p.Chains {
 		c := &p.Chains[i]
 		deepest = max(deepest, len(c.Nodes))
-		if c.Links != nil {
+		if c.Links != nil && c.isTree() {
 			s.trees[c] = c.visits()
 		}
 	}
@@ -60,7 +60,10 @@ func fits(p *Problem) (table [2][]bool) {
 // visitsOf returns the nodes of a chain in the order of the work.
 func (s *chainSolver) visitsOf(c *Chain) []visit {
 	if c.Links != nil {
-		return s.trees[c]
+		if v, ok := s.trees[c]; ok {
+			return v
+		}
+		return c.visits()
 	}
 	return s.paths[:len(c.Nodes)]
 }
@@ -121,15 +124,15 @@ func (s *chainSolver) handOn(v visit, open []int32) {
 			continue
 		}
 		var best float64
-		best, from[j] = s.cheapest(cost, table[int(j)*s.sizes:], j, v.splice)
+		best, from[j] = s.bestWith(cost, table[int(j)*s.sizes:], j, v.splice)
 		to[j] += best
 	}
 }
 
-// cheapest finds the size that makes the chain so far cheapest where the next
+// bestWith finds the size that makes the chain so far cheapest where the next
 // node has size j, among those that fit with j; on equal cost the section runs
 // through.
-func (s *chainSolver) cheapest(cost []float64, fits []bool, j int32, splice float64) (float64, int32) {
+func (s *chainSolver) bestWith(cost []float64, fits []bool, j int32, splice float64) (float64, int32) {
 	through := cost[j]
 	for _, i := range s.order {
 		w := cost[i] + splice
@@ -153,7 +156,7 @@ func (p *Problem) Cheapest() (Choice, float64) {
 func (p *Problem) cheapestOf(s *chainSolver, open []int32) (Choice, float64) {
 	choice, total := make(Choice, len(p.Chains)), 0.0
 	for c := range p.Chains {
-		v, picks := s.solve(&p.Chains[c], open, nil)
+		v, picks := s.cheapest(&p.Chains[c], open)
 		if picks == nil {
 			continue
 		}

@@ -19,7 +19,7 @@ type Chain struct {
 	// below, in the units of Cost.
 	SpliceCost float64
 	// Links, if not nil, replace the order of the nodes and SpliceCost. They
-	// join all nodes and close no ring.
+	// join all nodes. FewSizes needs them to close no ring.
 	Links []Link
 }
 
@@ -63,14 +63,14 @@ func (s *Solution) Gap() float64 {
 // Validate reports the first thing that is wrong with the problem's shape: a
 // chain without nodes, a cost list of the wrong length, or a cost that is
 // negative or not a number, or links
-// that are no tree.
+// that do not join the nodes.
 func (p *Problem) Validate() error {
 	for c, chain := range p.Chains {
 		if len(chain.Nodes) == 0 {
 			return fmt.Errorf("chain %d has no nodes", c)
 		}
-		if chain.Links != nil && !chain.isTree() {
-			return fmt.Errorf("chain %d: its links do not join its nodes without closing a ring", c)
+		if !chain.joined() {
+			return fmt.Errorf("chain %d: its links do not join its nodes", c)
 		}
 		for n, node := range chain.Nodes {
 			if len(node.Cost) != p.Sizes {

@@ -39,10 +39,13 @@ func (c *Chain) visits() []visit {
 	return outward
 }
 
-// isTree reports whether the links join all nodes and close no ring.
-func (c *Chain) isTree() bool {
-	if len(c.Links) != len(c.Nodes)-1 {
-		return false
+// isTree reports whether links that join all nodes close no ring.
+func (c *Chain) isTree() bool { return len(c.Links) == len(c.Nodes)-1 }
+
+// joined reports whether the links, where there are any, join all nodes.
+func (c *Chain) joined() bool {
+	if c.Links == nil {
+		return true
 	}
 	for _, l := range c.Links {
 		if l.Below < 0 || l.Above < 0 || l.Below >= len(c.Nodes) || l.Above >= len(c.Nodes) || l.Below == l.Above {

@@ -152,15 +152,51 @@ func indices(n int) []int {
 	return s
 }
 
-func TestLinksThatAreNoTree(t *testing.T) {
+func TestLinksThatJoinNothing(t *testing.T) {
 	nodes := []Node{{[]float64{1}}, {[]float64{1}}, {[]float64{1}}}
 	for name, links := range map[string][]Link{
-		"too few":   {{Below: 0, Above: 1}},
-		"a ring":    {{Below: 0, Above: 1}, {Below: 1, Above: 0}},
-		"itself":    {{Below: 0, Above: 0}, {Below: 1, Above: 2}},
-		"elsewhere": {{Below: 0, Above: 1}, {Below: 1, Above: 3}},
+		"too few":    {{Below: 0, Above: 1}},
+		"two parts":  {{Below: 0, Above: 1}, {Below: 1, Above: 0}},
+		"itself":     {{Below: 0, Above: 0}, {Below: 1, Above: 2}},
+		"elsewhere":  {{Below: 0, Above: 1}, {Below: 1, Above: 3}},
+		"none given": {},
 	} {
 		p := &Problem{Sizes: 1, Chains: []Chain{{Nodes: nodes, Links: links}}}
 		assert.Error(t, p.Validate(), name)
 	}
+}
+
+func TestRingsAgreeWithEveryChoiceTried(t *testing.T) {
+	served := 0
+	for seed := range uint64(300) {
+		rng := rand.New(rand.NewPCG(seed, 4))
+		p := tied(rng, 1, 2+rng.IntN(3), 6)
+		c := &p.Chains[0]
+		if len(c.Nodes) < 3 {
+			continue
+		}
+		for range 1 + rng.IntN(3) {
+			below, above := rng.IntN(len(c.Nodes)), rng.IntN(len(c.Nodes))
+			if below != above {
+				c.Links = append(c.Links, Link{below, above, rng.Float64()})
+			}
+		}
+		require.NoError(t, p.Validate())
+		choice, cost := p.Cheapest()
+		want := everyChoice(p, c, indices(p.Sizes))
+		if math.IsInf(want, 1) {
+			require.Nil(t, choice[0], "seed %d", seed)
+			continue
+		}
+		served++
+		require.InEpsilon(t, want, cost, 1e-12, "seed %d", seed)
+		require.InEpsilon(t, want, p.costOf(c, choice[0]), 1e-12, "seed %d", seed)
+	}
+	assert.Greater(t, served, 50)
+	ring := &Problem{Sizes: 1, Chains: []Chain{{
+		Nodes: []Node{{[]float64{1}}, {[]float64{1}}},
+		Links: []Link{{Below: 0, Above: 1}, {Below: 0, Above: 1}},
+	}}}
+	_, err := ring.FewSizes(context.Background(), 1)
+	assert.ErrorContains(t, err, "ring")
 }
