@@ -72,6 +72,9 @@ func (s *chainSolver) visitsOf(c *Chain) []visit {
 // added to each node's cost (nil: none), and the sizes chosen; the slice is
 // valid until the next call. The cost is +Inf where no choice serves.
 func (s *chainSolver) solve(c *Chain, open []int32, price [][]float64) (float64, []int) {
+	if c.Links != nil && !c.isTree() {
+		return s.solveRings(c, open, price)
+	}
 	visits := s.visitsOf(c)
 	for n := range c.Nodes {
 		for _, j := range open {
@@ -156,7 +159,7 @@ func (p *Problem) Cheapest() (Choice, float64) {
 func (p *Problem) cheapestOf(s *chainSolver, open []int32) (Choice, float64) {
 	choice, total := make(Choice, len(p.Chains)), 0.0
 	for c := range p.Chains {
-		v, picks := s.cheapest(&p.Chains[c], open)
+		v, picks := s.solve(&p.Chains[c], open, nil)
 		if picks == nil {
 			continue
 		}

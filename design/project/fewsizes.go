@@ -2,7 +2,6 @@ package project
 
 import (
 	"context"
-	"fmt"
 	"math"
 	"slices"
 )
@@ -10,8 +9,7 @@ import (
 // FewSizes finds the least cost with at most K different sizes, for K = 1 up to
 // most or to the K from which more sizes help no further. The answers are
 // proven optima unless ctx ends first; then the bound says how far they may be
-// off. Where no K sizes can serve every node, Choice is nil. Links that close a
-// ring are an error.
+// off. Where no K sizes can serve every node, Choice is nil.
 //
 // Method: the constraint that a node's size must be among the K is relaxed with
 // multipliers (Lagrangian relaxation of the p-median problem; Cornuejols,
@@ -22,11 +20,6 @@ import (
 func (p *Problem) FewSizes(ctx context.Context, most int) ([]Solution, error) {
 	if err := p.Validate(); err != nil {
 		return nil, err
-	}
-	for c := range p.Chains {
-		if chain := &p.Chains[c]; chain.Links != nil && !chain.isTree() {
-			return nil, fmt.Errorf("chain %d: its links close a ring", c)
-		}
 	}
 	r := p.reduce()
 	s := newSearch(r)

@@ -19,7 +19,7 @@ type Chain struct {
 	// below, in the units of Cost.
 	SpliceCost float64
 	// Links, if not nil, replace the order of the nodes and SpliceCost. They
-	// join all nodes. FewSizes needs them to close no ring.
+	// join all nodes, and may close rings.
 	Links []Link
 }
 

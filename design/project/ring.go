@@ -4,28 +4,29 @@ import (
 	"cmp"
 	"math"
 	"slices"
+
+	"gonum.org/v1/gonum/floats"
 )
 
-// cheapest returns the cheapest sizes of a chain whose links may close rings,
-// nil where no choice serves. A ring is opened at one node after another: each
-// of its sizes in turn is taken as settled, which cuts its links, until a tree
-// is left. That is exact; sizes that cannot lead to less than what has been
-// found are passed over, which keeps it short for the few rings that a
-// building has.
-func (s *chainSolver) cheapest(c *Chain, open []int32) (float64, []int) {
-	if c.Links == nil || c.isTree() {
-		return s.solve(c, open, nil)
-	}
+// solveRings is solve for a chain whose links close rings. A ring is opened at
+// one node after another: each of its sizes in turn is taken as settled, which
+// cuts its links, until a tree is left. That is exact; sizes that cannot lead
+// to less than what has been found are passed over, which keeps it short for
+// the few rings that a building has.
+func (s *chainSolver) solveRings(c *Chain, open []int32, price [][]float64) (float64, []int) {
 	r := ringSearch{s: s, open: open, best: math.Inf(1), pick: make([]int, len(c.Nodes))}
 	cost := make([][]float64, len(c.Nodes))
 	for n := range cost {
 		cost[n] = slices.Clone(c.Nodes[n].Cost)
+		if price != nil {
+			floats.Add(cost[n], price[n])
+		}
 	}
 	r.settle(cost, c.Links)
 	return r.best, r.found
 }
 
-// ringSearch is the work of one cheapest.
+// ringSearch is the work of one solveRings.
 type ringSearch struct {
 	s     *chainSolver
 	open  []int32

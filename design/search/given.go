@@ -58,7 +58,7 @@ func (e *Engine) newGiven(col *design.Column, families []string) (*List, error) 
 	for _, g := range grades {
 		l.add(s, g.Name, e.candidate(s, g))
 	}
-	l.tabulate(&e.settings.National)
+	l.tabulate(&e.settings)
 	return l, nil
 }
 

@@ -23,6 +23,7 @@ type List struct {
 	rows  []axialRow
 	skip  skipTable
 	ratio float64 // gM0/gM1
+	by    design.Objective
 }
 
 // Refused is a candidate that the rules do not cover, and why.
@@ -87,7 +88,7 @@ func (e *Engine) newList(ch *design.Choice, names []string) (*List, error) {
 	for _, en := range entries {
 		l.add(en.section, en.grade.Name, en.outcome)
 	}
-	l.tabulate(&e.settings.National)
+	l.tabulate(&e.settings)
 	return l, nil
 }
 
@@ -167,8 +168,9 @@ func compareGrades(a, b material.Grade) int {
 }
 
 // tabulate fills the flat tables from the candidates.
-func (l *List) tabulate(n *design.National) {
-	l.ratio = n.GammaM0 / n.GammaM1
+func (l *List) tabulate(set *design.Settings) {
+	l.by = set.Rates.Objective
+	l.ratio = set.National.GammaM0 / set.National.GammaM1
 	l.rows = make([]axialRow, len(l.Candidates))
 	for i, c := range l.Candidates {
 		l.rows[i] = newAxialRow(c)

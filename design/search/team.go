@@ -142,14 +142,14 @@ func (t *team) common() (*List, error) {
 		case l == nil:
 			l = own
 		case l != own:
-			l = l.in(own, &t.engine.settings.National)
+			l = l.in(own, &t.engine.settings)
 		}
 	}
 	return l, nil
 }
 
 // in returns the part of a list that is in another too.
-func (l *List) in(other *List, n *design.National) *List {
+func (l *List) in(other *List, set *design.Settings) *List {
 	has := map[*ec3.Candidate]bool{}
 	for _, c := range other.Candidates {
 		has[c] = true
@@ -160,7 +160,7 @@ func (l *List) in(other *List, n *design.National) *List {
 			both.Candidates = append(both.Candidates, c)
 		}
 	}
-	both.tabulate(n)
+	both.tabulate(set)
 	return both
 }
 

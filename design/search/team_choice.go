@@ -17,7 +17,7 @@ func (t *team) choose(l *List) {
 		return
 	}
 	t.fillAll(l.Candidates[i], design.Passes)
-	if j := l.lighter(i, t.engine.settings.Rates.Objective); j >= 0 {
+	if j := l.lighter(i); j >= 0 {
 		t.evidence(l.Candidates[j])
 	}
 }

@@ -1,6 +1,8 @@
 package search
 
 import (
+	"slices"
+
 	"stanchion/design"
 	"stanchion/design/ec3"
 )
@@ -81,7 +83,7 @@ func (w *worker) size(col *design.Column, res *design.Result) {
 	w.member.Assess(l.Candidates[i], &w.assess)
 	w.fill(res)
 	res.Status = design.Passes
-	if j := l.lighter(i, w.engine.settings.Rates.Objective); j >= 0 {
+	if j := l.lighter(i); j >= 0 {
 		w.member.Assess(l.Candidates[j], &w.assess)
 		evidence(res, &w.assess)
 	}
@@ -115,12 +117,23 @@ func (l *List) try(i int, m *ec3.Member, d *demand, limit float64, a *ec3.Assess
 // lighter returns the candidate that the choice would have preferred next to
 // candidate i, -1 if there is none: by mass the strongest grade of the section
 // before it, by cost or carbon the candidate before it.
-func (l *List) lighter(i int, by design.Objective) int {
+func (l *List) lighter(i int) int {
 	j := i - 1
-	if by == design.ByMass {
+	if l.by == design.ByMass {
 		for j >= 0 && l.Candidates[j].Section == l.Candidates[i].Section {
 			j--
 		}
 	}
 	return j
+}
+
+// Lighter returns the candidate of the list that the choice would have
+// preferred next to c, nil if there is none.
+func (l *List) Lighter(c *ec3.Candidate) *ec3.Candidate {
+	if i := slices.Index(l.Candidates, c); i >= 0 {
+		if j := l.lighter(i); j >= 0 {
+			return l.Candidates[j]
+		}
+	}
+	return nil
 }

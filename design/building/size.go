@@ -1,0 +1,260 @@
+package building
+
+import (
+	"context"
+	"errors"
+	"fmt"
+
+	"stanchion/design"
+	"stanchion/design/ec3"
+	"stanchion/design/project"
+	"stanchion/design/search"
+)
+
+// Size chooses the sections of a building's columns together. Without stacks
+// that are joined and without a limit on the number of sizes it is the
+// engine's SizeAll. The least total is found exactly, or, with a limit on
+// sizes, the Curve says what gap may be left.
+//
+// The errors are those of SizeAll, and those of options that cannot be met.
+func Size(ctx context.Context, e *search.Engine, cols []design.Column, o Options, workers int, progress func(done int)) (*Decision, error) {
+	if err := o.Validate(); err != nil {
+		return nil, err
+	}
+	all, notes := stacks(cols, &o)
+	if len(all) == 0 && o.MostSizes == 0 {
+		results, err := e.SizeAll(ctx, cols, workers, progress)
+		addNotes(results, notes)
+		return &Decision{Results: results}, err
+	}
+	r := &run{engine: e, cols: cols, options: &o, plan: tie(cols, all), workers: workers, notes: notes}
+	return r.decide(ctx, progress)
+}
+
+// run is the work of one Size.
+type run struct {
+	engine  *search.Engine
+	cols    []design.Column
+	options *Options
+	plan    *plan
+	workers int
+	notes   map[int]string // by column
+	curve   []Trade
+}
+
+func (r *run) decide(ctx context.Context, progress func(int)) (*Decision, error) {
+	options, defect := r.mayHave(ctx)
+	if err := ctx.Err(); err != nil {
+		return nil, err
+	}
+	b := &builder{engine: r.engine, cols: r.cols, plan: r.plan, options: options}
+	silent := b.silent()
+	links := r.sound(b, r.plan.bridge(silent))
+	p := b.build(r.wanted(silent, links), r.spliceCost(), links)
+	choice, err := r.solve(ctx, p)
+	if err != nil {
+		return nil, err
+	}
+	results := make([]design.Result, len(r.cols))
+	err = r.engine.Assign(ctx, r.cols, r.chosen(b, p, choice), results, r.workers, r.columns(progress))
+	if cancelled := ctx.Err(); cancelled != nil {
+		return nil, cancelled
+	}
+	addNotes(results, r.notes)
+	return &Decision{Results: results, Curve: r.curve}, errors.Join(defect, err)
+}
+
+// mayHave finds what the sets that are decided together may have.
+func (r *run) mayHave(ctx context.Context) ([]search.Options, error) {
+	asked := r.wanted(make([]bool, len(r.plan.sets)), r.plan.links)
+	var sets []search.Set
+	for k, set := range r.plan.sets {
+		if asked[k] {
+			sets = append(sets, set)
+		}
+	}
+	found, err := r.engine.Options(ctx, r.cols, sets, r.workers)
+	options := make([]search.Options, len(r.plan.sets))
+	for k := range options {
+		if asked[k] && len(found) > 0 {
+			options[k], found = found[0], found[1:]
+		}
+	}
+	return options, err
+}
+
+// wanted says which sets are decided together: all that have a say where sizes
+// are few, else those that stand on one another. The rest is sized by itself.
+func (r *run) wanted(silent []bool, links []link) []bool {
+	out := make([]bool, len(silent))
+	for k := range out {
+		out[k] = r.options.MostSizes > 0 && !silent[k]
+	}
+	for _, l := range links {
+		out[l.below], out[l.above] = true, true
+	}
+	return out
+}
+
+func (r *run) spliceCost() float64 {
+	if r.options.Splices == WhereItPays {
+		return r.options.SpliceCost
+	}
+	return 0
+}
+
+// sound leaves out links between two given sections that the rule does not
+// allow: the schedule decides, and is told.
+func (r *run) sound(b *builder, links []link) []link {
+	var out []link
+	for _, l := range links {
+		below, above := &b.options[l.below], &b.options[l.above]
+		if below.Given && above.Given {
+			s, t := below.List.Candidates[0].Section, above.List.Candidates[0].Section
+			if s != t && !mayStand(s, t) {
+				r.say(l.above, fmt.Sprintf("stack %q: %s is given above %s, which is lighter or smaller", l.stack, t.Name(), s.Name()))
+				continue
+			}
+		}
+		out = append(out, l)
+	}
+	return out
+}
+
+// say notes something about every column of a set.
+func (r *run) say(set int, text string) {
+	for _, i := range r.plan.sets[set].Columns {
+		if r.notes[i] != "" {
+			r.notes[i] += "; "
+		}
+		r.notes[i] += text
+	}
+}
+
+// solve finds the size of every node; a chain that no choice serves has none.
+func (r *run) solve(ctx context.Context, p *problem) (project.Choice, error) {
+	if r.options.MostSizes == 0 {
+		choice, _ := p.Cheapest()
+		for c := range choice {
+			if choice[c] == nil {
+				r.unserved(p, c)
+			}
+		}
+		return choice, nil
+	}
+	if err := r.servable(p); err != nil {
+		return nil, err
+	}
+	limited := ctx
+	if r.options.TimeLimit > 0 {
+		var stop context.CancelFunc
+		limited, stop = context.WithTimeout(ctx, r.options.TimeLimit)
+		defer stop()
+	}
+	solutions, err := p.FewSizes(limited, r.options.MostSizes)
+	if err != nil {
+		return nil, err
+	}
+	if err := ctx.Err(); err != nil {
+		return nil, err
+	}
+	for i := range solutions {
+		r.curve = append(r.curve, trade(p, &solutions[i]))
+	}
+	last := &solutions[len(solutions)-1]
+	if last.Choice == nil {
+		return nil, fmt.Errorf("at most %d sizes cannot serve all columns: allow more, or more families", r.options.MostSizes)
+	}
+	return last.Choice, nil
+}
+
+// servable leaves out chains that no choice of any number of sizes serves, so
+// that they do not stand in the way of the others.
+func (r *run) servable(p *problem) error {
+	choice, _ := p.Cheapest()
+	var chains []project.Chain
+	var nodes [][]int
+	for c := range choice {
+		if choice[c] == nil {
+			r.unserved(p, c)
+			continue
+		}
+		chains, nodes = append(chains, p.Chains[c]), append(nodes, p.nodes[c])
+	}
+	if len(chains) == 0 {
+		return errors.New("no column has a section that passes: there is no choice of few sizes")
+	}
+	p.Chains, p.nodes = chains, nodes
+	return nil
+}
+
+// unserved tells the columns of a chain that no choice serves: they are sized
+// by themselves.
+func (r *run) unserved(p *problem, c int) {
+	for _, k := range p.nodes[c] {
+		r.say(k, "no choice of sections keeps every one in the stack within the one below: each is sized by itself")
+	}
+}
+
+// trade carries a solution to what people read.
+func trade(p *problem, s *project.Solution) Trade {
+	t := Trade{Most: s.K, Total: s.Cost, Bound: s.Bound, Proven: s.Proven}
+	for _, j := range s.Sizes {
+		t.Sizes = append(t.Sizes, p.sections[j].Name())
+	}
+	return t
+}
+
+// chosen lists every set with what was decided for it.
+func (r *run) chosen(b *builder, p *problem, choice project.Choice) []search.Chosen {
+	decided := make(map[int]*ec3.Candidate)
+	for c, picks := range choice {
+		for n, j := range picks {
+			k := p.nodes[c][n]
+			if !b.options[k].Given { // the search keeps a given section itself
+				decided[k] = p.pick[k][j]
+			}
+		}
+	}
+	out := make([]search.Chosen, len(r.plan.sets))
+	for k := range out {
+		out[k] = search.Chosen{Set: r.plan.sets[k]}
+		if c := decided[k]; c != nil {
+			out[k].Candidate, out[k].Lighter, out[k].Why = c, b.options[k].List.Lighter(c), r.why()
+		}
+	}
+	return out
+}
+
+// why says what may keep a set from the lightest section that passes.
+func (r *run) why() string {
+	if n := r.options.MostSizes; n > 0 {
+		return fmt.Sprintf("%d sizes are allowed in all", n)
+	}
+	if r.options.Splices == WhereItPays {
+		return "the stack is lighter as a whole, splices counted"
+	}
+	return "a section of the stack is never heavier or of a larger serial size than the one below"
+}
+
+// columns turns the count of sets into that of columns.
+func (r *run) columns(progress func(int)) func(int) {
+	if progress == nil {
+		return nil
+	}
+	return func(done int) {
+		if done == len(r.plan.sets) {
+			progress(len(r.cols))
+			return
+		}
+		progress(done)
+	}
+}
+
+func addNotes(results []design.Result, notes map[int]string) {
+	for i, text := range notes {
+		if i < len(results) {
+			results[i].Notes = append(results[i].Notes, text)
+		}
+	}
+}

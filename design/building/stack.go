@@ -1,0 +1,176 @@
+package building
+
+import (
+	"cmp"
+	"fmt"
+	"slices"
+	"strconv"
+	"strings"
+
+	"stanchion/design"
+)
+
+// stack is the lengths of one column line that are decided on together, from
+// the bottom up.
+type stack struct {
+	name    string
+	lengths []int  // columns
+	splice  []bool // the section may change above the length
+}
+
+// stacks finds the stacks whose lengths are joined, in the order of the
+// schedule, and notes for columns whose place in a stack is in doubt.
+func stacks(cols []design.Column, o *Options) (all []stack, notes map[int]string) {
+	notes = map[int]string{}
+	for _, line := range lines(cols, o) {
+		parts, note := ordered(cols, line)
+		for _, i := range line {
+			if note != "" {
+				notes[i] = fmt.Sprintf("stack %q: %s", cols[i].Stack, note)
+			}
+		}
+		for _, lengths := range parts {
+			if len(lengths) > 1 {
+				all = append(all, stack{cols[lengths[0]].Stack, lengths, spliced(cols, lengths, o)})
+			}
+		}
+	}
+	return all, notes
+}
+
+// lines returns the columns of each stack that the rule for splices joins, in
+// the order of the schedule.
+func lines(cols []design.Column, o *Options) [][]int {
+	place := map[string]int{}
+	var all [][]int
+	for i := range cols {
+		c := &cols[i]
+		if c.Stack == "" || o.Splices == AsScheduled && !c.SpliceSaid {
+			continue
+		}
+		k, ok := place[c.Stack]
+		if !ok {
+			k = len(all)
+			place[c.Stack] = k
+			all = append(all, nil)
+		}
+		all[k] = append(all[k], i)
+	}
+	return all
+}
+
+// spliced says above which lengths the section may change.
+func spliced(cols []design.Column, lengths []int, o *Options) []bool {
+	splice := make([]bool, len(lengths))
+	for k, i := range lengths {
+		switch o.Splices {
+		case EveryNth:
+			splice[k] = (k+1)%o.Every == 0
+		case WhereItPays:
+			splice[k] = true
+		default:
+			splice[k] = cols[i].Splice
+		}
+	}
+	return splice
+}
+
+// ordered puts the lengths of a stack in order from the bottom up: by levels
+// where one's top is the next one's bottom, else by the heights that stand for
+// levels. Where levels leave a gap the lengths fall into parts, each a stack
+// of its own. The note says what was done where it can be doubted.
+func ordered(cols []design.Column, line []int) (parts [][]int, note string) {
+	if !slices.ContainsFunc(line, func(i int) bool { return cols[i].From != "" || cols[i].To != "" }) {
+		return [][]int{line}, "no levels are given: its lengths are taken as listed from the bottom up"
+	}
+	if twice := double(cols, line); twice != "" {
+		return nil, twice + ": its lengths are sized one by one"
+	}
+	parts = joined(cols, line)
+	if len(parts) == 1 {
+		return parts, ""
+	}
+	if byHeight, ok := sortedByHeight(cols, line); ok {
+		return [][]int{byHeight}, ""
+	}
+	return parts, "its levels do not join: each part is sized by itself"
+}
+
+// level makes names of levels comparable.
+func level(name string) string { return strings.ToLower(strings.Join(strings.Fields(name), " ")) }
+
+// double names two lengths that begin or end at the same level.
+func double(cols []design.Column, line []int) string {
+	for _, of := range []func(*design.Column) string{
+		func(c *design.Column) string { return c.From },
+		func(c *design.Column) string { return c.To },
+	} {
+		first := map[string]int{}
+		for _, i := range line {
+			l := level(of(&cols[i]))
+			if l == "" {
+				continue
+			}
+			if k, ok := first[l]; ok {
+				return fmt.Sprintf("%s and %s stand at one level", cols[k].Cell, cols[i].Cell)
+			}
+			first[l] = i
+		}
+	}
+	return ""
+}
+
+// joined follows the levels from each length that stands on no other. A ring
+// of levels, which has no such length, falls into single lengths.
+func joined(cols []design.Column, line []int) [][]int {
+	from, to := map[string]int{}, map[string]bool{}
+	for _, i := range line {
+		if l := level(cols[i].From); l != "" {
+			from[l] = i
+		}
+		to[level(cols[i].To)] = true
+	}
+	seen := map[int]bool{}
+	var parts [][]int
+	for _, i := range line {
+		if l := level(cols[i].From); l != "" && to[l] {
+			continue // stands on another
+		}
+		var part []int
+		for next, ok := i, true; ok && !seen[next]; {
+			seen[next] = true
+			part = append(part, next)
+			l := level(cols[next].To)
+			next, ok = from[l]
+			ok = ok && l != ""
+		}
+		parts = append(parts, part)
+	}
+	for _, i := range line {
+		if !seen[i] {
+			parts = append(parts, []int{i})
+		}
+	}
+	return parts
+}
+
+// sortedByHeight sorts lengths by the number at which each begins, and reports
+// whether every one begins at a number of its own.
+func sortedByHeight(cols []design.Column, line []int) ([]int, bool) {
+	height := map[int]float64{}
+	for _, i := range line {
+		v, err := strconv.ParseFloat(strings.TrimPrefix(strings.TrimSpace(cols[i].From), "+"), 64)
+		if err != nil {
+			return nil, false
+		}
+		height[i] = v
+	}
+	out := slices.Clone(line)
+	slices.SortFunc(out, func(a, b int) int { return cmp.Compare(height[a], height[b]) })
+	for k := 1; k < len(out); k++ {
+		if height[out[k]] == height[out[k-1]] {
+			return nil, false
+		}
+	}
+	return out, true
+}
