@@ -35,7 +35,11 @@ var aboveHeight = regexp.MustCompile(`(?i)\babove\s+(\d+(?:[.,]\d+)?(?:\s*(?:mm|
 // has neither keys nor trouble.
 func readHeading(text string) *meaning {
 	m := &meaning{}
-	rest := yesNo.ReplaceAllString(tidy(text), "")
+	rest := tidy(text)
+	if !speaks(rest) {
+		return m // most cells of a sheet: spare them the expressions below
+	}
+	rest = yesNo.ReplaceAllString(rest, "")
 	if at := aboveHeight.FindStringSubmatchIndex(rest); at != nil {
 		if m.above = readAbove(rest[at[2]:at[3]]); m.above != nil {
 			rest = rest[:at[0]] + rest[at[1]:]
@@ -51,6 +55,9 @@ func readHeading(text string) *meaning {
 	}
 	return m
 }
+
+// speaks reports whether any word of a text is one of the vocabulary's nouns.
+func speaks(text string) bool { return len(parsePhrase(text).nouns) > 0 }
 
 func readAbove(s string) *height {
 	hs, err := parseRestraints(strings.ReplaceAll(s, ",", "."), '.', length.defaultUnit())

@@ -41,8 +41,9 @@ type headerScan struct {
 }
 
 const (
-	headerDepth = 60 // rows of a sheet among which the header must start
-	maxHeader   = 3  // rows of a header
+	headerDepth = 60  // rows of a sheet among which the header must start
+	maxHeader   = 3   // rows of a header
+	maxColumns  = 512 // beyond it no office keeps a column of a schedule
 )
 
 // best returns the block of rows that reads best as a header.
@@ -71,7 +72,7 @@ func (h *headerScan) promising(i int) bool {
 	for j := i; j < min(i+maxHeader, len(h.rows)); j++ {
 		r := h.rows[j]
 		for c := range r.Cells {
-			if r.Cells[c].Kind == Text && !r.Cells[c].empty() && h.speaks(r.Cells[c].Text) {
+			if r.Cells[c].Kind == Text && !r.Cells[c].empty() && h.names(r.Cells[c].Text) {
 				return true
 			}
 		}
@@ -79,7 +80,7 @@ func (h *headerScan) promising(i int) bool {
 	return false
 }
 
-func (h *headerScan) speaks(text string) bool {
+func (h *headerScan) names(text string) bool {
 	m := h.read(tidy(text))
 	return len(m.keys) > 0 || m.vetoed || h.maps.find(text) != nil
 }
@@ -104,7 +105,7 @@ func (h *headerScan) layout(block []*Row) *layout {
 	}
 	l.cells = width
 	vetoed := 0
-	for col := range width {
+	for col := range min(width, maxColumns) {
 		c := h.column(block, col)
 		if c == nil {
 			continue

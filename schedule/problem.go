@@ -41,11 +41,18 @@ func (r *Refusal) Error() string {
 	var b strings.Builder
 	b.WriteString(r.Problem.Error())
 	for i := range r.Seen {
+		if i == maxSeen {
+			fmt.Fprintf(&b, "\n  and %d more", len(r.Seen)-maxSeen)
+			break
+		}
 		s := &r.Seen[i]
 		fmt.Fprintf(&b, "\n  %s", join(": ", s.Cell, s.Message()))
 	}
 	return b.String()
 }
+
+// maxSeen is how many finds a message lists.
+const maxSeen = 40
 
 // join joins the parts that are not empty.
 func join(sep string, parts ...string) string {

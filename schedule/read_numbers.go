@@ -61,64 +61,70 @@ const (
 	maxForce             = 200e6       // N
 	maxMoment            = 1e12        // N mm
 	minSize, maxSize     = 1, 3000     // mm
+	minFireRatio         = 0.01        // eta_fi
 	minK, maxK           = 0.1, 20     // effective-length factor
 	maxQuantity          = 1_000_000   // pieces
 	maxMinutes           = 360         // fire period
 	minLimit, maxLimit   = 0.01, 1.5   // utilisation
 )
 
+// inRange reports whether low <= x <= high. A bound that is typed must pass
+// when its unit is converted, so the last places do not count.
 func inRange(x, low, high float64) bool {
-	const slack = 1e-9 // a bound that is typed must pass when its unit is converted
-	return x >= low*(1-slack) && x <= high*(1+slack)
+	const slack = 1e-9
+	return x >= low-slack*math.Abs(low) && x <= high+slack*math.Abs(high)
 }
 
-// outOfRange says why a value cannot be true.
-func outOfRange(b *Binding, x float64) *Problem {
-	is := fmt.Sprintf("%s is %s", b.title(), b.show(x))
-	switch q := b.key.line().of; {
-	case math.IsNaN(x) || math.IsInf(x, 0):
-		return &Problem{What: is, Do: "give a number"}
-	case q == length && !inRange(x, minLength, maxLength):
-		return &Problem{What: is + ", outside 0.3 to 60 m", Do: "give its unit in the heading, the unit row or the cell (it is read in " + b.unit.name + "), or correct it"}
-	case q == force && math.Abs(x) > maxForce:
-		return &Problem{What: is + ", above 200 MN", Do: "give its unit in the heading, the unit row or the cell (it is read in " + b.unit.name + "), or correct it"}
-	case q == moment && math.Abs(x) > maxMoment:
-		return &Problem{What: is + ", above 1000 MNm", Do: "give its unit in the heading, the unit row or the cell (it is read in " + b.unit.name + "), or correct it"}
-	case q == size && !inRange(x, minSize, maxSize):
-		return &Problem{What: is + ", outside 1 mm to 3 m", Do: "give it in " + b.unit.name}
-	case q == stiffness && x < 0:
-		return &Problem{What: is, Do: "give a stiffness of 0 or more"}
-	}
-	return ratioOutOfRange(b, x, is)
-}
-
-func ratioOutOfRange(b *Binding, x float64, is string) *Problem {
-	low, high := 0.0, 0.0
+// bounds returns what a column can hold, and how a person is told of it.
+func (b *Binding) bounds() (low, high float64, remark string) {
 	switch b.key.field {
 	case factorField:
-		low, high = minK, maxK
+		return minK, maxK, ""
 	case etaField:
-		low, high = 0, 1
+		return 0, 1, ""
 	case limitField:
-		low, high = minLimit, maxLimit
+		return minLimit, maxLimit, ""
 	case fireRatioField:
-		low, high = 0.01, 1
+		return minFireRatio, 1, ""
 	case firePeriodField:
-		low, high = 1, maxMinutes
+		return 1, maxMinutes, ""
 	case fireSidesField:
-		low, high = 3, 4
+		return 3, 4, ""
 	case quantityField:
-		low, high = 1, maxQuantity
-	default:
+		return 1, maxQuantity, ""
+	}
+	switch b.key.line().of {
+	case length:
+		return minLength, maxLength, ", outside 0.3 to 60 m"
+	case force:
+		return -maxForce, maxForce, ", above 200 MN"
+	case moment:
+		return -maxMoment, maxMoment, ", above 1000 MNm"
+	case size:
+		return minSize, maxSize, ", outside 1 mm to 3 m"
+	case stiffness:
+		return 0, math.MaxFloat64, ", below 0"
+	}
+	return -math.MaxFloat64, math.MaxFloat64, ""
+}
+
+// outOfRange says why a value cannot be true; nil where it can.
+func outOfRange(b *Binding, x float64) *Problem {
+	low, high, remark := b.bounds()
+	whole := b.key.line().of == count
+	if inRange(x, low, high) && (!whole || x == math.Trunc(x)) {
 		return nil
 	}
-	if !inRange(x, low, high) {
-		return &Problem{What: is, Do: fmt.Sprintf("give a number from %s to %s", plainNumber(low), plainNumber(high))}
+	p := &Problem{What: fmt.Sprintf("%s is %s%s", b.title(), b.show(x), remark)}
+	switch {
+	case whole:
+		p.Do = fmt.Sprintf("give a whole number from %s to %s", plainNumber(low), plainNumber(high))
+	case remark == "":
+		p.Do = fmt.Sprintf("give a number from %s to %s", plainNumber(low), plainNumber(high))
+	default:
+		p.Do = fmt.Sprintf("give its unit in the heading, the unit row or the cell (it is read in %s), or correct it", b.unit.name)
 	}
-	if b.key.line().of == count && x != math.Trunc(x) {
-		return &Problem{What: is, Do: "give a whole number"}
-	}
-	return nil
+	return p
 }
 
 // show writes a value of design in the column's unit.
@@ -126,4 +132,11 @@ func (b *Binding) show(x float64) string {
 	return strings.TrimSpace(plainNumber(x/b.unit.factor) + " " + b.unit.name)
 }
 
-func plainNumber(x float64) string { return strconv.FormatFloat(x, 'g', 7, 64) }
+// plainNumber writes a number without exponent, to seven digits.
+func plainNumber(x float64) string {
+	rounded, err := strconv.ParseFloat(strconv.FormatFloat(x, 'g', 7, 64), 64)
+	if err != nil {
+		rounded = x
+	}
+	return strconv.FormatFloat(rounded, 'f', -1, 64)
+}

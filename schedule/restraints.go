@@ -206,7 +206,7 @@ func resolveHeights(list []height, L float64) (heights []float64, notes []string
 
 func outside(x, L float64) error {
 	hint := ""
-	if x > 0 && x/1000 < L {
+	if x > maxLength && x/1000 < L {
 		hint = fmt.Sprintf(" (if it is in mm, write %s mm)", metres(x))
 	}
 	return fmt.Errorf("the height %s m is outside the length %s m%s", metres(x), metres(L), hint)

@@ -1,6 +1,7 @@
 package schedule
 
 import (
+	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
@@ -31,6 +32,15 @@ C2   | A2   | GF | L1 |    | #4.5 | #800  | mid   | 203x203x60 UKC | S275 |
 	assert.Equal(t, 1, c.Quantity)
 	assert.Equal(t, Header{First: 4, Last: 4, Columns: s.Header.Columns, Width: 11, Cells: 11}, s.Header)
 	assert.Equal(t, []Seen{{Cell: "Columns!K4", Heading: "Remarks"}}, s.Summary.Other)
+}
+
+// A sheet as wide as a spreadsheet goes is read, or refused, at once.
+func TestAbsurdlyWideSheets(t *testing.T) {
+	row := "Mark | Length" + strings.Repeat(" | N_Ed", 4_000)
+	r := refused(t, sheetOf(strings.Repeat(row+"\n", 70)))
+	assert.ErrorContains(t, r, "two headings for one field")
+	assert.ErrorContains(t, r, "more")
+	assert.Less(t, len(r.Error()), 4000)
 }
 
 func TestHeaderOverThreeRows(t *testing.T) {
@@ -429,4 +439,25 @@ func TestMapping(t *testing.T) {
 	assert.ErrorContains(t, r, `no heading reads "Breite"`)
 	r = refused(t, sheetOf("Mark | Length | N_Ed\nC1 | 4 | 900"), "map Mark=Colour")
 	assert.ErrorContains(t, r, "is not a field")
+}
+
+func TestValuesThatNoColumnHas(t *testing.T) {
+	for _, c := range []struct{ heading, cell, want string }{
+		{"L_cr,y", "3500", "outside 0.3 to 60 m"}, {"L_T (mm)", "3.5", "L_T is 3.5 mm, outside 0.3 to 60 m"}, {"L_fi,z", "0", "outside"},
+		{"k_y", "0", "from 0.1 to 20"}, {"k_z", "-1", "from 0.1 to 20"}, {"eta y-y top", "1.5", "from 0 to 1"}, {"Stiffness z-z top", "-5", "below 0"},
+		{"Utilisation limit", "95", "from 0.01 to 1.5"}, {"Qty", "0", "whole number from 1"}, {"Qty", "1.5", "whole number"}, {"Qty", "-2", "whole number"}, {"Qty", "1 off", `Quantity is "1 off"`},
+		{"Sides exposed", "5", "from 3 to 4"}, {"Max depth", "0.3", "Greatest depth is 0.3 mm, outside 1 mm to 3 m"}, {"eta_fi", "65", "from 0.01 to 1"}, {"Fire period", "600", "from 1 to 360"},
+		{"M_y,Ed top", "5000000", "above 1000 MNm"}, {"Reaction flange A", "300000", "above 200 MN"}, {"Splice", "perhaps", "give yes or no"}, {"z-z held at flange", "maybe", "yes, no, or the distance"},
+		{"Ends y-y", "welded", "bottom first"}, {"End y-y top", "welded", "not an end condition"}, {"Group", "@1-Feb", "is a date"}, {"Boxed", "#0.5", "give yes or no"},
+	} {
+		p := problem(t, "Mark | Length | N_Ed | "+c.heading+"\nC1 | 4 | 900 | "+c.cell)
+		assert.Contains(t, p.Error(), c.want, c.heading)
+		assert.Equal(t, "Columns!D2", p.Cell)
+		assert.Equal(t, c.heading, p.Heading)
+	}
+	c := good(t, "Mark | Length | N_Ed | Utilisation limit | Qty | End y-y top | Splice | Boxed\nC1 | 4 | 900 | 90% | 1,000 | fixed | no | no")
+	assert.InDelta(t, 0.9, c.Choice.Limit, 1e-12)
+	assert.Equal(t, 1000, c.Quantity)
+	assert.Equal(t, design.Fixed, c.Y.Top.Condition)
+	assert.False(t, c.Splice)
 }
