@@ -22,12 +22,18 @@ func (f *runFlags) bind(c *cobra.Command, suffix string) {
 	fl := c.Flags()
 	fl.StringVarP(&f.output, "output", "o", "", "write the annotated schedule to `FILE` (default: beside the input, as NAME"+suffix+"; - is standard output, for text)")
 	fl.StringVar(&f.json, "json", "", "write the results as JSON lines to `FILE` too (- is standard output)")
+	fl.BoolVar(&f.force, "force", false, "replace an output that no earlier run wrote, or the input itself")
+	f.bindReading(c)
+}
+
+// bindReading binds the flags that say how the schedule is read and designed.
+func (f *runFlags) bindReading(c *cobra.Command) {
+	fl := c.Flags()
 	fl.StringVar(&f.sheet, "sheet", "", "`NAME` of the sheet that holds the schedule (default: chosen by content)")
 	fl.StringArrayVar(&f.set, "set", nil, "`NAME=VALUE` of a setting, such as families=\"UKC, HE\"; may be repeated")
 	fl.StringVar(&f.settings, "settings", "", "`FILE` of settings: two columns, name and value")
 	fl.StringArrayVar(&f.maps, "map", nil, "`HEADER=FIELD`: what a heading of your own stands for, or ignore; may be repeated")
 	fl.IntVar(&f.workers, "workers", 0, "`NUMBER` of columns designed at a time (default: one a processor); results do not depend on it")
-	fl.BoolVar(&f.force, "force", false, "replace an output that no earlier run wrote, or the input itself")
 	fl.BoolVarP(&f.quiet, "quiet", "q", false, "say errors alone")
 }
 

@@ -116,7 +116,7 @@ func (w *writer) equivalent(axis string, psi, cm float64, sway bool) {
 // sums writes (6.61) and (6.62).
 func (w *writer) sums(bentY, bentZ bool) {
 	x := &w.a.Interaction
-	one := func(symbol string, my float64, n, ky, kz string, u float64, clause, note string) {
+	one := func(my float64, n, ky, kz string, u float64, clause, note string) {
 		source := n
 		var list Values
 		if bentY {
@@ -128,10 +128,8 @@ func (w *writer) sums(bentY, bentZ bool) {
 			source += " + " + kz + " M_z,Ed/(M_z,Rk/γ_M1)"
 		}
 		w.add(list)
-		s := w.find(symbol, source, u, None, clause)
-		s.Result = shortest(s, u)
-		s.Limit, s.Within = "≤ "+fixed(w.sheet.Limit, 2), ec3.Passes(u, w.sheet.Limit)
+		w.ratio(source, u, clause)
 	}
-	one("U_61", x.My661, "n_y", "k_yy", "k_yz", x.U661, "(6.61)", "y-y segment")
-	one("U_62", x.My662, "n_z", "k_zy", "k_zz", x.U662, "(6.62)", "lateral-torsional segment")
+	one(x.My661, "n_y", "k_yy", "k_yz", x.U661, "(6.61)", "y-y segment")
+	one(x.My662, "n_z", "k_zy", "k_zz", x.U662, "(6.62)", "lateral-torsional segment")
 }

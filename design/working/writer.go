@@ -105,10 +105,17 @@ func (w *writer) derive(symbol, source string, u Unit, clause string) *Step {
 	return w.find(symbol, source, exact, u, clause)
 }
 
-// ratio writes a utilisation against its limit.
+// ratio writes a utilisation against its limit: a ratio, or a sum U.
 func (w *writer) ratio(source string, exact float64, clause string) *Step {
-	s := w.step(formula.Must(source), source, exact, None, clause)
-	s.Formula = nil
+	left := formula.Must(source)
+	_, plain := left.(formula.Quotient)
+	if !plain {
+		left = formula.Symbol{Base: "U"} // a sum
+	}
+	s := w.step(left, source, exact, None, clause)
+	if plain {
+		s.Formula = nil
+	}
 	s.Result = shortest(s, exact)
 	s.Limit, s.Within = "≤ "+fixed(w.sheet.Limit, 2), ec3.Passes(exact, w.sheet.Limit)
 	return s
@@ -137,6 +144,9 @@ func (w *writer) step(left formula.Expr, source string, exact float64, u Unit, c
 	w.hold(left, f, exact)
 	s.Numbers = w.numbers(f, exact, u)
 	s.Result = w.supported(s.Numbers, exact, u)
+	if _, alone := f.(formula.Symbol); alone {
+		s.Numbers = nil // the same number twice
+	}
 	if symbol, ok := left.(formula.Symbol); ok {
 		w.know(symbol, exact, s.Result, u)
 	}

@@ -27,16 +27,19 @@ func ends(left, right string) string {
 }
 
 // wrap breaks a text at blanks into lines of a width.
-func wrap(s string, width int) []string {
+func wrap(s string, width int) []string { return wrapFirst(s, width, width) }
+
+// wrapFirst breaks a text at blanks into lines, the first of its own width.
+func wrapFirst(s string, first, rest int) []string {
 	var lines []string
-	at := ""
+	at, width := "", first
 	for _, word := range strings.Fields(s) {
 		switch {
 		case at == "":
 			at = word
 		case columns(at)+1+columns(word) > width:
 			lines = append(lines, at)
-			at = word
+			at, width = word, rest
 		default:
 			at += " " + word
 		}

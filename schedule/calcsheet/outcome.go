@@ -63,7 +63,12 @@ func amounts(c *design.Check) (ed, rd, unit string) {
 }
 
 // segment writes the heights of a segment in m.
-func segment(from, to float64) string { return metres(from) + "-" + metres(to) }
+func segment(from, to float64) string {
+	if to <= from {
+		return metres(from) // a cross-section
+	}
+	return metres(from) + "-" + metres(to)
+}
 
 func metres(mm float64) string {
 	s := formula.Figures(mm/1000, 12)

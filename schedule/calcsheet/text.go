@@ -160,7 +160,7 @@ func (p *textPrinter) parts(lead, body, result, clause string) {
 		return
 	}
 	blank := strings.Repeat(" ", columns(lead))
-	for i, l := range wrap(body, room-columns(lead)) {
+	for i, l := range wrapFirst(body, room-columns(lead), TextWidth-columns(lead)-2) {
 		if i == 0 {
 			p.line(ends(lead+l, clause))
 		} else {

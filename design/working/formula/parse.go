@@ -147,6 +147,10 @@ func (p *parser) atom() Expr {
 		e := p.sum()
 		p.expect(')')
 		return e
+	case '|':
+		e := p.sum()
+		p.expect('|')
+		return Call{"abs", []Expr{e}}
 	}
 	return p.fail()
 }

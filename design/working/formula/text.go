@@ -160,6 +160,9 @@ func Text(e Expr) string {
 	case Root:
 		return "√(" + Text(e.Of) + ")"
 	case Call:
+		if e.Name == "abs" {
+			return "|" + Text(e.Args[0]) + "|"
+		}
 		args := make([]string, len(e.Args))
 		for i, a := range e.Args {
 			args[i] = Text(a)
