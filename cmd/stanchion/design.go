@@ -19,7 +19,7 @@ func (r *run) design(ctx context.Context) error {
 		bar.add()
 		return r.out.put(m, res)
 	}
-	if r.mode == search.Size && r.hasField("Group") {
+	if r.engine.Coupled() || r.mode == search.Size && r.hasField("Group") {
 		return r.designTogether(ctx, put)
 	}
 	return search.Stream(ctx, r.engine, r.mode, r.flags.workers, r.jobs(), func(j *search.Job[*schedule.Member]) error {
@@ -46,8 +46,8 @@ func (r *run) jobs() iter.Seq2[*search.Job[*schedule.Member], error] {
 	}
 }
 
-// designTogether holds all members: those of a group share a section, and may
-// stand anywhere.
+// designTogether holds all members: those of a group share a section and those
+// of a column line may depend on each other, and they may stand anywhere.
 func (r *run) designTogether(ctx context.Context, put func(*schedule.Member, *design.Result) error) error {
 	var members []*schedule.Member
 	var cols []design.Column
@@ -60,7 +60,11 @@ func (r *run) designTogether(ctx context.Context, put func(*schedule.Member, *de
 			cols = append(cols, j.Column)
 		}
 	}
-	results, defects := r.engine.SizeAll(ctx, cols, r.flags.workers, nil)
+	all := r.engine.SizeAll
+	if r.mode == search.Check {
+		all = r.engine.CheckAll
+	}
+	results, defects := all(ctx, cols, r.flags.workers, nil)
 	if results == nil && defects != nil {
 		return defects
 	}

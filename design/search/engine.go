@@ -91,6 +91,12 @@ func (e *Engine) CheckAll(ctx context.Context, cols []design.Column, workers int
 func (e *Engine) all(ctx context.Context, mode Mode, cols []design.Column, workers int, progress func(done int)) ([]design.Result, error) {
 	results := make([]design.Result, len(cols))
 	single, groups := partition(cols, mode)
+	var lines standing
+	var clusters [][]Chosen
+	if e.Coupled() {
+		lines = stand(cols)
+		single, groups, clusters = split(single, groups, &lines)
+	}
 	var bugs bugs
 	start := func() *worker { return e.worker(mode, &bugs) }
 
@@ -107,7 +113,14 @@ func (e *Engine) all(ctx context.Context, mode Mode, cols []design.Column, worke
 	if err != nil {
 		return nil, err
 	}
-	if progress != nil && len(groups) > 0 {
+	err = spread(ctx, workers, len(clusters), 1, start, func(w *worker, i int) {
+		w.settle(clusters[i], cols, &lines, results)
+	}, nil)
+	if err != nil {
+		return nil, err
+	}
+	lines.tell(results)
+	if progress != nil && len(groups)+len(clusters) > 0 {
 		progress(len(cols))
 	}
 	return results, bugs.err()

@@ -58,7 +58,17 @@ type Chosen struct {
 // each passes or fails there. Columns in no set are left as they are in
 // results. progress and the errors are those of SizeAll.
 func (e *Engine) Assign(ctx context.Context, cols []design.Column, chosen []Chosen, results []design.Result, workers int, progress func(done int)) error {
-	return e.each(ctx, workers, len(chosen), progress, func(w *worker, i int) {
+	var lines standing
+	var clusters [][]Chosen
+	if e.Coupled() {
+		lines = stand(cols)
+		chosen, clusters = parts(chosen, &lines)
+	}
+	return e.each(ctx, workers, len(chosen)+len(clusters), progress, func(w *worker, i int) {
+		if i >= len(chosen) {
+			w.settle(clusters[i-len(chosen)], cols, &lines, results)
+			return
+		}
 		c := &chosen[i]
 		if c.Candidate == nil && len(c.Columns) == 1 {
 			w.one(&cols[c.Columns[0]], &results[c.Columns[0]])

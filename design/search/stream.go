@@ -38,8 +38,12 @@ type Job[T any] struct {
 // each called from one goroutine, and the two run at the same time. Members of
 // a group share one section and can stand anywhere in a schedule, so Stream
 // cannot size them: it ends with a *GroupError that names the first; use
-// SizeAll.
+// SizeAll. Nor can it see what stands on what: where the lengths of a column line
+// depend on each other (Coupled) it ends with an error at once.
 func Stream[T any](ctx context.Context, e *Engine, mode Mode, workers int, in iter.Seq2[*Job[T], error], emit func(*Job[T]) error) error {
+	if e.Coupled() {
+		return errCoupled
+	}
 	workers = Workers(workers)
 	g, ctx := errgroup.WithContext(ctx)
 	var bugs bugs

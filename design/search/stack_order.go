@@ -1,0 +1,112 @@
+package search
+
+import (
+	"fmt"
+	"slices"
+	"strings"
+
+	"stanchion/design"
+)
+
+// standing says which length of a column line stands on which, by index among
+// the columns at hand.
+type standing struct {
+	below []int    // the length that each stands on, -1 if none
+	above []int    // the length that stands on each, -1 if none
+	notes []string // by length: why its line could not be put in order
+}
+
+// stand puts the lengths of every column line in order by their levels: a
+// length stands on the one whose upper level is its lower level. A line is the
+// lengths with one grid reference, or where there is none with one mark, that
+// give their levels. Nothing is guessed: a line whose levels are missing,
+// doubled or go round in a ring is taken apart, and a note says so.
+func stand(cols []design.Column) standing {
+	s := standing{below: slices.Repeat([]int{-1}, len(cols)), above: slices.Repeat([]int{-1}, len(cols)),
+		notes: make([]string, len(cols))}
+	lines := map[string][]int{}
+	for i := range cols {
+		if name := lineOf(&cols[i]); name != "" {
+			lines[name] = append(lines[name], i)
+		}
+	}
+	for name, line := range lines {
+		if len(line) > 1 {
+			s.order(cols, name, line)
+		}
+	}
+	return s
+}
+
+// lineOf names the column line of a length; empty where it is in none.
+func lineOf(col *design.Column) string {
+	switch {
+	case col.Stack != "":
+		return "stack " + col.Stack
+	case col.Mark != "" && col.From != "" && col.To != "":
+		return "mark " + col.Mark
+	}
+	return ""
+}
+
+// level makes two spellings of a level alike.
+func level(name string) string { return strings.Join(strings.Fields(strings.ToLower(name)), " ") }
+
+// order joins the lengths of one line.
+func (s *standing) order(cols []design.Column, name string, line []int) {
+	ends := map[string]int{} // the length that ends at a level
+	for _, i := range line {
+		c := &cols[i]
+		if c.From == "" || c.To == "" {
+			s.apart(line, name+": not every length gives its levels, so it is not known which stands on which: each is designed on its own")
+			return
+		}
+		if _, taken := ends[level(c.To)]; taken {
+			s.apart(line, fmt.Sprintf("%s: two lengths end at level %s: each is designed on its own", name, c.To))
+			return
+		}
+		ends[level(c.To)] = i
+	}
+	bases := 0
+	for _, i := range line {
+		j, ok := ends[level(cols[i].From)]
+		if !ok {
+			bases++
+			continue
+		}
+		if s.above[j] >= 0 || j == i {
+			s.apart(line, fmt.Sprintf("%s: two lengths begin at level %s: each is designed on its own", name, cols[i].From))
+			return
+		}
+		s.below[i], s.above[j] = j, i
+	}
+	switch {
+	case bases == 0:
+		s.apart(line, name+": its levels go round in a ring: each length is designed on its own")
+	case bases > 1:
+		s.note(line, fmt.Sprintf("%s: its levels do not join: it is designed as %d columns", name, bases))
+	}
+}
+
+// apart takes a line to pieces.
+func (s *standing) apart(line []int, why string) {
+	for _, i := range line {
+		s.below[i], s.above[i] = -1, -1
+	}
+	s.note(line, why)
+}
+
+// tell puts the notes into the results.
+func (s *standing) tell(results []design.Result) {
+	for i, text := range s.notes {
+		if text != "" {
+			results[i].Notes = append(results[i].Notes, text)
+		}
+	}
+}
+
+func (s *standing) note(line []int, text string) {
+	for _, i := range line {
+		s.notes[i] = text
+	}
+}
