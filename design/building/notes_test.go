@@ -127,3 +127,31 @@ func TestSerialSize(t *testing.T) {
 		assert.Equal(t, want, serialOf(s), name)
 	}
 }
+
+func TestMayStand(t *testing.T) {
+	section := func(name string) *catalogue.Section {
+		s, err := catalogue.Default().Find(name, catalogue.FindOptions{})
+		require.NoError(t, err)
+		return s
+	}
+	for _, tc := range []struct {
+		below, above string
+		want         bool
+	}{
+		{"254x254x89 UKC", "254x254x73 UKC", true},
+		{"254x254x73 UKC", "254x254x89 UKC", false}, // heavier
+		{"254x254x89 UKC", "203x203x86 UKC", true},
+		{"203x203x86 UKC", "254x254x73 UKC", false}, // larger, though lighter
+		{"457x152x82 UKB", "406x178x74 UKB", false}, // wider
+		{"457x191x82 UKB", "406x178x74 UKB", true},
+	} {
+		assert.Equal(t, tc.want, mayStand(section(tc.below), section(tc.above)), "%s on %s", tc.above, tc.below)
+	}
+}
+
+// A group that has no say is bridged in each stack by itself.
+func TestBridgeKeepsToTheStack(t *testing.T) {
+	p := &plan{links: []link{{0, 2, 1, "A"}, {2, 3, 1, "A"}, {1, 2, 1, "B"}, {2, 4, 1, "B"}}}
+	got := p.bridge([]bool{false, false, true, false, false})
+	assert.ElementsMatch(t, []link{{0, 3, 1, "A"}, {1, 4, 1, "B"}}, got)
+}

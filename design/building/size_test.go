@@ -47,7 +47,7 @@ func TestAgainstEveryCombination(t *testing.T) {
 	served := 0
 	for seed := range uint64(80) {
 		r := rand.New(rand.NewPCG(seed, 1))
-		cols := tower(r, 3+r.IntN(6))
+		cols := tower(r, 3+r.IntN(4))
 		o := Options{Splices: Splices(seed % 3), Every: 1 + r.IntN(2), SpliceCost: 40 * r.Float64()}
 		ru := newRules(t, e, cols, &o)
 		want := ru.least(&o, 0)

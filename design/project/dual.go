@@ -126,7 +126,7 @@ func (d *dual) ascend(ctx context.Context, s *search, k int, node branchNode, be
 				often[j] += 0.1
 			}
 		}
-		if d.level != nil && len(d.level) > 0 && (scale < 0.02 || step >= steps/2) {
+		if len(d.level) > 0 && (scale < 0.02 || step >= steps/2) {
 			// One level a node has raised the bound as far as it goes; now every price on its own.
 			d.copy(keep)
 			bound = d.evaluate(s, k, state)

@@ -177,8 +177,7 @@ func parts(nodes int, links []Link) [][]int {
 	for n := range root {
 		root[n] = n
 	}
-	var find func(n int) int
-	find = func(n int) int {
+	find := func(n int) int {
 		for root[n] != n {
 			n = root[n]
 		}
