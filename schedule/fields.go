@@ -107,7 +107,7 @@ type field struct {
 // case, punctuation, spaces, accents; axis, end, unit, combination and words
 // that say nothing (noise) may stand before or behind them.
 var fields = []field{
-	{markField, "Mark", noQuantity, isLabel, "mark|column mark|member mark|mark no|column no|column number|column id|column ref|column reference|member ref|member no|member id|member name|column name|stutze|stutze nr|repere|poteau", "column|columns|col|ref|reference|ref no|member|id|name|tag|pos|position|pilastro|pilar"},
+	{markField, "Mark", noQuantity, isLabel, "mark|column mark|member mark|mark no|column no|column number|column id|column ref|column reference|member ref|member no|member id|member name|column name|marke|stutze|stutze nr|repere|poteau", "column|columns|col|ref|reference|ref no|member|id|name|tag|pos|position|pilastro|pilar"},
 	{stackField, "Stack", noQuantity, isLabel, "stack|grid|grid ref|grid reference|grid line|gridline|grid position|column line|column stack", "location|line|achse|axe"},
 	{levelField, "Level", noQuantity, isLabel, "", "level|levels|storey|story|lift|floor|floors|geschoss|etage|niveau|piano|planta"},
 	{fromField, "Level from", noQuantity, isLabel, "from|level from|from level|from floor|base level|bottom level|lower level|lower floor|level base|level bottom|level lower|floor from|start level|bottom floor|from storey", ""},

@@ -63,7 +63,32 @@ func (h *headerScan) best() *layout {
 			}
 		}
 	}
+	if best == nil {
+		return h.widest()
+	}
 	return best
+}
+
+// widest returns the row with the most texts, to be shown to people where none
+// names a field; nil where there is no text.
+func (h *headerScan) widest() *layout {
+	var found *Row
+	most := 0
+	for _, r := range h.rows {
+		texts := 0
+		for i := range r.Cells {
+			if r.Cells[i].Kind == Text && !r.Cells[i].Merged && !r.Cells[i].empty() {
+				texts++
+			}
+		}
+		if texts > most {
+			found, most = r, texts
+		}
+	}
+	if found == nil {
+		return nil
+	}
+	return h.layout([]*Row{found})
 }
 
 // promising reports whether a header may start at row i: a text there or in

@@ -84,8 +84,8 @@ func (s *scanner) refuse(settings *Settings) error {
 	case len(s.refs) == 0:
 		r.What, r.Do = "there are no members below the header", "give one row a column length"
 	case s.negative > 0 && s.positive == 0 && settings.Compression == "":
-		r.What = "every N_Ed is negative: is compression negative here?"
-		r.Do = "give the setting compression=negative, or compression=positive if every column is in tension"
+		r.What = "every N_Ed is negative, so compression seems to be negative here"
+		r.Do = "say so with the setting compression=negative, or with compression=positive if every column is in tension"
 	case len(s.refs) > math.MaxInt32-1:
 		r.What = "there are too many rows"
 	default:

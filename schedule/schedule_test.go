@@ -161,7 +161,8 @@ func TestNeededHeaders(t *testing.T) {
 	assert.ErrorContains(t, r, `"Length" is Length`)
 	assert.ErrorContains(t, r, `"Remarks" is not read`)
 	assert.ErrorContains(t, r, "Length and N_Ed (Mark and the others are optional)")
-	refused(t, sheetOf("some | words\nno | schedule"))
+	r = refused(t, sheetOf("some | words\nand | figures"))
+	assert.ErrorContains(t, r, `Columns!B1: "words" is not read`)
 	refused(t, sheetOf("Mark | Length | Unfactored axial\nC1 | 3.6 | 500"))
 	refused(t, sheetOf("Mark | Length | N_Ed\nTotal | | 0"))
 	// A take-off needs no loads.
