@@ -17,6 +17,7 @@ func (p *Plan) frames() (before, behind []byte, err error) {
 	p.setColumns(&edits)
 	p.setMerges(&edits)
 	p.widenFilter(&edits)
+	p.setLinks(&edits)
 	frame := edits.Apply(p.layout.frame)
 	root, err := markup.Parse(frame)
 	if err != nil {
@@ -139,6 +140,63 @@ func (p *Plan) setMerges(edits *markup.Edits) {
 		return
 	}
 	edits.Insert(behindLast(root, beforeMerges), text)
+}
+
+// beforeLinks are the elements of a sheet that stand before hyperlinks.
+var beforeLinks = append(slices.Clone(beforeMerges), "mergeCells", "phoneticPr", "conditionalFormatting", "dataValidations")
+
+// setLinks takes out the links of an earlier run and adds those of this one.
+func (p *Plan) setLinks(edits *markup.Edits) {
+	root := p.layout.root
+	list := root.Child("hyperlinks")
+	var kept strings.Builder
+	count, gone := 0, false
+	for _, e := range list.All("hyperlink") {
+		if a, ok := parseArea(e.Attr("ref")); ok && p.swept(a) {
+			gone = true
+			continue
+		}
+		kept.Write(e.Raw())
+		count++
+	}
+	links := p.links(maxLinks - count)
+	if len(links) == 0 && !gone {
+		return
+	}
+	for _, l := range links {
+		fmt.Fprintf(&kept, `<%shyperlink ref="%s" location="%s"/>`, root.Prefix, l.cell, markup.Escaped(l.to))
+	}
+	name := root.Prefix + "hyperlinks"
+	text := ""
+	if kept.Len() > 0 {
+		text = "<" + name + ">" + kept.String() + "</" + name + ">"
+	}
+	if list != nil {
+		edits.Replace(list, text)
+		return
+	}
+	edits.Insert(behindLast(root, beforeLinks), text)
+}
+
+// swept reports whether a cell is one that an earlier run wrote, or that this
+// one writes.
+func (p *Plan) swept(a area) bool {
+	o := &p.place.old
+	return o.columns[a.firstCol] && o.area.contains(a) || p.place.rows.contains(a)
+}
+
+// links returns the block's links, so many at most.
+func (p *Plan) links(most int) []link {
+	if p.block.Link == nil {
+		return nil
+	}
+	var out []link
+	for row := p.place.heading + 1; row <= p.block.LastRow && len(out) < most; row++ {
+		if col, to := p.block.Link(row); to != "" {
+			out = append(out, link{cellName(p.place.rows.firstCol+col, row), to})
+		}
+	}
+	return out
 }
 
 // behindLast returns where the last of the named children ends.

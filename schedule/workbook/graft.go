@@ -18,15 +18,16 @@ type graft struct {
 	types  *manifest // of the own workbook
 	styles *styleMap
 	moved  map[string]string // own part to new name
+	links  map[string][]link // by own sheet
 }
 
 // openGraft opens the own workbook and adds its styles to the user's.
-func (d *draft) openGraft(data []byte) (*graft, error) {
+func (d *draft) openGraft(data []byte, links map[string][]link) (*graft, error) {
 	own, err := OpenBytes("own sheets", data)
 	if err != nil {
 		return nil, err
 	}
-	g := &graft{draft: d, own: own, moved: map[string]string{}}
+	g := &graft{draft: d, own: own, moved: map[string]string{}, links: links}
 	if g.types, err = openManifest(own.pkg); err != nil {
 		return nil, err
 	}
@@ -141,6 +142,7 @@ func (g *graft) worksheet(s *sheet) ([]byte, error) {
 	defer in.Close()
 	scan := markup.NewScanner(in)
 	var out bytes.Buffer
+	links := linking{list: g.links[s.name]}
 	shared := false // in a cell whose text is shared
 	for {
 		t, err := scan.Next()
@@ -150,6 +152,7 @@ func (g *graft) worksheet(s *sheet) ([]byte, error) {
 		if err != nil {
 			return nil, err
 		}
+		links.before(&out, t, scan.Depth())
 		if t.Kind == markup.Start && shared && string(t.Name) == "v" {
 			if err := g.inline(&out, scan); err != nil {
 				return nil, err

@@ -94,7 +94,7 @@ func (p *Plan) graftOwn(d *draft, sheets []Sheet) (*grafting, error) {
 	if err != nil {
 		return nil, err
 	}
-	gr, err := d.openGraft(data)
+	gr, err := d.openGraft(data, own.links)
 	if err != nil {
 		return nil, err
 	}

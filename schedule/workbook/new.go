@@ -33,11 +33,11 @@ func WriteNew(w io.Writer, sheets []Sheet) error {
 	if err != nil {
 		return err
 	}
-	return marked(w, data)
+	return finished(w, data, own.links)
 }
 
-// marked writes a workbook with the mark of the program in it.
-func marked(w io.Writer, data []byte) error {
+// finished writes a workbook with the mark of the program and the links in it.
+func finished(w io.Writer, data []byte, links map[string][]link) error {
 	b, err := OpenBytes("", data)
 	if err != nil {
 		return err
@@ -46,5 +46,10 @@ func marked(w io.Writer, data []byte) error {
 	at := b.root.From
 	out := opc.NewRewrite(b.pkg)
 	out.Set(b.main, slices.Concat(b.doc[:at:at], []byte(mark), b.doc[at:]))
+	for _, s := range b.sheets {
+		if list := links[s.name]; len(list) > 0 {
+			out.SetStream(s.part, func(to io.Writer) error { return b.link(s, list, to) })
+		}
+	}
 	return out.Write(w)
 }

@@ -73,10 +73,11 @@ type own struct {
 	file  *excelize.File
 	base  lettering
 	looks map[Look]int
+	links map[string][]link // by sheet: the library takes ever longer over each
 }
 
 func newOwn(base lettering) *own {
-	return &own{file: excelize.NewFile(), base: base, looks: map[Look]int{}}
+	return &own{file: excelize.NewFile(), base: base, looks: map[Look]int{}, links: map[string][]link{}}
 }
 
 // style returns the id of a look in the own workbook.
@@ -144,9 +145,7 @@ func (o *own) cell(sheet, ref string, c *Cell) error {
 		return err
 	}
 	if c.Link != "" {
-		if err := o.file.SetCellHyperLink(sheet, ref, c.Link, "Location"); err != nil {
-			return err
-		}
+		o.links[sheet] = append(o.links[sheet], link{ref, c.Link})
 	}
 	if c.Note == "" {
 		return nil
@@ -373,7 +372,7 @@ func (o *own) charts(s *Sheet, name string) error {
 	return nil
 }
 
-// bytes returns the own workbook as a package.
+// bytes returns the own workbook as a package, without its links.
 func (o *own) bytes() ([]byte, error) {
 	var buf bytes.Buffer
 	if err := o.file.Write(&buf); err != nil {

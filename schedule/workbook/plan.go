@@ -19,6 +19,10 @@ type Block struct {
 	// no results. Rows are asked for in rising order, each once, and again for
 	// each time that the workbook is written.
 	Cells func(row int) []schedule.Value
+	// Link returns a column of the block, counted from 0, whose cell in a row
+	// leads to a place in the workbook ('Sheet'!A1); no place: it leads
+	// nowhere. nil: no cell does.
+	Link func(row int) (column int, place string)
 }
 
 // Plan says where results go in a workbook, before anything is written.

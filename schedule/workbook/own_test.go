@@ -1,0 +1,55 @@
+package workbook
+
+import (
+	"bytes"
+	"fmt"
+	"github.com/stretchr/testify/assert"
+	"github.com/xuri/excelize/v2"
+	"io"
+	"stanchion/schedule/workbook/internal/markup"
+	"strings"
+	"testing"
+
+	"github.com/stretchr/testify/require"
+)
+
+// BenchmarkOwnSheet makes a sheet of ours as long as a schedule of which every
+// row has a problem.
+func BenchmarkOwnSheet(b *testing.B) {
+	s := Sheet{Name: "Problems", Rows: [][]Cell{{{Value: "Cell", Look: Look{Role: Heading}}}}}
+	for r := range 20_000 {
+		row := []Cell{{Value: fmt.Sprintf("Columns!A%d", r+7), Link: fmt.Sprintf("'Columns'!A%d", r+7)}}
+		for c := range 7 {
+			row = append(row, Cell{Value: fmt.Sprintf("value %d", c), Look: Look{Wrap: true}})
+		}
+		s.Rows = append(s.Rows, row)
+	}
+	plan := planFor(b, packed(b, simple(b, 14)), simpleBlock(14))
+	for b.Loop() {
+		require.NoError(b, plan.WriteTo(io.Discard, []Sheet{s}))
+	}
+}
+
+func TestLinksOfOwnSheets(t *testing.T) {
+	sheets := ownSheets()
+	sheets[0].Rows[0][0].Link = "'It''s & more'!A1"
+	var alone bytes.Buffer
+	require.NoError(t, WriteNew(&alone, sheets))
+	for name, data := range map[string][]byte{"grafted": annotate(t, rich(t), richBlock(), sheets...), "alone": alone.Bytes()} {
+		f, err := excelize.OpenReader(bytes.NewReader(data))
+		require.NoError(t, err)
+		for cell, want := range map[string]string{"A1": "'It''s & more'!A1", "A3": "Columns!A6"} {
+			linked, target, err := f.GetCellHyperLink("Summary", cell)
+			require.NoError(t, err)
+			assert.True(t, linked, name)
+			assert.Equal(t, want, target, name)
+		}
+	}
+}
+
+func TestMoreLinksThanASheetHolds(t *testing.T) {
+	l := linking{list: make([]link, maxLinks+1)}
+	var out bytes.Buffer
+	l.before(&out, &markup.Token{Kind: markup.End}, 0)
+	assert.Equal(t, maxLinks, strings.Count(out.String(), "<hyperlink "))
+}
