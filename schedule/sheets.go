@@ -118,7 +118,9 @@ func noHeader(src Source, opts *Options, l *layout) error {
 	if l == nil {
 		return r
 	}
-	r.What = fmt.Sprintf("no header was recognised: nothing stands for %s", strings.Join(l.missing(!opts.LoadsOptional), " and "))
+	if missing := l.missing(!opts.LoadsOptional); len(missing) == 1 && !opts.LoadsOptional {
+		r.What += ": nothing stands for " + missing[0]
+	}
 	if l.sheet != "" {
 		r.What += fmt.Sprintf(" on sheet %q, which comes nearest", l.sheet)
 	}
