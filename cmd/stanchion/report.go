@@ -8,6 +8,7 @@ import (
 	"strings"
 
 	"stanchion/design"
+	"stanchion/design/search"
 	"stanchion/schedule"
 	"stanchion/schedule/summary"
 )
@@ -183,22 +184,29 @@ func (r *run) lightest(ctx context.Context, lines []summary.Line) []string {
 
 // sayNotRead lists why members could not be read.
 func (r *run) sayNotRead() {
-	lines := r.tally.NotRead[:min(shownNotRead, len(r.tally.NotRead))]
-	if len(lines) == 0 {
+	list := r.tally.NotRead
+	if len(list) == 0 {
 		return
 	}
 	r.print("", "Not read:")
-	for i := range lines {
-		l := &lines[i]
-		for _, p := range l.Member.Problems {
-			r.paragraph("  ", p.Cell+": "+p.Message())
+	shown := list[:min(shownNotRead, len(list))]
+	more := r.tally.Unlisted
+	for i, reason := range list {
+		if i >= len(shown) {
+			more += reason.Count
+			continue
 		}
-		if len(l.Member.Problems) == 0 {
-			r.paragraph("  ", l.Member.Column.Cell+": "+strings.Join(l.Result.Notes, "; "))
+		cell := reason.Cell
+		if reason.Count > 1 {
+			cell += fmt.Sprintf(" and %d more", reason.Count-1)
 		}
+		r.paragraph("  ", cell+": "+reason.Text)
 	}
-	if more := r.tally.Count[design.NotRead] - len(lines); more > 0 {
+	if more > 0 {
 		r.print(fmt.Sprintf("  and %d more: see the result column \"note\"", more))
+	}
+	if r.tally.Resized && r.mode == search.Check {
+		r.paragraph("  ", "The sections that an earlier run chose are results and not given: copy them into a column headed Section to have them checked.")
 	}
 }
 

@@ -5,6 +5,7 @@ package summary
 import (
 	"cmp"
 	"slices"
+	"strings"
 
 	"stanchion/design"
 	"stanchion/schedule"
@@ -16,9 +17,13 @@ type Tally struct {
 	Count [4]int // of members, by design.Status
 
 	// Worst are members that fail or have no section, the greatest utilisation
-	// first, and NotRead those that could not be read, in their order: as many
-	// of each as were asked for.
-	Worst, NotRead []Line
+	// first, and NotRead the reasons why others could not be read, in the order
+	// of the schedule: as many of each as were asked for. Unlisted counts the
+	// reasons beyond those.
+	Worst    []Line
+	NotRead  []Reason
+	Unlisted int
+	Resized  bool // a member that could not be read has a section of an earlier run
 
 	keep     int
 	familyOf func(section string) string
@@ -28,6 +33,13 @@ type Tally struct {
 
 // size is a section in a grade.
 type size struct{ section, grade string }
+
+// Reason is why members could not be read.
+type Reason struct {
+	Cell  string // the first
+	Text  string
+	Count int // of cells
+}
 
 // Line is one member with its result.
 type Line struct {
@@ -65,10 +77,32 @@ func (t *Tally) Add(m *schedule.Member, r *design.Result) {
 	case design.NoSection:
 		t.addWorst(m, r)
 	case design.NotRead:
-		if len(t.NotRead) < t.keep {
-			t.NotRead = append(t.NotRead, Line{m, *r})
+		t.addNotRead(m, r)
+	}
+}
+
+func (t *Tally) addNotRead(m *schedule.Member, r *design.Result) {
+	t.Resized = t.Resized || m.Earlier.Section != ""
+	for _, p := range m.Problems {
+		t.addReason(p.Cell, p.Message())
+	}
+	if len(m.Problems) == 0 {
+		t.addReason(m.Column.Cell, strings.Join(r.Notes, "; "))
+	}
+}
+
+func (t *Tally) addReason(cell, text string) {
+	for i := range t.NotRead {
+		if t.NotRead[i].Text == text {
+			t.NotRead[i].Count++
+			return
 		}
 	}
+	if len(t.NotRead) == t.keep {
+		t.Unlisted++
+		return
+	}
+	t.NotRead = append(t.NotRead, Reason{cell, text, 1})
 }
 
 func (t *Tally) addSteel(m *schedule.Member, r *design.Result) {

@@ -31,7 +31,18 @@ func TestTallyKeepsTheWorst(t *testing.T) {
 	assert.Equal(t, []string{"d", "b", "a"}, marks)
 	assert.Equal(t, [4]int{1, 4, 1, 1}, y.Count)
 	assert.Equal(t, 7, y.Members())
-	assert.Equal(t, "g", y.NotRead[0].Member.Column.Mark)
+}
+
+func TestTallyJoinsEqualReasons(t *testing.T) {
+	y := NewTally(2, func(string) string { return "" })
+	for _, c := range [][2]string{{"A1", "no section"}, {"A2", "too long"}, {"A3", "no section"}, {"A4", "too short"}} {
+		m := &schedule.Member{Column: design.Column{Cell: c[0]}}
+		y.Add(m, &design.Result{Status: design.NotRead, Notes: []string{c[1]}})
+	}
+	m := &schedule.Member{Problems: []*schedule.Problem{{Cell: "B5", What: "too long"}, {Cell: "C5", What: "N_Ed"}}}
+	y.Add(m, &design.Result{Status: design.NotRead})
+	assert.Equal(t, []Reason{{"A1", "no section", 2}, {"A2", "too long", 2}}, y.NotRead)
+	assert.Equal(t, 2, y.Unlisted)
 }
 
 func TestTallyCountsSteelThatIsBought(t *testing.T) {
