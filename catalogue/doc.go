@@ -12,4 +12,12 @@
 // mm6, masses in kg/m. Axes are those of EN 1993-1-1: y-y major, z-z minor; for
 // angles y-y is parallel to the shorter leg and z-z to the longer, with u-u and
 // v-v the principal axes. A channel is symmetric about y-y.
+//
+// Areas and moduli are exact for the outline that the standards draw. Torsion
+// constants follow the published expression of each family's own tables (El
+// Darwish and Johnston for the UK families, channels and angles; the annexes of
+// EN 10210-2 and EN 10219-2 for hollow sections); warping constants and shear
+// centres those of thin-walled theory. The tests hold all of them against
+// section tables, against the outline integrated as a polygon, and against a
+// finite-element solution of torsion.
 package catalogue

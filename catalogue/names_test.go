@@ -122,6 +122,11 @@ func TestEveryNameIsReadBack(t *testing.T) {
 		got, err := Default().Find(s.Name(), FindOptions{})
 		require.NoError(t, err, s.Name())
 		require.Same(t, s, got, s.Name())
+		for _, o := range []FindOptions{{}, {ColdFormed: true}, {Families: []string{"CHS SHS RHS CF"}}, {Families: []string{"UKC"}, ColdFormed: true}} {
+			got, err := Default().Find(s.FullName(), o)
+			require.NoError(t, err, s.FullName())
+			require.Same(t, s, got, s.FullName())
+		}
 	}
 }
 

@@ -71,11 +71,21 @@ type Properties struct {
 // flange's of I, H and channel sections, the wall's or leg's otherwise.
 func (s *Section) Thickness() float64 { return s.Tf }
 
-// Name returns the name that the program writes and reads back without doubt:
-// the designation, with " CF" behind it for a cold-formed hollow section.
+// Name returns the name that the program writes: the designation, with " CF"
+// behind it for a cold-formed hollow section. Where cold formed is the setting,
+// only FullName reads back as a hot-finished one.
 func (s *Section) Name() string {
 	if s.Finish == ColdFormed {
 		return s.Designation + " CF"
 	}
 	return s.Designation
+}
+
+// FullName returns the name with the finish of a hollow section stated, which
+// reads back as this section whatever FindOptions say.
+func (s *Section) FullName() string {
+	if s.Finish == HotFinished {
+		return s.Designation + " HF"
+	}
+	return s.Name()
 }
