@@ -27,8 +27,17 @@ type Item struct {
 	Remark  string // what a person should know of how it was counted
 }
 
-// LeftOut is a member that is not counted, and why.
+// LeftOut is a member that a person should look at: in most lists one that is
+// not counted, and why.
 type LeftOut struct{ Name, Cell, Why string }
+
+// String returns "C4 L1 to L2 (Columns!A9): it has no section".
+func (l *LeftOut) String() string {
+	if l.Cell == "" || l.Cell == l.Name {
+		return l.Name + ": " + l.Why
+	}
+	return l.Name + " (" + l.Cell + "): " + l.Why
+}
 
 // ItemOf returns a column with a section as the take-off counts it.
 func ItemOf(col *design.Column, s *catalogue.Section, grade string) Item {

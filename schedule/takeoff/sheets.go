@@ -1,0 +1,242 @@
+package takeoff
+
+import (
+	"fmt"
+	"strings"
+
+	"stanchion/schedule/workbook"
+)
+
+// The names that the sheets want.
+const (
+	Sheet        = "Take-off"
+	CuttingSheet = "Cutting list"
+)
+
+// The number formats of the sheets.
+const (
+	wholeFormat  = "#,##0"
+	metreFormat  = "#,##0.00"
+	lengthFormat = "0.000"
+	tonneFormat  = "#,##0.000"
+	areaFormat   = "#,##0.0"
+	kgFormat     = "0.0##"
+	moneyFormat  = "#,##0"
+)
+
+// Sheets lays the take-off out as sheets of a workbook. file is the name of
+// the schedule, for the foot of the page.
+func (t *TakeOff) Sheets(file string) []workbook.Sheet {
+	p := &page{Page: workbook.NewPage(Sheet, "Take-off", 14, 21, 9, 9, 9, 11, 9, 11, 11, 13, 12), t: t}
+	p.Landscape = true
+	p.Footer = file
+	p.notCounted()
+	p.totals()
+	p.bySection()
+	p.byLevel()
+	p.byFamily()
+	p.splices()
+	p.remarks()
+	p.Across(8, workbook.Cell{Value: exactness, Look: workbook.Look{Role: workbook.Remark}})
+	return []workbook.Sheet{p.Sheet, t.cuttingSheet(file)}
+}
+
+// exactness says what the sums rest on.
+const exactness = "Mass is the published mass per metre times the length, each piece to the gram; every table adds up to the same total. " +
+	"Painted area is the outside surface of the lengths, without ends and fittings. Allowances are parts of the net mass, priced as the steel is."
+
+// page is the sheet of tables: three columns that name a row, then its amounts.
+type page struct {
+	*workbook.Page
+	t *TakeOff
+}
+
+// amounts are the cells of a row from the fourth column on. pieces and kgM are
+// left blank where they are 0.
+func (p *page) amounts(pieces int64, kgM float64, a *Amounts) []workbook.Cell {
+	cells := []workbook.Cell{
+		some(float64(pieces), wholeFormat), some(float64(a.Lengths), wholeFormat), some(a.Metres(), metreFormat), some(kgM, kgFormat),
+		workbook.NumberCell(a.Tonnes(), tonneFormat), some(a.SquareMetres(), areaFormat),
+	}
+	if p.t.HasCost() {
+		cells = append(cells, workbook.NumberCell(a.Money(), moneyFormat))
+	}
+	if p.t.HasCarbon() {
+		cells = append(cells, workbook.NumberCell(a.TonnesCO2e(), tonneFormat))
+	}
+	return cells
+}
+
+func some(x float64, format string) workbook.Cell {
+	if x == 0 {
+		return workbook.TextCell("")
+	}
+	return workbook.NumberCell(x, format)
+}
+
+// table starts a table: the headings of its first three columns, then those of
+// the amounts.
+func (p *page) table(a, b, c string) {
+	p.Blank()
+	headings := []string{a, b, c, ">Pieces", ">Lengths", ">Length [m]", ">kg/m", ">Mass [t]", ">Painted [m2]"}
+	if p.t.HasCost() {
+		headings = append(headings, ">Cost")
+	}
+	if p.t.HasCarbon() {
+		headings = append(headings, ">CO2e [t]")
+	}
+	p.Headings(headings...)
+}
+
+func (p *page) line(a, b, c string, amounts []workbook.Cell) {
+	p.Row(append([]workbook.Cell{workbook.TextCell(a), workbook.TextCell(b), workbook.TextCell(c)}, amounts...)...)
+}
+
+// total ends a table.
+func (p *page) total(name string, pieces int64, a *Amounts) {
+	p.Totals(append([]workbook.Cell{workbook.TextCell(name), {}, {}}, p.amounts(pieces, 0, a)...)...)
+}
+
+func (p *page) notCounted() {
+	n := len(p.t.LeftOut)
+	if n == 0 {
+		return
+	}
+	p.Across(8, workbook.Cell{Value: fmt.Sprintf("✗ %d members are not counted: see below.", n), Look: workbook.Look{Role: workbook.NotRead}})
+}
+
+// totals says what all of it comes to.
+func (p *page) totals() {
+	t := p.t
+	p.table("Total", "", "")
+	net := t.Net
+	p.line("net", "", "", p.amounts(t.Pieces, 0, &net))
+	connections, waste := t.Allowance()
+	for _, a := range []struct {
+		name string
+		part float64
+		*Amounts
+	}{{"for connections", t.Connections, &connections}, {"for waste", t.Waste, &waste}} {
+		if a.part > 0 {
+			p.line(a.name, Percent(a.part), "", p.amounts(0, 0, a.Amounts))
+		}
+	}
+	gross := t.Gross()
+	p.total("with allowances", t.Pieces, &gross)
+	p.Blank()
+	for _, line := range t.Facts() {
+		p.Row(workbook.LabelCell(line[0]), workbook.Cell{Value: line[1]})
+	}
+}
+
+// Percent writes a part in per cent: 0.065 as "6.5 %".
+func Percent(part float64) string {
+	return strings.TrimSuffix(fmt.Sprintf("%.4g", 100*part), ".") + " %"
+}
+
+func (p *page) bySection() {
+	p.table("Family", "Section", "Grade")
+	for i := range p.t.Sections {
+		s := &p.t.Sections[i]
+		p.line(FamilyName(s.Section), s.Section.Name(), s.Grade, p.amounts(s.Pieces, s.Section.Mass, &s.Amounts))
+	}
+	p.total("all", p.t.Pieces, &p.t.Net)
+}
+
+func (p *page) byLevel() {
+	p.table("Level", "", "")
+	for i := range p.t.Levels {
+		l := &p.t.Levels[i]
+		p.line(orNone(l.Name()), "", "", p.amounts(0, 0, &l.Amounts))
+	}
+	p.total("all", 0, &p.t.Net)
+}
+
+func orNone(level string) string {
+	if level == "" {
+		return "not said"
+	}
+	return level
+}
+
+func (p *page) byFamily() {
+	p.table("Family", "", "")
+	for i := range p.t.Families {
+		f := &p.t.Families[i]
+		p.line(f.Family, "", "", p.amounts(f.Pieces, 0, &f.Amounts))
+	}
+	p.total("all", p.t.Pieces, &p.t.Net)
+}
+
+// splices lists the splices by what they join.
+func (p *page) splices() {
+	if len(p.t.Splices) == 0 {
+		return
+	}
+	p.Blank()
+	p.Headings("Splice at", "Below", "", ">Number", "Above", "")
+	for _, s := range p.t.SpliceKinds() {
+		p.Row(workbook.TextCell(s.Level), workbook.TextCell(s.Lower), workbook.TextCell(""), workbook.NumberCell(float64(s.Number), wholeFormat),
+			workbook.TextCell(s.Upper), workbook.TextCell(""))
+		p.span(1, 2)
+		p.span(4, 5)
+	}
+	p.Totals(workbook.TextCell("all"), workbook.Cell{}, workbook.Cell{}, workbook.NumberCell(float64(p.t.SpliceCount()), wholeFormat), workbook.Cell{}, workbook.Cell{})
+}
+
+// span merges cells of the last row.
+func (p *page) span(from, to int) {
+	n := len(p.Rows)
+	p.Merges = append(p.Merges, fmt.Sprintf("%c%d:%c%d", 'A'+from, n, 'A'+to, n))
+}
+
+// remarks lists what a person should look at.
+func (p *page) remarks() {
+	t := p.t
+	for _, list := range []struct {
+		heading string
+		lines   []LeftOut
+	}{{"Not counted", t.LeftOut}, {"Counted, and they fail", t.Failing}, {"Counted, with a remark", t.Remarks}} {
+		if len(list.lines) == 0 {
+			continue
+		}
+		p.Blank()
+		p.Headings(list.heading, "Cell", "Why", "", "", "", "", "")
+		p.span(2, 7)
+		for i := range list.lines {
+			l := &list.lines[i]
+			p.Row(workbook.TextCell(l.Name), workbook.TextCell(l.Cell), workbook.WordsCell(l.Why), workbook.TextCell(""), workbook.TextCell(""),
+				workbook.TextCell(""), workbook.TextCell(""), workbook.TextCell(""))
+			p.span(2, 7)
+		}
+	}
+	p.Blank()
+}
+
+// cuttingSheet lists the pieces by section and length.
+func (t *TakeOff) cuttingSheet(file string) workbook.Sheet {
+	p := workbook.NewPage(CuttingSheet, "Cutting list", 10, 21, 9, 11, 9, 12, 11, 14, 60)
+	p.Landscape, p.Footer = true, file
+	p.Blank()
+	p.Headings("Family", "Section", "Grade", ">Length [m]", ">Number", ">Together [m]", ">Mass [t]", "Transport", "Marks")
+	head := len(p.Rows)
+	p.Freeze()
+	limit := whole(t.Transport * 1e3)
+	for i := range t.Cuts {
+		c := &t.Cuts[i]
+		transport := workbook.TextCell("")
+		if limit > 0 && c.Length > limit {
+			transport = workbook.Cell{Value: "too long", Look: workbook.Look{Role: workbook.Fails}}
+		}
+		p.Row(workbook.TextCell(FamilyName(c.Section)), workbook.TextCell(c.Section.Name()), workbook.TextCell(c.Grade),
+			workbook.NumberCell(float64(c.Length)/1e6, lengthFormat), workbook.NumberCell(float64(c.Number), wholeFormat),
+			workbook.NumberCell(c.Metres(), metreFormat), workbook.NumberCell(c.Tonnes(), tonneFormat), transport,
+			workbook.WordsCell(strings.Join(c.Marks, "; ")))
+	}
+	if len(p.Rows) > head {
+		p.Filter = fmt.Sprintf("A%d:I%d", head, len(p.Rows))
+	}
+	p.Totals(workbook.TextCell("all"), workbook.Cell{}, workbook.Cell{}, workbook.Cell{}, workbook.NumberCell(float64(t.Pieces), wholeFormat),
+		workbook.NumberCell(t.Net.Metres(), metreFormat), workbook.NumberCell(t.Net.Tonnes(), tonneFormat), workbook.Cell{}, workbook.Cell{})
+	return p.Sheet
+}

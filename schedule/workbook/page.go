@@ -1,0 +1,80 @@
+package workbook
+
+import (
+	"fmt"
+	"strings"
+)
+
+// Page is a Sheet being filled from the top.
+type Page struct{ Sheet }
+
+// NewPage starts a page with a title and columns of these widths.
+func NewPage(name, title string, widths ...float64) *Page {
+	p := &Page{Sheet{Name: name, Widths: widths, PagesWide: 1}}
+	p.Row(Cell{Value: title, Look: Look{Role: Title}})
+	return p
+}
+
+// Row adds a row.
+func (p *Page) Row(cells ...Cell) { p.Rows = append(p.Rows, cells) }
+
+// Blank leaves a row out.
+func (p *Page) Blank() { p.Row() }
+
+// Headings adds a row of headings over columns of text. One that opens with
+// ">" stands over numbers.
+func (p *Page) Headings(texts ...string) {
+	var cells []Cell
+	for _, t := range texts {
+		text, number := strings.CutPrefix(t, ">")
+		look := Look{Role: Heading}
+		if number {
+			look.Align = Right
+		}
+		cells = append(cells, Cell{Value: text, Look: look})
+	}
+	p.Row(cells...)
+}
+
+// Totals adds a row of sums.
+func (p *Page) Totals(cells ...Cell) {
+	for i := range cells {
+		cells[i].Look.Role = Total
+	}
+	p.Row(cells...)
+}
+
+// Across adds a text over the first columns of the page, as high as it needs.
+func (p *Page) Across(columns int, c Cell) {
+	c.Look.Wrap = true
+	p.Row(c)
+	n := len(p.Rows)
+	p.Merges = append(p.Merges, fmt.Sprintf("A%d:%s%d", n, columnName(columns-1), n))
+	wide := 0.0
+	for _, w := range p.Widths[:min(columns, len(p.Widths))] {
+		wide += w
+	}
+	if p.Heights == nil {
+		p.Heights = map[int]float64{}
+	}
+	const points = 15.5 // of a line
+	lines := 1 + int(float64(len(fmt.Sprint(c.Value)))/max(1, wide))
+	p.Heights[n] = points * float64(lines)
+}
+
+// Freeze keeps the rows so far in view and repeats them on every printed page.
+func (p *Page) Freeze() { p.FreezeRows, p.RepeatRows = len(p.Rows), len(p.Rows) }
+
+// TextCell is a text of a table.
+func TextCell(s string) Cell { return Cell{Value: s, Look: Look{Role: Result}} }
+
+// WordsCell is a text of a table that may need several lines.
+func WordsCell(s string) Cell { return Cell{Value: s, Look: Look{Role: Result, Wrap: true}} }
+
+// NumberCell is a number of a table, shown in a number format.
+func NumberCell(x float64, format string) Cell {
+	return Cell{Value: x, Look: Look{Role: Result, Format: format}}
+}
+
+// LabelCell names what stands beside it.
+func LabelCell(s string) Cell { return Cell{Value: s, Look: Look{Role: Label}} }
