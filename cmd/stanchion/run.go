@@ -21,6 +21,8 @@ type run struct {
 	input string
 	mode  search.Mode
 
+	loadsOptional bool // a schedule without N_Ed will do
+
 	source   schedule.Source
 	plan     *schedule.Plan
 	cat      *catalogue.Catalogue
@@ -99,6 +101,8 @@ func (r *run) scan(ctx context.Context, assignments []schedule.Assignment) error
 		Settings: assignments,
 		National: r.national,
 		Stock:    r.stock,
+
+		LoadsOptional: r.loadsOptional,
 	}
 	if r.flags.settings != "" {
 		s, err := openSource(ctx, r.con, r.flags.settings)

@@ -37,13 +37,14 @@ func TestScripts(t *testing.T) {
 			return err
 		},
 		Cmds: map[string]func(*testscript.TestScript, bool, []string){
-			"exits": scriptExits,
-			"book":  scriptBook,
-			"dump":  scriptDump,
-			"rows":  scriptRows,
-			"parts": scriptParts,
-			"same":  scriptSame,
-			"type":  scriptType,
+			"exits":  scriptExits,
+			"book":   scriptBook,
+			"dump":   scriptDump,
+			"rows":   scriptRows,
+			"parts":  scriptParts,
+			"same":   scriptSame,
+			"addsup": scriptAddsUp,
+			"type":   scriptType,
 		},
 	})
 }

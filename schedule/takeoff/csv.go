@@ -139,3 +139,10 @@ func decimals(n int64, places, least int, point byte) string {
 	}
 	return sign + whole + string(point) + part
 }
+
+// IsCSV reports whether the first line of a file is that of a list written by
+// WriteCSV.
+func IsCSV(line string) bool {
+	line = strings.TrimRight(line, "\r\n")
+	return line == strings.Join(csvHeader, ",") || line == strings.Join(csvHeader, ";")
+}

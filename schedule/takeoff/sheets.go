@@ -27,9 +27,10 @@ const (
 // Sheets lays the take-off out as sheets of a workbook. file is the name of
 // the schedule, for the foot of the page.
 func (t *TakeOff) Sheets(file string) []workbook.Sheet {
-	p := &page{Page: workbook.NewPage(Sheet, "Take-off", 14, 21, 9, 9, 9, 11, 9, 11, 11, 13, 12), t: t}
+	p := &page{Page: workbook.NewPage(Sheet, "Take-off", 17, 22, 10, 10, 10, 13, 9, 12, 15, 13, 12), t: t}
 	p.Landscape = true
 	p.Footer = file
+	p.Row(workbook.Cell{Value: "of " + file, Look: workbook.Look{Role: workbook.Remark}})
 	p.notCounted()
 	p.totals()
 	p.bySection()
@@ -59,10 +60,10 @@ func (p *page) amounts(pieces int64, kgM float64, a *Amounts) []workbook.Cell {
 		workbook.NumberCell(a.Tonnes(), tonneFormat), some(a.SquareMetres(), areaFormat),
 	}
 	if p.t.HasCost() {
-		cells = append(cells, workbook.NumberCell(a.Money(), moneyFormat))
+		cells = append(cells, rated(a.Money(), moneyFormat))
 	}
 	if p.t.HasCarbon() {
-		cells = append(cells, workbook.NumberCell(a.TonnesCO2e(), tonneFormat))
+		cells = append(cells, rated(a.TonnesCO2e(), tonneFormat))
 	}
 	return cells
 }
@@ -70,6 +71,14 @@ func (p *page) amounts(pieces int64, kgM float64, a *Amounts) []workbook.Cell {
 func some(x float64, format string) workbook.Cell {
 	if x == 0 {
 		return workbook.TextCell("")
+	}
+	return workbook.NumberCell(x, format)
+}
+
+// rated is what a rate gives, and says where there is none.
+func rated(x float64, format string) workbook.Cell {
+	if x == 0 {
+		return workbook.Cell{Value: "no rate", Look: workbook.Look{Role: workbook.Result, Align: workbook.Right}}
 	}
 	return workbook.NumberCell(x, format)
 }
@@ -86,10 +95,22 @@ func (p *page) table(a, b, c string) {
 		headings = append(headings, ">CO2e [t]")
 	}
 	p.Headings(headings...)
+	p.named(b, c)
 }
 
 func (p *page) line(a, b, c string, amounts []workbook.Cell) {
 	p.Row(append([]workbook.Cell{workbook.TextCell(a), workbook.TextCell(b), workbook.TextCell(c)}, amounts...)...)
+	p.named(b, c)
+}
+
+// named joins the cells that name a row where they are not all needed.
+func (p *page) named(b, c string) {
+	switch {
+	case b == "":
+		p.Span(0, 2)
+	case c == "":
+		p.Span(1, 2)
+	}
 }
 
 // total ends a table.
@@ -102,7 +123,7 @@ func (p *page) notCounted() {
 	if n == 0 {
 		return
 	}
-	p.Across(8, workbook.Cell{Value: fmt.Sprintf("✗ %d members are not counted: see below.", n), Look: workbook.Look{Role: workbook.NotRead}})
+	p.Across(8, workbook.Cell{Value: plural(int64(n), "member is", "members are") + " not counted: see below", Look: workbook.Look{Role: workbook.NotRead}})
 }
 
 // totals says what all of it comes to.
@@ -174,20 +195,21 @@ func (p *page) splices() {
 		return
 	}
 	p.Blank()
-	p.Headings("Splice at", "Below", "", ">Number", "Above", "")
+	p.Headings("Splices at", "Section below", "", "Section above", "", "", ">Number")
+	p.spliced()
 	for _, s := range p.t.SpliceKinds() {
-		p.Row(workbook.TextCell(s.Level), workbook.TextCell(s.Lower), workbook.TextCell(""), workbook.NumberCell(float64(s.Number), wholeFormat),
-			workbook.TextCell(s.Upper), workbook.TextCell(""))
-		p.span(1, 2)
-		p.span(4, 5)
+		p.Row(workbook.TextCell(s.Level), workbook.TextCell(s.Lower), workbook.TextCell(""), workbook.TextCell(s.Upper), workbook.TextCell(""),
+			workbook.TextCell(""), workbook.NumberCell(float64(s.Number), wholeFormat))
+		p.spliced()
 	}
-	p.Totals(workbook.TextCell("all"), workbook.Cell{}, workbook.Cell{}, workbook.NumberCell(float64(p.t.SpliceCount()), wholeFormat), workbook.Cell{}, workbook.Cell{})
+	p.Totals(workbook.TextCell("all"), workbook.Cell{}, workbook.Cell{}, workbook.Cell{}, workbook.Cell{}, workbook.Cell{},
+		workbook.NumberCell(float64(p.t.SpliceCount()), wholeFormat))
 }
 
-// span merges cells of the last row.
-func (p *page) span(from, to int) {
-	n := len(p.Rows)
-	p.Merges = append(p.Merges, fmt.Sprintf("%c%d:%c%d", 'A'+from, n, 'A'+to, n))
+// spliced joins the cells of a section with its grade.
+func (p *page) spliced() {
+	p.Span(1, 2)
+	p.Span(3, 5)
 }
 
 // remarks lists what a person should look at.
@@ -202,12 +224,12 @@ func (p *page) remarks() {
 		}
 		p.Blank()
 		p.Headings(list.heading, "Cell", "Why", "", "", "", "", "")
-		p.span(2, 7)
+		p.Span(2, 7)
 		for i := range list.lines {
 			l := &list.lines[i]
 			p.Row(workbook.TextCell(l.Name), workbook.TextCell(l.Cell), workbook.WordsCell(l.Why), workbook.TextCell(""), workbook.TextCell(""),
 				workbook.TextCell(""), workbook.TextCell(""), workbook.TextCell(""))
-			p.span(2, 7)
+			p.Span(2, 7)
 		}
 	}
 	p.Blank()
@@ -215,8 +237,9 @@ func (p *page) remarks() {
 
 // cuttingSheet lists the pieces by section and length.
 func (t *TakeOff) cuttingSheet(file string) workbook.Sheet {
-	p := workbook.NewPage(CuttingSheet, "Cutting list", 10, 21, 9, 11, 9, 12, 11, 14, 60)
+	p := workbook.NewPage(CuttingSheet, "Cutting list", 10, 22, 10, 13, 11, 15, 12, 12, 60)
 	p.Landscape, p.Footer = true, file
+	p.Row(workbook.Cell{Value: "of " + file, Look: workbook.Look{Role: workbook.Remark}})
 	p.Blank()
 	p.Headings("Family", "Section", "Grade", ">Length [m]", ">Number", ">Together [m]", ">Mass [t]", "Transport", "Marks")
 	head := len(p.Rows)

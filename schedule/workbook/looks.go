@@ -116,6 +116,7 @@ func (l Look) draw(s *excelize.Style) {
 	case Total:
 		s.Font.Bold = true
 		s.Border = []excelize.Border{{Type: "top", Color: lineHard, Style: 1}}
+		l.indent(s)
 	case Input:
 		fill(s, fillInput)
 		box(s, lineSoft)

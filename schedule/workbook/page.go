@@ -27,7 +27,7 @@ func (p *Page) Headings(texts ...string) {
 	var cells []Cell
 	for _, t := range texts {
 		text, number := strings.CutPrefix(t, ">")
-		look := Look{Role: Heading}
+		look := Look{Role: Heading, Align: Left}
 		if number {
 			look.Align = Right
 		}
@@ -62,18 +62,26 @@ func (p *Page) Across(columns int, c Cell) {
 	p.Heights[n] = points * float64(lines)
 }
 
+// Span merges cells of the last row, from one column to another.
+func (p *Page) Span(from, to int) {
+	n := len(p.Rows)
+	p.Merges = append(p.Merges, fmt.Sprintf("%s%d:%s%d", columnName(from), n, columnName(to), n))
+}
+
 // Freeze keeps the rows so far in view and repeats them on every printed page.
 func (p *Page) Freeze() { p.FreezeRows, p.RepeatRows = len(p.Rows), len(p.Rows) }
 
 // TextCell is a text of a table.
-func TextCell(s string) Cell { return Cell{Value: s, Look: Look{Role: Result}} }
+func TextCell(s string) Cell { return Cell{Value: s, Look: Look{Role: Result, Align: Left}} }
 
 // WordsCell is a text of a table that may need several lines.
-func WordsCell(s string) Cell { return Cell{Value: s, Look: Look{Role: Result, Wrap: true}} }
+func WordsCell(s string) Cell {
+	return Cell{Value: s, Look: Look{Role: Result, Align: Left, Wrap: true}}
+}
 
 // NumberCell is a number of a table, shown in a number format.
 func NumberCell(x float64, format string) Cell {
-	return Cell{Value: x, Look: Look{Role: Result, Format: format}}
+	return Cell{Value: x, Look: Look{Role: Result, Align: Right, Format: format}}
 }
 
 // LabelCell names what stands beside it.
