@@ -4,6 +4,8 @@ import (
 	"context"
 	"errors"
 	"fmt"
+	"maps"
+	"slices"
 
 	"stanchion/design"
 	"stanchion/design/ec3"
@@ -16,6 +18,11 @@ import (
 // engine's SizeAll. The least total is found exactly, or, with a limit on
 // sizes, the Curve says what gap may be left.
 //
+// Where the lengths of a stack depend on each other's sections (shared moments,
+// carried weight: Engine.Coupled), the decision is made as if they did not,
+// and made again without whatever fails beside its neighbours, until nothing
+// does: every section then passes, but a lighter choice may exist.
+//
 // The errors are those of SizeAll, and those of options that cannot be met.
 func Size(ctx context.Context, e *search.Engine, cols []design.Column, o Options, workers int, progress func(done int)) (*Decision, error) {
 	if err := o.Validate(); err != nil {
@@ -27,7 +34,7 @@ func Size(ctx context.Context, e *search.Engine, cols []design.Column, o Options
 		addNotes(results, notes)
 		return &Decision{Results: results}, err
 	}
-	r := &run{engine: e, cols: cols, options: &o, plan: tie(cols, all), workers: workers, notes: notes}
+	r := &run{engine: e, cols: cols, options: &o, plan: tie(cols, all), workers: workers, doubts: notes}
 	return r.decide(ctx, progress)
 }
 
@@ -38,7 +45,8 @@ type run struct {
 	options *Options
 	plan    *plan
 	workers int
-	notes   map[int]string // by column
+	doubts  map[int]string // notes on the place of columns in their stacks
+	notes   map[int]string // the same and what the decision has to say, by column
 	curve   []Trade
 }
 
@@ -48,20 +56,54 @@ func (r *run) decide(ctx context.Context, progress func(int)) (*Decision, error)
 		return nil, err
 	}
 	b := &builder{engine: r.engine, cols: r.cols, plan: r.plan, options: options}
+	for {
+		d, chosen, err := r.attempt(ctx, b, progress)
+		if d == nil {
+			return nil, err
+		}
+		if !r.engine.Coupled() || !b.ruleOut(chosen, d.Results) {
+			return d, errors.Join(defect, err)
+		}
+	}
+}
+
+// attempt decides with the options as they stand, and makes the results.
+func (r *run) attempt(ctx context.Context, b *builder, progress func(int)) (*Decision, []search.Chosen, error) {
+	r.notes, r.curve = maps.Clone(r.doubts), nil
 	silent := b.silent()
 	links := r.sound(b, r.plan.bridge(silent))
 	p := b.build(r.wanted(silent, links), r.spliceCost(), links)
 	choice, err := r.solve(ctx, p)
 	if err != nil {
-		return nil, err
+		return nil, nil, err
 	}
+	chosen := r.chosen(b, p, choice)
 	results := make([]design.Result, len(r.cols))
-	err = r.engine.Assign(ctx, r.cols, r.chosen(b, p, choice), results, r.workers, r.columns(progress))
+	err = r.engine.Assign(ctx, r.cols, chosen, results, r.workers, r.columns(progress))
 	if cancelled := ctx.Err(); cancelled != nil {
-		return nil, cancelled
+		return nil, nil, cancelled
 	}
 	addNotes(results, r.notes)
-	return &Decision{Results: results, Curve: r.curve}, errors.Join(defect, err)
+	return &Decision{Results: results, Curve: r.curve}, chosen, err
+}
+
+// ruleOut takes from the options what turned out to fail beside the sections
+// above and below, which options do not know, and reports whether there was
+// anything. Every call that does leaves fewer options, so that deciding again
+// and again ends.
+func (b *builder) ruleOut(chosen []search.Chosen, results []design.Result) bool {
+	found := false
+	for k := range chosen {
+		c := chosen[k].Candidate
+		failing := func(i int) bool { return results[i].Status == design.Fails }
+		if c == nil || !slices.ContainsFunc(chosen[k].Columns, failing) {
+			continue
+		}
+		o := &b.options[k]
+		o.Pass[slices.Index(o.List.Candidates, c)] = false
+		found = true
+	}
+	return found
 }
 
 // mayHave finds what the sets that are decided together may have.

@@ -159,3 +159,32 @@ func TestOptionsThatCannotBeMeant(t *testing.T) {
 		assert.Error(t, err)
 	}
 }
+
+// Where each length carries the weight of those above, every section that is
+// decided on passes under it, and the rules hold.
+func TestCoupledStacks(t *testing.T) {
+	e := engineOf(t, func(s *design.Settings) { s.SelfWeight = 1.35 * 40 }) // heavy, so that it decides
+	require.True(t, e.Coupled())
+	again := 0
+	for seed := range uint64(30) {
+		r := rand.New(rand.NewPCG(seed, 6))
+		cols := tower(r, 8)
+		for i := range cols {
+			cols[i].Given, cols[i].Group = "", ""
+			cols[i].Combinations[0].NEd *= 0.6
+		}
+		o := Options{Splices: EveryNth, Every: 1}
+		d := size(t, e, cols, o)
+		alone := size(t, engineOf(t, nil), cols, o)
+		ru := newRules(t, engineOf(t, nil), cols, &o)
+		holds(t, ru, d, &o, seed)
+		for i := range d.Results {
+			require.Equal(t, design.Passes, d.Results[i].Status, "seed %d", seed)
+			if d.Results[i].Section != alone.Results[i].Section {
+				again++
+			}
+		}
+		require.LessOrEqual(t, total(cols, alone.Results), total(cols, d.Results)*(1+1e-12))
+	}
+	assert.NotZero(t, again, "the weight decides somewhere")
+}
