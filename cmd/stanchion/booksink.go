@@ -59,7 +59,7 @@ func (s *bookSink) finish(ctx context.Context) error {
 	if err != nil {
 		return err
 	}
-	return place.WriteTo(&stopper{ctx, s.w}, summary.Sheets(info, s.run.tally, s.lines))
+	return place.WriteTo(&stopper{ctx, s.w}, append(summary.Sheets(info, s.run.tally, s.lines), s.run.takeoffSheets(s.lines)...))
 }
 
 // cells returns the results of a row: all of a member's on its first.
