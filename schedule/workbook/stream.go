@@ -198,12 +198,20 @@ func (w *rowWriter) row(t *markup.Token) error {
 		return explain(w.plan.book.name, err)
 	}
 	held := w.held.Bytes()
-	if i := bytes.LastIndex(held, []byte("<"+w.prefix+"extLst")); i >= 0 {
-		// An extension stands behind the cells of its row.
+	if i := w.extension(held); i >= 0 {
 		w.cells = append(w.cells, held[i:]...)
 		held = held[:i]
 	}
 	return w.emit(w.spanned(tag), held)
+}
+
+// extension finds the extension that stands behind the cells of a row; -1 where
+// there is none, as nearly always.
+func (w *rowWriter) extension(row []byte) int {
+	if !bytes.HasSuffix(bytes.TrimSpace(row), []byte("extLst>")) {
+		return -1
+	}
+	return bytes.LastIndex(row, []byte("<"+w.prefix+"extLst"))
 }
 
 // pass writes a row's tag; its content follows as it is.
