@@ -54,9 +54,9 @@ func newNames(opts *Options, set *Settings) (*names, error) {
 	return n, nil
 }
 
-// section resolves a section's name to the one that the program writes. The
-// families settle a name that fits sections of several; empty: those of the
-// settings do.
+// section resolves a section's name to the one that reads back whatever the
+// settings and families. The families settle a name that fits sections of
+// several; empty: those of the settings do.
 func (n *names) section(name string, families []string) (string, error) {
 	if len(families) == 0 {
 		families = n.set.Families
@@ -64,12 +64,12 @@ func (n *names) section(name string, families []string) (string, error) {
 	o := catalogue.FindOptions{ColdFormed: n.set.ColdFormed, Families: families}
 	if n.stock != nil {
 		if s, err := n.stock.Find(name, o); err == nil {
-			return s.Name(), nil
+			return s.FullName(), nil
 		}
 	}
 	s, err := catalogue.Default().Find(name, o)
 	if err == nil {
-		return s.Name(), nil
+		return s.FullName(), nil
 	}
 	if n.lax {
 		return name, nil

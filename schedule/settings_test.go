@@ -2,6 +2,7 @@ package schedule
 
 import (
 	"errors"
+	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
@@ -120,9 +121,13 @@ func TestStock(t *testing.T) {
 
 func TestGivenNamesAreSettledByFamily(t *testing.T) {
 	text := "Mark | Length | N_Ed | Section | Family\nC1 | 4 | 900 | 150x150x10 | SHS\n"
-	assert.Equal(t, "SHS 150x150x10.0", good(t, text).Given)
+	assert.Equal(t, "SHS 150x150x10.0 HF", good(t, text).Given)
 	assert.Equal(t, "SHS 150x150x10.0 CF", good(t, text, "hollow sections=cold formed").Given)
 	assert.Equal(t, "SHS 150x150x10.0 CF", good(t, "Mark | Length | N_Ed | Section\nC1 | 4 | 900 | 150x150x10 SHS CF").Given)
+	// The finish stands in the name that goes on: the search reads it under the
+	// row's families and the settings again.
+	assert.Equal(t, "SHS 150x150x10.0 CF", good(t, strings.Replace(text, "| SHS", "| SHS CF", 1)).Given)
+	assert.Equal(t, "SHS 150x150x10.0 HF", good(t, "Mark | Length | N_Ed | Section | Family\nC1 | 4 | 900 | SHS 150x150x10 HF | SHS CF\n").Given)
 	problem(t, "Mark | Length | N_Ed | Family\nC1 | 4 | 900 | wood")
 	problem(t, "Mark | Length | N_Ed | Grade\nC1 | 4 | 900 | S36")
 	assert.Equal(t, []string{"S275", "S355"}, good(t, "Mark | Length | N_Ed | Grade\nC1 | 4 | 900 | S275 S355").Grades)
