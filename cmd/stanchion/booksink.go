@@ -11,6 +11,7 @@ import (
 	"stanchion/design"
 	"stanchion/schedule"
 	"stanchion/schedule/summary"
+	"stanchion/schedule/takeoff"
 	"stanchion/schedule/workbook"
 )
 
@@ -59,7 +60,33 @@ func (s *bookSink) finish(ctx context.Context) error {
 	if err != nil {
 		return err
 	}
-	return place.WriteTo(&stopper{ctx, s.w}, append(summary.Sheets(info, s.run.tally, s.lines), s.run.takeoffSheets(s.lines)...))
+	return place.WriteTo(&stopper{ctx, s.w}, s.sheets(info))
+}
+
+// sheets are the project's own: the summary, the take-off, and what a person
+// must look at.
+func (s *bookSink) sheets(info *summary.Info) []workbook.Sheet {
+	overview, problems := summary.Sheets(info, s.run.tally, s.lines)
+	sheets := append([]workbook.Sheet{overview}, s.run.steelOf(s.lines).Sheets(info.File)...)
+	return append(sheets, problems)
+}
+
+// steelOf counts the steel of members as they were designed.
+func (r *run) steelOf(lines []summary.Line) *takeoff.TakeOff {
+	var items []takeoff.Item
+	var leftOut []takeoff.LeftOut
+	for i := range lines {
+		col, res := &lines[i].Member.Column, &lines[i].Result
+		section, err := r.section(res.Section)
+		if res.Status > design.Fails || err != nil {
+			leftOut = append(leftOut, takeoff.LeftOut{Name: takeoff.MemberName(col), Cell: col.Cell, Why: res.Status.String()})
+			continue
+		}
+		item := takeoff.ItemOf(col, section, res.Grade)
+		item.Failing = res.Status == design.Fails
+		items = append(items, item)
+	}
+	return takeoff.Of(items, leftOut, r.takeoffOptions())
 }
 
 // cells returns the results of a row: all of a member's on its first.

@@ -3,6 +3,7 @@ package main
 import (
 	"stanchion/catalogue"
 	"stanchion/design"
+	"stanchion/schedule/takeoff"
 )
 
 // national resolves the name of a national set, or of the user's own.
@@ -13,23 +14,25 @@ func (r *run) stock(file string) (*catalogue.Catalogue, error) {
 	return readStock(findFile(file, r.input))
 }
 
-// familyOf names the family of a section as the schedule and the settings take
-// it: with the finish of a cold-formed one.
-func (r *run) familyOf(section string) string {
-	if family, ok := r.families[section]; ok {
-		return family
-	}
-	s, err := r.cat.Find(section, catalogue.FindOptions{})
+// section returns the section of a result. One that was given need not be in
+// stock.
+func (r *run) section(name string) (*catalogue.Section, error) {
+	s, err := r.cat.Find(name, catalogue.FindOptions{})
 	if err != nil {
-		s, err = catalogue.Default().Find(section, catalogue.FindOptions{}) // given, not in stock
+		s, err = catalogue.Default().Find(name, catalogue.FindOptions{})
 	}
-	family := ""
-	if err == nil {
-		family = s.Family
-		if s.Finish == catalogue.ColdFormed {
-			family += " CF"
+	return s, err
+}
+
+// familyOf names the family of a result's section as the schedule and the
+// settings take it: with the finish of a cold-formed one.
+func (r *run) familyOf(section string) string {
+	family, ok := r.families[section]
+	if !ok {
+		if s, err := r.section(section); err == nil {
+			family = takeoff.FamilyName(s)
 		}
+		r.families[section] = family
 	}
-	r.families[section] = family
 	return family
 }

@@ -15,7 +15,6 @@ import (
 	"stanchion/design"
 	"stanchion/design/search"
 	"stanchion/schedule/outfile"
-	"stanchion/schedule/summary"
 	"stanchion/schedule/takeoff"
 	"stanchion/schedule/workbook"
 )
@@ -105,27 +104,12 @@ func (r *takeoffRun) count() error {
 	return nil
 }
 
+// takeoffOptions are what the settings ask of a take-off.
 func (r *run) takeoffOptions() takeoff.Options {
 	set := &r.plan.Settings
-	return takeoff.Options{Rates: set.Design.Rates, Connections: set.TakeOff.Connections, Waste: set.TakeOff.Waste, Transport: set.TakeOff.Transport}
-}
-
-// takeoffSheets lays out the steel of the members of a run.
-func (r *run) takeoffSheets(lines []summary.Line) []workbook.Sheet {
-	var items []takeoff.Item
-	var leftOut []takeoff.LeftOut
-	for i := range lines {
-		col, res := &lines[i].Member.Column, &lines[i].Result
-		section, err := r.find(res.Section, col)
-		if res.Status == design.NotRead || res.Status == design.NoSection || err != nil {
-			leftOut = append(leftOut, takeoff.LeftOut{Name: col.Mark, Cell: col.Cell, Why: res.Status.String()})
-			continue
-		}
-		it := takeoff.ItemOf(col, section, res.Grade)
-		it.Failing = res.Status == design.Fails
-		items = append(items, it)
+	return takeoff.Options{
+		Rates: set.Design.Rates, Connections: set.TakeOff.Connections, Waste: set.TakeOff.Waste, Transport: set.TakeOff.Transport,
 	}
-	return takeoff.Of(items, leftOut, r.takeoffOptions()).Sheets(filepath.Base(r.input))
 }
 
 // find returns the section of a name in a column's row. One that is given need

@@ -10,7 +10,6 @@ import (
 	"github.com/agnivade/levenshtein"
 	"github.com/spf13/cobra"
 
-	"stanchion/catalogue"
 	"stanchion/design"
 	"stanchion/design/search"
 	"stanchion/design/working"
@@ -180,13 +179,4 @@ func (r *run) sheetOf(d *designed) (*working.Sheet, error) {
 		return nil, fmt.Errorf("%s: %w", name, err)
 	}
 	return sheet, nil
-}
-
-// section finds a section that a result names: of the stock list, or given and
-// not in it.
-func (r *run) section(name string) (*catalogue.Section, error) {
-	if s, err := r.cat.Find(name, catalogue.FindOptions{}); err == nil {
-		return s, nil
-	}
-	return catalogue.Default().Find(name, catalogue.FindOptions{})
 }

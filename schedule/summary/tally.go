@@ -28,11 +28,7 @@ type Tally struct {
 	keep     int
 	familyOf func(section string) string
 	steel    map[string]*Steel // by family
-	sizes    map[size]*Steel
 }
-
-// size is a section in a grade.
-type size struct{ section, grade string }
 
 // Reason is why members could not be read.
 type Reason struct {
@@ -47,21 +43,18 @@ type Line struct {
 	Result design.Result
 }
 
-// Steel is the steel of one family, or of one section in a grade, that the
-// members need.
+// Steel is the steel of one family that the members need.
 type Steel struct {
-	Family         string
-	Section, Grade string  // of one size
-	MassPerM       float64 // kg/m, of one size
-	Pieces         int
-	Length         float64 // m
-	Mass           float64 // kg
+	Family string
+	Pieces int
+	Length float64 // m
+	Mass   float64 // kg
 }
 
 // NewTally starts a tally that keeps so many members of each kind that a
 // person must look at. familyOf names the family of a section.
 func NewTally(keep int, familyOf func(section string) string) *Tally {
-	return &Tally{keep: keep, familyOf: familyOf, steel: map[string]*Steel{}, sizes: map[size]*Steel{}}
+	return &Tally{keep: keep, familyOf: familyOf, steel: map[string]*Steel{}}
 }
 
 // Add adds one member. The steel of members without a section that passes, or
@@ -106,23 +99,16 @@ func (t *Tally) addReason(cell, text string) {
 }
 
 func (t *Tally) addSteel(m *schedule.Member, r *design.Result) {
-	k := size{r.Section, r.Grade}
-	one := t.sizes[k]
-	if one == nil {
-		one = &Steel{Family: t.familyOf(r.Section), Section: r.Section, Grade: r.Grade, MassPerM: r.MassPerM}
-		t.sizes[k] = one
+	family := t.familyOf(r.Section)
+	s := t.steel[family]
+	if s == nil {
+		s = &Steel{Family: family}
+		t.steel[family] = s
 	}
-	family := t.steel[one.Family]
-	if family == nil {
-		family = &Steel{Family: one.Family}
-		t.steel[one.Family] = family
-	}
-	for _, s := range []*Steel{one, family} {
-		n := float64(m.Column.Quantity)
-		s.Pieces += m.Column.Quantity
-		s.Length += n * m.Column.Length / 1000
-		s.Mass += n * r.Mass
-	}
+	n := float64(m.Column.Quantity)
+	s.Pieces += m.Column.Quantity
+	s.Length += n * m.Column.Length / 1000
+	s.Mass += n * r.Mass
 }
 
 // addWorst keeps the members with the greatest utilisations; the earlier of
@@ -154,19 +140,7 @@ func (t *Tally) Steel() []Steel {
 	return list
 }
 
-// Sizes returns the steel by section and grade: by family, the lightest first.
-func (t *Tally) Sizes() []Steel {
-	var list []Steel
-	for _, s := range t.sizes {
-		list = append(list, *s)
-	}
-	slices.SortFunc(list, func(a, b Steel) int {
-		return cmp.Or(cmp.Compare(a.Family, b.Family), cmp.Compare(a.MassPerM, b.MassPerM), cmp.Compare(a.Section, b.Section), cmp.Compare(a.Grade, b.Grade))
-	})
-	return list
-}
-
-// Total returns the steel of all families or sizes.
+// Total returns the steel of all families.
 func Total(list []Steel) Steel {
 	all := Steel{Family: "all"}
 	for _, s := range list {

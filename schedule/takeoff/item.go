@@ -50,6 +50,11 @@ func ItemOf(col *design.Column, s *catalogue.Section, grade string) Item {
 // Name names the item for people: mark, stack and levels.
 func (it *Item) Name() string { return memberName(it.Mark, it.Stack, it.From, it.To) }
 
+// MemberName names a column for people: mark, stack and levels.
+func MemberName(col *design.Column) string {
+	return memberName(col.Mark, col.Stack, col.From, col.To)
+}
+
 func memberName(mark, stack, from, to string) string {
 	if stack != "" && !strings.Contains(mark, stack) {
 		mark += " " + stack

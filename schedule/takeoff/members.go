@@ -25,7 +25,7 @@ func Members(members iter.Seq2[*schedule.Member, error], find Find, grades []str
 		it, why := r.item(m)
 		if why != "" {
 			col := &m.Column
-			leftOut = append(leftOut, LeftOut{memberName(col.Mark, col.Stack, col.From, col.To), col.Cell, why})
+			leftOut = append(leftOut, LeftOut{MemberName(col), col.Cell, why})
 			continue
 		}
 		items = append(items, it)
