@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"math"
 	"strconv"
+	"strings"
 
 	"stanchion/schedule"
 	"stanchion/schedule/workbook/internal/markup"
@@ -242,7 +243,7 @@ func (c *cellReader) number(cell schedule.Cell, text string, f format) schedule.
 	if text == "" {
 		return cell
 	}
-	n, err := strconv.ParseFloat(text, 64)
+	n, err := strconv.ParseFloat(strings.TrimSpace(text), 64)
 	if err != nil || math.IsNaN(n) || math.IsInf(n, 0) {
 		cell.Kind, cell.Text = schedule.Text, text
 		return cell

@@ -168,6 +168,26 @@ func requirePartsOnce(t *testing.T, data []byte) {
 	}
 }
 
+func TestCopyOfAnOwnSheetIsTheUsers(t *testing.T) {
+	p := unpack(t, annotate(t, rich(t), richBlock(), ownSheets()...))
+	p["xl/worksheets/sheet9.xml"] = worksheet(`<row r="1"><c r="A1" t="inlineStr"><is><t>mine</t></is></c></row>`, "")
+	p["xl/workbook.xml"] = insertBefore(p["xl/workbook.xml"], "</sheets>", `<sheet name="Summary (mine)" sheetId="99" r:id="rId199"/>`)
+	p["xl/workbook.xml"] = insertBefore(p["xl/workbook.xml"], "</definedNames>", `<definedName name="_stanchion_sheet" localSheetId="6">"Summary"</definedName>`)
+	p["xl/_rels/workbook.xml.rels"] = insertBefore(p["xl/_rels/workbook.xml.rels"], "</Relationships>", `<Relationship Id="rId199" Type="http://schemas.openxmlformats.org/officeDocument/2006/relationships/worksheet" Target="worksheets/sheet9.xml"/>`)
+	p["[Content_Types].xml"] = insertBefore(p["[Content_Types].xml"], "</Types>", `<Override PartName="/xl/worksheets/sheet9.xml" ContentType="application/vnd.openxmlformats-officedocument.spreadsheetml.worksheet+xml"/>`)
+	block := richBlock()
+	block.Header.Old = []int{5, 6, 7, 8, 9, 10}
+	out := annotate(t, p.bytes(t), block, ownSheets()...)
+	assert.Contains(t, dump(t, out), "Summary (mine)!A1 = mine")
+	requirePartsOnce(t, out)
+
+	b, err := OpenBytes("loads.xlsx", out)
+	require.NoError(t, err)
+	block.Sheet = "Summary"
+	_, err = b.Plan(block)
+	assert.ErrorContains(t, err, "was written by an earlier run")
+}
+
 func TestNamesOfOwnSheets(t *testing.T) {
 	f := simple(t, 14)
 	for _, name := range []string{"summary", "Summary (2)"} {

@@ -53,14 +53,18 @@ func (b *Book) localTo(name *markup.Element) *sheet {
 	return b.sheets[i]
 }
 
-// findOwn finds the sheets that an earlier run added.
+// findOwn finds the sheets that an earlier run added. A copy that somebody
+// made of one is a sheet of theirs.
 func (b *Book) findOwn() {
+	taken := map[string]bool{}
 	for _, n := range b.definedNames() {
 		if n.Attr("name") != sheetName {
 			continue
 		}
-		if s := b.localTo(n); s != nil {
-			s.own = strings.ReplaceAll(strings.Trim(n.Text(), `"`), `""`, `"`)
+		role := strings.ReplaceAll(strings.Trim(n.Text(), `"`), `""`, `"`)
+		if s := b.localTo(n); s != nil && s.grid && !taken[role] {
+			s.own = role
+			taken[role] = true
 		}
 	}
 }

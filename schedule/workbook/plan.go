@@ -61,6 +61,9 @@ func (b *Book) Plan(block Block) (p *Plan, err error) {
 	if s == nil {
 		return nil, refuse(b.name, fmt.Sprintf("has no sheet %q that holds cells", block.Sheet), "name one that it has")
 	}
+	if s.own != "" {
+		return nil, refuse(b.name, fmt.Sprintf("sheet %q was written by an earlier run", s.name), "name the sheet that holds the schedule")
+	}
 	p = &Plan{book: b, sheet: s, block: block}
 	if p.layout, err = b.layoutOf(s); err != nil {
 		return nil, explain(b.name, err)
