@@ -4,6 +4,8 @@ import (
 	"fmt"
 	"strings"
 
+	"github.com/xuri/excelize/v2"
+
 	"stanchion/schedule"
 	"stanchion/schedule/workbook"
 )
@@ -60,21 +62,16 @@ func width(h *heading) float64 {
 // there are few. Other values are warned of and not refused: the schedule is
 // read in any of the trade's notations.
 func validation(h *heading, col int) workbook.Validation {
-	name := columnName(col)
+	name, err := excelize.ColumnNumberToName(col + 1)
+	if err != nil {
+		panic(err) // there are few columns
+	}
 	v := workbook.Validation{Range: fmt.Sprintf("%s%d:%s%d", name, firstRow, name, lastRow), Loose: true, PromptTitle: h.name, Prompt: h.field.Meaning}
 	// A list within the rule itself may take 255 characters.
 	if list := allowed(&h.field); len(strings.Join(list, ",")) <= 255 {
 		v.Allowed = list
 	}
 	return v
-}
-
-// columnName names a column; columns count from 0.
-func columnName(col int) string {
-	if col < 26 {
-		return string(rune('A' + col))
-	}
-	return columnName(col/26-1) + columnName(col%26)
 }
 
 // headingsSheet explains every field.

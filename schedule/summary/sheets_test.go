@@ -1,0 +1,52 @@
+package summary
+
+import (
+	"math"
+	"testing"
+
+	"github.com/stretchr/testify/assert"
+	"github.com/stretchr/testify/require"
+
+	"stanchion/design"
+	"stanchion/schedule"
+	"stanchion/schedule/workbook"
+)
+
+func texts(s *workbook.Sheet, column int) (out []any) {
+	for _, row := range s.Rows {
+		if column < len(row) {
+			out = append(out, row[column].Value)
+		}
+	}
+	return out
+}
+
+func TestSheets(t *testing.T) {
+	y := NewTally(10, func(string) string { return "UKC" })
+	lines := []Line{
+		{&schedule.Member{Column: design.Column{Mark: "A", Cell: "C'1!A2", Quantity: 1, Length: 4000}},
+			design.Result{Status: design.Passes, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: 0.9}},
+		{&schedule.Member{Column: design.Column{Mark: "B", Cell: "C'1!A3", Quantity: 1, Length: 4000}},
+			design.Result{Status: design.Fails, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: math.Inf(1), Notes: []string{"outside the rules"}}},
+		{&schedule.Member{Column: design.Column{Mark: "C", Cell: "C'1!A4"}, Problems: []*schedule.Problem{{Cell: "C'1!C4", What: "N_Ed is missing"}}},
+			design.Result{Status: design.NotRead}},
+	}
+	for i := range lines {
+		y.Add(lines[i].Member, &lines[i].Result)
+	}
+	info := &Info{Program: "stanchion devel", File: "loads.xlsx", Sheet: "C'1", National: &design.National{Name: "UK", Source: "the annex"},
+		Settings: []schedule.SettingLine{{Name: "limit", Value: "1.00", From: "default"}}, Cautions: []string{"Check it."},
+		Reading: &schedule.Summary{Rows: 3, Totals: 1, Notes: []string{"a note"}}}
+	overview, problems := Sheets(info, y, lines)
+
+	assert.Subset(t, texts(&overview, 1), []any{"loads.xlsx", "C'1", "UK: the annex", 1.0, 3.0, "1.00"})
+	assert.Subset(t, texts(&overview, 0), []any{"passes", "fails", "no section", "not read", "UKC", "limit", "total rows passed over", "note", "Check it."})
+
+	require.Len(t, problems.Rows, 5) // title, blank, headings, two members
+	failing, unread := problems.Rows[3], problems.Rows[4]
+	assert.Equal(t, "'C''1'!A3", failing[0].Link)
+	assert.Equal(t, "", failing[5].Value, "an endless utilisation is no number")
+	assert.Equal(t, "outside the rules", failing[7].Value)
+	assert.Equal(t, "not read", unread[3].Value)
+	assert.Contains(t, unread[7].Value, "N_Ed is missing")
+}
