@@ -6,12 +6,13 @@ import (
 	"math"
 	"os"
 	"path/filepath"
-	"stanchion/schedule"
 	"testing"
 	"time"
 
 	"github.com/stretchr/testify/require"
 	"github.com/xuri/excelize/v2"
+
+	"stanchion/schedule"
 )
 
 const benchRows, benchCols = 20_000, 30

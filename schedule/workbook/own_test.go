@@ -3,14 +3,15 @@ package workbook
 import (
 	"bytes"
 	"fmt"
-	"github.com/stretchr/testify/assert"
-	"github.com/xuri/excelize/v2"
 	"io"
-	"stanchion/schedule/workbook/internal/markup"
 	"strings"
 	"testing"
 
+	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
+	"github.com/xuri/excelize/v2"
+
+	"stanchion/schedule/workbook/internal/markup"
 )
 
 // BenchmarkOwnSheet makes a sheet of ours as long as a schedule of which every

@@ -4,32 +4,11 @@ import (
 	"bytes"
 	"fmt"
 	"io"
-	"math"
 	"strconv"
 	"strings"
 
-	"stanchion/design"
-	"stanchion/schedule"
 	"stanchion/schedule/workbook/internal/markup"
 )
-
-// outcomes are the words by which a cell is known to hold a status.
-var outcomes = map[string]Role{
-	design.Passes.String():    Passes,
-	design.Fails.String():     Fails,
-	design.NoSection.String(): NoSection,
-	design.NotRead.String():   NotRead,
-}
-
-// look returns how the cells of a column are drawn.
-func (p *Plan) look(i int, role Role) Look {
-	c := &p.block.Columns[i]
-	l := Look{Role: role, Align: alignOf(c), Edge: p.edge(i)}
-	if c.Numeric && role == Result {
-		l.Format = Decimals(c.Decimals)
-	}
-	return l
-}
 
 // rowWriter passes the rows of the schedule's sheet through, and adds the
 // block's cells to them.
@@ -47,12 +26,6 @@ type rowWriter struct {
 	last  int // the last row written
 	cells []byte
 	held  bytes.Buffer
-}
-
-// columnStyles are the style ids of a column's cells.
-type columnStyles struct {
-	result   int
-	outcomes map[string]int
 }
 
 func (p *Plan) newRowWriter(g *grafting) (*rowWriter, error) {
@@ -225,102 +198,6 @@ func (w *rowWriter) pass(tag string) error {
 	return explain(w.plan.book.name, w.scan.Skim(w.out))
 }
 
-// sweeps reports whether a row may hold results of an earlier run.
-func (w *rowWriter) sweeps(row int) bool {
-	o := &w.plan.place.old
-	return len(o.columns) > 0 && o.area.firstRow <= row && row <= o.area.lastRow
-}
-
-// crowded reports whether a row holds cells where the block stands, or beyond.
-func (w *rowWriter) crowded(row int) bool {
-	e := &w.plan.sheet.extent
-	return max(furthest(e.valued, row, row), furthest(e.styled, row, row)) > w.plan.place.rows.firstCol
-}
-
-// merge passes a row through cell by cell: what an earlier run left is dropped,
-// and the block's cells take their place among the others.
-func (w *rowWriter) merge(tag string, row int, filled bool) error {
-	block := append([]byte(nil), w.cells...)
-	w.held.Reset()
-	pending := filled
-	next := 0
-	depth := w.scan.Depth()
-	for {
-		t, err := w.scan.Next()
-		if err != nil {
-			return explain(w.plan.book.name, err)
-		}
-		if t.Kind == markup.End && w.scan.Depth() < depth {
-			break
-		}
-		cell := (t.Kind == markup.Start || t.Kind == markup.Empty) && string(t.Local()) == "c"
-		if !cell {
-			if pending && t.Kind != markup.Other && t.Kind != markup.Text {
-				w.held.Write(block) // before anything that is no cell
-				pending = false
-			}
-			w.held.Write(t.Raw)
-			if t.Kind == markup.Start {
-				err = w.rest(&w.held)
-			}
-		} else {
-			col := next
-			if v, ok := t.Attr("r"); ok {
-				col, _, _ = parseCell([]byte(v))
-			}
-			next = col + 1
-			if pending && col > w.plan.place.rows.lastCol {
-				w.held.Write(block)
-				pending = false
-			}
-			err = w.cell(t, row, col, filled)
-		}
-		if err != nil {
-			return err
-		}
-	}
-	w.cells = w.cells[:0]
-	if pending {
-		w.cells = block
-	}
-	if filled {
-		tag = w.spanned(tag)
-	}
-	return w.emit(tag, w.held.Bytes())
-}
-
-// cell passes one cell of the user's through, or drops it.
-func (w *rowWriter) cell(t *markup.Token, row, col int, filled bool) error {
-	pl := &w.plan.place
-	gone := pl.old.columns[col] && w.sweeps(row) || filled && pl.rows.firstCol <= col && col <= pl.rows.lastCol
-	var to io.Writer = &w.held
-	if gone {
-		to = io.Discard
-	}
-	tag := string(t.Raw)
-	if _, ok := t.Attr("r"); !ok { // its place may change
-		tag = markup.SetAttrs(t.Raw, "r", cellName(col, row))
-	}
-	start := t.Kind == markup.Start
-	if _, err := io.WriteString(to, tag); err != nil || !start {
-		return err
-	}
-	return w.rest(to)
-}
-
-// rest passes the content and the end of the open element.
-func (w *rowWriter) rest(to io.Writer) error {
-	if err := w.scan.Skim(to); err != nil {
-		return explain(w.plan.book.name, err)
-	}
-	t, err := w.scan.Next()
-	if err != nil {
-		return explain(w.plan.book.name, err)
-	}
-	_, err = to.Write(t.Raw)
-	return err
-}
-
 // spanned returns a row's tag with the columns that it says it spans, if it
 // says so, widened.
 func (w *rowWriter) spanned(tag string) string {
@@ -335,101 +212,4 @@ func (w *rowWriter) spanned(tag string) string {
 		return tag
 	}
 	return markup.SetAttrs(t.Raw, "spans", from+":"+strconv.Itoa(w.plan.place.rows.lastCol+1))
-}
-
-// tall gives the heading row, where it has no height of its own, the height
-// that its text needs. Not every spreadsheet program finds that by itself.
-func (w *rowWriter) tall(tag string, row int) string {
-	p := w.plan
-	if _, given := p.sheet.extent.heights[row]; given || row != p.place.heading {
-		return tag
-	}
-	height := math.Ceil(headingLines * lineHeight * p.letters.size)
-	return markup.SetAttrs([]byte(tag), "ht", strconv.FormatFloat(height, 'f', -1, 64))
-}
-
-// fill makes the block's cells of a row, and reports whether there are any.
-func (w *rowWriter) fill(row int) bool {
-	w.cells = w.cells[:0]
-	if cells, ok := w.headings[row]; ok {
-		for _, c := range cells {
-			w.textCell(c.col, row, w.grafting.styles[c.look], c.text)
-		}
-		return true
-	}
-	if row <= w.plan.place.heading || row > w.plan.block.LastRow {
-		return false
-	}
-	values := w.plan.block.Cells(row)
-	if len(values) == 0 {
-		return false
-	}
-	for i := range w.plan.block.Columns {
-		v := schedule.Value{}
-		if i < len(values) {
-			v = values[i]
-		}
-		w.value(i, row, v)
-	}
-	return true
-}
-
-func (w *rowWriter) value(i, row int, v schedule.Value) {
-	col, s := w.plan.place.rows.firstCol+i, &w.styles[i]
-	switch v.Kind {
-	case schedule.Number:
-		if math.IsNaN(v.Number) || math.IsInf(v.Number, 0) {
-			v.Text = ""
-			break
-		}
-		w.open(col, row, s.result)
-		w.cells = append(w.cells, "><"...)
-		w.cells = append(w.cells, w.prefix...)
-		w.cells = append(w.cells, "v>"...)
-		w.cells = strconv.AppendFloat(w.cells, v.Number, 'g', -1, 64)
-		w.cells = append(w.cells, "</"...)
-		w.cells = append(w.cells, w.prefix...)
-		w.cells = append(w.cells, "v>"...)
-		w.close()
-		return
-	case schedule.Blank:
-		v.Text = ""
-	}
-	style := s.result
-	if id, ok := s.outcomes[v.Text]; ok && !w.plan.block.Columns[i].Numeric {
-		style = id
-	}
-	w.textCell(col, row, style, v.Text)
-}
-
-// textCell makes a cell that holds a text itself; an empty one where there is
-// none.
-func (w *rowWriter) textCell(col, row, style int, text string) {
-	w.open(col, row, style)
-	if text == "" {
-		w.cells = append(w.cells, "/>"...)
-		return
-	}
-	w.cells = append(w.cells, ` t="inlineStr">`...)
-	w.cells = appendInline(w.cells, w.prefix, clip(text))
-	w.close()
-}
-
-func (w *rowWriter) open(col, row, style int) {
-	w.cells = append(w.cells, '<')
-	w.cells = append(w.cells, w.prefix...)
-	w.cells = append(w.cells, `c r="`...)
-	w.cells = appendCell(w.cells, col, row)
-	w.cells = append(w.cells, '"')
-	if style > 0 {
-		w.cells = append(w.cells, ` s="`...)
-		w.cells = strconv.AppendInt(w.cells, int64(style), 10)
-		w.cells = append(w.cells, '"')
-	}
-}
-
-func (w *rowWriter) close() {
-	w.cells = append(w.cells, "</"...)
-	w.cells = append(w.cells, w.prefix...)
-	w.cells = append(w.cells, "c>"...)
 }
