@@ -1,6 +1,7 @@
 package project
 
 import (
+	"cmp"
 	"context"
 	"math"
 	"slices"
@@ -13,30 +14,49 @@ const (
 	closed
 )
 
-// search is the branch and bound over one reduced problem. Multipliers are kept
-// from one K to the next: the dual moves little.
+// search is the branch and bound over one reduced problem.
 type search struct {
-	r    *reduced
-	m    int
-	dp   *chainSolver
-	dual *dual
+	r  *reduced
+	m  int
+	dp *chainSolver
 
-	// The least cost of a row or node, by which its multiplier's step is scaled:
-	// the multipliers of heavy nodes have further to go.
+	offers [][]offer // of each row, the sizes that serve it, cheapest first
+
+	// The root of the least cost of a row or node, by which its multiplier's
+	// step is scaled: the multipliers of heavy nodes have further to go.
 	rowScale  []float64
 	nodeScale [][]float64
+}
+
+// offer is a size that serves a row, and its cost there.
+type offer struct {
+	size int32
+	cost float64
+}
+
+// offersOf lists the sizes that serve a row, cheapest first.
+func offersOf(row []float64) []offer {
+	var out []offer
+	for j, v := range row {
+		if !math.IsInf(v, 1) {
+			out = append(out, offer{int32(j), v})
+		}
+	}
+	slices.SortStableFunc(out, func(a, b offer) int { return cmp.Compare(a.cost, b.cost) })
+	return out
 }
 
 func newSearch(r *reduced) *search {
 	inner := &Problem{Sizes: len(r.sizes), Chains: r.chains, MayStand: r.stand}
 	s := &search{r: r, m: len(r.sizes), dp: newChainSolver(inner)}
 	for _, row := range r.rows {
-		s.rowScale = append(s.rowScale, slices.Min(row))
+		s.rowScale = append(s.rowScale, math.Sqrt(slices.Min(row)))
+		s.offers = append(s.offers, offersOf(row))
 	}
 	for _, c := range r.chains {
 		scale := make([]float64, len(c.Nodes))
 		for n, node := range c.Nodes {
-			scale[n] = slices.Min(node.Cost)
+			scale[n] = math.Sqrt(slices.Min(node.Cost))
 		}
 		s.nodeScale = append(s.nodeScale, scale)
 	}
@@ -76,11 +96,7 @@ type branchNode struct {
 
 func (s *search) solve(ctx context.Context, k int, warm []int32) answer {
 	best := s.heuristic(k, warm)
-	start := s.dual
-	if start == nil {
-		start = newDual(s, best)
-	}
-	stack := []branchNode{{state: make([]int8, s.m), bound: 0, dual: start}}
+	stack := []branchNode{{state: make([]int8, s.m), bound: 0, dual: newDual(s, best)}}
 	first := true
 	for len(stack) > 0 {
 		if ctx.Err() != nil {
@@ -96,14 +112,12 @@ func (s *search) solve(ctx context.Context, k int, warm []int32) answer {
 			continue
 		}
 		d := node.dual.clone()
-		steps := 60
+		effort := ascent{steps: 150, scale: 0.3} // the parent's multipliers are near
 		if first {
-			steps = 800
+			effort = ascent{steps: 800, scale: 1.2}
 		}
-		out := d.ascend(ctx, s, k, node, &best, steps)
-		if first {
-			s.dual, first = d, false
-		}
+		out := d.ascend(ctx, s, k, node, &best, effort)
+		first = false
 		if out.closed {
 			continue
 		}

@@ -90,16 +90,23 @@ type outcome struct {
 	branch int
 }
 
+// ascent says how hard a node's bound is worked at: the number of steps, and
+// the part of Polyak's length that the first ones take.
+type ascent struct {
+	steps int
+	scale float64
+}
+
 // ascend raises the bound of a node by subgradient steps, settles sizes by
 // their reduced costs and improves best by the sizes that the relaxation picks.
-func (d *dual) ascend(ctx context.Context, s *search, k int, node branchNode, best *answer, steps int) outcome {
+func (d *dual) ascend(ctx context.Context, s *search, k int, node branchNode, best *answer, effort ascent) outcome {
 	d.worth = make([]float64, s.m)
 	d.pick = make([]bool, s.m)
 	d.rest()
 	state := slices.Clone(node.state)
 	often := make([]float64, s.m)
 	top, keep := math.Inf(-1), d.clone()
-	scale, stale := 1.2, 0
+	scale, stale := effort.scale, 0
 	for step := 0; ; step++ {
 		bound := d.evaluate(s, k, state)
 		if math.IsInf(bound, 1) {
@@ -112,6 +119,7 @@ func (d *dual) ascend(ctx context.Context, s *search, k int, node branchNode, be
 		} else if stale++; stale >= 12 {
 			scale, stale = scale/2, 0
 			d.copy(keep)
+			d.rest()
 			bound = d.evaluate(s, k, state)
 		}
 		if max(top, node.bound) >= cutoff(best.cost) {
@@ -126,13 +134,13 @@ func (d *dual) ascend(ctx context.Context, s *search, k int, node branchNode, be
 				often[j] += 0.1
 			}
 		}
-		if len(d.level) > 0 && (scale < 0.02 || step >= steps/2) {
+		if len(d.level) > 0 && (scale < 0.02 || step >= effort.steps/2) {
 			// One level a node has raised the bound as far as it goes; now every price on its own.
 			d.copy(keep)
 			bound = d.evaluate(s, k, state)
 			d.level, keep.level, scale, stale = nil, nil, 1.2, 0
 		}
-		if step >= steps || scale < 1e-4 || ctx.Err() != nil {
+		if step >= effort.steps || scale < 1e-4 || ctx.Err() != nil {
 			break
 		}
 		target := best.cost
@@ -183,13 +191,14 @@ func (s *search) improveBy(state []int8, best *answer) {
 func (d *dual) evaluate(s *search, k int, state []int8) float64 {
 	clear(d.worth)
 	total := 0.0
-	for i, row := range s.r.rows {
+	for i, offers := range s.offers {
 		u := d.u[i]
 		total += u
-		for j, v := range row {
-			if v < u {
-				d.worth[j] += u - v
+		for _, o := range offers {
+			if o.cost >= u {
+				break
 			}
+			d.worth[o.size] += u - o.cost
 		}
 	}
 	d.order = d.order[:0]
@@ -246,10 +255,13 @@ func (d *dual) choose(k int, state []int8) {
 // gradient is nil.
 func (d *dual) step(s *search, distance float64) bool {
 	norm := 0.0
-	for i, row := range s.r.rows {
+	for i, offers := range s.offers {
 		g := 1.0
-		for j, in := range d.pick {
-			if in && row[j] < d.u[i] {
+		for _, o := range offers {
+			if o.cost >= d.u[i] {
+				break
+			}
+			if d.pick[o.size] {
 				g--
 			}
 		}
