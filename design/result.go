@@ -49,6 +49,7 @@ type Check struct {
 	Clause      string  // "6.3.1.1(1)"
 	Combination int     // index into Column.Combinations
 	From, To    float64 // the segment, mm from the bottom
+	NEd         float64 // axial force that the check rests on, own weight included, N, compression positive; 0 of a refusal
 	Ed, Rd      float64 // action and resistance, N or N mm; 0 where the criterion is a sum
 	Utilisation float64 // +Inf of a refusal
 	Reason      string  // of a refusal or a change of rule

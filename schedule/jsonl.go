@@ -12,9 +12,8 @@ import (
 // member. The keys and their order are fixed; a value that does not apply is
 // null.
 type JSONLines struct {
-	w      *bufio.Writer
-	enc    *json.Encoder
-	growth float64
+	w   *bufio.Writer
+	enc *json.Encoder
 }
 
 // jsonLine is one line. The fields stand in the order of the keys.
@@ -59,10 +58,10 @@ type jsonLine struct {
 	Critical    *float64 `json:"critical_temperature_C"`
 }
 
-// NewJSONLines returns a writer of JSON lines of a run with these settings.
-func NewJSONLines(w io.Writer, set *design.Settings) *JSONLines {
+// NewJSONLines returns a writer of JSON lines.
+func NewJSONLines(w io.Writer) *JSONLines {
 	b := bufio.NewWriterSize(w, 1<<16)
-	j := &JSONLines{w: b, enc: json.NewEncoder(b), growth: set.Growth}
+	j := &JSONLines{w: b, enc: json.NewEncoder(b)}
 	j.enc.SetEscapeHTML(false)
 	return j
 }
@@ -88,8 +87,8 @@ func (j *JSONLines) Write(m *Member, r *design.Result) error {
 		x := Round(r.Utilisation)
 		l.Utilisation = &x
 	}
-	if r.Governing.Kind != design.KindNone && len(c.Combinations) > 0 {
-		x := Round(governingForce(c, g, j.growth) / 1e3)
+	if g.Kind != design.KindNone && g.Kind != design.Refused {
+		x := Round(g.NEd / 1e3)
 		l.NEd = &x
 	}
 	return j.enc.Encode(&l)
@@ -97,32 +96,6 @@ func (j *JSONLines) Write(m *Member, r *design.Result) error {
 
 // Flush writes what is still held back.
 func (j *JSONLines) Flush() error { return j.w.Flush() }
-
-// governingForce returns the axial force behind the governing check, N,
-// compression positive: that of the check itself where it compares forces, and
-// otherwise the greatest given one along its segment.
-func governingForce(c *design.Column, g *design.Check, growth float64) float64 {
-	switch g.Kind {
-	case design.Tension:
-		return -g.Ed
-	case design.Compression, design.FlexuralY, design.FlexuralZ, design.Torsional, design.TorsionalFlexural, design.RestrainedAxis:
-		return g.Ed
-	}
-	if g.Combination < 0 || g.Combination >= len(c.Combinations) {
-		return 0
-	}
-	if growth == 0 {
-		growth = 1
-	}
-	combo := &c.Combinations[g.Combination]
-	n := combo.NEdAt(g.From)
-	for _, s := range combo.Steps {
-		if s.Height > g.From && s.Height < g.To {
-			n = max(n, s.NEd)
-		}
-	}
-	return n * growth
-}
 
 func str(s string) *string {
 	if s == "" {

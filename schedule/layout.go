@@ -17,6 +17,7 @@ type layout struct {
 	troubles    []Problem   // headings that cannot be read as they stand
 	left        []Seen      // headings of a field that are not read
 	other       []Seen      // headings that say nothing to the program
+	types       []Binding   // headings that are Family where their values are
 	headings    int
 	texts       map[int][]string // by column, what the header and unit rows hold, folded
 	width       int              // columns that hold a heading
@@ -158,6 +159,9 @@ func (h *headerScan) bind(l *layout, c *headerColumn) (vetoed bool) {
 	where := h.src.Where(h.sheet, c.row, c.col)
 	seen := Seen{Cell: where, Heading: heading}
 	switch {
+	case rank == 0 && c.isType():
+		k := key{field: familyField}
+		l.types = append(l.types, Binding{Col: c.col, Heading: heading, Cell: where, Field: k.String(), key: k, rank: 1, hidden: h.hidden[c.col]})
 	case m == nil && rank == mapped:
 		seen.Why = "the mapping says so"
 		l.left = append(l.left, seen)

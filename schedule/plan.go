@@ -57,7 +57,7 @@ func (s *scanner) remarks(p *Plan) []string {
 	}
 	for i := range p.Header.Columns {
 		b := &p.Header.Columns[i]
-		if b.rank == 1 && (b.key.field == momentField || b.key.axis != noAxis) {
+		if b.rank == 1 && (b.key.field == momentField || b.key.field == familyField || b.key.axis != noAxis) {
 			list = append(list, fmt.Sprintf("%s (%q) is read as %s", b.Cell, b.Heading, b.Field))
 		}
 	}

@@ -23,7 +23,7 @@ func sized() (*Member, *design.Result) {
 	}}
 	r := &design.Result{
 		Status: design.Passes, Notes: []string{"checked"}, Section: "203x203x60 UKC", Grade: "S355", Utilisation: 0.8765432,
-		Governing: design.Check{Kind: design.FlexuralZ, Clause: "6.3.1.1(1)", Combination: 1, From: 2500, To: 5000, Ed: 1000e3, Rd: 1140.845e3, Utilisation: 0.8765432},
+		Governing: design.Check{Kind: design.FlexuralZ, Clause: "6.3.1.1(1)", Combination: 1, From: 2500, To: 5000, NEd: 1000e3, Ed: 1000e3, Rd: 1140.845e3, Utilisation: 0.8765432},
 		Y:         design.Buckling{Lcr: 5000, LambdaBar: 0.62112, Curve: "b", Chi: 0.82632, NbRd: 2240.3e3},
 		Z:         design.Buckling{Lcr: 2500, LambdaBar: 0.50343, Curve: "c", Chi: 0.84107, NbRd: 1140.845e3},
 		T:         design.Buckling{Lcr: 2500, NbRd: 2352.5e3}, HasT: true, TKind: design.Torsional,
@@ -43,7 +43,7 @@ next_lighter_check, cell, critical_temperature_C`
 
 func jsonOf(t *testing.T, m *Member, r *design.Result) string {
 	var out bytes.Buffer
-	j := NewJSONLines(&out, &design.Settings{Growth: 1.1})
+	j := NewJSONLines(&out)
 	require.NoError(t, j.Write(m, r))
 	require.NoError(t, j.Flush())
 	return out.String()
@@ -97,13 +97,25 @@ func TestJSONOfOddValues(t *testing.T) {
 	assert.Nil(t, line["combination"])
 }
 
-func TestGoverningForce(t *testing.T) {
+// N_Ed is that of the governing check, tension negative; a check that rests on
+// no force says 0, and a refusal nothing.
+func TestJSONOfTheGoverningForce(t *testing.T) {
 	m, r := sized()
-	c := &m.Column
-	r.Governing = design.Check{Kind: design.Interaction661, From: 0, To: 5000}
-	assert.InDelta(t, 990e3, governingForce(c, &r.Governing, 1.1), 1e-6)
-	r.Governing = design.Check{Kind: design.Interaction662, From: 2500, To: 5000}
-	assert.InDelta(t, 770e3, governingForce(c, &r.Governing, 1.1), 1e-6)
+	for _, c := range []struct {
+		check design.Check
+		want  any
+	}{
+		{design.Check{Kind: design.Interaction661, NEd: 990.5e3}, 990.5},
+		{design.Check{Kind: design.Tension, NEd: -70e3, Ed: 70e3}, -70.0},
+		{design.Check{Kind: design.BendingY}, 0.0},
+		{design.Check{Kind: design.Refused}, nil},
+		{design.Check{}, nil},
+	} {
+		r.Governing = c.check
+		var line map[string]any
+		require.NoError(t, json.Unmarshal([]byte(jsonOf(t, m, r)), &line))
+		assert.Equal(t, c.want, line["N_Ed_kN"], c.check.Kind)
+	}
 }
 
 func TestResultColumns(t *testing.T) {

@@ -19,6 +19,9 @@ func Scan(src Source, opts Options) (*Plan, error) {
 	if err := unusedMaps(src, settings, &notes); err != nil {
 		return nil, err
 	}
+	if err := l.settleTypes(src); err != nil {
+		return nil, err
+	}
 	s := newScanner(src, l, &opts)
 	if err := s.run(); err != nil {
 		return nil, err

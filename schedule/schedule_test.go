@@ -172,7 +172,7 @@ func TestNeededHeaders(t *testing.T) {
 }
 
 func TestExactBeatsSuggested(t *testing.T) {
-	s := readAll(t, sheetOf("Mark | ID | Level from | Level to | Lift | Length | Storey height | N_Ed\nC1 | 77 | L1 | L2 | L1-L2 | 3.6 | 4.0 | 900"))
+	s := readAll(t, sheetOf("Mark | ID | Level from | Level to | Lift | Length | N_Ed\nC1 | 77 | L1 | L2 | L1-L2 | 3.6 | 900"))
 	c := s.Members[0].Column
 	assert.Equal(t, "C1", c.Mark)
 	assert.Equal(t, [2]string{"L1", "L2"}, [2]string{c.From, c.To})
@@ -181,9 +181,20 @@ func TestExactBeatsSuggested(t *testing.T) {
 	for _, l := range s.Summary.LeftAlone {
 		left = append(left, l.Heading)
 	}
-	assert.Equal(t, []string{"ID", "Storey height", "Lift"}, left)
+	assert.Equal(t, []string{"ID", "Lift"}, left)
 	c = *good(t, "Mark | Lift | Length | N_Ed\nC1 | L1 to L2 | 3.6 | 900")
 	assert.Equal(t, [2]string{"L1", "L2"}, [2]string{c.From, c.To})
+}
+
+// Length, Height and Storey height name the field with the same right: which
+// of them is meant is not for the program to choose.
+func TestTwoHeadersForTheLength(t *testing.T) {
+	for _, pair := range []string{"Length | Height", "Storey height | L", "Height (mm) | Storey height (m)"} {
+		r := refused(t, sheetOf("Mark | "+pair+" | N_Ed\nC1 | 3.6 | 4.0 | 900"))
+		assert.ErrorContains(t, r, "two headings for one field")
+		assert.ErrorContains(t, r, "Columns!B1")
+		assert.ErrorContains(t, r, "Columns!C1")
+	}
 }
 
 func TestHiddenColumnsAndRows(t *testing.T) {

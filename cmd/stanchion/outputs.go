@@ -193,7 +193,7 @@ func (r *run) openSinks(path string) error {
 	if w, err = r.out.create(r.con, r.flags.json); err != nil {
 		return err
 	}
-	r.out.sinks = append(r.out.sinks, newJSONSink(w, &r.plan.Settings.Design))
+	r.out.sinks = append(r.out.sinks, newJSONSink(w))
 	return nil
 }
 
@@ -233,8 +233,8 @@ func (s *textSink) finish(context.Context) error                     { return s.
 // jsonSink writes JSON lines.
 type jsonSink struct{ *schedule.JSONLines }
 
-func newJSONSink(w io.Writer, set *design.Settings) *jsonSink {
-	return &jsonSink{schedule.NewJSONLines(w, set)}
+func newJSONSink(w io.Writer) *jsonSink {
+	return &jsonSink{schedule.NewJSONLines(w)}
 }
 
 func (s *jsonSink) put(m *schedule.Member, res *design.Result) error { return s.Write(m, res) }

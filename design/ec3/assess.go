@@ -95,10 +95,12 @@ func (m *Member) segments(c *Candidate, a *Assessment) {
 	}
 }
 
-// add records a check of an action against a resistance.
-func (a *Assessment) add(kind design.Kind, clause string, combination int, from, to, ed, rd float64) {
+// add records a check of an axial force, compression positive, against a
+// resistance to its size.
+func (a *Assessment) add(kind design.Kind, clause string, combination int, from, to, nEd, rd float64) {
+	ed := math.Abs(nEd)
 	a.record(design.Check{Kind: kind, Clause: clause, Combination: combination,
-		From: from, To: to, Ed: ed, Rd: rd, Utilisation: ed / rd}, a.Candidate.Class)
+		From: from, To: to, NEd: nEd, Ed: ed, Rd: rd, Utilisation: ed / rd}, a.Candidate.Class)
 }
 
 // refuse records that a rule does not cover the member in this candidate.

@@ -73,11 +73,14 @@ func (b *bending) forces(length float64) (vz, vy float64) {
 func (m *Member) shear(c *Candidate, a *Assessment, b *bending) {
 	vz, vy := b.forces(m.Length)
 	vzRd, vyRd := c.VcRd()
+	nEd, _, _ := m.press(b.combination, c.Section.Mass)
 	if vz > 0 {
-		a.add(design.ShearZ, "6.2.6(1)", b.combination, 0, m.Length, vz, vzRd)
+		a.record(design.Check{Kind: design.ShearZ, Clause: "6.2.6(1)", Combination: b.combination, To: m.Length,
+			NEd: nEd, Ed: vz, Rd: vzRd, Utilisation: vz / vzRd}, c.Class)
 	}
 	if vy > 0 {
-		a.add(design.ShearY, "6.2.6(1)", b.combination, 0, m.Length, vy, vyRd)
+		a.record(design.Check{Kind: design.ShearY, Clause: "6.2.6(1)", Combination: b.combination, To: m.Length,
+			NEd: nEd, Ed: vy, Rd: vyRd, Utilisation: vy / vyRd}, c.Class)
 	}
 }
 
@@ -100,7 +103,7 @@ func (m *Member) sections(c *Candidate, a *Assessment, b *bending) {
 			}
 			s := c.bendSection(n, my, mz, vz, vy)
 			check := design.Check{Kind: design.CrossSection, Clause: s.clause(c.Section.Shape), Combination: b.combination,
-				From: x, To: x, Utilisation: s.Utilisation}
+				From: x, To: x, NEd: n, Utilisation: s.Utilisation}
 			if a.Section.Class == 0 || s.Utilisation > a.Section.Utilisation {
 				a.Section = s
 			}
@@ -140,12 +143,12 @@ func (m *Member) assessBendingBuckling(c *Candidate, a *Assessment) {
 	for i := range a.interactions {
 		x := &a.interactions[i]
 		a.record(design.Check{Kind: design.Interaction661, Clause: "6.3.3 (6.61)", Combination: x.Combination,
-			From: x.FromY, To: x.ToY, Utilisation: x.U661, Reason: a.scopes[x.Combination].reason}, x.Class)
+			From: x.FromY, To: x.ToY, NEd: x.NY, Utilisation: x.U661, Reason: a.scopes[x.Combination].reason}, x.Class)
 	}
 	for i := range a.interactions {
 		x := &a.interactions[i]
 		a.record(design.Check{Kind: design.Interaction662, Clause: "6.3.3 (6.62)", Combination: x.Combination,
-			From: x.FromZ, To: x.ToZ, Utilisation: x.U662, Reason: a.scopes[x.Combination].reason}, x.Class)
+			From: x.FromZ, To: x.ToZ, NEd: x.NZ, Utilisation: x.U662, Reason: a.scopes[x.Combination].reason}, x.Class)
 	}
 	m.assessSimple(c, a)
 }
@@ -177,7 +180,7 @@ func (m *Member) lateralChecks(c *Candidate, a *Assessment, b *bending) {
 		}
 		if bucklesLaterally(c.Section) {
 			a.record(design.Check{Kind: design.LateralTorsional, Clause: "6.3.2.1(1)", Combination: s.Combination,
-				From: s.From, To: s.To, Ed: lt.MyEd, Rd: lt.MbRd, Utilisation: lt.Utilisation}, class)
+				From: s.From, To: s.To, NEd: n, Ed: lt.MyEd, Rd: lt.MbRd, Utilisation: lt.Utilisation}, class)
 		}
 	}
 }

@@ -7,7 +7,7 @@ func (m *Member) assessSection(c *Candidate, a *Assessment) {
 	for i := range m.Forces {
 		if f := &m.Forces[i]; f.Least < 0 {
 			// EN 1993-1-1:2005 6.2.3(2)a, (6.6): yielding of the gross section.
-			a.add(design.Tension, "6.2.3(2)", f.Combination, f.FromLow, f.ToLow, -f.Least, c.NplRd)
+			a.add(design.Tension, "6.2.3(2)", f.Combination, f.FromLow, f.ToLow, f.Least, c.NplRd)
 		}
 	}
 	for i := range m.Forces {

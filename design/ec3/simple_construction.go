@@ -152,7 +152,7 @@ func (m *Member) assessSimple(c *Candidate, a *Assessment) {
 			a.Simple = x
 		}
 		a.record(design.Check{Kind: design.SimpleConstruction, Clause: "NCCI SN048", Combination: i,
-			To: m.Length, Utilisation: x.Utilisation}, x.Class)
+			To: m.Length, NEd: x.NEd, Utilisation: x.Utilisation}, x.Class)
 	}
 	for i := range a.scopes {
 		if !a.scopes[i].pinned {
@@ -162,6 +162,6 @@ func (m *Member) assessSimple(c *Candidate, a *Assessment) {
 		x := m.simplified(c, a, &b)
 		limit := simpleBase * x.NbyRd
 		a.record(design.Check{Kind: design.SimpleConstructionY, Clause: "NCCI SN048", Combination: i,
-			To: m.Length, Ed: x.NEd, Rd: limit, Utilisation: x.NEd / limit}, x.Class)
+			To: m.Length, NEd: x.NEd, Ed: x.NEd, Rd: limit, Utilisation: x.NEd / limit}, x.Class)
 	}
 }
