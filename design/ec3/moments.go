@@ -6,8 +6,16 @@ import (
 	"stanchion/design"
 )
 
-// at returns the ordinate of a linear diagram at height x of a length.
+// at returns the ordinate of a linear diagram at height x of a length. At the
+// ends it is the end moment to the last figure: where that is 0, the section is
+// bent about one axis and not about both.
 func at(m design.EndMoments, x, length float64) float64 {
+	switch {
+	case x <= 0:
+		return m.Bottom
+	case x >= length:
+		return m.Top
+	}
 	return m.Bottom + (m.Top-m.Bottom)*x/length
 }
 
