@@ -18,7 +18,7 @@ import (
 func TestInterrupt(t *testing.T) {
 	dir := t.TempDir()
 	loads, out := filepath.Join(dir, "loads.csv"), filepath.Join(dir, "loads-sized.csv")
-	require.NoError(t, os.WriteFile(loads, []byte(manyRows(400_000)), 0o666))
+	require.NoError(t, os.WriteFile(loads, []byte(manyRows(150_000)), 0o666))
 	require.NoError(t, os.WriteFile(out, []byte("as it was"), 0o666))
 
 	run := exec.Command("stanchion", "size", loads, "--force")

@@ -8,6 +8,7 @@ import (
 	"strings"
 
 	"stanchion/design"
+	"stanchion/design/ec3"
 	"stanchion/design/search"
 	"stanchion/schedule"
 	"stanchion/schedule/summary"
@@ -141,7 +142,7 @@ func (r *run) sayFailing(ctx context.Context) {
 	t.limit(4, 26)
 	for i := range lines {
 		l := &lines[i]
-		t.add("  "+l.Member.Column.Mark, summary.Level(&l.Member.Column), l.Result.Section, utilisation(l.Result.Utilisation), schedule.CheckName(l.Result.Governing.Kind), instead[i])
+		t.add("  "+l.Member.Column.Mark, summary.Level(&l.Member.Column), l.Result.Section, utilisation(l.Result.Utilisation, ec3.Limit(&l.Member.Column, &r.plan.Settings.Design)), schedule.CheckName(l.Result.Governing.Kind), instead[i])
 	}
 	r.print("", "Members that fail:")
 	r.print(t.lines()...)
@@ -150,11 +151,18 @@ func (r *run) sayFailing(ctx context.Context) {
 	}
 }
 
-func utilisation(u float64) string {
+// utilisation writes a utilisation that is above its limit: to three decimals,
+// as a spreadsheet rounds the number that is written, and to more where three
+// would hide that it fails.
+func utilisation(u, limit float64) string {
 	if math.IsInf(u, 0) {
 		return "-"
 	}
-	return strconv.FormatFloat(u, 'f', 3, 64)
+	u = schedule.Round(u)
+	if rounded := math.Round(u*1000) / 1000; rounded > limit {
+		return strconv.FormatFloat(rounded, 'f', 3, 64)
+	}
+	return strconv.FormatFloat(u, 'f', -1, 64)
 }
 
 // lightest names, for members that fail, the lightest section that passes: of
