@@ -4,6 +4,7 @@ import (
 	"context"
 	"math"
 	"slices"
+	"time"
 )
 
 // FewSizes finds the least cost with at most K different sizes, for K = 1 up to
@@ -27,7 +28,9 @@ func (p *Problem) FewSizes(ctx context.Context, most int) ([]Solution, error) {
 	var out []Solution
 	var warm []int32
 	for k := 1; k <= most; k++ {
-		sol := s.solve(ctx, k, warm)
+		share, stop := shareOf(ctx, most-k+1)
+		sol := s.solve(share, k, warm)
+		stop()
 		warm = sol.open
 		out = append(out, p.solution(r, k, sol))
 		if sol.cost <= free*(1+tolerance) || ctx.Err() != nil {
@@ -35,6 +38,16 @@ func (p *Problem) FewSizes(ctx context.Context, most int) ([]Solution, error) {
 		}
 	}
 	return out, nil
+}
+
+// shareOf gives one of several K its part of the time that is left, so that a
+// hard K does not leave the others without an answer.
+func shareOf(ctx context.Context, left int) (context.Context, context.CancelFunc) {
+	end, limited := ctx.Deadline()
+	if !limited {
+		return ctx, func() {}
+	}
+	return context.WithTimeout(ctx, time.Until(end)/time.Duration(left))
 }
 
 // tolerance is the relative difference below which two costs are equal: sums of
