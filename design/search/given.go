@@ -74,6 +74,11 @@ func (e *Engine) find(name string, o catalogue.FindOptions) (*catalogue.Section,
 	return s, err
 }
 
+// Section returns the section that a result names.
+func (e *Engine) Section(name string) (*catalogue.Section, error) {
+	return e.find(name, catalogue.FindOptions{})
+}
+
 // refuse fails a given section that the rules do not cover, with the reason.
 func refuse(res *design.Result, r *Refused, col *design.Column) {
 	res.Status = design.Fails

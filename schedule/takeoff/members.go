@@ -14,18 +14,16 @@ import (
 type Find func(name string, col *design.Column) (*catalogue.Section, error)
 
 // Members takes the members of a schedule with the sections that it says they
-// have: those of its section column and, where that is blank, those that an
-// earlier run wrote. grades are used where neither says one.
+// have, those that cannot be counted apart.
 func Members(members iter.Seq2[*schedule.Member, error], find Find, grades []string) (items []Item, leftOut []LeftOut, err error) {
-	r := memberReader{find: find, grades: grades, found: map[string]*catalogue.Section{}}
+	r := NewReader(find, grades)
 	for m, err := range members {
 		if err != nil {
 			return nil, nil, err
 		}
-		it, why := r.item(m)
+		it, why := r.Item(m)
 		if why != "" {
-			col := &m.Column
-			leftOut = append(leftOut, LeftOut{MemberName(col), col.Cell, why})
+			leftOut = append(leftOut, LeftOut{it.Name(), it.Cell, why})
 			continue
 		}
 		items = append(items, it)
@@ -33,14 +31,23 @@ func Members(members iter.Seq2[*schedule.Member, error], find Find, grades []str
 	return items, leftOut, nil
 }
 
-type memberReader struct {
+// Reader finds which section a schedule says that a member has: that of its
+// section column and, where it is blank, the one that an earlier run wrote.
+type Reader struct {
 	find   Find
 	grades []string
 	found  map[string]*catalogue.Section // by name and families
 }
 
-// item returns a member as it is counted, or why it is not.
-func (r *memberReader) item(m *schedule.Member) (it Item, why string) {
+// NewReader returns a reader. grades are used where neither the row nor its
+// results say one.
+func NewReader(find Find, grades []string) *Reader {
+	return &Reader{find: find, grades: grades, found: map[string]*catalogue.Section{}}
+}
+
+// Item returns a member as it is counted, or with no section and why.
+func (r *Reader) Item(m *schedule.Member) (it Item, why string) {
+	it = ItemOf(&m.Column, nil, "")
 	if len(m.Problems) > 0 {
 		return it, m.Problems[0].Message()
 	}
@@ -54,11 +61,11 @@ func (r *memberReader) item(m *schedule.Member) (it Item, why string) {
 	}
 	switch {
 	case given != nil:
-		it = r.given(m, given, earlier)
+		r.given(&it, m, given, earlier)
 	case earlier == nil:
 		return it, "it has no section: " + reasonOf(m.Earlier.Status, "size the schedule first, or give one")
 	case decided(m.Earlier.Status):
-		it = ItemOf(&m.Column, earlier, m.Earlier.Grade)
+		it.Section, it.Grade = earlier, m.Earlier.Grade
 		it.Failing = m.Earlier.Status == design.Fails.String()
 	default:
 		return it, fmt.Sprintf("it has no section that passes: an earlier run found %q, and named %s as the nearest", m.Earlier.Status, earlier.Name())
@@ -82,19 +89,18 @@ func decided(status string) bool {
 
 // given takes the section of the schedule's own column. An earlier run's
 // result counts for what it says of that same section.
-func (r *memberReader) given(m *schedule.Member, given, earlier *catalogue.Section) Item {
-	it := ItemOf(&m.Column, given, "")
+func (r *Reader) given(it *Item, m *schedule.Member, given, earlier *catalogue.Section) {
+	it.Section = given
 	if earlier == given {
 		it.Grade = m.Earlier.Grade
 		it.Failing = m.Earlier.Status == design.Fails.String()
 	} else if earlier != nil {
 		it.Remark = fmt.Sprintf("%s stands in the schedule and %s in the results of an earlier run: %[1]s is counted", given.Name(), earlier.Name())
 	}
-	return it
 }
 
 // grade settles the grade: that of the result, of the row, of the settings.
-func (r *memberReader) grade(it *Item, col *design.Column) {
+func (r *Reader) grade(it *Item, col *design.Column) {
 	if it.Grade != "" {
 		return
 	}
@@ -112,7 +118,7 @@ func (r *memberReader) grade(it *Item, col *design.Column) {
 }
 
 // section finds a section, remembering those found; nil for no name.
-func (r *memberReader) section(name string, col *design.Column) (*catalogue.Section, error) {
+func (r *Reader) section(name string, col *design.Column) (*catalogue.Section, error) {
 	if name == "" {
 		return nil, nil
 	}

@@ -84,11 +84,20 @@ func runsThrough(lower, upper *Item) bool {
 		lower.Grade == upper.Grade && lower.Quantity == upper.Quantity
 }
 
+// line names the column line that a length belongs to: its stack or, where
+// there is none, its mark.
+func (it *Item) line() string {
+	if it.Stack != "" {
+		return "stack " + fold(it.Stack)
+	}
+	return "mark " + fold(it.Mark)
+}
+
 // stackLinks finds, for every length, the one that stands on it: of the same
-// stack, and starting at the level where this one ends. -1: none. Where
+// column line, and starting at the level where this one ends. -1: none. Where
 // several could stand there, nothing is joined.
 func stackLinks(items []Item) []int {
-	type foot struct{ stack, level string }
+	type foot struct{ line, level string }
 	feet := map[foot]int{}
 	const several = -2
 	heads := map[foot]int{}
@@ -100,16 +109,16 @@ func stackLinks(items []Item) []int {
 	}
 	for i := range items {
 		it := &items[i]
-		if it.Stack == "" || it.From == "" || it.To == "" || fold(it.From) == fold(it.To) {
+		if it.From == "" || it.To == "" || fold(it.From) == fold(it.To) {
 			continue
 		}
-		count(feet, foot{fold(it.Stack), fold(it.From)}, i)
-		count(heads, foot{fold(it.Stack), fold(it.To)}, i)
+		count(feet, foot{it.line(), fold(it.From)}, i)
+		count(heads, foot{it.line(), fold(it.To)}, i)
 	}
 	above := make([]int, len(items))
 	for i := range items {
 		above[i] = -1
-		place := foot{fold(items[i].Stack), fold(items[i].To)}
+		place := foot{items[i].line(), fold(items[i].To)}
 		if j, ok := feet[place]; ok && j >= 0 && heads[place] == i {
 			above[i] = j
 		}
