@@ -464,7 +464,9 @@ func (r reference) bent(col *design.Column, set *design.Settings) float64 {
 	}
 	u := 0.0
 	line := func(m design.EndMoments, x float64) float64 { return growth * (m.Bottom*(L-x) + m.Top*x) / L }
-	top := func(m design.EndMoments, a, b float64) float64 { return max(math.Abs(line(m, a)), math.Abs(line(m, b))) }
+	top := func(m design.EndMoments, a, b float64) float64 {
+		return max(math.Abs(line(m, a)), math.Abs(line(m, b)))
+	}
 	sways := func(h *design.Hold) bool { return h.K > 1 || h.Lcr > L }
 	for k := range col.Combinations {
 		c := &col.Combinations[k]
