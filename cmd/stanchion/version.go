@@ -4,6 +4,8 @@ import (
 	"fmt"
 	"runtime"
 	"runtime/debug"
+	"slices"
+	"strings"
 
 	"github.com/spf13/cobra"
 
@@ -66,23 +68,15 @@ func nationalNames() string {
 	return names + " (the first is the default)"
 }
 
-// sectionCounts says how many sections of which standards there are.
+// sectionCounts says how many sections there are, and of which standards.
 func sectionCounts() string {
-	count := map[string]int{}
-	var standards []string
 	list := catalogue.Default().Sections()
+	var standards []string
 	for _, s := range list {
-		if count[s.Standard] == 0 {
+		if !slices.Contains(standards, s.Standard) {
 			standards = append(standards, s.Standard)
 		}
-		count[s.Standard]++
 	}
-	text := fmt.Sprintf("%d:", len(list))
-	for i, s := range standards {
-		if i > 0 {
-			text += ","
-		}
-		text += fmt.Sprintf(" %d to %s", count[s], s)
-	}
-	return text
+	slices.Sort(standards)
+	return fmt.Sprintf("%d of %s", len(list), strings.Join(standards, ", "))
 }
