@@ -127,6 +127,9 @@ func isSpace(r rune) bool {
 	return unicode.IsSpace(r) || r == '\u200b' || r == '\u2060' || r == '\ufeff' || r == '\u00ad'
 }
 
+// countWords may follow a number of pieces: "2 no.", "4 off".
+var countWords = compactSet("no|nos|nr|nrs|number|off|no off|x|pc|pcs|piece|pieces|column|columns|stk|stuck|st|pz|ud")
+
 // parseNumber reads a whole cell as a number of quantity q in unit u, or in
 // the unit that stands behind it, and returns it in the unit of design.
 func parseNumber(s string, decimal byte, q quantity, u unit) (float64, error) {
@@ -134,7 +137,7 @@ func parseNumber(s string, decimal byte, q quantity, u unit) (float64, error) {
 	if err != nil {
 		return 0, err
 	}
-	if rest == "" {
+	if rest == "" || q == count && countWords[compact(rest)] && !strings.ContainsAny(rest, "()[]") {
 		return value * u.factor, nil
 	}
 	own, known, _ := findUnit(rest)

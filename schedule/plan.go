@@ -50,7 +50,14 @@ func (s *scanner) freeColumn() int {
 func (s *scanner) remarks(p *Plan) []string {
 	var list []string
 	if n := s.vote.mixed(); n > 0 {
-		list = append(list, fmt.Sprintf("%d numbers do not fit the decimal mark %q that the others use", n, p.Decimal))
+		what := "1 number does"
+		if n > 1 {
+			what = fmt.Sprintf("%d numbers do", n)
+		}
+		list = append(list, fmt.Sprintf("%s not fit the decimal mark %q that the others use", what, p.Decimal))
+	}
+	if s.heavy > 0 && 2*s.heavy > s.positive+s.negative {
+		list = append(list, "most N_Ed are above 50 MN, which hardly any column carries: if they are in N, say so in the heading, as N_Ed [N]")
 	}
 	if p.Settings.Compression == "negative" && s.negative == 0 && s.positive > 0 {
 		list = append(list, "compression is set to negative, and every N_Ed is positive: every member is in tension")
@@ -75,7 +82,7 @@ func (s *scanner) refuse(settings *Settings) error {
 			r.Seen[i].File = ""
 		}
 	case len(s.l.clashes) > 0:
-		r.What, r.Do = "two headings for one field", "rename one, or map one with the setting map HEADING (to "+ignored+", to leave it alone)"
+		r.What, r.Do = "two headers for one field", "rename one, or map one with the setting map HEADING (to "+ignored+", to leave it alone)"
 		for _, group := range s.l.clashes {
 			for i := range group {
 				r.Seen = append(r.Seen, Problem{Cell: group[i].Cell, What: fmt.Sprintf("%q is %s", group[i].Heading, group[i].title())})

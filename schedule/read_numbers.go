@@ -34,8 +34,15 @@ func notNumber(b *Binding, cell *Cell, err error) *Problem {
 	if err != errNotNumber {
 		p.What += ", " + err.Error()
 	}
-	p.Do = "give a number" + b.inUnit() + ", or clear the " + b.cellOrRow()
+	p.Do = "give a " + b.number() + b.inUnit() + ", or clear the " + b.cellOrRow()
 	return p
+}
+
+func (b *Binding) number() string {
+	if b.key.line().of == count {
+		return "whole number"
+	}
+	return "number"
 }
 
 func (b *Binding) inUnit() string {

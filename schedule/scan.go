@@ -2,6 +2,7 @@ package schedule
 
 import (
 	"fmt"
+	"strconv"
 	"strings"
 )
 
@@ -51,8 +52,8 @@ type scanner struct {
 	vote    decimalVote
 	marks   []int // columns of mark, stack and levels, -1 where there is none
 	comb    int
-	decides []decides // columns whose texts tell the decimal mark
-	axial   []int     // columns of N_Ed
+	decides []decides  // columns whose texts tell the decimal mark
+	axial   []*Binding // columns of N_Ed
 
 	refs     []rowRef
 	groups   *groupScan
@@ -60,6 +61,7 @@ type scanner struct {
 	summary  Summary
 	positive int // N_Ed above 0
 	negative int
+	heavy    int // N_Ed beyond any rolled column, in a unit that nobody named
 	width    int
 	cells    int
 }
@@ -91,7 +93,7 @@ func newScanner(src Source, l *layout, opts *Options) *scanner {
 			}})
 		default:
 			if f.name == axialField {
-				s.axial = append(s.axial, b.Col)
+				s.axial = append(s.axial, b)
 			}
 			if f.of != noQuantity {
 				s.decides = append(s.decides, decides{col: b.Col})
@@ -158,8 +160,9 @@ func (s *scanner) member(r *Row) {
 	for i := range s.decides {
 		s.see(r.at(s.decides[i].col), &s.decides[i])
 	}
-	for _, col := range s.axial {
-		s.sign(r.at(col))
+	for _, b := range s.axial {
+		s.sign(r.at(b.Col))
+		s.weigh(r.at(b.Col), b)
 	}
 	s.cells = max(s.cells, len(r.Cells))
 	if len(r.Cells) > s.width {
@@ -192,6 +195,24 @@ func (s *scanner) see(cell *Cell, d *decides) {
 		if strings.Contains(item, ".") || strings.Count(item, ",") == 1 && strings.Contains(cell.Text, ";") {
 			s.vote.see(item, nil)
 		}
+	}
+}
+
+// heaviest is what hardly any column has to carry, N: about what the heaviest
+// section carries as a short column.
+const heaviest = 50e6
+
+// weigh counts an axial force that is hardly one in the unit assumed for it.
+func (s *scanner) weigh(cell *Cell, b *Binding) {
+	if b.named {
+		return
+	}
+	x := cell.Number
+	if cell.Kind == Text {
+		x, _ = strconv.ParseFloat(trim(cell.Text), 64) // a number that is written otherwise has no say
+	}
+	if abs(x)*b.unit.factor > heaviest {
+		s.heavy++
 	}
 }
 

@@ -38,7 +38,7 @@ C2   | A2   | GF | L1 |    | #4.5 | #800  | mid   | 203x203x60 UKC | S275 |
 func TestAbsurdlyWideSheets(t *testing.T) {
 	row := "Mark | Length" + strings.Repeat(" | N_Ed", 4_000)
 	r := refused(t, sheetOf(strings.Repeat(row+"\n", 70)))
-	assert.ErrorContains(t, r, "two headings for one field")
+	assert.ErrorContains(t, r, "two headers for one field")
 	assert.ErrorContains(t, r, "more")
 	assert.Less(t, len(r.Error()), 4000)
 }
@@ -141,12 +141,12 @@ func TestDecimalMarkIsDecidedOnce(t *testing.T) {
 	// One that does not fit is not read.
 	s = readAll(t, sheetOf("Mark | Length | N_Ed\nC1 | 3.6 | 900.5\nC2 | 3,6 | 900.5\nC3|3.5|1.5"))
 	assert.Len(t, s.Members[1].Problems, 1)
-	assert.Contains(t, s.Summary.Notes[0], "do not fit the decimal mark")
+	assert.Contains(t, s.Summary.Notes[0], "1 number does not fit the decimal mark")
 }
 
 func TestTwoHeadersForOneField(t *testing.T) {
 	r := refused(t, sheetOf("Mark | Length | N_Ed (kN) | Axial load (kN)\nC1 | 3.6 | 900 | 800"))
-	assert.Equal(t, `loads.xlsx, Columns!A1: two headings for one field: rename one, or map one with the setting map HEADING (to ignore, to leave it alone)
+	assert.Equal(t, `loads.xlsx, Columns!A1: two headers for one field: rename one, or map one with the setting map HEADING (to ignore, to leave it alone)
   Columns!C1: "N_Ed (kN)" is N_Ed
   Columns!D1: "Axial load (kN)" is N_Ed`, r.Error())
 	// A mapping settles it.
@@ -191,7 +191,7 @@ func TestExactBeatsSuggested(t *testing.T) {
 func TestTwoHeadersForTheLength(t *testing.T) {
 	for _, pair := range []string{"Length | Height", "Storey height | L", "Height (mm) | Storey height (m)"} {
 		r := refused(t, sheetOf("Mark | "+pair+" | N_Ed\nC1 | 3.6 | 4.0 | 900"))
-		assert.ErrorContains(t, r, "two headings for one field")
+		assert.ErrorContains(t, r, "two headers for one field")
 		assert.ErrorContains(t, r, "Columns!B1")
 		assert.ErrorContains(t, r, "Columns!C1")
 	}
@@ -457,7 +457,7 @@ func TestValuesThatNoColumnHas(t *testing.T) {
 	for _, c := range []struct{ heading, cell, want string }{
 		{"L_cr,y", "3500", "outside 0.3 to 60 m"}, {"L_T (mm)", "3.5", "L_T is 3.5 mm, outside 0.3 to 60 m"}, {"L_fi,z", "0", "outside"},
 		{"k_y", "0", "from 0.1 to 20"}, {"k_z", "-1", "from 0.1 to 20"}, {"eta y-y top", "1.5", "from 0 to 1"}, {"Stiffness z-z top", "-5", "below 0"},
-		{"Utilisation limit", "95", "from 0.01 to 1.5"}, {"Qty", "0", "whole number from 1"}, {"Qty", "1.5", "whole number"}, {"Qty", "-2", "whole number"}, {"Qty", "1 off", `Quantity is "1 off"`},
+		{"Utilisation limit", "95", "from 0.01 to 1.5"}, {"Qty", "0", "whole number from 1"}, {"Qty", "1.5", "whole number"}, {"Qty", "-2", "whole number"}, {"Qty", "1 of 2", `Quantity is "1 of 2"`},
 		{"Sides exposed", "5", "from 3 to 4"}, {"Max depth", "0.3", "Greatest depth is 0.3 mm, outside 1 mm to 3 m"}, {"eta_fi", "65", "from 0.01 to 1"}, {"Fire period", "600", "from 1 to 360"},
 		{"M_y,Ed top", "5000000", "above 1000 MNm"}, {"Reaction flange A", "300000", "above 200 MN"}, {"Splice", "perhaps", "give yes or no"}, {"z-z held at flange", "maybe", "yes, no, or the distance"},
 		{"Ends y-y", "welded", "bottom first"}, {"End y-y top", "welded", "not an end condition"}, {"Group", "@1-Feb", "is a date"}, {"Boxed", "#0.5", "give yes or no"},

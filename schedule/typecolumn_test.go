@@ -31,5 +31,5 @@ func TestTypeColumn(t *testing.T) {
 	assert.Equal(t, []string{"UKC"}, s.Members[0].Column.Choice.Families)
 	assert.Equal(t, []Seen{{Cell: "Columns!B1", Heading: "Type"}}, s.Summary.Other)
 	r := refused(t, sheetOf("Mark | Type | Member type | Length | N_Ed\nC1 | HEB | UC | 3.6 | 900"))
-	assert.ErrorContains(t, r, "two headings for one field")
+	assert.ErrorContains(t, r, "two headers for one field")
 }

@@ -1,0 +1,31 @@
+package schedule
+
+import (
+	"testing"
+
+	"github.com/stretchr/testify/assert"
+)
+
+// Pieces are counted in offices with a word behind the number.
+func TestCountsWithTheirWord(t *testing.T) {
+	for cell, want := range map[string]int{"2 no.": 2, "3 No": 3, "4 off": 4, "2x": 2, "12 nr": 12, "1 no. off": 1, "5 pcs": 5, "#6": 6} {
+		assert.Equal(t, want, good(t, "Mark | Qty | Length | N_Ed\nC1 | "+cell+" | 3.6 | 900").Quantity, cell)
+	}
+	for _, cell := range []string{"two", "2 (no.)", "2 no. tbc", "2 kN", "1.5"} {
+		assert.Contains(t, problem(t, "Mark | Qty | Length | N_Ed\nC1 | "+cell+" | 3.6 | 900").Error(), "give a whole number", cell)
+	}
+	problem(t, "Mark | Length | N_Ed\nC1 | 3.6 | 900 no.")
+}
+
+// Forces in N that are read in kN are suspected where a column could not carry
+// them, and the bound of what is read lies far above.
+func TestForcesInNewtons(t *testing.T) {
+	const header = "Mark | Length | N_Ed"
+	for _, rows := range []string{"\nC1 | 3.6 | #95000\nC2 | 3.6 | #87000\nC3 | 3.6 | 900", "\nC1 | 3.6 | 95000"} {
+		notes := readAll(t, sheetOf(header+rows)).Summary.Notes
+		assert.Len(t, notes, 1)
+		assert.Contains(t, notes[0], "N_Ed [N]")
+	}
+	assert.Empty(t, readAll(t, sheetOf(header+" (kN)\nC1 | 3.6 | #95000")).Summary.Notes)
+	assert.Empty(t, readAll(t, sheetOf(header+"\nC1 | 3.6 | #95000\nC2 | 3.6 | 900")).Summary.Notes)
+}
