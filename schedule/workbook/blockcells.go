@@ -17,6 +17,15 @@ var outcomes = map[string]Role{
 	design.NotRead.String():   NotRead,
 }
 
+// words are the texts by which cells of the block are known to need a look of
+// their own.
+func (p *Plan) words() map[string]Role {
+	if p.block.Words != nil {
+		return p.block.Words
+	}
+	return outcomes
+}
+
 // look returns how the cells of a column are drawn.
 func (p *Plan) look(i int, role Role) Look {
 	c := &p.block.Columns[i]

@@ -220,8 +220,8 @@ func (p *Plan) looks() []Look {
 	for i := range p.block.Columns {
 		add(p.look(i, Result))
 		if !p.block.Columns[i].Numeric {
-			for _, word := range sortedKeys(outcomes) {
-				add(p.look(i, outcomes[word]))
+			for _, word := range sortedKeys(p.words()) {
+				add(p.look(i, p.words()[word]))
 			}
 		}
 	}

@@ -21,6 +21,11 @@ const (
 	Fails          // a member that fails
 	NoSection      // a member without a section
 	NotRead        // a row that could not be read
+	Changed        // something that differs from an earlier issue
+	Added          // something that an earlier issue does not have
+	Gone           // something that only the earlier issue has
+	Spare          // a member that has more than it needs
+	Perhaps        // something for a person to decide
 )
 
 // Align is where a cell's content stands.
@@ -49,19 +54,23 @@ type Look struct {
 // orange and a yellow that people with any common colour blindness tell apart;
 // printed in black and white the outcomes differ by darkness, mark and word.
 const (
-	inkDark   = "1F2A33"
-	inkLight  = "FFFFFF"
-	inkMuted  = "5A6670"
-	inkLink   = "1F4E79"
-	fillHead  = "2F4858"
-	fillGroup = "D5DEE4"
-	fillUnit  = "EEF2F4"
-	fillInput = "FFFBE6"
-	fillFail  = "B5430B"
-	fillNone  = "E8A76F"
-	fillRead  = "F5E663"
-	lineSoft  = "C4CDD3"
-	lineHard  = "2F4858"
+	inkDark     = "1F2A33"
+	inkLight    = "FFFFFF"
+	inkMuted    = "5A6670"
+	inkLink     = "1F4E79"
+	fillHead    = "2F4858"
+	fillGroup   = "D5DEE4"
+	fillUnit    = "EEF2F4"
+	fillInput   = "FFFBE6"
+	fillFail    = "B5430B"
+	fillNone    = "E8A76F"
+	fillRead    = "F5E663"
+	fillChanged = "CFE2F0"
+	fillAdded   = "E3DCF0"
+	fillGone    = "DADADA"
+	fillSpare   = "FBE6C8"
+	lineSoft    = "C4CDD3"
+	lineHard    = "2F4858"
 )
 
 // lettering is the font that the workbook uses for its plain cells.
@@ -124,7 +133,7 @@ func (l Look) draw(s *excelize.Style) {
 	case Result:
 		box(s, lineSoft)
 		l.indent(s)
-	case Passes, Fails, NoSection, NotRead:
+	case Passes, Fails, NoSection, NotRead, Changed, Added, Gone, Spare, Perhaps:
 		box(s, lineSoft)
 		l.indent(s)
 		l.drawOutcome(s)
@@ -141,24 +150,29 @@ func (l Look) indent(s *excelize.Style) {
 // drawOutcome puts a mark before the word by number format, so that the cell
 // holds the word alone.
 func (l Look) drawOutcome(s *excelize.Style) {
-	mark := ""
-	switch l.Role {
-	case Passes:
-		mark = `;;;"✓ "@`
-	case Fails:
-		mark = `;;;"✗ "@`
-		s.Font.Bold, s.Font.Color = true, inkLight
-		fill(s, fillFail)
-	case NoSection:
-		mark = `;;;"✗ "@`
+	o := outcomeLooks[l.Role]
+	mark := `;;;"` + o.mark + ` "@`
+	if o.fill != "" {
 		s.Font.Bold = true
-		fill(s, fillNone)
-	case NotRead:
-		mark = `;;;"? "@`
-		s.Font.Bold = true
-		fill(s, fillRead)
+		fill(s, o.fill)
+	}
+	if o.fill == fillFail {
+		s.Font.Color = inkLight
 	}
 	s.CustomNumFmt = &mark
+}
+
+// outcomeLooks are the marks and fills of outcomes.
+var outcomeLooks = map[Role]struct{ mark, fill string }{
+	Passes:    {"✓", ""},
+	Fails:     {"✗", fillFail},
+	NoSection: {"✗", fillNone},
+	NotRead:   {"?", fillRead},
+	Changed:   {"≠", fillChanged},
+	Added:     {"+", fillAdded},
+	Gone:      {"−", fillGone},
+	Spare:     {"▼", fillSpare},
+	Perhaps:   {"?", fillRead},
 }
 
 func fill(s *excelize.Style, colour string) {

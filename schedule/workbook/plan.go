@@ -14,6 +14,7 @@ type Block struct {
 	LastRow int    // of the rows that have results
 	Title   string // over the whole block, where there is room for it
 	Columns []schedule.ResultColumn
+	Words   map[string]Role // texts whose cells are drawn in a role; nil: the outcomes of a member
 	// Cells returns the results of a row, one a column; none where the row has
 	// no results. Rows are asked for in rising order, each once, and again for
 	// each time that the workbook is written.

@@ -40,7 +40,7 @@ func (p *Plan) newRowWriter(g *grafting) (*rowWriter, error) {
 	}
 	for i := range p.block.Columns {
 		s := columnStyles{result: g.styles[p.look(i, Result)], outcomes: map[string]int{}}
-		for word, role := range outcomes {
+		for word, role := range p.words() {
 			s.outcomes[word] = g.styles[p.look(i, role)]
 		}
 		w.styles = append(w.styles, s)
