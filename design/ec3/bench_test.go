@@ -77,3 +77,55 @@ func BenchmarkNewCandidate(b *testing.B) {
 		}
 	}
 }
+
+// bentUsual is usual with moments about both axes, and beam reactions.
+func bentUsual() *design.Column {
+	col := usual()
+	for i := range col.Combinations {
+		k := &col.Combinations[i]
+		k.My, k.Mz = design.EndMoments{Bottom: -20e6, Top: 40e6}, design.EndMoments{Top: 6e6}
+		k.HasReactions, k.FlangeA, k.WebB = true, 90e3, 20e3
+	}
+	return col
+}
+
+// Nor does bending, by either annex, by simple construction or between
+// neighbours.
+func TestBendingDoesNotAllocateOnceWarm(t *testing.T) {
+	for _, interaction := range []design.Interaction{design.AnnexB, design.AnnexA, design.SimpleInteraction} {
+		set := simpleSettings()
+		set.Interaction = interaction
+		for _, s := range []*catalogue.Section{section(t, "203x203x60 UKC"), section(t, "RHS 200x100x8.0"), section(t, "CHS 168.3x8.0")} {
+			c := candidate(t, s, "S355", set)
+			var m ec3.Member
+			var a ec3.Assessment
+			col, next := bentUsual(), &ec3.Neighbour{Column: bentUsual(), Section: s}
+			col.Z.Restraints = nil
+			work := func() {
+				if m.Reset(col, set) != nil {
+					panic("not a member")
+				}
+				m.Between(next, next)
+				m.Assess(c, &a)
+			}
+			work()
+			require.NotZero(t, a.Section.Class)
+			assert.Zero(t, testing.AllocsPerRun(20, work), "%s by %v", s.Name(), interaction)
+		}
+	}
+}
+
+func BenchmarkAssessBent(b *testing.B) {
+	set := settings()
+	m, err := ec3.NewMember(bentUsual(), set)
+	require.NoError(b, err)
+	var a ec3.Assessment
+	for _, name := range []string{"203x203x60 UKC", "RHS 200x100x8.0"} {
+		c := candidate(b, section(b, name), "S355", set)
+		b.Run(name, func(b *testing.B) {
+			for b.Loop() {
+				m.Assess(c, &a)
+			}
+		})
+	}
+}

@@ -1,8 +1,10 @@
 package search
 
 import (
+	"cmp"
 	"fmt"
 	"slices"
+	"strconv"
 	"strings"
 
 	"stanchion/design"
@@ -19,8 +21,10 @@ type standing struct {
 // stand puts the lengths of every column line in order by their levels: a
 // length stands on the one whose upper level is its lower level. A line is the
 // lengths with one grid reference, or where there is none with one mark, that
-// give their levels. Nothing is guessed: a line whose levels are missing,
-// doubled or go round in a ring is taken apart, and a note says so.
+// give their levels. Where a line does not give them all, the axial force tells
+// the order if it grows downwards in every combination. Nothing is guessed: a
+// line that neither tells, or whose levels are doubled or go round in a ring,
+// is taken apart. Notes say what was done.
 func stand(cols []design.Column) standing {
 	s := standing{below: slices.Repeat([]int{-1}, len(cols)), above: slices.Repeat([]int{-1}, len(cols)),
 		notes: make([]string, len(cols))}
@@ -49,8 +53,15 @@ func lineOf(col *design.Column) string {
 	return ""
 }
 
-// level makes two spellings of a level alike.
-func level(name string) string { return strings.Join(strings.Fields(strings.ToLower(name)), " ") }
+// level makes two spellings of a level alike: "Level 1" and "level  1", "+3.90"
+// and "3.9".
+func level(name string) string {
+	name = strings.Join(strings.Fields(strings.ToLower(name)), " ")
+	if v, err := strconv.ParseFloat(strings.TrimPrefix(name, "+"), 64); err == nil {
+		return strconv.FormatFloat(v, 'g', -1, 64)
+	}
+	return name
+}
 
 // order joins the lengths of one line.
 func (s *standing) order(cols []design.Column, name string, line []int) {
@@ -58,7 +69,7 @@ func (s *standing) order(cols []design.Column, name string, line []int) {
 	for _, i := range line {
 		c := &cols[i]
 		if c.From == "" || c.To == "" {
-			s.apart(line, name+": not every length gives its levels, so it is not known which stands on which: each is designed on its own")
+			s.byForce(cols, name, line)
 			return
 		}
 		if _, taken := ends[level(c.To)]; taken {
@@ -86,6 +97,47 @@ func (s *standing) order(cols []design.Column, name string, line []int) {
 	case bases > 1:
 		s.note(line, fmt.Sprintf("%s: its levels do not join: it is designed as %d columns", name, bases))
 	}
+}
+
+// byForce joins the lengths of a line that does not give all its levels by
+// their axial force.
+func (s *standing) byForce(cols []design.Column, name string, line []int) {
+	line = slices.Clone(line)
+	slices.SortStableFunc(line, func(i, j int) int { return cmp.Compare(footForce(&cols[j]), footForce(&cols[i])) })
+	for k := 1; k < len(line); k++ {
+		if !lighter(&cols[line[k]], &cols[line[k-1]]) {
+			s.apart(line, name+": neither levels nor axial forces tell which length stands on which: each is designed on its own")
+			return
+		}
+	}
+	for k := 1; k < len(line); k++ {
+		s.below[line[k]], s.above[line[k-1]] = line[k-1], line[k]
+	}
+	s.note(line, name+": not every length gives its levels: they are put in order by their axial forces, the greatest at the bottom")
+}
+
+// footForce is the axial force at the foot of a length in its first
+// combination.
+func footForce(col *design.Column) float64 {
+	if len(col.Combinations) == 0 {
+		return 0
+	}
+	return col.Combinations[0].NEd
+}
+
+// lighter reports whether one length carries less than another in every
+// combination, and in the same ones.
+func lighter(upper, lower *design.Column) bool {
+	if len(upper.Combinations) == 0 || len(upper.Combinations) != len(lower.Combinations) {
+		return false
+	}
+	for i := range upper.Combinations {
+		u, l := &upper.Combinations[i], &lower.Combinations[i]
+		if u.Name != l.Name || !(u.NEd < l.NEd) {
+			return false
+		}
+	}
+	return true
 }
 
 // apart takes a line to pieces.

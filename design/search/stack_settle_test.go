@@ -273,6 +273,13 @@ func TestLinesOutOfOrderAreTakenApart(t *testing.T) {
 	named := func(stack, mark, from, to string) design.Column {
 		return design.Column{Stack: stack, Mark: mark, From: from, To: to}
 	}
+	pressed := func(n ...float64) design.Column {
+		col := named("A", "", "", "")
+		for _, f := range n {
+			col.Combinations = append(col.Combinations, design.Combination{NEd: f})
+		}
+		return col
+	}
 	for _, tc := range []struct {
 		name  string
 		cols  []design.Column
@@ -282,7 +289,11 @@ func TestLinesOutOfOrderAreTakenApart(t *testing.T) {
 		{"in order, however spelt", []design.Column{named("A", "", "Level 1", "roof"), named("A", "", "Base", "level  1")}, []int{1, -1}, ""},
 		{"by mark", []design.Column{named("", "C1", "0", "1"), named("", "C1", "1", "2"), named("", "C2", "1", "2")}, []int{-1, 0, -1}, ""},
 		{"marks without levels", []design.Column{named("", "C1", "", ""), named("", "C1", "", "")}, []int{-1, -1}, ""},
-		{"levels missing", []design.Column{named("A", "", "0", "1"), named("A", "", "", "2")}, []int{-1, -1}, "not every length gives its levels"},
+		{"levels missing", []design.Column{named("A", "", "0", "1"), named("A", "", "", "2")}, []int{-1, -1}, "neither levels nor axial forces tell"},
+		{"numbers", []design.Column{named("A", "", "+3.90", "7.8"), named("A", "", "0", "3.9")}, []int{1, -1}, ""},
+		{"by force", []design.Column{pressed(1, 2), pressed(7, 8), pressed(4, 3)}, []int{2, -1, 1}, "in order by their axial forces"},
+		{"forces that disagree", []design.Column{pressed(1, 2), pressed(7, 8), pressed(4, 9)}, []int{-1, -1, -1}, "neither levels nor axial forces tell"},
+		{"equal forces", []design.Column{pressed(1, 2), pressed(1, 2)}, []int{-1, -1}, "neither levels nor axial forces tell"},
 		{"doubled above", []design.Column{named("A", "", "0", "1"), named("A", "", "1", "2"), named("A", "", "1", "3")}, []int{-1, -1, -1}, "two lengths begin at level 1"},
 		{"doubled below", []design.Column{named("A", "", "0", "1"), named("A", "", "1", "2"), named("A", "", "0.5", "1")}, []int{-1, -1, -1}, "two lengths end at level 1"},
 		{"ring", []design.Column{named("A", "", "1", "2"), named("A", "", "2", "1")}, []int{-1, -1}, "ring"},
