@@ -42,10 +42,10 @@ func (p *Plan) listSheets(edits *markup.Edits, g *grafting) {
 			edits.Remove(e)
 		}
 	}
-	idName := relationAttr(elements[0])
+	idName, declared := relationAttr(elements[0])
 	var added strings.Builder
 	for i, s := range g.added {
-		fmt.Fprintf(&added, `<%ssheet name="%s" sheetId="%d" %s="%s"/>`, list.Prefix, markup.Escaped(s.name), next+i, idName, s.rel)
+		fmt.Fprintf(&added, `<%ssheet name="%s" sheetId="%d"%s %s="%s"/>`, list.Prefix, markup.Escaped(s.name), next+i, declared, idName, s.rel)
 	}
 	if added.Len() > 0 {
 		edits.Append(list, added.String())
@@ -53,15 +53,21 @@ func (p *Plan) listSheets(edits *markup.Edits, g *grafting) {
 	p.moveViews(edits, g)
 }
 
-// relationAttr returns the name, prefix and all, by which a sheet element
-// names its relationship.
-func relationAttr(e *markup.Element) string {
+// relationAttr returns the name, prefix and all, by which a sheet element names
+// its relationship, and the declaration of that prefix where the element makes
+// it itself: some programs declare it on every sheet and not on the root.
+func relationAttr(e *markup.Element) (name, declared string) {
+	name = "r:id"
 	for a := e.Attrs(); a.Next(); {
-		if name := string(a.Name); name == "id" || strings.HasSuffix(name, ":id") {
-			return name
+		if n := string(a.Name); n == "id" || strings.HasSuffix(n, ":id") {
+			name = n
 		}
 	}
-	return "r:id"
+	prefix, _, _ := strings.Cut(name, ":")
+	if namespace := e.Attr("xmlns:" + prefix); namespace != "" {
+		declared = fmt.Sprintf(` xmlns:%s="%s"`, prefix, markup.Escaped(namespace))
+	}
+	return name, declared
 }
 
 // moveViews keeps the sheet that is shown first where sheets before it go.
