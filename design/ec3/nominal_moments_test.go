@@ -113,6 +113,10 @@ func TestNominalMoments(t *testing.T) {
 	my, _ = moments(small, both, on, nil)
 	assert.InDelta(t, -2.2e6, my.Top, 1)
 	assert.InDelta(t, 7.7e6, my.Bottom, 1)
+	m, err := ec3.NewMember(both, set)
+	require.NoError(t, err)
+	require.Len(t, m.Notes, 1, "and says so")
+	assert.Contains(t, m.Notes[0], "beam reactions are given and do not count")
 }
 
 // A length without reactions of its own is bent by those of the floor that it

@@ -1,6 +1,10 @@
 package ec3
 
-import "strconv"
+import (
+	"strconv"
+
+	"stanchion/design"
+)
 
 // note says what a person must know of how the row was taken.
 func (m *Member) note() {
@@ -17,6 +21,9 @@ func (m *Member) note() {
 		m.Notes = append(m.Notes, "z-z is held off the shear centre: between torsion restraints an open section turns "+
 			"about the line that holds it (Timoshenko and Gere, art. 5.7)")
 	}
+	if m.reactionsLeftOut() {
+		m.Notes = append(m.Notes, "beam reactions are given and do not count: the setting moments is analysis, and nominal moments need simple")
+	}
 	tension, zero := -1, true
 	for i := range m.Forces {
 		f := &m.Forces[i]
@@ -32,6 +39,38 @@ func (m *Member) note() {
 	if zero {
 		m.Notes = append(m.Notes, "N_Ed is 0")
 	}
+}
+
+// reactionsLeftOut reports whether beam reactions bend the member that the
+// settings do not ask for.
+func (m *Member) reactionsLeftOut() bool {
+	if m.Settings.Moments == design.MomentsSimple {
+		return false
+	}
+	for i := range m.Column.Combinations {
+		if c := &m.Column.Combinations[i]; c.FlangeA != 0 || c.FlangeB != 0 || c.WebA != 0 || c.WebB != 0 {
+			return true
+		}
+	}
+	return false
+}
+
+// Notes says what a person must know of how the checks were chosen in the
+// candidate: where (6.61) and (6.62) stand in the place of the criterion of
+// simple construction, and why.
+func (a *Assessment) Notes() []string {
+	var notes []string
+	for i := range a.scopes {
+		reason := a.scopes[i].reason
+		if reason == "" {
+			continue
+		}
+		if len(a.scopes) > 1 {
+			reason += " in " + a.Member.combination(i)
+		}
+		notes = append(notes, reason+": (6.61) and (6.62) are checked instead")
+	}
+	return notes
 }
 
 // combination names a combination for people.

@@ -96,6 +96,8 @@ func TestScopeOfSimpleConstruction(t *testing.T) {
 			}
 		}
 		require.Contains(t, kinds(a), design.Interaction662, tc.name)
+		require.Len(t, a.Notes(), 1, tc.name)
+		assert.Contains(t, a.Notes()[0], tc.reason, tc.name)
 		plain := settings()
 		assert.Equal(t, assess(t, tc.col, candidate(t, tc.section, "S355", plain), plain).Utilisation, a.Utilisation, tc.name)
 	}
@@ -105,7 +107,9 @@ func TestScopeOfSimpleConstruction(t *testing.T) {
 		"about z-z":     given(func(c *design.Column) { c.Combinations[0].My = design.EndMoments{} }),
 		"a length of k": given(func(c *design.Column) { c.Z.K = 0.85 }),
 	} {
-		assert.Contains(t, kinds(assess(t, col, candidate(t, uc, "S355", set), set)), design.SimpleConstruction, name)
+		a := assess(t, col, candidate(t, uc, "S355", set), set)
+		assert.Contains(t, kinds(a), design.SimpleConstruction, name)
+		assert.Empty(t, a.Notes(), name)
 	}
 	tension := assess(t, given(func(c *design.Column) { c.Combinations[0].NEd = -600e3 }), candidate(t, uc, "S355", set), set)
 	for _, kind := range []design.Kind{design.SimpleConstruction, design.Interaction661, design.Interaction662} {

@@ -25,6 +25,7 @@ func (w *worker) fill(res *design.Result) {
 	c := a.Candidate
 	a.Explain()
 	res.Notes = append(res.Notes, a.Member.Notes...)
+	res.Notes = append(res.Notes, a.Notes()...)
 	res.Utilisation = a.Utilisation
 	res.Governing = a.Governing
 	res.Y, res.Z, res.T = a.Y, a.Z, a.T
