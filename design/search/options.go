@@ -19,13 +19,23 @@ type Options struct {
 }
 
 // Options finds every candidate that passes for every set, for decisions over
-// many columns. A column that cannot be designed has no say in its set.
+// many columns. A column that cannot be designed has no say in its set. Where
+// lengths depend on each other (Coupled) a candidate is tried beside the
+// sections to which the lines settle by themselves, which need not be those
+// that the decision ends at: Assign has the last word.
 func (e *Engine) Options(ctx context.Context, cols []design.Column, sets []Set, workers int) ([]Options, error) {
 	all := make([]Options, len(sets))
 	scratch := make([]design.Result, len(cols))
+	var around *surroundings
+	if e.Coupled() {
+		var err error
+		if around, err = e.surroundings(ctx, cols, sets, scratch, workers); around == nil {
+			return all, err
+		}
+	}
 	err := e.each(ctx, workers, len(sets), nil, func(w *worker, i int) {
 		all[i].Err = errUndesigned
-		w.together(&sets[i], cols, scratch, func(t *team) { all[i] = t.options() })
+		w.together(&sets[i], cols, scratch, func(t *team) { all[i] = t.options(around) })
 	})
 	return all, err
 }
@@ -34,13 +44,15 @@ func (e *Engine) Options(ctx context.Context, cols []design.Column, sets []Set, 
 // columns' own results say why.
 var errUndesigned = errors.New("no column of it can be designed")
 
-func (t *team) options() Options {
+func (t *team) options(around *surroundings) Options {
 	l, given, err := t.candidates()
 	if err != nil {
 		return Options{Err: err}
 	}
 	o := Options{List: l, Pass: make([]bool, len(l.rows)), Given: given != nil}
+	move := around.put(t)
 	for i := range l.rows {
+		move(l.Candidates[i])
 		o.Pass[i] = t.allPass(l, i)
 	}
 	return o

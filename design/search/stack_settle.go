@@ -222,14 +222,21 @@ func (s *settling) earliest(n *node, low, high int) int {
 // settle chooses the sections of a cluster and writes the results.
 func (w *worker) settle(cluster []Chosen, cols []design.Column, s *standing, results []design.Result) {
 	defer w.bugs.catchAll(columnsOf(cluster), cols, results)
+	t := w.settled(cluster, cols, s, results)
+	for _, n := range t.nodes {
+		t.fillNode(n)
+	}
+}
+
+// settled chooses the sections of a cluster. What cannot be designed has its
+// result.
+func (w *worker) settled(cluster []Chosen, cols []design.Column, s *standing, results []design.Result) *settling {
 	t := &settling{worker: w}
 	t.verdict = t.try
 	t.join(sorted(cluster, cols, s), cols, results)
 	t.link(cols, s)
 	t.choose()
-	for _, n := range t.nodes {
-		t.fillNode(n)
-	}
+	return t
 }
 
 func columnsOf(sets []Chosen) []int {

@@ -377,3 +377,34 @@ func BenchmarkSettle(b *testing.B) {
 	}
 	perSecond(b, len(cols))
 }
+
+// What a line may have beside the sections to which it settles holds what it
+// settled to. (Lighter ones may be among it: they make a neighbour fail.)
+func TestOptionsOfSettledLines(t *testing.T) {
+	set := settingsOf(t, "UK")
+	set.Families, set.Moments, set.SelfWeight = []string{"UKC"}, design.MomentsSimple, 1.35
+	e := engineOf(t, set)
+	cols := building(random(21), 8, true)
+	results, err := e.SizeAll(context.Background(), cols, 2, nil)
+	require.NoError(t, err)
+	single, groups := partition(cols, Size)
+	sets := groups
+	for _, i := range single {
+		sets = append(sets, Set{Columns: []int{i}})
+	}
+	options, err := e.Options(context.Background(), cols, sets, 2)
+	require.NoError(t, err)
+	u := newUpright(t, e, cols, results)
+	passing := 0
+	for k := range sets {
+		i := sets[k].Columns[0]
+		if results[i].Status != design.Passes || options[k].Given {
+			continue
+		}
+		passing++
+		at := slices.Index(options[k].List.Candidates, u.chosen[i])
+		require.GreaterOrEqual(t, at, 0)
+		assert.True(t, options[k].Pass[at], cols[i].Cell)
+	}
+	assert.Greater(t, passing, 15)
+}
