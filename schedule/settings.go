@@ -30,6 +30,7 @@ type Settings struct {
 	Compression string // positive, negative; empty: not said
 	Stock       string // file of the sections that may be used; empty: the whole catalogue
 	TakeOff     TakeOff
+	Together    Together
 	lines       []SettingLine
 }
 

@@ -4,12 +4,14 @@ import (
 	"errors"
 	"strings"
 	"testing"
+	"time"
 
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 
 	"stanchion/catalogue"
 	"stanchion/design"
+	"stanchion/design/building"
 	"stanchion/design/ec3"
 )
 
@@ -32,7 +34,8 @@ func TestDefaultSettings(t *testing.T) {
 	assert.Equal(t, map[string]string{
 		"national": "UK", "gamma_M0": "1.00", "gamma_M1": "1.00", "gamma_M,fi": "1.00", "strength": "product", "grade": "S355", "families": "UKC",
 		"hollow sections": "hot finished", "exclude": "", "stock": "", "compression": "positive (assumed)", "limit": "1.00", "effective length": "segment",
-		"moments": "analysis", "interaction": "annex B", "LTB": "rolled", "self-weight": "0", "growth": "1.00", "fire": "off", "fire period": "off", "shadow factor": "off", "objective": "mass", "connections": "0", "waste": "0", "transport length": "off",
+		"moments": "analysis", "interaction": "annex B", "LTB": "rolled", "self-weight": "0", "growth": "1.00", "fire": "off", "fire period": "off", "shadow factor": "off", "objective": "mass",
+		"splices": "as scheduled", "splice cost": "0", "sizes": "any", "time for sizes": "120", "reserve": "off", "reclaimed": "", "connections": "0", "waste": "0", "transport length": "off",
 	}, used(s))
 }
 
@@ -62,6 +65,23 @@ func TestSettings(t *testing.T) {
 	assert.Equal(t, d, readAll(t, sheetOf(plain), again...).Settings.Design)
 }
 
+func TestSettingsOfDecisionsTogether(t *testing.T) {
+	for given, want := range map[string]string{
+		"splices=every 2": "every 2", "splices=every 3rd length": "every 3", "Splices=Where it pays": "where it pays", "splices=As scheduled": "as scheduled",
+		"splice cost=85": "85", "splice cost=off": "0", "sizes=6": "6", "sizes=any": "any", "time for sizes=30 s": "30", "time for sizes=off": "off",
+		"reserve=yes": "on", "reserve=off": "off", "reclaimed=yard.csv": "yard.csv",
+	} {
+		s := readAll(t, sheetOf(plain), given)
+		name, _, _ := strings.Cut(given, "=")
+		name = strings.ToLower(name)
+		assert.Equal(t, want, used(s)[name], given)
+		// What is written back gives the same run.
+		assert.Equal(t, s.Settings.Together, readAll(t, sheetOf(plain), name+"="+want).Settings.Together, given)
+	}
+	o := readAll(t, sheetOf(plain), "splices=every 2", "splice cost=85", "sizes=6").Settings.Together
+	assert.Equal(t, building.Options{Splices: building.EveryNth, Every: 2, SpliceCost: 85, MostSizes: 6, TimeLimit: 2 * time.Minute}, o.Options)
+}
+
 func TestSettingsInLayers(t *testing.T) {
 	src := sheetOf(plain)
 	src.sheet("settings", "gamma_M1 | #1.2\nnational | DK\nmap Druck | N_Ed\ngrade |\n | lonely")
@@ -86,6 +106,7 @@ func TestSettingsInLayers(t *testing.T) {
 
 func TestSettingsThatAreRefused(t *testing.T) {
 	for setting, want := range map[string]string{
+		"splices=never": "as scheduled, every 2", "splices=every 0": "every 2", "sizes=0": "from 1 to 1000", "sizes=2.5": "whole number", "reserve=some": "on or off", "splice cost=dear": "splice cost",
 		"weather=fine": "unknown setting", "limit=0": "from 0.01 to 1.50", "limit=95": "from", "national=XX": "unknown national set", "grade=S999": "S999", "families=wood": "wood",
 		"compression=down": "positive or negative", "moments=some": "analysis, simple", "growth=tbc": "growth", "fire=2": "fire", "grade=": "grade", "cost UKC=free": "cost UKC",
 	} {

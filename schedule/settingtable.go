@@ -47,6 +47,7 @@ func init() {
 		offSetting("shadow factor", "shadow factor|k_sh", 0.01, 1, func(s *Settings) *float64 { return &s.Design.ShadowFactor }, "off"),
 		choiceSetting("objective", "objective", "mass", func(s *Settings) *design.Objective { return &s.Design.Rates.Objective }, "mass", "cost", "carbon"),
 	}
+	settingTable = append(settingTable, togetherSettings()...)
 	settingTable = append(settingTable, takeOffSettings()...)
 }
 

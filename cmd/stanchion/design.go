@@ -5,6 +5,7 @@ import (
 	"iter"
 
 	"stanchion/design"
+	"stanchion/design/building"
 	"stanchion/design/search"
 	"stanchion/schedule"
 )
@@ -19,12 +20,22 @@ func (r *run) design(ctx context.Context) error {
 		bar.add()
 		return r.out.put(m, res)
 	}
-	if r.engine.Coupled() || r.mode == search.Size && r.hasField("Group") {
+	if r.mustHold() {
 		return r.designTogether(ctx, put)
 	}
 	return search.Stream(ctx, r.engine, r.mode, r.flags.workers, r.jobs(), func(j *search.Job[*schedule.Member]) error {
 		return put(j.Tag, &j.Result)
 	})
+}
+
+// mustHold reports whether a decision needs all members at once.
+func (r *run) mustHold() bool {
+	if r.engine.Coupled() {
+		return true
+	}
+	t := &r.plan.Settings.Together
+	return r.mode == search.Size && (r.hasField("Group") || r.hasField("Splice") ||
+		t.Splices != building.AsScheduled || t.MostSizes > 0 || t.Reclaimed != "")
 }
 
 // jobs yields the members as jobs of the search.
@@ -46,8 +57,9 @@ func (r *run) jobs() iter.Seq2[*search.Job[*schedule.Member], error] {
 	}
 }
 
-// designTogether holds all members: those of a group share a section and those
-// of a column line may depend on each other, and they may stand anywhere.
+// designTogether holds all members: those of a group share a section, those of
+// a column line depend on each other, sizes are counted over all of them, and
+// they may stand anywhere.
 func (r *run) designTogether(ctx context.Context, put func(*schedule.Member, *design.Result) error) error {
 	var members []*schedule.Member
 	var cols []design.Column
@@ -60,11 +72,7 @@ func (r *run) designTogether(ctx context.Context, put func(*schedule.Member, *de
 			cols = append(cols, j.Column)
 		}
 	}
-	all := r.engine.SizeAll
-	if r.mode == search.Check {
-		all = r.engine.CheckAll
-	}
-	results, defects := all(ctx, cols, r.flags.workers, nil)
+	results, defects := r.decide(ctx, cols)
 	if results == nil && defects != nil {
 		return defects
 	}
@@ -80,6 +88,19 @@ func (r *run) designTogether(ctx context.Context, put func(*schedule.Member, *de
 		}
 	}
 	return defects
+}
+
+// decide designs columns that are held.
+func (r *run) decide(ctx context.Context, cols []design.Column) ([]design.Result, error) {
+	if r.mode == search.Check {
+		return r.engine.CheckAll(ctx, cols, r.flags.workers, nil)
+	}
+	d, err := building.Size(ctx, r.engine, cols, r.plan.Settings.Together.Options, r.flags.workers, nil)
+	if d == nil {
+		return nil, err
+	}
+	r.curve = d.Curve
+	return d.Results, err
 }
 
 // hasField reports whether the schedule has a column for a field.

@@ -142,7 +142,7 @@ func (r *run) sayFailing(ctx context.Context) {
 	t.limit(4, 26)
 	for i := range lines {
 		l := &lines[i]
-		t.add("  "+l.Member.Column.Mark, summary.Level(&l.Member.Column), l.Result.Section, utilisation(l.Result.Utilisation, ec3.Limit(&l.Member.Column, &r.plan.Settings.Design)), schedule.CheckName(l.Result.Governing.Kind), instead[i])
+		t.add("  "+l.Member.Column.Mark, summary.Level(&l.Member.Column), l.Result.Section, utilisation(&l.Result, ec3.Limit(&l.Member.Column, &r.plan.Settings.Design)), schedule.CheckName(l.Result.Governing.Kind), instead[i])
 	}
 	r.print("", "Members that fail:")
 	r.print(t.lines()...)
@@ -151,15 +151,15 @@ func (r *run) sayFailing(ctx context.Context) {
 	}
 }
 
-// utilisation writes a utilisation that is above its limit: to three decimals,
-// as a spreadsheet rounds the number that is written, and to more where three
-// would hide that it fails.
-func utilisation(u, limit float64) string {
-	if math.IsInf(u, 0) {
+// utilisation writes the utilisation of a result: to three decimals, as a
+// spreadsheet rounds the number that is written, and to more where three would
+// hide that it is above its limit. Of none there is a dash.
+func utilisation(res *design.Result, limit float64) string {
+	if res.Section == "" || math.IsInf(res.Utilisation, 0) {
 		return "-"
 	}
-	u = schedule.Round(u)
-	if rounded := math.Round(u*1000) / 1000; rounded > limit {
+	u := schedule.Round(res.Utilisation)
+	if rounded := math.Round(u*1000) / 1000; rounded > limit || u <= limit {
 		return strconv.FormatFloat(rounded, 'f', 3, 64)
 	}
 	return strconv.FormatFloat(u, 'f', -1, 64)

@@ -8,6 +8,7 @@ import (
 	"github.com/spf13/cobra"
 
 	"stanchion/catalogue"
+	"stanchion/design/building"
 	"stanchion/design/search"
 	"stanchion/schedule"
 	"stanchion/schedule/summary"
@@ -29,6 +30,7 @@ type run struct {
 	engine   *search.Engine
 	families map[string]string // of sections, by name
 	out      *outputs
+	curve    []building.Trade // what fewer sizes come to, where they are limited
 	tally    *summary.Tally
 }
 
@@ -124,6 +126,7 @@ func (r *run) scan(ctx context.Context, assignments []schedule.Assignment) error
 	if r.engine, err = search.New(r.cat, set.Design); err != nil {
 		return fmt.Errorf("settings: %w", err)
 	}
+	r.engine.Reserve = set.Together.Reserve
 	return nil
 }
 

@@ -96,7 +96,7 @@ func TestTooFewSizes(t *testing.T) {
 	cols := tall(1e5, 1e5)
 	cols[0].Given, cols[1].Given = "203x203x60 UKC", "152x152x30 UKC"
 	_, err := Size(t.Context(), e, cols, Options{MostSizes: 1}, 1, nil)
-	assert.ErrorContains(t, err, "at most 1 sizes cannot serve")
+	assert.ErrorContains(t, err, "at most 1 different section cannot serve")
 	_, err = Size(t.Context(), e, tall(9e7), Options{MostSizes: 1}, 1, nil)
 	assert.ErrorContains(t, err, "no column has a section that passes")
 }

@@ -49,6 +49,11 @@ type Decision struct {
 	// total for 1, 2, 3 ... sizes, up to the limit or to where more help no
 	// further. Its totals are of the columns that have a section that passes.
 	Curve []Trade
+
+	// Any is what the same columns come to with any number of sizes, and the
+	// sections that they have then: what fewer sizes are measured against. Nil
+	// where the number is not limited.
+	Any *Trade
 }
 
 // Trade is the least total that a number of sizes allows.
@@ -64,4 +69,20 @@ type Trade struct {
 func (t *Trade) Gap() float64 {
 	s := project.Solution{Cost: t.Total, Bound: t.Bound, Proven: t.Proven}
 	return s.Gap()
+}
+
+// TooFewSizesError says that so few sizes cannot serve every column.
+type TooFewSizesError struct{ Most int }
+
+// Error says what to do about it.
+func (e *TooFewSizesError) Error() string {
+	return fmt.Sprintf("at most %s cannot serve every column: allow more, or give the columns more families in common", different(e.Most))
+}
+
+// different counts sections.
+func different(n int) string {
+	if n == 1 {
+		return "1 different section"
+	}
+	return fmt.Sprintf("%d different sections", n)
 }

@@ -28,7 +28,8 @@ func Size(ctx context.Context, e *search.Engine, cols []design.Column, o Options
 	if err := o.Validate(); err != nil {
 		return nil, err
 	}
-	all, notes := stacks(cols, &o)
+	set := e.Settings()
+	all, notes := stacks(cols, &o, &set)
 	if len(all) == 0 && o.MostSizes == 0 {
 		results, err := e.SizeAll(ctx, cols, workers, progress)
 		addNotes(results, notes)
@@ -48,6 +49,7 @@ type run struct {
 	doubts  map[int]string // notes on the place of columns in their stacks
 	notes   map[int]string // the same and what the decision has to say, by column
 	curve   []Trade
+	any     *Trade
 }
 
 func (r *run) decide(ctx context.Context, progress func(int)) (*Decision, error) {
@@ -69,7 +71,7 @@ func (r *run) decide(ctx context.Context, progress func(int)) (*Decision, error)
 
 // attempt decides with the options as they stand, and makes the results.
 func (r *run) attempt(ctx context.Context, b *builder, progress func(int)) (*Decision, []search.Chosen, error) {
-	r.notes, r.curve = maps.Clone(r.doubts), nil
+	r.notes, r.curve, r.any = maps.Clone(r.doubts), nil, nil
 	silent := b.silent()
 	links := r.sound(b, r.plan.bridge(silent))
 	p := b.build(r.wanted(silent, links), r.spliceCost(), links)
@@ -84,7 +86,7 @@ func (r *run) attempt(ctx context.Context, b *builder, progress func(int)) (*Dec
 		return nil, nil, cancelled
 	}
 	addNotes(results, r.notes)
-	return &Decision{Results: results, Curve: r.curve}, chosen, err
+	return &Decision{Results: results, Curve: r.curve, Any: r.any}, chosen, err
 }
 
 // ruleOut takes from the options what turned out to fail beside the sections
@@ -166,10 +168,7 @@ func (r *run) sound(b *builder, links []link) []link {
 // say notes something about every column of a set.
 func (r *run) say(set int, text string) {
 	for _, i := range r.plan.sets[set].Columns {
-		if r.notes[i] != "" {
-			r.notes[i] += "; "
-		}
-		r.notes[i] += text
+		note(r.notes, i, text)
 	}
 }
 
@@ -205,7 +204,7 @@ func (r *run) solve(ctx context.Context, p *problem) (project.Choice, error) {
 	}
 	last := &solutions[len(solutions)-1]
 	if last.Choice == nil {
-		return nil, fmt.Errorf("at most %d sizes cannot serve all columns: allow more, or more families", r.options.MostSizes)
+		return nil, &TooFewSizesError{r.options.MostSizes}
 	}
 	return last.Choice, nil
 }
@@ -227,7 +226,24 @@ func (r *run) servable(p *problem) error {
 		return errors.New("no column has a section that passes: there is no choice of few sizes")
 	}
 	p.Chains, p.nodes = chains, nodes
+	r.any = unlimited(p)
 	return nil
+}
+
+// unlimited is the trade of any number of sizes.
+func unlimited(p *problem) *Trade {
+	choice, total := p.Cheapest()
+	used := map[int]bool{}
+	for _, picks := range choice {
+		for _, j := range picks {
+			used[j] = true
+		}
+	}
+	t := &Trade{Most: len(used), Total: total, Bound: total, Proven: true}
+	for _, j := range slices.Sorted(maps.Keys(used)) {
+		t.Sizes = append(t.Sizes, p.sections[j].Name())
+	}
+	return t
 }
 
 // unserved tells the columns of a chain that no choice serves: they are sized
@@ -271,7 +287,7 @@ func (r *run) chosen(b *builder, p *problem, choice project.Choice) []search.Cho
 // why says what may keep a set from the lightest section that passes.
 func (r *run) why() string {
 	if n := r.options.MostSizes; n > 0 {
-		return fmt.Sprintf("%d sizes are allowed in all", n)
+		return "at most " + different(n) + " may be used in all"
 	}
 	if r.options.Splices == WhereItPays {
 		return "the stack is lighter as a whole, splices counted"

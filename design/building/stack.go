@@ -20,18 +20,18 @@ type stack struct {
 
 // stacks finds the stacks whose lengths are joined, in the order of the
 // schedule, and notes for columns whose place in a stack is in doubt.
-func stacks(cols []design.Column, o *Options) (all []stack, notes map[int]string) {
+func stacks(cols []design.Column, o *Options, set *design.Settings) (all []stack, notes map[int]string) {
 	notes = map[int]string{}
 	for _, line := range lines(cols, o) {
-		parts, note := ordered(cols, line)
+		parts, doubt := ordered(cols, line)
 		for _, i := range line {
-			if note != "" {
-				notes[i] = fmt.Sprintf("stack %q: %s", cols[i].Stack, note)
+			if doubt != "" {
+				notes[i] = fmt.Sprintf("stack %q: %s", cols[i].Stack, doubt)
 			}
 		}
 		for _, lengths := range parts {
 			if len(lengths) > 1 {
-				all = append(all, stack{cols[lengths[0]].Stack, lengths, spliced(cols, lengths, o)})
+				all = append(all, stack{cols[lengths[0]].Stack, lengths, spliced(cols, lengths, o, set, notes)})
 			}
 		}
 	}
@@ -59,13 +59,21 @@ func lines(cols []design.Column, o *Options) [][]int {
 	return all
 }
 
-// spliced says above which lengths the section may change.
-func spliced(cols []design.Column, lengths []int, o *Options) []bool {
+// spliced says above which lengths the section may change. A rule that counts
+// lengths gives way where two of them can have no section in common.
+func spliced(cols []design.Column, lengths []int, o *Options, set *design.Settings, notes map[int]string) []bool {
 	splice := make([]bool, len(lengths))
 	for k, i := range lengths {
 		switch o.Splices {
 		case EveryNth:
 			splice[k] = (k+1)%o.Every == 0
+			if k+1 == len(lengths) || splice[k] {
+				continue
+			}
+			if why := apart(&cols[i], &cols[lengths[k+1]], set); why != "" {
+				splice[k] = true
+				note(notes, lengths[k+1], fmt.Sprintf("stack %q: a splice stands below this length too: %s", cols[i].Stack, why))
+			}
 		case WhereItPays:
 			splice[k] = true
 		default:
@@ -73,6 +81,45 @@ func spliced(cols []design.Column, lengths []int, o *Options) []bool {
 		}
 	}
 	return splice
+}
+
+// note adds to the note of a column.
+func note(notes map[int]string, i int, text string) {
+	if notes[i] != "" {
+		text = notes[i] + "; " + text
+	}
+	notes[i] = text
+}
+
+// apart says why two lengths can have no section in common; empty: they can.
+func apart(a, b *design.Column, set *design.Settings) string {
+	switch {
+	case a.Given != "" && b.Given != "":
+		if a.Given != b.Given {
+			return "other sections are given"
+		}
+	case a.Given != "" || b.Given != "": // the given one stands for both
+	case !common(a.Choice.Families, b.Choice.Families, set.Families):
+		return "other families are given"
+	case !common(a.Grades, b.Grades, set.Grades):
+		return "other grades are given"
+	}
+	return ""
+}
+
+// common reports whether two lists share a value; an empty one is the
+// settings' own.
+func common(a, b, own []string) bool {
+	if len(a) == 0 && len(b) == 0 {
+		return true
+	}
+	if len(a) == 0 {
+		a = own
+	}
+	if len(b) == 0 {
+		b = own
+	}
+	return slices.ContainsFunc(a, func(s string) bool { return slices.Contains(b, s) })
 }
 
 // ordered puts the lengths of a stack in order from the bottom up: by levels

@@ -58,14 +58,43 @@ func TestLengthsAreOrderedByLevel(t *testing.T) {
 // run has a rule of its own.
 func TestWhichStacksAreJoined(t *testing.T) {
 	cols := levels([2]string{"GF", "L1"}, [2]string{"L1", "L2"})
-	all, _ := stacks(cols, &Options{})
+	all, _ := stacks(cols, &Options{}, &design.Settings{})
 	require.Len(t, all, 1)
 	cols[0].SpliceSaid, cols[1].SpliceSaid = false, false
-	all, _ = stacks(cols, &Options{})
+	all, _ = stacks(cols, &Options{}, &design.Settings{})
 	assert.Empty(t, all)
-	all, _ = stacks(cols, &Options{Splices: WhereItPays})
+	all, _ = stacks(cols, &Options{Splices: WhereItPays}, &design.Settings{})
 	require.Len(t, all, 1)
 	assert.Equal(t, []bool{true, true}, all[0].splice)
-	all, _ = stacks(cols, &Options{Splices: EveryNth, Every: 2})
+	all, _ = stacks(cols, &Options{Splices: EveryNth, Every: 2}, &design.Settings{})
 	assert.Equal(t, []bool{false, true}, all[0].splice)
+}
+
+// A rule that counts lengths gives way where two lengths can have no section in
+// common, and says so.
+func TestCountedSplicesGiveWay(t *testing.T) {
+	set := &design.Settings{Families: []string{"UKC"}, Grades: []string{"S355"}}
+	for name, tc := range map[string]struct {
+		change func(below, above *design.Column)
+		why    string
+	}{
+		"alike":                {func(_, _ *design.Column) {}, ""},
+		"one given":            {func(b, a *design.Column) { b.Given, a.Choice.Families = "203x203x46 UKC", []string{"HEA"} }, ""},
+		"the same given":       {func(b, a *design.Column) { b.Given, a.Given = "203x203x46 UKC", "203x203x46 UKC" }, ""},
+		"two given":            {func(b, a *design.Column) { b.Given, a.Given = "203x203x60 UKC", "203x203x46 UKC" }, "other sections"},
+		"another family":       {func(b, _ *design.Column) { b.Choice.Families = []string{"SHS"} }, "other families"},
+		"a family in common":   {func(b, _ *design.Column) { b.Choice.Families = []string{"SHS", "UKC"} }, ""},
+		"another grade":        {func(_, a *design.Column) { a.Grades = []string{"S275"} }, "other grades"},
+		"the settings' family": {func(_, a *design.Column) { a.Choice.Families = []string{"UKC"} }, ""},
+	} {
+		t.Run(name, func(t *testing.T) {
+			cols := levels([2]string{"GF", "L1"}, [2]string{"L1", "L2"}, [2]string{"L2", "L3"})
+			tc.change(&cols[0], &cols[1])
+			all, notes := stacks(cols, &Options{Splices: EveryNth, Every: 2}, set)
+			require.Len(t, all, 1)
+			assert.Equal(t, []bool{tc.why != "", true, false}, all[0].splice)
+			assert.Contains(t, notes[1], tc.why)
+			assert.Equal(t, tc.why != "", notes[1] != "")
+		})
+	}
 }
