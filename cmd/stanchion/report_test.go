@@ -9,15 +9,18 @@ import (
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 	"pgregory.net/rapid"
+
+	"stanchion/design"
 )
 
 func TestUtilisationShowsThatItFails(t *testing.T) {
 	for _, c := range []struct {
 		u, limit float64
 		want     string
-	}{{1.0465, 1, "1.047"}, {1.54, 1, "1.540"}, {1.0002, 1, "1.0002"}, {0.9504, 0.95, "0.9504"}, {0.96, 0.95, "0.960"}, {math.Inf(1), 1, "-"}} {
-		assert.Equal(t, c.want, utilisation(c.u, c.limit))
+	}{{1.0465, 1, "1.047"}, {1.54, 1, "1.540"}, {1.0002, 1, "1.0002"}, {0.9504, 0.95, "0.9504"}, {0.96, 0.95, "0.960"}, {math.Inf(1), 1, "-"}, {0.96412, 1, "0.964"}} {
+		assert.Equal(t, c.want, utilisation(&design.Result{Section: "203x203x46 UKC", Utilisation: c.u}, c.limit))
 	}
+	assert.Equal(t, "-", utilisation(&design.Result{}, 1), "no section")
 }
 
 func TestSpan(t *testing.T) {
