@@ -18,20 +18,17 @@ type graft struct {
 	types  *manifest // of the own workbook
 	styles *styleMap
 	moved  map[string]string // own part to new name
-	links  map[string][]link // by own sheet
+	looks  map[Look]int      // style ids in the own workbook
 }
 
 // openGraft opens the own workbook and adds its styles to the user's.
-func (d *draft) openGraft(data []byte, links map[string][]link) (*graft, error) {
+func (d *draft) openGraft(data []byte, looks map[Look]int) (*graft, error) {
 	own, err := OpenBytes("own sheets", data)
 	if err != nil {
 		return nil, err
 	}
-	g := &graft{draft: d, own: own, moved: map[string]string{}, links: links}
+	g := &graft{draft: d, own: own, moved: map[string]string{}, looks: looks}
 	if g.types, err = openManifest(own.pkg); err != nil {
-		return nil, err
-	}
-	if err := own.loadStrings(); err != nil {
 		return nil, err
 	}
 	return g, g.graftStyles()
@@ -80,19 +77,29 @@ func (g *graft) newStyles(root *markup.Element, doc []byte) error {
 	return nil
 }
 
-// sheet moves a sheet to a part of that name.
-func (g *graft) sheet(own *sheet, to string) error {
+// sheet moves a sheet to a part of that name, and puts its rows into it.
+func (g *graft) sheet(own *sheet, f *filling, to string) error {
 	g.moved[own.part] = to
-	content, err := g.worksheet(own)
-	if err != nil {
-		return err
+	write := func(w io.Writer) error { return g.own.fill(own, f, w, g.retag) }
+	if g.draft.strict {
+		var content bytes.Buffer
+		if err := write(&content); err != nil {
+			return err
+		}
+		return g.place(own.part, to, content.Bytes())
 	}
-	return g.place(own.part, to, content)
+	g.draft.out.SetStream(to, write)
+	return g.join(own.part, to)
 }
 
-// place sets a moved part, its type, and moves what it is joined to.
+// place sets a moved part.
 func (g *graft) place(from, to string, content []byte) error {
 	g.draft.out.Set(to, g.draft.edition(content))
+	return g.join(from, to)
+}
+
+// join gives a moved part its type, and moves what it is joined to.
+func (g *graft) join(from, to string) error {
 	g.draft.types.set(to, g.types.typeOf(from))
 	rels, err := g.own.pkg.Rels(from)
 	if err != nil || len(rels) == 0 {
@@ -131,44 +138,12 @@ func (g *graft) part(from string) (string, error) {
 	return to, g.place(from, to, content)
 }
 
-// worksheet returns an own sheet with the styles of the user's workbook, and
-// with its texts in the cells themselves, since the user's table of shared
-// texts stays as it is.
-func (g *graft) worksheet(s *sheet) ([]byte, error) {
-	in, err := g.own.pkg.Stream(s.part)
-	if err != nil {
-		return nil, err
+// style returns the style id of a look in the user's workbook.
+func (g *graft) style(l Look) int {
+	if id := g.looks[l]; id != 0 {
+		return g.styles.cell(id)
 	}
-	defer in.Close()
-	scan := markup.NewScanner(in)
-	var out bytes.Buffer
-	links := linking{list: g.links[s.name]}
-	shared := false // in a cell whose text is shared
-	for {
-		t, err := scan.Next()
-		if err == io.EOF {
-			return out.Bytes(), nil
-		}
-		if err != nil {
-			return nil, err
-		}
-		links.before(&out, t, scan.Depth())
-		if t.Kind == markup.Start && shared && string(t.Name) == "v" {
-			if err := g.inline(&out, scan); err != nil {
-				return nil, err
-			}
-			continue
-		}
-		if t.Kind != markup.Start && t.Kind != markup.Empty {
-			out.Write(t.Raw)
-			continue
-		}
-		if string(t.Name) == "c" {
-			kind, _ := t.Attr("t")
-			shared = kind == "s"
-		}
-		out.WriteString(g.retag(t))
-	}
+	return 0
 }
 
 // retag returns a tag with the user's style ids.
@@ -182,13 +157,6 @@ func (g *graft) retag(t *markup.Token) string {
 		return strconv.Itoa(g.styles.cell(n))
 	}
 	switch string(t.Name) {
-	case "c":
-		if kind, _ := t.Attr("t"); kind == "s" {
-			return markup.SetAttrs(t.Raw, "s", style("s"), "t", "inlineStr")
-		}
-		return markup.SetAttrs(t.Raw, "s", style("s"))
-	case "row":
-		return markup.SetAttrs(t.Raw, "s", style("s"))
 	case "col":
 		return markup.SetAttrs(t.Raw, "style", style("style"))
 	case "cfRule":
@@ -201,30 +169,6 @@ func (g *graft) retag(t *markup.Token) string {
 		return markup.SetAttrs(t.Raw, "tabSelected", "")
 	}
 	return string(t.Raw)
-}
-
-// inline writes, in place of the number of a shared text, the text.
-func (g *graft) inline(out *bytes.Buffer, scan *markup.Scanner) error {
-	var index []byte
-	for {
-		t, err := scan.Next()
-		if err != nil {
-			return err
-		}
-		if t.Kind == markup.Text {
-			index = append(index, t.Raw...)
-		}
-		if t.Kind == markup.End {
-			break
-		}
-	}
-	i, err := strconv.Atoi(string(index))
-	if err != nil {
-		return err
-	}
-	text, _ := g.own.strings.at(i)
-	out.Write(appendInline(nil, "", text))
-	return nil
 }
 
 // appendInline appends a text as a cell holds it itself.

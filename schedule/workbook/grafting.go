@@ -94,7 +94,7 @@ func (p *Plan) graftOwn(d *draft, sheets []Sheet) (*grafting, error) {
 	if err != nil {
 		return nil, err
 	}
-	gr, err := d.openGraft(data, own.links)
+	gr, err := d.openGraft(data, own.looks)
 	if err != nil {
 		return nil, err
 	}
@@ -102,7 +102,7 @@ func (p *Plan) graftOwn(d *draft, sheets []Sheet) (*grafting, error) {
 	for l, id := range looks {
 		g.styles[l] = gr.styles.cell(id)
 	}
-	return g, p.moveSheets(d, gr, g, sheets)
+	return g, p.moveSheets(d, gr, g, own, sheets)
 }
 
 // settleSheets finds the place of each own sheet: that of an earlier run, or
@@ -139,7 +139,7 @@ func (p *Plan) settleSheets(sheets []Sheet) *grafting {
 
 // moveSheets moves the own sheets into the draft, in the place of those of an
 // earlier run, which go first so that their names are free again.
-func (p *Plan) moveSheets(d *draft, gr *graft, g *grafting, sheets []Sheet) error {
+func (p *Plan) moveSheets(d *draft, gr *graft, g *grafting, own *own, sheets []Sheet) error {
 	old := map[string]*sheet{}
 	for i, s := range p.book.sheets {
 		if s.own == "" {
@@ -156,11 +156,12 @@ func (p *Plan) moveSheets(d *draft, gr *graft, g *grafting, sheets []Sheet) erro
 	}
 	for i := range sheets {
 		from := gr.own.sheets[i]
+		f := own.filling(from.name, gr.style)
 		if s := old[sheets[i].Name]; s != nil {
-			if err := gr.sheet(from, s.part); err != nil {
+			if err := gr.sheet(from, f, s.part); err != nil {
 				return err
 			}
-		} else if err := p.addSheet(d, gr, g, from); err != nil {
+		} else if err := p.addSheet(d, gr, g, from, f); err != nil {
 			return err
 		}
 		g.sheets[i].names = gr.namesOf(from)
@@ -173,9 +174,9 @@ func (p *Plan) moveSheets(d *draft, gr *graft, g *grafting, sheets []Sheet) erro
 	return nil
 }
 
-func (p *Plan) addSheet(d *draft, gr *graft, g *grafting, from *sheet) error {
+func (p *Plan) addSheet(d *draft, gr *graft, g *grafting, from *sheet, f *filling) error {
 	part := d.freeName(from.part)
-	if err := gr.sheet(from, part); err != nil {
+	if err := gr.sheet(from, f, part); err != nil {
 		return err
 	}
 	g.added = append(g.added, addedSheet{from.name, d.rels.add(d.kind("worksheet"), part)})

@@ -1,7 +1,6 @@
 package workbook
 
 import (
-	"bufio"
 	"io"
 	"slices"
 
@@ -48,26 +47,4 @@ func (l *linking) before(w io.Writer, t *markup.Token, depth int) {
 		b = append(b, `"/>`...)
 	}
 	w.Write(append(b, "</hyperlinks>"...))
-}
-
-// link copies a sheet with links put in.
-func (b *Book) link(s *sheet, list []link, to io.Writer) error {
-	in, err := b.pkg.Stream(s.part)
-	if err != nil {
-		return err
-	}
-	defer in.Close()
-	out := bufio.NewWriter(to)
-	links, scan := linking{list: list}, markup.NewScanner(in)
-	for {
-		t, err := scan.Next()
-		if err == io.EOF {
-			return out.Flush()
-		}
-		if err != nil {
-			return err
-		}
-		links.before(out, t, scan.Depth())
-		out.Write(t.Raw)
-	}
 }

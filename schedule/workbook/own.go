@@ -3,25 +3,34 @@ package workbook
 import (
 	"bytes"
 	"fmt"
-	"math"
-	"unicode/utf16"
 
 	"github.com/xuri/excelize/v2"
 )
 
-// maxText is the longest text that a cell may hold, in UTF-16 units.
-const maxText = 32_767
-
-// own is a workbook being made with the library.
+// own is a workbook being made with the library, but for the rows of its
+// sheets: those are put in as it is copied to its place.
 type own struct {
-	file  *excelize.File
-	base  lettering
-	looks map[Look]int
-	links map[string][]link // by sheet: the library takes ever longer over each
+	file   *excelize.File
+	base   lettering
+	looks  map[Look]int
+	sheets map[string]*ownSheet // by name
+}
+
+// ownSheet is what the library has not been told of a sheet.
+type ownSheet struct {
+	*Sheet
+	links []link
 }
 
 func newOwn(base lettering) *own {
-	return &own{file: excelize.NewFile(), base: base, looks: map[Look]int{}, links: map[string][]link{}}
+	return &own{file: excelize.NewFile(), base: base, looks: map[Look]int{}, sheets: map[string]*ownSheet{}}
+}
+
+// filling returns what puts the rows into a sheet. style gives the style id of
+// a look in the workbook that the sheet goes to.
+func (o *own) filling(name string, style func(Look) int) *filling {
+	s := o.sheets[name]
+	return &filling{sheet: s.Sheet, style: style, links: linking{list: s.links}}
 }
 
 // style returns the id of a look in the own workbook.
@@ -61,57 +70,27 @@ func (o *own) add(s *Sheet, name string, first bool) error {
 	return nil
 }
 
+// cells makes the styles that the cells need, and their notes.
 func (o *own) cells(s *Sheet, name string) error {
+	kept := &ownSheet{Sheet: s}
+	o.sheets[name] = kept
 	for r, row := range s.Rows {
 		for c := range row {
-			if err := o.cell(name, cellName(c, r+1), &row[c]); err != nil {
+			cell := &row[c]
+			if _, err := o.style(cell.look()); err != nil {
+				return err
+			}
+			if cell.Link != "" {
+				kept.links = append(kept.links, link{cellName(c, r+1), cell.Link})
+			}
+			if cell.Note == "" {
+				continue
+			}
+			err := o.file.AddComment(name, excelize.Comment{Cell: cellName(c, r+1), Author: "stanchion", Text: cell.Note, Width: 320, Height: noteHeight(cell.Note)})
+			if err != nil {
 				return err
 			}
 		}
-	}
-	return nil
-}
-
-func (o *own) cell(sheet, ref string, c *Cell) error {
-	if c.Link != "" {
-		c.Look.Link = true
-	}
-	style, err := o.style(c.Look)
-	if err != nil {
-		return err
-	}
-	if style != 0 {
-		if err := o.file.SetCellStyle(sheet, ref, ref, style); err != nil {
-			return err
-		}
-	}
-	if err := o.content(sheet, ref, c); err != nil {
-		return err
-	}
-	if c.Link != "" {
-		o.links[sheet] = append(o.links[sheet], link{ref, c.Link})
-	}
-	if c.Note == "" {
-		return nil
-	}
-	return o.file.AddComment(sheet, excelize.Comment{Cell: ref, Author: "stanchion", Text: c.Note, Width: 320, Height: noteHeight(c.Note)})
-}
-
-func (o *own) content(sheet, ref string, c *Cell) error {
-	switch v := c.Value.(type) {
-	case nil:
-	case string:
-		return o.file.SetCellStr(sheet, ref, clip(v))
-	case float64:
-		if math.IsNaN(v) || math.IsInf(v, 0) {
-			return nil
-		}
-		return o.file.SetCellFloat(sheet, ref, v, -1, 64)
-	default:
-		return o.file.SetCellValue(sheet, ref, v)
-	}
-	if c.Formula != "" {
-		return o.file.SetCellFormula(sheet, ref, c.Formula)
 	}
 	return nil
 }
@@ -127,23 +106,7 @@ func noteHeight(text string) uint {
 	return uint(20 + 16*lines)
 }
 
-// clip cuts a text to what a cell can hold.
-func clip(s string) string {
-	if len(s) <= maxText {
-		return s
-	}
-	units := utf16.Encode([]rune(s))
-	if len(units) <= maxText {
-		return s
-	}
-	cut := maxText - 1
-	if utf16.IsSurrogate(rune(units[cut-1])) && units[cut-1] < 0xDC00 {
-		cut--
-	}
-	return string(utf16.Decode(units[:cut])) + "…"
-}
-
-// bytes returns the own workbook as a package, without its links.
+// bytes returns the own workbook as a package, without its rows.
 func (o *own) bytes() ([]byte, error) {
 	var buf bytes.Buffer
 	if err := o.file.Write(&buf); err != nil {

@@ -16,11 +16,6 @@ func (o *own) sizes(s *Sheet, name string) error {
 			return err
 		}
 	}
-	for _, r := range sortedKeys(s.Heights) {
-		if err := o.file.SetRowHeight(name, r, s.Heights[r]); err != nil {
-			return err
-		}
-	}
 	for _, m := range s.Merges {
 		a, ok := parseArea(m)
 		if !ok {
