@@ -64,8 +64,10 @@ func relationAttr(e *markup.Element) (name, declared string) {
 		}
 	}
 	prefix, _, _ := strings.Cut(name, ":")
-	if namespace := e.Attr("xmlns:" + prefix); namespace != "" {
-		declared = fmt.Sprintf(` xmlns:%s="%s"`, prefix, markup.Escaped(namespace))
+	for a := e.Attrs(); a.Next(); {
+		if string(a.Name) == "xmlns:"+prefix {
+			declared = fmt.Sprintf(` %s="%s"`, a.Name, a.Value)
+		}
 	}
 	return name, declared
 }
