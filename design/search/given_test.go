@@ -132,3 +132,14 @@ func TestWhatCannotBeDesignedIsNotRead(t *testing.T) {
 	}
 	assert.Equal(t, design.NotRead, checkOne(t, e, pressed(1e5)).Status, "no section to check")
 }
+
+// Where a rule covers no candidate at all, the note says which.
+func TestNoSectionSaysWhichRuleDoesNotCover(t *testing.T) {
+	set := settingsOf(t, "UK")
+	set.Families = []string{"UKPFC"}
+	col := pressed(100e3)
+	col.Combinations[0].My.Top = 10e6
+	r := sizeOne(t, engineOf(t, set), col)
+	assert.Equal(t, design.NoSection, r.Status)
+	assert.Contains(t, r.Notes[len(r.Notes)-1], "outside the rules: moments on channels and angles are not covered")
+}

@@ -3,6 +3,7 @@ package search
 import (
 	"errors"
 	"fmt"
+	"math"
 
 	"stanchion/catalogue"
 	"stanchion/design"
@@ -66,8 +67,18 @@ func (w *worker) noSection(l *List, res *design.Result) {
 	}
 	w.member.Assess(l.Candidates[best], &w.assess)
 	w.fill(res)
-	res.Notes = append(res.Notes, fmt.Sprintf("no section passes: %s has the least utilisation, %.3f, of %d tried%s",
-		nameIn(l.Candidates[best]), res.Utilisation, len(l.Candidates), l.leftOut()))
+	res.Notes = append(res.Notes, "no section passes: "+l.shortfall(l.Candidates[best], &res.Governing, res.Utilisation, ""))
+}
+
+// shortfall says how near the best candidate of a list comes to passing, as
+// units tells of its utilisation, or why a rule does not cover even that one.
+func (l *List) shortfall(best *ec3.Candidate, governing *design.Check, utilisation float64, units string) string {
+	if math.IsInf(utilisation, 1) {
+		return fmt.Sprintf("%s, as all of %d tried, is outside the rules: %s (%s)%s",
+			nameIn(best), len(l.Candidates), governing.Reason, governing.Clause, l.leftOut())
+	}
+	return fmt.Sprintf("%s has the least utilisation, %.3f%s, of %d tried%s",
+		nameIn(best), utilisation, units, len(l.Candidates), l.leftOut())
 }
 
 // best returns the candidate with the least utilisation, the first of equal

@@ -46,8 +46,8 @@ func (s *settling) tellAside(n *node) {
 		if n.name != "" {
 			whose = " for " + n.name
 		}
-		m.res.Notes = append(m.res.Notes, fmt.Sprintf("no section passes%s beside those above and below: %s has the least utilisation, %.3f of the limit at %s, of %d tried%s",
-			whose, nameIn(n.candidate()), least, who.place(), len(n.list.Candidates), n.list.leftOut()))
+		m.res.Notes = append(m.res.Notes, fmt.Sprintf("no section passes%s beside those above and below: %s", whose,
+			n.list.shortfall(n.candidate(), &who.res.Governing, least, " of the limit at "+who.place())))
 	}
 }
 

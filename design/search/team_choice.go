@@ -121,8 +121,8 @@ func (t *team) noSection(l *List) {
 	}
 	t.fillAll(best, design.NoSection)
 	for _, m := range t.mates {
-		m.res.Notes = append(m.res.Notes, fmt.Sprintf("no section passes for %s: %s has the least utilisation, %.3f of the limit at %s, of %d tried%s",
-			t.name, nameIn(best), least, who.place(), len(l.Candidates), l.leftOut()))
+		m.res.Notes = append(m.res.Notes, fmt.Sprintf("no section passes for %s: %s", t.name,
+			l.shortfall(best, &who.res.Governing, least, " of the limit at "+who.place())))
 	}
 }
 
