@@ -111,7 +111,11 @@ func noHeader(src Source, opts *Options, l *layout) error {
 		needs = "Length"
 	}
 	r := &Refusal{Problem: Problem{File: src.Name(), What: "no header was recognised"}}
-	r.Do = "a schedule needs the fields " + needs + " (Mark and the others are optional): rename the headings, map them with the setting map HEADING, or name the sheet with --sheet"
+	r.Do = "a schedule needs the fields " + needs + " (Mark and the others are optional): rename the headings, or map them with the setting map HEADING"
+	choice := opts.Sheet == "" && len(src.Sheets()) > 1
+	if choice {
+		r.Do = strings.Replace(r.Do, ", or map them with the setting map HEADING", ", map them with the setting map HEADING, or name the sheet with --sheet", 1)
+	}
 	if opts.LoadsOptional {
 		r.Do = strings.Replace(r.Do, "fields", "field", 1)
 	}
@@ -122,7 +126,10 @@ func noHeader(src Source, opts *Options, l *layout) error {
 		r.What += ": nothing stands for " + missing[0]
 	}
 	if l.sheet != "" {
-		r.What += fmt.Sprintf(" on sheet %q, which comes nearest", l.sheet)
+		r.What += fmt.Sprintf(" on sheet %q", l.sheet)
+	}
+	if choice {
+		r.What += ", which comes nearest"
 	}
 	for i := range l.bindings {
 		b := &l.bindings[i]

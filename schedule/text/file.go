@@ -118,7 +118,7 @@ func (f *File) opened() (*File, error) {
 
 func (f *File) learn() (err error) {
 	if f.end == 0 {
-		return errors.New("the file is empty")
+		return errors.New("the file is empty: give one that holds a schedule")
 	}
 	if f.form, err = detect(f.file, f.end); err != nil {
 		return err

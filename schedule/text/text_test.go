@@ -175,7 +175,7 @@ func TestFilesThatAreNone(t *testing.T) {
 	_, err = Open(dir)
 	assert.ErrorContains(t, err, "it is a folder")
 	for content, want := range map[string]string{
-		"":                      "the file is empty",
+		"":                      "the file is empty: give one that holds a schedule",
 		"  \n \n":               "not a text file",
 		"PK\x03\x04 and so on":  "it looks like a workbook",
 		"a,b\x00\x01\x02,c,d,e": "not a text file",
