@@ -11,4 +11,8 @@
 // candidates and shared by every column that may choose from it. Columns are
 // spread over a pool of workers; results land by index, so they do not depend
 // on the number of workers or on who finished first.
+//
+// Under settings that make the lengths of a column line depend on each other's
+// sections (Coupled), a line is settled as a whole: see settling in
+// stack_settle.go for the steps, and why they end.
 package search
