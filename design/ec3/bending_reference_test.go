@@ -94,7 +94,7 @@ func rhoTip(lp float64) float64 {
 	if lp <= 0.748 {
 		return 1
 	}
-	return (lp - 0.188) / lp / lp
+	return math.Min(1, (lp-0.188)/lp/lp)
 }
 
 // weff returns W_eff about an axis by slices. Fillets and corners are those of

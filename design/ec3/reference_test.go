@@ -79,7 +79,7 @@ func (r reference) area() float64 {
 		a := s.A - webLoss(s.H-2*s.Tf-2*s.R, s.Tw)
 		c := (s.B-s.Tw)/2 - s.R
 		if l := c / s.Tf / (28.4 * eps * math.Sqrt(0.43)); l > 0.748 {
-			a -= 4 * (1 - (l-0.188)/(l*l)) * c * s.Tf
+			a -= 4 * (1 - math.Min(1, (l-0.188)/(l*l))) * c * s.Tf
 		}
 		return a
 	case catalogue.ShapeRHS:
