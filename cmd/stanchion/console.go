@@ -17,6 +17,7 @@ type console struct {
 	in       io.Reader
 	out, err io.Writer
 	terminal bool // err is a terminal: progress may be shown
+	screen   bool // out is a terminal: a person reads the results there
 	colour   bool // err takes colours
 	quiet    bool // errors alone are said
 }
@@ -27,6 +28,7 @@ func systemConsole() *console {
 	return &console{
 		in: os.Stdin, out: os.Stdout, err: os.Stderr,
 		terminal: terminal,
+		screen:   term.IsTerminal(int(os.Stdout.Fd())),
 		colour:   terminal && os.Getenv("NO_COLOR") == "" && os.Getenv("TERM") != "dumb",
 	}
 }

@@ -188,6 +188,8 @@ func (r *takeoffRun) say() {
 	t := r.steel
 	if out := r.flags.output; out != "" && out != stdio {
 		r.con.say("%s, %s t net: %s", plural(int(t.Pieces), "piece"), tonnes(t.Net.Mass), out)
+	} else if r.con.screen && r.format == "text" {
+		return // the lists stand on the same screen, at the end
 	}
 	r.sayList("not counted", t.LeftOut)
 	r.sayList("counted, and they fail", t.Failing)
