@@ -26,7 +26,7 @@ const (
 
 // String names the kind.
 func (k Kind) String() string {
-	return [...]string{"load", "length", "restraint", "quantity", "choice", "fire", "section"}[k]
+	return [...]string{"loads", "length", "restraint", "quantity", "choice of section", "fire", "section"}[k]
 }
 
 // Change is one thing that differs between two issues of a member.
@@ -80,8 +80,14 @@ func equal(a, b float64) bool {
 
 // number adds a change of a number. 0 stands for one that is not given.
 func (c *changes) number(k Kind, name, unit string, a, b float64) {
-	if !equal(a, b) {
-		c.add(k, "%s %s → %s%s", name, orNone(a), orNone(b), space(unit))
+	switch {
+	case equal(a, b):
+	case a == 0:
+		c.add(k, "%s none → %s%s", name, figures(b), space(unit))
+	case b == 0:
+		c.add(k, "%s %s%s → none", name, figures(a), space(unit))
+	default:
+		c.add(k, "%s %s → %s%s", name, figures(a), figures(b), space(unit))
 	}
 }
 
@@ -96,13 +102,6 @@ func (c *changes) words(k Kind, name, a, b string) {
 		b = "none"
 	}
 	c.add(k, "%s %s → %s", name, a, b)
-}
-
-func orNone(x float64) string {
-	if x == 0 {
-		return "none"
-	}
-	return figures(x)
 }
 
 // figures writes a number with as many digits as people type.

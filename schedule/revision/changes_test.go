@@ -29,13 +29,13 @@ func TestChanges(t *testing.T) {
 		want   []string
 	}{
 		"nothing": {func(c *design.Column) { c.Length = 4000 + 1e-7 }, nil},
-		"load":    {func(c *design.Column) { c.Combinations[0].NEd = 1710e3 }, []string{"load: N_Ed ULS1 1556 → 1710 kN (+9.9 %)"}},
-		"tension": {func(c *design.Column) { c.Combinations[1].NEd = -20e3 }, []string{"load: N_Ed ULS2 1930 → -20 kN"}},
+		"load":    {func(c *design.Column) { c.Combinations[0].NEd = 1710e3 }, []string{"loads: N_Ed ULS1 1556 → 1710 kN (+9.9 %)"}},
+		"tension": {func(c *design.Column) { c.Combinations[1].NEd = -20e3 }, []string{"loads: N_Ed ULS2 1930 → -20 kN"}},
 		"combination new": {func(c *design.Column) {
 			c.Combinations = append(c.Combinations, design.Combination{Name: "ULS3", NEd: 5e5})
-		}, []string{"load: combination ULS3 is new: N_Ed 500 kN"}},
+		}, []string{"loads: combination ULS3 is new: N_Ed 500 kN"}},
 		"combination gone": {func(c *design.Column) { c.Combinations = c.Combinations[1:] },
-			[]string{"load: combination ULS1 is gone: N_Ed was 1556 kN"}},
+			[]string{"loads: combination ULS1 is gone: N_Ed was 1556 kN"}},
 		"order of combinations": {func(c *design.Column) {
 			c.Combinations[0], c.Combinations[1] = c.Combinations[1], c.Combinations[0]
 			c.Combinations[0].Name = "uls2"
@@ -43,10 +43,10 @@ func TestChanges(t *testing.T) {
 		"moments": {func(c *design.Column) {
 			c.Combinations[0].My.Top = 12e6
 			c.Combinations[0].Mz.Bottom = -3.5e6
-		}, []string{"load: M_y,Ed top ULS1 0 → 12 kNm", "load: M_z,Ed bottom ULS1 0 → -3.5 kNm"}},
+		}, []string{"loads: M_y,Ed top ULS1 0 → 12 kNm", "loads: M_z,Ed bottom ULS1 0 → -3.5 kNm"}},
 		"steps": {func(c *design.Column) { c.Combinations[0].Steps = []design.Step{{Height: 2500, NEd: 9e5}} },
-			[]string{"load: N_Ed ULS1 above none → 2.5 m 900 kN"}},
-		"reactions": {func(c *design.Column) { c.Combinations[0].FlangeA = 120e3 }, []string{"load: reaction flange A ULS1 0 → 120 kN"}},
+			[]string{"loads: N_Ed ULS1 above none → 2.5 m 900 kN"}},
+		"reactions": {func(c *design.Column) { c.Combinations[0].FlangeA = 120e3 }, []string{"loads: reaction flange A ULS1 0 → 120 kN"}},
 		"length":    {func(c *design.Column) { c.Length = 4250 }, []string{"length: length 4 → 4.25 m"}},
 		"restraints": {func(c *design.Column) {
 			c.Z.Restraints = []float64{2000}
@@ -62,8 +62,8 @@ func TestChanges(t *testing.T) {
 		"choice": {func(c *design.Column) {
 			c.Choice = design.Choice{Families: []string{"HEA", "HEB"}, MaxWidth: 210, Limit: 0.9}
 			c.Grades, c.Group = []string{"S460"}, "G1"
-		}, []string{"choice: family none → HEA, HEB", "choice: grade none → S460", "choice: greatest width none → 210 mm",
-			"choice: utilisation limit none → 0.9", "choice: group none → G1"}},
+		}, []string{"choice of section: family none → HEA, HEB", "choice of section: grade none → S460", "choice of section: greatest width none → 210 mm",
+			"choice of section: utilisation limit none → 0.9", "choice of section: group none → G1"}},
 		"fire": {func(c *design.Column) { c.Fire = design.Fire{Period: 60, Boxed: true} }, []string{"fire: fire period none → 60 min", "fire: boxed no → yes"}},
 	} {
 		t.Run(name, func(t *testing.T) {
@@ -81,8 +81,8 @@ func TestChanges(t *testing.T) {
 func TestTheOnlyCombinationMayBeRenamed(t *testing.T) {
 	a := design.Column{Combinations: []design.Combination{{Name: "ULS", NEd: 9e5}}}
 	b := design.Column{Combinations: []design.Combination{{NEd: 9.9e5}}}
-	assert.Equal(t, []string{"load: N_Ed 900 → 990 kN (+10.0 %)"}, texts(a, b))
-	assert.Equal(t, []string{"load: loads given → none"}, texts(a, design.Column{}))
+	assert.Equal(t, []string{"loads: N_Ed 900 → 990 kN (+10.0 %)"}, texts(a, b))
+	assert.Equal(t, []string{"loads: loads given → none"}, texts(a, design.Column{}))
 	assert.Empty(t, texts(design.Column{}, design.Column{}))
 }
 

@@ -18,11 +18,12 @@ const (
 	Stays                     // it passes, and no lighter section does
 	Spare                     // it passes, and a lighter one would
 	Weak                      // it fails
+	Barred                    // the new issue does not allow it any more
 )
 
 // String returns the verdict as it stands in the output.
 func (v Verdict) String() string {
-	return [...]string{"not checked", "stays", "lighter passes", "fails"}[v]
+	return [...]string{"not checked", "stays", "lighter passes", "fails", "not allowed"}[v]
 }
 
 // Row is what became of one member of the new issue.
@@ -216,7 +217,7 @@ func (c *comparer) judge(r *Row, kept *Kept, lightest *design.Result) {
 	switch {
 	case r.Check == nil:
 		if r.Old != nil && r.Old.Section != nil {
-			r.Verdict, r.Clash = Weak, kept.Why
+			r.Verdict, r.Clash = Barred, kept.Why
 		}
 	case r.Check.Status == design.NotRead:
 	case r.Check.Status != design.Passes:

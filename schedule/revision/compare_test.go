@@ -102,7 +102,7 @@ func TestOldSectionThatIsNotAllowed(t *testing.T) {
 	n := col("C1 A L0 L1 500")
 	n.Column.Choice.MaxWidth = 210
 	c := compared(t, []Member{with(t, col("C1 A L0 L1 500"), "254x254x89 UKC")}, []Member{n})
-	assert.Equal(t, Weak, c.Rows[0].Verdict)
+	assert.Equal(t, Barred, c.Rows[0].Verdict)
 	assert.Nil(t, c.Rows[0].Check)
 	assert.Equal(t, "its width, 256.3 mm, is outside the row's limits", c.Rows[0].Clash)
 }

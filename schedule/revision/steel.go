@@ -30,16 +30,16 @@ func sectionOf(e *search.Engine, r *design.Result) *catalogue.Section {
 
 // weigh counts the steel of both issues.
 func (c *comparer) weigh() {
-	c.Before = *c.count(len(c.Old.Members), func(i int) (*Member, *catalogue.Section, string) {
+	c.Before = *c.steelOf(len(c.Old.Members), func(i int) (*Member, *catalogue.Section, string) {
 		m := &c.Old.Members[i]
 		return m, m.Section, m.Grade
 	})
-	c.Issued = *c.count(len(c.Rows), func(i int) (*Member, *catalogue.Section, string) {
+	c.Issued = *c.steelOf(len(c.Rows), func(i int) (*Member, *catalogue.Section, string) {
 		m := c.Rows[i].New
 		return m, m.Section, m.Grade
 	})
 	of := func(result func(*Row) *design.Result) *takeoff.TakeOff {
-		return c.count(len(c.Rows), func(i int) (*Member, *catalogue.Section, string) {
+		return c.steelOf(len(c.Rows), func(i int) (*Member, *catalogue.Section, string) {
 			r := result(&c.Rows[i])
 			return c.Rows[i].New, sectionOf(c.engine, r), r.Grade
 		})
@@ -48,8 +48,8 @@ func (c *comparer) weigh() {
 	c.Light = *of(func(r *Row) *design.Result { return &r.Lightest })
 }
 
-// count counts the steel of members in the sections that they are given here.
-func (c *comparer) count(n int, at func(i int) (*Member, *catalogue.Section, string)) *takeoff.TakeOff {
+// steelOf counts the steel of members in the sections that they are given here.
+func (c *comparer) steelOf(n int, at func(i int) (*Member, *catalogue.Section, string)) *takeoff.TakeOff {
 	var items []takeoff.Item
 	var leftOut []takeoff.LeftOut
 	for i := range n {

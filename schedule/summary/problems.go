@@ -3,7 +3,6 @@ package summary
 import (
 	"fmt"
 	"math"
-	"strings"
 
 	"stanchion/design"
 	"stanchion/schedule"
@@ -40,16 +39,7 @@ func (p *page) problem(info *Info, l *Line) {
 		utilisation = number(r.Utilisation, ratio)
 	}
 	cell := workbook.TextCell(c.Cell)
-	cell.Link = place(info.Sheet, c.Cell)
+	cell.Link = workbook.Place(info.Sheet, c.Cell)
 	p.Row(cell, workbook.TextCell(c.Mark), workbook.TextCell(Level(c)), outcome(r.Status), workbook.TextCell(r.Section), utilisation,
 		workbook.TextCell(schedule.CheckName(r.Governing.Kind)), workbook.WordsCell(schedule.Note(l.Member, r)))
-}
-
-// place is a cell as a link names it: 'Columns'!B12.
-func place(sheet, cell string) string {
-	i := strings.LastIndexByte(cell, '!')
-	if i < 0 {
-		return ""
-	}
-	return "'" + strings.ReplaceAll(sheet, "'", "''") + "'" + cell[i:]
 }

@@ -5,6 +5,8 @@ import (
 	"fmt"
 	"math"
 	"strings"
+	"unicode"
+	"unicode/utf8"
 
 	"stanchion/catalogue"
 	"stanchion/design"
@@ -56,10 +58,22 @@ func MemberName(col *design.Column) string {
 }
 
 func memberName(mark, stack, from, to string) string {
-	if stack != "" && !strings.Contains(mark, stack) {
-		mark += " " + stack
+	return strings.TrimSpace(MarkName(mark, stack) + " " + LevelName(from, to))
+}
+
+// MarkName returns the mark with the grid reference behind it, unless the mark
+// opens with that: "C1 A/3", but "A3-01".
+func MarkName(mark, stack string) string {
+	rest, ok := strings.CutPrefix(mark, stack)
+	if ok && (rest == "" || !unicode.IsLetter(firstRune(rest)) && !unicode.IsDigit(firstRune(rest))) {
+		return mark
 	}
-	return strings.TrimSpace(mark + " " + LevelName(from, to))
+	return strings.TrimSpace(mark + " " + stack)
+}
+
+func firstRune(s string) rune {
+	r, _ := utf8.DecodeRuneInString(s)
+	return r
 }
 
 // LevelName returns "L1 to L2", or what there is of it.

@@ -227,7 +227,7 @@ func (p *page) remarks() {
 		p.Span(2, 7)
 		for i := range list.lines {
 			l := &list.lines[i]
-			p.Row(workbook.TextCell(l.Name), workbook.TextCell(l.Cell), workbook.WordsCell(l.Why), workbook.TextCell(""), workbook.TextCell(""),
+			p.Row(workbook.TextCell(l.Name), workbook.TextCell(l.Cell), workbook.TextCell(l.Why), workbook.TextCell(""), workbook.TextCell(""),
 				workbook.TextCell(""), workbook.TextCell(""), workbook.TextCell(""))
 			p.Span(2, 7)
 		}

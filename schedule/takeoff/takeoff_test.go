@@ -290,3 +290,9 @@ func BenchmarkOf(b *testing.B) {
 		Of(items, nil, Options{})
 	}
 }
+
+func TestMarkName(t *testing.T) {
+	for _, c := range [][3]string{{"C1", "A/3", "C1 A/3"}, {"A3-01", "A3", "A3-01"}, {"C3", "C", "C3 C"}, {"A31", "A3", "A31 A3"}, {"A3", "A3", "A3"}, {"C1", "", "C1"}} {
+		assert.Equal(t, c[2], MarkName(c[0], c[1]))
+	}
+}

@@ -15,8 +15,30 @@ func NewPage(name, title string, widths ...float64) *Page {
 	return p
 }
 
-// Row adds a row.
-func (p *Page) Row(cells ...Cell) { p.Rows = append(p.Rows, cells) }
+// Row adds a row, as high as its longest wrapped text needs: not every
+// spreadsheet program finds that by itself.
+func (p *Page) Row(cells ...Cell) {
+	p.Rows = append(p.Rows, cells)
+	lines := 1
+	for c := range cells {
+		if text, ok := cells[c].Value.(string); ok && cells[c].Look.Wrap && c < len(p.Widths) {
+			lines = max(lines, linesAt(splitWords(text), max(1, int(p.Widths[c])-2)))
+		}
+	}
+	p.high(lines)
+}
+
+// high makes the last row so many lines high.
+func (p *Page) high(lines int) {
+	if lines < 2 {
+		return
+	}
+	if p.Heights == nil {
+		p.Heights = map[int]float64{}
+	}
+	const points = 15.5 // of a line
+	p.Heights[len(p.Rows)] = points * float64(lines)
+}
 
 // Blank leaves a row out.
 func (p *Page) Blank() { p.Row() }
@@ -46,20 +68,14 @@ func (p *Page) Totals(cells ...Cell) {
 
 // Across adds a text over the first columns of the page, as high as it needs.
 func (p *Page) Across(columns int, c Cell) {
-	c.Look.Wrap = true
 	p.Row(c)
-	n := len(p.Rows)
-	p.Merges = append(p.Merges, fmt.Sprintf("A%d:%s%d", n, columnName(columns-1), n))
+	p.Rows[len(p.Rows)-1][0].Look.Wrap = true
 	wide := 0.0
 	for _, w := range p.Widths[:min(columns, len(p.Widths))] {
 		wide += w
 	}
-	if p.Heights == nil {
-		p.Heights = map[int]float64{}
-	}
-	const points = 15.5 // of a line
-	lines := 1 + int(float64(len(fmt.Sprint(c.Value)))/max(1, wide))
-	p.Heights[n] = points * float64(lines)
+	p.high(linesAt(splitWords(fmt.Sprint(c.Value)), max(1, int(wide)-2)))
+	p.Span(0, columns-1)
 }
 
 // Span merges cells of the last row, from one column to another.
@@ -86,3 +102,13 @@ func NumberCell(x float64, format string) Cell {
 
 // LabelCell names what stands beside it.
 func LabelCell(s string) Cell { return Cell{Value: s, Look: Look{Role: Label}} }
+
+// Place is a cell of a sheet as a link names it: 'Columns'!B12. cell is as
+// messages name it; empty where it is none of a workbook.
+func Place(sheet, cell string) string {
+	i := strings.LastIndexByte(cell, '!')
+	if i < 0 {
+		return ""
+	}
+	return quoted(sheet) + cell[i:]
+}
