@@ -172,11 +172,12 @@ func nextLighterFails(_ *Member, r *design.Result) string {
 	return join(": ", CheckName(c.Kind), c.Reason)
 }
 
-// Note joins what the reading and the design have to say about a member.
+// Note joins what the reading, the design and the fire have to say about a
+// member.
 func Note(m *Member, r *design.Result) string {
 	seen := map[string]bool{}
 	var notes []string
-	for _, list := range [][]string{m.problemTexts(), r.Notes, m.Column.Notes} {
+	for _, list := range [][]string{m.problemTexts(), r.Notes, fireNotes(&r.Fire), m.Column.Notes} {
 		for _, n := range list {
 			if !seen[n] {
 				seen[n] = true
@@ -185,6 +186,15 @@ func Note(m *Member, r *design.Result) string {
 		}
 	}
 	return strings.Join(notes, "; ")
+}
+
+// fireNotes says why a member has no critical temperature, and on what it rests
+// (EN 1993-1-2, as the lengths used where none are given for fire).
+func fireNotes(f *design.FireResult) []string {
+	if f.Reason == "" {
+		return f.Notes
+	}
+	return append([]string{"no critical temperature: " + f.Reason}, f.Notes...)
 }
 
 // problemTexts are the member's problems with their cells, without the file.

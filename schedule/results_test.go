@@ -118,6 +118,16 @@ func TestJSONOfTheGoverningForce(t *testing.T) {
 	}
 }
 
+// What is said of fire reaches the row: why there is no critical temperature,
+// and which lengths were used (4.2.3.2 of EN 1993-1-2 asks for those in fire).
+func TestNoteOfFire(t *testing.T) {
+	m, r := sized()
+	r.Fire = design.FireResult{Asked: true, Reason: "a moment acts", Notes: []string{"L_fi,y is not given"}}
+	assert.Equal(t, "checked; no critical temperature: a moment acts; L_fi,y is not given; the row is hidden", Note(m, r))
+	r.Fire.Reason = ""
+	assert.Equal(t, "checked; L_fi,y is not given; the row is hidden", Note(m, r))
+}
+
 func TestResultColumns(t *testing.T) {
 	m, r := sized()
 	cols := ResultColumns(ResultOptions{Reserve: true, Fire: true})
