@@ -166,6 +166,11 @@ func (h *headerScan) bind(l *layout, c *headerColumn) (vetoed bool) {
 		seen.Why = "the mapping says so"
 		l.left = append(l.left, seen)
 	case m == nil:
+		if _, u, _ := splitUnit(heading); u != nil && (u.of == force || u.of == moment) {
+			seen.Why = "it is in " + u.name + ", and nothing says which field it is: map it if it is one"
+			l.left = append(l.left, seen)
+			break
+		}
 		l.other = append(l.other, seen)
 	case m.vetoed:
 		seen.Why = "it does not speak of design values"

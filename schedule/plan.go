@@ -66,6 +66,8 @@ func (s *scanner) remarks(p *Plan) []string {
 		b := &p.Header.Columns[i]
 		if b.rank == 1 && (b.key.field == momentField || b.key.field == familyField || b.key.axis != noAxis) {
 			list = append(list, fmt.Sprintf("%s (%q) is read as %s", b.Cell, b.Heading, b.Field))
+		} else if b.hidden {
+			list = append(list, fmt.Sprintf("%s (%q) is hidden, and %s is read from it", b.Cell, b.Heading, b.title()))
 		}
 	}
 	return list

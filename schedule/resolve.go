@@ -28,8 +28,9 @@ func (p *phrase) resolve(m *meaning) {
 // or several.
 func (p *phrase) field() (*field, word) {
 	var found word
-	if p.names(fromField) && p.names(toField) {
-		return fieldTable[levelField], word{} // Level from / to
+	if p.names(fromField) && p.names(toField) || p.names(fromField) && slices.Contains(p.ends, topEnd) || p.names(toField) && slices.Contains(p.ends, bottomEnd) {
+		p.ends = nil
+		return fieldTable[levelField], word{} // Level from / to, Base / top level
 	}
 	for _, weak := range []bool{false, true} {
 		for _, w := range p.nouns {

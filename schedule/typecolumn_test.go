@@ -33,3 +33,16 @@ func TestTypeColumn(t *testing.T) {
 	r := refused(t, sheetOf("Mark | Type | Member type | Length | N_Ed\nC1 | HEB | UC | 3.6 | 900"))
 	assert.ErrorContains(t, r, "two headers for one field")
 }
+
+// What is not understood and measures an action is named louder than a remark,
+// and so is a hidden column that something is read from.
+func TestHeadingsThatMayMatter(t *testing.T) {
+	src := sheetOf("Mark | Length | N_Ed | M (kNm) | P [kN] | Remarks\nC1 | 3.6 | 900 | 20 | 30 | as drawn")
+	src.hidden = map[int]bool{2: true}
+	s := readAll(t, src)
+	assert.Len(t, s.Summary.LeftAlone, 2)
+	assert.Contains(t, s.Summary.LeftAlone[0].Why, "it is in kNm")
+	assert.Contains(t, s.Summary.LeftAlone[1].Why, "it is in kN,")
+	assert.Equal(t, []Seen{{Cell: "Columns!F1", Heading: "Remarks"}}, s.Summary.Other)
+	assert.Equal(t, []string{`Columns!C1 ("N_Ed") is hidden, and N_Ed is read from it`}, s.Summary.Notes)
+}

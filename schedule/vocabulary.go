@@ -104,7 +104,7 @@ var otherWords = compactSet("capacity|resistance|rd|ratio|utilisation|utilizatio
 
 // vetoWords turn a heading into something else: an action that is not a
 // design value, or one no longer valid.
-const vetoWords = "sls|service|serviceability|unfactored|unfact|characteristic|char|dead|dead load|live|live load|imposed|imposed load|permanent|variable|gk|qk|ng|nq|superseded|previous|old|former|working load|nominal"
+const vetoWords = "sls|service|serviceability|unfactored|unfact|characteristic|char|dead|dead load|live|live load|imposed|imposed load|permanent|variable|gk|qk|ng|nq|superseded|previous|old|former|working load|nominal|g|q|gq|sdl"
 
 // combinationWords stand in the name of a combination.
 var combinationWords = compactSet("uls|lc|combo|comb|combination|co|case|str|equ|geo|set|eq|lk|lfk|max|min|wind|snow|maximum|minimum|acc|accidental")
