@@ -142,7 +142,7 @@ func (r *compareRun) compare(ctx context.Context) error {
 	if err != nil {
 		return err
 	}
-	r.result, err = revision.Compare(ctx, old, new, r.old.engine, r.new.engine, r.flags.workers)
+	r.result, err = revision.Compare(ctx, old, new, r.old.engine, r.new.engine, r.new.plan.Settings.Together.Options, r.flags.workers)
 	return err
 }
 

@@ -177,3 +177,10 @@ func merged(links []link, spliceCost float64) []project.Link {
 	}
 	return out
 }
+
+// Sets returns which columns share a section: the members of a group, the
+// lengths of a stack between splices, and the others each on its own.
+func Sets(cols []design.Column, o Options, set *design.Settings) []search.Set {
+	all, _ := stacks(cols, &o, set)
+	return tie(cols, all).sets
+}

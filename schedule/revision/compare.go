@@ -2,9 +2,11 @@ package revision
 
 import (
 	"context"
+	"errors"
 
 	"stanchion/catalogue"
 	"stanchion/design"
+	"stanchion/design/building"
 	"stanchion/design/search"
 	"stanchion/schedule/takeoff"
 )
@@ -58,13 +60,13 @@ type Comparison struct {
 
 // Compare sets two issues side by side, and tries the sections of the old
 // under the actions of the new. engine works under the settings of the new
-// issue. Where the old issue gives no section at all, its members are sized by
+// issue, and o says what is decided together. Where the old issue gives no section at all, its members are sized by
 // oldEngine first.
 //
-// The errors are those of search.Engine.SizeAll; with a *search.BugError every
-// member but those named is complete.
-func Compare(ctx context.Context, old, new *Issue, oldEngine, engine *search.Engine, workers int) (*Comparison, error) {
-	c := &comparer{ctx: ctx, workers: workers, engine: engine, Comparison: &Comparison{Old: old, New: new, Matching: Match(old.Members, new.Members)}}
+// The errors are those of building.Size; besides a *search.BugError there is a
+// comparison, complete but for the members that it names.
+func Compare(ctx context.Context, old, new *Issue, oldEngine, engine *search.Engine, o building.Options, workers int) (*Comparison, error) {
+	c := &comparer{ctx: ctx, workers: workers, engine: engine, options: o, Comparison: &Comparison{Old: old, New: new, Matching: Match(old.Members, new.Members)}}
 	c.rows()
 	if err := c.sizeOld(oldEngine); err != nil {
 		return nil, err
@@ -82,6 +84,7 @@ type comparer struct {
 	ctx     context.Context
 	workers int
 	engine  *search.Engine
+	options building.Options
 	defects error
 }
 
@@ -145,14 +148,12 @@ func (c *comparer) sizeOld(e *search.Engine) error {
 
 // all sizes columns. A defect of single columns is kept and the rest goes on.
 func (c *comparer) all(e *search.Engine, cols []design.Column) ([]design.Result, error) {
-	results, err := e.SizeAll(c.ctx, cols, c.workers, nil)
-	if results == nil && err != nil {
+	d, err := building.Size(c.ctx, e, cols, c.options, c.workers, nil)
+	if d == nil || d.Results == nil && len(cols) > 0 {
 		return nil, err
 	}
-	if err != nil {
-		c.defects = err
-	}
-	return results, nil
+	c.defects = errors.Join(c.defects, err)
+	return d.Results, nil
 }
 
 // try tries the old sections under the new actions, and what would be lightest.
@@ -163,11 +164,11 @@ func (c *comparer) try() error {
 			cols[n].Given = "" // the old section is to be tried, whatever the new issue gives
 		}
 	}
-	kept, err := Keep(c.ctx, c.engine, cols, had, c.workers)
-	if kept == nil && err != nil {
+	kept, err := Keep(c.ctx, c.engine, cols, had, c.options, c.workers)
+	if kept == nil {
 		return err
 	}
-	c.defects = err
+	c.defects = errors.Join(c.defects, err)
 	light := cols
 	for n := range light {
 		light[n].Given = ""
@@ -178,7 +179,7 @@ func (c *comparer) try() error {
 		return err
 	}
 	for n, i := range at {
-		c.judge(&c.Rows[i], &kept[n], &lightest[n])
+		c.judge(&c.Rows[i], &kept.Columns[n], &lightest[n])
 	}
 	return nil
 }

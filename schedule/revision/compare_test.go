@@ -8,6 +8,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"stanchion/design"
+	"stanchion/design/building"
 	"stanchion/design/search"
 	"stanchion/schedule"
 )
@@ -23,7 +24,7 @@ func with(t testing.TB, m Member, name string) Member {
 func compared(t testing.TB, old, new []Member) *Comparison {
 	t.Helper()
 	e := engine(t, settings(t))
-	c, err := Compare(context.Background(), &Issue{"old.xlsx", old}, &Issue{"new.xlsx", new}, e, e, 2)
+	c, err := Compare(context.Background(), &Issue{"old.xlsx", old}, &Issue{"new.xlsx", new}, e, e, building.Options{}, 2)
 	require.NoError(t, err)
 	return c
 }
@@ -118,7 +119,7 @@ func TestCompareStops(t *testing.T) {
 	cancel()
 	e := engine(t, settings(t))
 	members := []Member{with(t, col("C1 A L0 L1 64"), "CHS 168.3x8.0")}
-	c, err := Compare(ctx, &Issue{"a", members}, &Issue{"b", members}, e, e, 1)
+	c, err := Compare(ctx, &Issue{"a", members}, &Issue{"b", members}, e, e, building.Options{}, 1)
 	assert.ErrorIs(t, err, context.Canceled)
 	assert.Nil(t, c)
 	var bug *search.BugError
@@ -136,7 +137,7 @@ func BenchmarkCompare(b *testing.B) {
 		new = append(new, m)
 	}
 	for b.Loop() {
-		if _, err := Compare(context.Background(), &Issue{"a", old}, &Issue{"b", new}, e, e, 2); err != nil {
+		if _, err := Compare(context.Background(), &Issue{"a", old}, &Issue{"b", new}, e, e, building.Options{}, 2); err != nil {
 			b.Fatal(err)
 		}
 	}

@@ -7,6 +7,7 @@ import (
 
 	"stanchion/catalogue"
 	"stanchion/design"
+	"stanchion/design/building"
 	"stanchion/design/search"
 )
 
@@ -25,35 +26,52 @@ type Kept struct {
 	Why    string         // why it does not stay
 }
 
+// Keeping is a schedule sized anew with the sections that stay.
+type Keeping struct {
+	Columns  []Kept
+	Decision *building.Decision // the sizing that it ended with
+}
+
 // Keep sizes columns so that sections stay where they still pass, and the
 // fewest members change: a section that the row gives goes first; then the one
 // that the column had, if it passes and the row's own limits allow it; the rest
-// is sized anew. A group has one section: of those that its members had it
-// keeps the one that passes for all of them and that most have.
+// is sized anew. Columns that share a section (groups, the lengths of a stack
+// between splices) keep, of those that they had, the one that passes for all of
+// them and that most have.
 //
-// Where lengths of a column line depend on each other, a new section can make a
-// kept one beside it fail; that one is sized anew then too, until all that stay
-// pass.
+// What is sized anew can make a kept section beside it fail, where the lengths
+// of a column line depend on each other; that one is sized anew then too, until
+// all that stay pass. The rule that no section of a stack grows above a splice
+// holds for what is sized anew, as far as the sections that stay allow it.
 //
-// The errors are those of SizeAll.
-func Keep(ctx context.Context, e *search.Engine, cols []design.Column, had []Had, workers int) ([]Kept, error) {
+// The errors are those of building.Size; besides a *search.BugError there is a
+// result.
+func Keep(ctx context.Context, e *search.Engine, cols []design.Column, had []Had, o building.Options, workers int) (*Keeping, error) {
 	if len(had) != len(cols) {
 		panic("revision: one old section for each column")
 	}
-	k := &keeper{ctx: ctx, engine: e, workers: workers, cols: cols, had: had, kept: make([]Kept, len(cols)), stay: make([]Had, len(cols))}
+	k := &keeper{ctx: ctx, engine: e, options: o, workers: workers, cols: cols, had: had, kept: make([]Kept, len(cols)), stay: make([]Had, len(cols))}
 	if err := k.checkOld(); err != nil {
 		return nil, err
 	}
+	set := e.Settings()
+	k.sets = building.Sets(cols, o, &set)
 	k.decide()
-	return k.kept, k.size()
+	d, err := k.size()
+	if d == nil {
+		return nil, err
+	}
+	return &Keeping{k.kept, d}, k.defects
 }
 
 type keeper struct {
 	ctx     context.Context
 	engine  *search.Engine
+	options building.Options
 	workers int
 	cols    []design.Column
 	had     []Had
+	sets    []search.Set // columns that share a section
 	kept    []Kept
 	stay    []Had // what each column is to keep; no section: it is sized
 	defects error // columns that the search could not bring to an end
@@ -80,7 +98,7 @@ func (k *keeper) checkOld() error {
 		cols = slices.Clone(k.cols)
 	}
 	for _, i := range at {
-		if c := fixed(&k.cols[i], &k.had[i]); together {
+		if c := alone(&k.cols[i], &k.had[i]); together {
 			cols[i] = c
 		} else {
 			cols = append(cols, c)
@@ -114,36 +132,32 @@ func (k *keeper) mayStay() []int {
 	return at
 }
 
-// fixed is a column with the section that it had, on its own.
-func fixed(col *design.Column, h *Had) design.Column {
+// given is a column with a section that it had.
+func given(col *design.Column, h *Had) design.Column {
 	c := *col
-	c.Given, c.Group = h.Section.Name(), ""
+	c.Given = h.Section.Name()
 	if h.Grade != "" {
 		c.Grades = []string{h.Grade}
 	}
 	return c
 }
 
-// decide settles which columns keep what they had: each on its own, and the
-// members of a group together.
+// alone is given for a column that shares its section with no other.
+func alone(col *design.Column, h *Had) design.Column {
+	c := given(col, h)
+	c.Group = ""
+	return c
+}
+
+// decide settles which columns keep what they had: each on its own, and those
+// that share a section together.
 func (k *keeper) decide() {
-	groups := map[string][]int{}
-	var order []string
-	for i := range k.cols {
-		name := k.cols[i].Group
-		if name == "" {
-			if k.passes(i) {
-				k.stay[i] = k.had[i]
-			}
-			continue
+	for _, set := range k.sets {
+		if len(set.Columns) > 1 {
+			k.decideTogether(set.Columns)
+		} else if i := set.Columns[0]; k.passes(i) {
+			k.stay[i] = k.had[i]
 		}
-		if groups[name] == nil {
-			order = append(order, name)
-		}
-		groups[name] = append(groups[name], i)
-	}
-	for _, name := range order {
-		k.decideGroup(groups[name])
 	}
 }
 
@@ -154,43 +168,39 @@ func (k *keeper) passes(i int) bool {
 
 // size sizes what does not stay. What stays and does not pass beside new
 // neighbours is let go, and the rest sized once more.
-func (k *keeper) size() error {
+func (k *keeper) size() (*building.Decision, error) {
 	for {
 		cols := slices.Clone(k.cols)
 		for i := range cols {
 			if k.stay[i].Section != nil {
-				cols[i] = fixed(&k.cols[i], &k.stay[i])
+				cols[i] = given(&k.cols[i], &k.stay[i])
 			}
 		}
-		results, err := k.all(cols)
-		if err != nil {
-			return err
+		d, err := building.Size(k.ctx, k.engine, cols, k.options, k.workers, nil)
+		if d == nil || d.Results == nil {
+			return nil, err
 		}
-		if !k.letGo(results) {
-			k.finish(results)
-			return k.defects
+		k.defects = errors.Join(k.defects, err)
+		if !k.letGo(d.Results) {
+			k.finish(d.Results)
+			return d, nil
 		}
 	}
 }
 
-// letGo gives up the sections that do not pass any more, with those of their
-// groups. It reports whether there were any.
+// letGo gives up the sections that do not pass any more, with those that share
+// them. It reports whether there were any.
 func (k *keeper) letGo(results []design.Result) bool {
-	gone := map[string]bool{}
 	any := false
-	for i := range results {
-		if k.stay[i].Section == nil || results[i].Status == design.Passes || results[i].Status == design.NotRead {
+	for _, set := range k.sets {
+		if !slices.ContainsFunc(set.Columns, func(i int) bool {
+			return k.stay[i].Section != nil && (results[i].Status == design.Fails || results[i].Status == design.NoSection)
+		}) {
 			continue
 		}
 		any = true
-		k.kept[i].Why = "it fails beside its new neighbours"
-		k.stay[i] = Had{}
-		if name := k.cols[i].Group; name != "" {
-			gone[name] = true
-		}
-	}
-	for i := range k.stay {
-		if gone[k.cols[i].Group] {
+		for _, i := range set.Columns {
+			k.kept[i].Why = "it fails beside its new neighbours"
 			k.stay[i] = Had{}
 		}
 	}

@@ -2,13 +2,12 @@ package revision
 
 import "stanchion/design"
 
-// decideGroup keeps for a group the section that most of its members had, of
-// those that pass for all. Members whose own old section passes say so at once
-// for it; for the others it is tried.
-func (k *keeper) decideGroup(members []int) {
+// decideTogether keeps, for columns that share a section, the one that most of
+// them had, of those that pass for all.
+func (k *keeper) decideTogether(members []int) {
 	for _, i := range members {
 		if k.cols[i].Given != "" {
-			return // the group has what the row gives
+			return // they have what the row gives
 		}
 	}
 	var best Had
@@ -29,7 +28,7 @@ func (k *keeper) decideGroup(members []int) {
 	}
 }
 
-// choices are the sections that the members of a group had, in their order.
+// choices are the sections that the columns had, in their order.
 func (k *keeper) choices(members []int) []Had {
 	var list []Had
 	seen := map[Had]bool{}
@@ -42,8 +41,8 @@ func (k *keeper) choices(members []int) []Had {
 	return list
 }
 
-// passesForAll reports whether a section passes for every member of a group
-// that can be designed.
+// passesForAll reports whether a section passes for every column that can be
+// designed.
 func (k *keeper) passesForAll(members []int, h Had) bool {
 	set := k.engine.Settings()
 	var cols []design.Column
@@ -56,7 +55,7 @@ func (k *keeper) passesForAll(members []int, h Had) bool {
 				return false
 			}
 		default:
-			cols = append(cols, fixed(&k.cols[i], &h))
+			cols = append(cols, alone(&k.cols[i], &h))
 		}
 	}
 	if len(cols) == 0 {

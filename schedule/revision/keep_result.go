@@ -30,7 +30,7 @@ func (k *keeper) remark(i int) string {
 	if k.had[i] == k.stay[i] {
 		return "kept from the old issue"
 	}
-	return "as the rest of its group, which keeps its section"
+	return "as the others that share its section"
 }
 
 // why says why a column does not keep what it had.
@@ -44,7 +44,7 @@ func (k *keeper) why(i int) string {
 	case old == nil || old.Status == design.NotRead:
 		return "it cannot be designed"
 	case old.Status == design.Passes:
-		return "it passes, and not for the whole group"
+		return "it passes, and not for all that share a section"
 	}
 	return Failure(old)
 }

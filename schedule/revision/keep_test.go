@@ -11,6 +11,7 @@ import (
 
 	"stanchion/catalogue"
 	"stanchion/design"
+	"stanchion/design/building"
 	"stanchion/design/ec3"
 	"stanchion/design/search"
 )
@@ -57,9 +58,9 @@ func keep(t require.TestingT, e *search.Engine, cols []design.Column, sections .
 		cols[i].Mark = fmt.Sprint("C", i)
 		h = append(h, had(t, sections[i]))
 	}
-	kept, err := Keep(context.Background(), e, cols, h, 2)
+	kept, err := Keep(context.Background(), e, cols, h, building.Options{}, 2)
 	require.NoError(t, err)
-	return kept
+	return kept.Columns
 }
 
 func TestKeep(t *testing.T) {
@@ -129,7 +130,7 @@ func TestKeepGroups(t *testing.T) {
 	k = keep(t, e, cols(500, 2500), "203x203x60 UKC", "203x203x60 UKC")
 	assert.Equal(t, sections(k)[0], sections(k)[1])
 	assert.False(t, k[0].Stays || k[1].Stays)
-	assert.Equal(t, "it passes, and not for the whole group", k[0].Why)
+	assert.Equal(t, "it passes, and not for all that share a section", k[0].Why)
 	// Two had one section, one another: the group takes what most had, if it passes for all.
 	k = keep(t, e, cols(500, 500, 500), "203x203x60 UKC", "203x203x71 UKC", "203x203x71 UKC")
 	assert.Equal(t, "203x203x71 UKC", sections(k)[0])
@@ -253,9 +254,42 @@ func TestKeepInColumnLines(t *testing.T) {
 	})
 }
 
+// The lengths of a stack between splices share a section, as groups do, and
+// the section above a splice may stay.
+func TestKeepStacks(t *testing.T) {
+	e := engine(t, settings(t))
+	stack := func(kN ...float64) []design.Column {
+		var cols []design.Column
+		for i, n := range kN {
+			cols = append(cols, column(n, func(c *design.Column) {
+				c.Stack, c.From, c.To = "A", fmt.Sprint("L", i), fmt.Sprint("L", i+1)
+				c.SpliceSaid, c.Splice = true, i == 1
+			}))
+		}
+		return cols
+	}
+	k := keep(t, e, stack(1000, 800, 300), "203x203x60 UKC", "203x203x60 UKC", "203x203x46 UKC")
+	for i := range k {
+		assert.True(t, k[i].Stays, i)
+	}
+	// The lowest fails: it and the one that shares its section change, the top stays.
+	k = keep(t, e, stack(2500, 800, 300), "203x203x60 UKC", "203x203x60 UKC", "203x203x46 UKC")
+	assert.Equal(t, k[0].Result.Section, k[1].Result.Section)
+	assert.Equal(t, []bool{false, false, true}, []bool{k[0].Stays, k[1].Stays, k[2].Stays})
+	assert.Equal(t, "it passes, and not for all that share a section", k[1].Why)
+	assert.Equal(t, "203x203x46 UKC", k[2].Result.Section)
+	// Without a word of splices every length is on its own.
+	cols := stack(2500, 800, 300)
+	for i := range cols {
+		cols[i].SpliceSaid, cols[i].Splice = false, false
+	}
+	k = keep(t, e, cols, "203x203x60 UKC", "203x203x60 UKC", "203x203x46 UKC")
+	assert.Equal(t, []bool{false, true, true}, []bool{k[0].Stays, k[1].Stays, k[2].Stays})
+}
+
 func TestKeepStops(t *testing.T) {
 	ctx, cancel := context.WithCancel(context.Background())
 	cancel()
-	_, err := Keep(ctx, engine(t, settings(t)), []design.Column{column(500)}, []Had{had(t, "203x203x60 UKC")}, 1)
+	_, err := Keep(ctx, engine(t, settings(t)), []design.Column{column(500)}, []Had{had(t, "203x203x60 UKC")}, building.Options{}, 1)
 	assert.ErrorIs(t, err, context.Canceled)
 }

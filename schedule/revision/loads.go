@@ -12,7 +12,7 @@ import (
 func (c *changes) loads(a, b []design.Combination) {
 	if len(a) == 0 || len(b) == 0 {
 		if len(a) != len(b) {
-			c.add(Load, "loads %s → %s", given(a), given(b))
+			c.add(Load, "loads %s → %s", presence(a), presence(b))
 		}
 		return
 	}
@@ -50,7 +50,7 @@ func named(name string) string {
 	return name
 }
 
-func given(list []design.Combination) string {
+func presence(list []design.Combination) string {
 	if len(list) == 0 {
 		return "none"
 	}
