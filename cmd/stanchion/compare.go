@@ -38,12 +38,9 @@ func compareCommand(con *console) *cobra.Command {
   stanchion compare P01.csv P02.csv -o changes.csv --renamed "L1=Level 01" --renamed C7=C7A`,
 		Args: twoFiles,
 		RunE: func(c *cobra.Command, args []string) error {
-			for _, s := range renamed {
-				n, err := revision.ParseRenaming(s)
-				if err != nil {
-					return usage(c, "--renamed: %v", err)
-				}
-				r.renamed = append(r.renamed, n)
+			var err error
+			if r.renamed, err = parseRenamings(c, renamed); err != nil {
+				return err
 			}
 			return r.do(c.Context(), con, c, args[0], args[1])
 		},

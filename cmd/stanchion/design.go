@@ -30,7 +30,7 @@ func (r *run) design(ctx context.Context) error {
 
 // mustHold reports whether a decision needs all members at once.
 func (r *run) mustHold() bool {
-	if r.engine.Coupled() {
+	if r.engine.Coupled() || r.keep != nil {
 		return true
 	}
 	t := &r.plan.Settings.Together
@@ -68,8 +68,11 @@ func (r *run) designTogether(ctx context.Context, put func(*schedule.Member, *de
 			return err
 		}
 		members = append(members, j.Tag)
-		if !j.Skip {
+		switch {
+		case !j.Skip:
 			cols = append(cols, j.Column)
+		case r.keep != nil:
+			r.keep.unread = append(r.keep.unread, j.Column)
 		}
 	}
 	results, defects := r.decide(ctx, cols)
@@ -95,12 +98,20 @@ func (r *run) decide(ctx context.Context, cols []design.Column) ([]design.Result
 	if r.mode == search.Check {
 		return r.engine.CheckAll(ctx, cols, r.flags.workers, nil)
 	}
-	d, err := building.Size(ctx, r.engine, cols, r.plan.Settings.Together.Options, r.flags.workers, nil)
+	d, err := r.sized(ctx, cols)
 	if d == nil {
 		return nil, err
 	}
 	r.curve = d.Curve
 	return d.Results, err
+}
+
+// sized chooses the sections of columns that are held.
+func (r *run) sized(ctx context.Context, cols []design.Column) (*building.Decision, error) {
+	if r.keep != nil {
+		return r.decideKeeping(ctx, cols)
+	}
+	return building.Size(ctx, r.engine, cols, r.plan.Settings.Together.Options, r.flags.workers, nil)
 }
 
 // hasField reports whether the schedule has a column for a field.

@@ -31,6 +31,7 @@ func (r *run) report(ctx context.Context) {
 	}
 	r.sayRead()
 	r.sayOutcome()
+	r.sayKept()
 	r.saySteel()
 	r.sayFailing(ctx)
 	r.sayNotRead()

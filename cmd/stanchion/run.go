@@ -30,6 +30,7 @@ type run struct {
 	engine   *search.Engine
 	families map[string]string // of sections, by name
 	out      *outputs
+	keep     *keeping         // the old issue whose sections stay; nil: none
 	curve    []building.Trade // what fewer sizes come to, where they are limited
 	tally    *summary.Tally
 }
@@ -57,6 +58,11 @@ func (r *run) do(ctx context.Context) error {
 		return err
 	}
 	defer r.source.Close()
+	if r.flags.keep.file != "" {
+		if err := r.readOld(ctx); err != nil {
+			return err
+		}
+	}
 	if err := r.openOutputs(); err != nil {
 		return err
 	}

@@ -16,6 +16,7 @@ type runFlags struct {
 	settings            string
 	workers             int
 	force, quiet        bool
+	keep                keepFlags
 }
 
 func (f *runFlags) bind(c *cobra.Command, suffix string) {
@@ -65,7 +66,7 @@ func (f *runFlags) check(c *cobra.Command) error {
 	if f.output == stdio && f.json == stdio {
 		return usage(c, "-o - and --json - both go to standard output: name a file for one of them")
 	}
-	return nil
+	return f.keep.check(c)
 }
 
 // settingsHelp lists the settings for the help of a command.

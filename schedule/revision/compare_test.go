@@ -105,7 +105,7 @@ func TestOldSectionThatIsNotAllowed(t *testing.T) {
 	c := compared(t, []Member{with(t, col("C1 A L0 L1 500"), "254x254x89 UKC")}, []Member{n})
 	assert.Equal(t, Barred, c.Rows[0].Verdict)
 	assert.Nil(t, c.Rows[0].Check)
-	assert.Equal(t, "its width, 256.3 mm, is outside the row's limits", c.Rows[0].Clash)
+	assert.Equal(t, "width 256.3 mm: outside the row's limits", c.Rows[0].Clash)
 }
 
 func TestCompareNothing(t *testing.T) {

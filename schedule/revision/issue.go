@@ -35,7 +35,10 @@ func (m *Member) Readable() bool { return len(m.Problems) == 0 }
 func (m *Member) Name() string { return m.item().Name() }
 
 // Level names the levels between which the member stands.
-func (m *Member) Level() string { return takeoff.LevelName(m.Column.From, m.Column.To) }
+func (m *Member) Level() string { return LevelOf(&m.Column) }
+
+// LevelOf names the levels between which a column stands: "L1 to L2".
+func LevelOf(col *design.Column) string { return takeoff.LevelName(col.From, col.To) }
 
 // SectionName returns the section with its grade, for people; empty: none.
 func (m *Member) SectionName() string { return sectionName(m.Section, m.Grade) }

@@ -21,7 +21,7 @@ func notAllowed(col *design.Column, h *Had, set *design.Settings) string {
 		{"depth", s.H, c.MinDepth, c.MaxDepth}, {"width", s.B, c.MinWidth, c.MaxWidth}, {"thickness", s.Tf, c.MinThickness, c.MaxThickness},
 	} {
 		if l.value < l.least || l.most > 0 && l.value > l.most {
-			return fmt.Sprintf("its %s, %s mm, is outside the row's limits", l.name, figures(l.value))
+			return fmt.Sprintf("%s %s mm: outside the row's limits", l.name, figures(l.value))
 		}
 	}
 	if len(c.Families) > 0 && !isOf(s, c.Families, set.ColdFormed) {

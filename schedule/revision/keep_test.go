@@ -87,7 +87,7 @@ func TestKeep(t *testing.T) {
 		"not of the row's family": {column(500, func(c *design.Column) { c.Choice.Families = []string{"UKC"} }), "HE 260 A", lightest(500), false,
 			"the row asks for UKC"},
 		"too wide for the row": {column(500, func(c *design.Column) { c.Choice.MaxWidth = 210 }), "254x254x89 UKC", lightest(500), false,
-			"its width, 256.3 mm, is outside the row's limits"},
+			"width 256.3 mm: outside the row's limits"},
 		"not of the row's grade": {column(500, func(c *design.Column) { c.Grades = []string{"S460"} }), "254x254x89 UKC", "", false, "the row asks for S460"},
 	} {
 		t.Run(name, func(t *testing.T) {
