@@ -2,6 +2,7 @@ package working
 
 import (
 	"fmt"
+	"strings"
 
 	"stanchion/design"
 )
@@ -21,7 +22,7 @@ func (w *writer) fire() {
 	}
 	w.exposure(f)
 	for _, note := range f.Notes {
-		w.add(Words(note))
+		w.say("%s.", strings.ToUpper(note[:1])+note[1:])
 	}
 }
 

@@ -6,6 +6,7 @@ import (
 
 	"stanchion/design"
 	"stanchion/design/ec3"
+	"stanchion/design/working/formula"
 )
 
 // interaction writes (6.61) and (6.62) of the set of segments where the greater
@@ -16,10 +17,10 @@ func (w *writer) interaction() {
 		return
 	}
 	w.start("Interaction of buckling and bending")
-	w.say("y-y segment %s, z-z segment %s to %s m, lateral-torsional segment %s to %s m.",
+	w.say("Segments: y-y %s, z-z %s-%s m, lateral-torsional %s-%s m.",
 		w.where(x.FromY, x.ToY, x.Combination), metres(x.FromZ), metres(x.ToZ), metres(x.FromLT), metres(x.ToLT))
 	bentY, bentZ := x.My661 > 0 || x.My662 > 0, x.Mz > 0
-	w.force(max(x.NY, x.NZ), "the greater of the segments")
+	w.force(max(x.NY, x.NZ), "greatest in these segments")
 	w.combinedClass(&x.Web, x.Class, max(x.NY, x.NZ), bentY)
 	w.modulus(x.Class, bentY, bentZ)
 	w.characteristic(bentY, bentZ)
@@ -65,7 +66,9 @@ func (w *writer) ratioOf(axis string, ncr, lambda, chi, nEd, n float64) {
 	default:
 		w.chain(axis, ncr, alpha, lambda, chi)
 	}
-	w.force(nEd, fmt.Sprintf("greatest in the %s-%s segment", axis, axis))
+	if k, ok := w.known[formula.Sym("N_Ed")]; !ok || k.exact != nEd {
+		w.force(nEd, fmt.Sprintf("greatest in the %s-%s segment", axis, axis))
+	}
 	w.find("n_"+axis, w.fill("N_Ed/(χ_# N_Rk/γ_M1)", axis), n, None, "")
 }
 

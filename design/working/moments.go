@@ -64,13 +64,21 @@ func (w *writer) modulus(class int, y, z bool) {
 	}
 	symbolY, symbolZ := moduli(class)
 	var list Values
+	add := func(symbol string, modulus float64) {
+		if _, ok := w.known[formula.Sym(symbol)]; !ok {
+			list = append(list, w.value(symbol, modulus, Cm3))
+		}
+	}
 	if y {
-		list = append(list, w.value(symbolY, wy, Cm3))
+		add(symbolY, wy)
 	}
 	if z {
-		list = append(list, w.value(symbolZ, wz, Cm3))
+		add(symbolZ, wz)
 	}
-	if class == 4 && len(list) > 0 {
+	if len(list) == 0 {
+		return // they stand above
+	}
+	if class == 4 {
 		list[0].Note = "EN 1993-1-5 4.4, each in bending about its axis alone"
 	}
 	w.add(list)
@@ -78,6 +86,11 @@ func (w *writer) modulus(class int, y, z bool) {
 
 // combinedClass writes the class under an axial force together with moments.
 func (w *writer) combinedClass(web *ec3.Element, class int, nEd float64, bent bool) {
+	if class == w.classedFor.class && *web == w.classedFor.web && nEd == w.classedFor.nEd {
+		w.say("The section is class %d as above.", class)
+		return
+	}
+	w.classedFor.class, w.classedFor.web, w.classedFor.nEd = class, *web, nEd
 	if len(w.c.Elements) > 1 && bent && web.Limits != w.webInCompression(web) {
 		w.webClass(web, nEd)
 	}

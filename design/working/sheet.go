@@ -21,6 +21,7 @@ type Sheet struct {
 	// What the drawings show.
 	Lengths []Length
 	Points  []Point
+	Diagram *Diagram
 
 	Checks    []design.Check // every one
 	Governing int            // index into Checks; -1: none
@@ -117,3 +118,7 @@ type Point struct {
 	LambdaBar float64
 	Chi       float64
 }
+
+// Diagram is the bending of the combination that governs: nil where nothing
+// bends.
+type Diagram struct{ My, Mz design.EndMoments }

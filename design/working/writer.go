@@ -20,6 +20,12 @@ type writer struct {
 	most int  // the greatest number of figures of a value
 	weak bool // a result has fewer figures than enough
 
+	classedFor struct { // the last classification under axial force and moments
+		class int
+		web   ec3.Element
+		nEd   float64
+	}
+
 	c *ec3.Candidate
 	m *ec3.Member
 	a *ec3.Assessment
@@ -235,7 +241,7 @@ func (w *writer) combination(i int) string {
 
 // where names a segment in a combination for people.
 func (w *writer) where(from, to float64, combination int) string {
-	s := metres(from) + " to " + metres(to) + " m"
+	s := metres(from) + "-" + metres(to) + " m"
 	if name := w.combination(combination); name != "" {
 		s += ", " + name
 	}

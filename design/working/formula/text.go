@@ -48,7 +48,7 @@ const (
 	bindAtom
 )
 
-// Binding returns how tightly a formula binds: brackets go about it where its
+// binding returns how tightly a formula binds: brackets go about it where its
 // place asks for more.
 func binding(e Expr) int {
 	switch e := e.(type) {
@@ -150,11 +150,7 @@ func Text(e Expr) string {
 	case Product:
 		return productText(e)
 	case Quotient:
-		above := Text(e.Above)
-		if binding(e.Above) == bindSum {
-			above = "(" + above + ")"
-		}
-		return above + " / " + bracketed(e.Below, binding(e.Below) <= bindProduct)
+		return bracketed(e.Above, AboveBracketed(e.Above)) + " / " + bracketed(e.Below, BelowBracketed(e.Below))
 	case Power:
 		return powerText(e)
 	case Root:
@@ -214,3 +210,10 @@ func powerText(e Power) string {
 	}
 	return base + "^" + bracketed(e.Exponent, binding(e.Exponent) < bindAtom)
 }
+
+// AboveBracketed reports whether the upper side of a quotient on one line needs
+// brackets.
+func AboveBracketed(e Expr) bool { return binding(e) == bindSum }
+
+// BelowBracketed reports whether the lower side needs them.
+func BelowBracketed(e Expr) bool { return binding(e) <= bindProduct }
