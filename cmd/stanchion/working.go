@@ -3,7 +3,6 @@ package main
 import (
 	"context"
 	"fmt"
-	"io"
 	"slices"
 	"strings"
 
@@ -55,19 +54,20 @@ type designed struct {
 	result design.Result
 }
 
-// pick keeps the members with chosen marks, in the order of the schedule; all
-// where no marks are given.
+// pick keeps the members, and knows those with chosen marks: all where no
+// marks are given.
 type pick struct {
 	marks   []string
-	members []designed
-	seen    []string // every mark
+	all     []designed // in the order of the schedule
+	members []int      // the chosen ones
+	run     *working.Run
 }
 
 func (p *pick) put(m *schedule.Member, res *design.Result) error {
-	p.seen = append(p.seen, m.Column.Mark)
 	if len(p.marks) == 0 || slices.ContainsFunc(p.marks, func(mark string) bool { return sameMark(mark, m.Column.Mark) }) {
-		p.members = append(p.members, designed{m, *res})
+		p.members = append(p.members, len(p.all))
 	}
+	p.all = append(p.all, designed{m, *res})
 	return nil
 }
 
@@ -82,16 +82,25 @@ func sameMark(given, mark string) bool {
 // like it.
 func (p *pick) missing(file string) error {
 	for _, mark := range p.marks {
-		if slices.ContainsFunc(p.members, func(d designed) bool { return sameMark(mark, d.member.Column.Mark) }) {
+		if slices.ContainsFunc(p.members, func(i int) bool { return sameMark(mark, p.all[i].member.Column.Mark) }) {
 			continue
 		}
 		message := fmt.Sprintf("%s: no column is marked %q", file, mark)
-		if near := nearest(mark, p.seen); len(near) > 0 {
+		if near := nearest(mark, p.seen()); len(near) > 0 {
 			message += ": did you mean " + strings.Join(near, ", ") + "?"
 		}
 		return fmt.Errorf("%s", message)
 	}
 	return nil
+}
+
+// seen returns every mark.
+func (p *pick) seen() []string {
+	marks := make([]string, len(p.all))
+	for i := range p.all {
+		marks[i] = p.all[i].member.Column.Mark
+	}
+	return marks
 }
 
 // nearest returns up to three different marks that differ least from one.
@@ -129,7 +138,21 @@ func (r *run) picked(ctx context.Context, marks []string) (*pick, error) {
 	if err := r.design(ctx); err != nil {
 		return nil, err
 	}
-	return p, p.missing(r.input)
+	if err := p.missing(r.input); err != nil {
+		return nil, err
+	}
+	p.run = r.again(p.all)
+	return p, nil
+}
+
+// again prepares the working of designed members.
+func (r *run) again(all []designed) *working.Run {
+	columns, results := make([]design.Column, len(all)), make([]design.Result, len(all))
+	for i := range all {
+		columns[i], results[i] = all[i].member.Column, all[i].result
+	}
+	set := r.engine.Settings()
+	return working.NewRun(r.section, &set, columns, results)
 }
 
 // working prints the working of the members with these marks.
@@ -139,44 +162,35 @@ func (r *run) working(ctx context.Context, marks []string) error {
 		return err
 	}
 	var count [4]int
-	for i := range p.members {
-		d := &p.members[i]
-		count[d.result.Status]++
-		if err := r.show(r.con.out, d); err != nil {
+	for _, i := range p.members {
+		count[p.all[i].result.Status]++
+		sheet, err := p.sheet(i)
+		if err != nil {
+			r.con.fail(err)
+			continue
+		}
+		if err := calcsheet.Text(r.con.out, sheet); err != nil {
+			return err
+		}
+		if _, err := fmt.Fprintln(r.con.out); err != nil {
 			return err
 		}
 	}
 	return verdict(&count)
 }
 
-// show prints the working of one member, or says why there is none.
-func (r *run) show(w io.Writer, d *designed) error {
-	sheet, err := r.sheetOf(d)
+// sheet writes the working of a member down. The error says why there is none.
+func (p *pick) sheet(i int) (*working.Sheet, error) {
+	m, res := p.all[i].member, &p.all[i].result
+	if len(m.Problems) > 0 {
+		return nil, fmt.Errorf("%s: not read: %w", m.Column.Mark, m.Problems[0])
+	}
+	sheet, err := p.run.Sheet(i)
 	if err != nil {
-		r.con.fail(err)
-		return nil
-	}
-	if err := calcsheet.Text(w, sheet); err != nil {
-		return err
-	}
-	_, err = fmt.Fprintln(w)
-	return err
-}
-
-// sheetOf writes the working of a member down. The error says why there is
-// none.
-func (r *run) sheetOf(d *designed) (*working.Sheet, error) {
-	name := d.member.Column.Mark
-	if len(d.member.Problems) > 0 {
-		return nil, fmt.Errorf("%s: not read: %w", name, d.member.Problems[0])
-	}
-	set := r.engine.Settings()
-	sheet, err := working.Again(r.section, &set, &d.member.Column, &d.result)
-	if err != nil {
-		if note := schedule.Note(d.member, &d.result); note != "" {
+		if note := schedule.Note(m, res); note != "" {
 			err = fmt.Errorf("%w: %s", err, note)
 		}
-		return nil, fmt.Errorf("%s: %w", name, err)
+		return nil, fmt.Errorf("%s: %w", m.Column.Mark, err)
 	}
 	return sheet, nil
 }

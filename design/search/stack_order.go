@@ -42,6 +42,14 @@ func stand(cols []design.Column) standing {
 	return s
 }
 
+// Stand returns which length of a column line each column stands on and which
+// stands on it, by index, -1 for none: the order in which SizeAll and CheckAll
+// settle the lines.
+func Stand(cols []design.Column) (below, above []int) {
+	s := stand(cols)
+	return s.below, s.above
+}
+
 // lineOf names the column line of a length; empty where it is in none.
 func lineOf(col *design.Column) string {
 	switch {

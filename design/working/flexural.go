@@ -22,7 +22,7 @@ func (w *writer) flexural(axis string, b *design.Buckling) {
 		return
 	}
 	w.start(fmt.Sprintf("Flexural buckling about %s-%s", axis, axis))
-	w.add(Values{w.noted("L_cr,"+axis, b.Lcr, Mm, b.How), w.noted("α_"+axis, b.Alpha, None, "curve "+b.Curve+", Tables 6.1, 6.2")})
+	w.add(Values{w.noted("L_cr,"+axis, b.Lcr, Mm, b.How), w.noted("α_"+axis, b.Alpha, None, "curve "+b.Curve+", Table 6.2")})
 	w.find("N_cr,"+axis, w.fill("π^2 E I_#/L_cr,#^2", axis), b.Ncr, KN, "6.3.1.2(1)")
 	w.reduction(axis, axis, b)
 }
@@ -36,11 +36,20 @@ func (w *writer) reduction(axis, of string, b *design.Buckling) {
 	}
 	w.find("λ̄_"+axis, w.fill("√(@ f_y/N_cr,"+of+")", axis), b.LambdaBar, None, slenderness)
 	w.find("Φ_"+axis, w.fill("0.5 (1 + α_# (λ̄_# - 0.2) + λ̄_#^2)", axis), b.Phi, None, "6.3.1.2(1)")
-	w.find("χ_"+axis, w.fill("min(1/(Φ_# + √(Φ_#^2 - λ̄_#^2)), 1)", axis), b.Chi, None, "(6.49)")
+	w.chi(axis, b.LambdaBar, b.Chi)
 	w.find("N_b,"+axis+",Rd", w.fill("χ_# @ f_y/γ_M1", axis), b.NbRd, KN, resistance)
 	if b.NEd > 0 {
 		w.pressed(b.NEd, b.From, b.To, b.Combination)
 		w.ratio(w.fill("N_Ed/N_b,#,Rd", axis), b.Utilisation(), "(6.46)")
 	}
 	w.sheet.Points = append(w.sheet.Points, Point{axis, b.Curve, b.LambdaBar, b.Chi})
+}
+
+// chi writes the reduction factor.
+func (w *writer) chi(axis string, lambdaBar, chi float64) {
+	if lambdaBar <= 0.2 {
+		w.add(Values{w.noted("χ_"+axis, chi, None, "λ̄ ≤ 0.2, 6.3.1.2")})
+		return
+	}
+	w.find("χ_"+axis, w.fill("1/(Φ_# + √(Φ_#^2 - λ̄_#^2))", axis), chi, None, "(6.49)")
 }

@@ -79,7 +79,7 @@ func (w *writer) chain(axis string, ncr, alpha, lambda, chi float64) {
 	w.find("N_cr,"+axis, w.fill("π^2 E I_#/L_cr,#^2", axis), ncr, KN, "6.3.1.2(1)")
 	w.find("λ̄_"+axis, "√(N_Rk/N_cr,"+axis+")", lambda, None, "(6.50)")
 	w.derive("Φ_"+axis, w.fill("0.5 (1 + α_# (λ̄_# - 0.2) + λ̄_#^2)", axis), None, "6.3.1.2(1)")
-	w.find("χ_"+axis, w.fill("min(1/(Φ_# + √(Φ_#^2 - λ̄_#^2)), 1)", axis), chi, None, "(6.49)")
+	w.chi(axis, lambda, chi)
 }
 
 func (w *writer) inertia(axis string) float64 {

@@ -1,13 +1,8 @@
 package working
 
 import (
-	"errors"
-	"fmt"
-
-	"stanchion/catalogue"
 	"stanchion/design"
 	"stanchion/design/ec3"
-	"stanchion/design/material"
 	"stanchion/design/working/formula"
 )
 
@@ -39,36 +34,4 @@ func write(a *ec3.Assessment, result *design.Result, figures int) *writer {
 	w.fire()
 	w.outcome()
 	return w
-}
-
-// ErrNoSection is said of a result that names no section: there is nothing to
-// work out.
-var ErrNoSection = errors.New("no section: there is no working")
-
-// Again assesses a column in the section and grade of its result once more,
-// and writes the working. The settings are those of the run that gave the
-// result.
-func Again(find func(name string) (*catalogue.Section, error), set *design.Settings, col *design.Column, result *design.Result) (*Sheet, error) {
-	if result.Section == "" {
-		return nil, ErrNoSection
-	}
-	section, err := find(result.Section)
-	if err != nil {
-		return nil, err
-	}
-	grade, err := material.Parse(result.Grade)
-	if err != nil {
-		return nil, err
-	}
-	c, err := ec3.NewCandidate(section, grade, set)
-	if err != nil {
-		return nil, fmt.Errorf("%s %s: %w", result.Section, result.Grade, err)
-	}
-	m, err := ec3.NewMember(col, set)
-	if err != nil {
-		return nil, err
-	}
-	var a ec3.Assessment
-	m.Assess(c, &a)
-	return Of(&a, result), nil
 }

@@ -11,7 +11,7 @@ import (
 func (w *writer) section() {
 	c := w.c
 	w.start("Section and material")
-	w.say("%s to %s, properties computed from the dimensions.", c.Section.Name(), c.Section.Standard)
+	w.say("%s to %s, properties from the dimensions.", c.Section.Name(), c.Section.Standard)
 	w.add(w.dimensions())
 	w.add(w.properties())
 	w.strength()

@@ -231,12 +231,21 @@ func (w *writer) combination(i int) string {
 		return ""
 	}
 	if name := w.m.Column.Combinations[i].Name; name != "" {
-		return name
+		return Short(name)
 	}
 	if len(w.m.Column.Combinations) == 1 {
 		return ""
 	}
 	return fmt.Sprintf("combination %d", i+1)
+}
+
+// Short cuts a name that would not stand on a line.
+func Short(name string) string {
+	const most = 24
+	if runes := []rune(name); len(runes) > most {
+		return string(runes[:most-1]) + "…"
+	}
+	return name
 }
 
 // where names a segment in a combination for people.

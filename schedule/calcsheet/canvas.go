@@ -35,9 +35,9 @@ const pt = 25.4 / 72
 type anchor uint8
 
 const (
-	left anchor = iota
-	middle
-	right
+	atLeft anchor = iota
+	atMiddle
+	atRight
 )
 
 // draw draws a box with its origin at x, y; size is that of 1 em in mm.
@@ -55,9 +55,9 @@ func draw(c canvas, b *box, x, y, size float64) {
 // write draws a text at an anchor; size is that of 1 em in mm.
 func write(c canvas, x, y float64, s string, f face, size float64, at anchor) {
 	switch w := f.width(s) * size; at {
-	case middle:
+	case atMiddle:
 		x -= w / 2
-	case right:
+	case atRight:
 		x -= w
 	}
 	c.text(x, y, s, f, size)

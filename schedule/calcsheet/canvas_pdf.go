@@ -1,6 +1,11 @@
 package calcsheet
 
-import "github.com/go-pdf/fpdf"
+import (
+	"strings"
+	"unicode"
+
+	"github.com/go-pdf/fpdf"
+)
 
 // pdfCanvas draws on the pages of a PDF. It keeps the state of the file, so
 // that nothing is said twice.
@@ -90,7 +95,21 @@ func (c *pdfCanvas) text(x, y float64, s string, f face, size float64) {
 		c.pdf.SetFont(fontName, faceStyles[f], size/pt)
 		c.face, c.size, c.set = f, size, true
 	}
-	c.pdf.Text(x, y, s)
+	c.pdf.Text(x, y, printable(s))
+}
+
+// printable replaces what the file's fonts cannot address: control characters,
+// and those beyond the first 65536.
+func printable(s string) string {
+	return strings.Map(func(r rune) rune {
+		switch {
+		case r > 0xFFFF:
+			return '□'
+		case unicode.IsControl(r):
+			return ' '
+		}
+		return r
+	}, s)
 }
 
 func (c *pdfCanvas) link(x, y, w, h float64, to int) {

@@ -54,12 +54,12 @@ func (p *plot) grid() {
 	for v := 0.0; v <= p.most; v += step {
 		a := p.at(v, 0)
 		p.canvas.line(a.x, a.y, a.x, p.y, faint)
-		write(p.canvas, a.x, a.y+2.3, decimal(v), upright, 5*pt, middle)
+		write(p.canvas, a.x, a.y+2.3, decimal(v), upright, 5*pt, atMiddle)
 	}
 	for v := 0.0; v < 1.01; v += 0.2 {
 		a := p.at(0, v)
 		p.canvas.line(a.x, a.y, p.x+p.w, a.y, faint)
-		write(p.canvas, a.x-0.8, a.y+0.6, decimal(v), upright, 5*pt, right)
+		write(p.canvas, a.x-0.8, a.y+0.6, decimal(v), upright, 5*pt, atRight)
 	}
 	o := p.at(0, 0)
 	p.canvas.polyline([]point{{o.x, p.y}, o, {p.x + p.w, o.y}}, usualLine)
@@ -84,7 +84,7 @@ func (p *plot) curve(name string, order int) {
 	p.canvas.polyline(list, usualLine)
 	v := p.most * (0.30 + 0.16*float64(order))
 	a := p.at(v, working.Chi(name, v))
-	write(p.canvas, a.x+0.6, a.y-0.6, name, bold, 6*pt, left)
+	write(p.canvas, a.x+0.6, a.y-0.6, name, bold, 6*pt, atLeft)
 }
 
 // euler draws the elastic critical load, 1/lambdaBar2.
@@ -133,9 +133,9 @@ func (p *plot) key(y float64) {
 		if at.Axis == "T" {
 			name = "torsion"
 		}
-		write(p.canvas, x+2.4, y, name, upright, 5.6*pt, left)
+		write(p.canvas, x+2.4, y, name, upright, 5.6*pt, atLeft)
 		x += 4.2 + upright.width(name)*5.6*pt
 	}
 	p.canvas.line(x, y-0.8, x+4, y-0.8, dashed)
-	write(p.canvas, x+4.8, y, "elastic", upright, 5.6*pt, left)
+	write(p.canvas, x+4.8, y, "elastic", upright, 5.6*pt, atLeft)
 }

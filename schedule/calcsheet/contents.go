@@ -22,7 +22,8 @@ func (d *document) paragraph(x, y, w float64, s string, f face, size float64) fl
 	set := setter{width: w / size}
 	for _, l := range set.fill(words(s, f), 0, 0) {
 		y += 1.3 * size
-		draw(d.canvas, &l.body, x, y, size)
+		body := l.body()
+		draw(d.canvas, &body, x, y, size)
 	}
 	return y
 }
@@ -32,7 +33,7 @@ func (d *document) basis() float64 {
 	p := d.project
 	const size = 7.4 * pt
 	y := marginTop + titleHeight + 5
-	write(d.canvas, marginLeft, y, "Column calculations", bold, 14*pt, left)
+	write(d.canvas, marginLeft, y, "Column calculations", bold, 14*pt, atLeft)
 	y += 2
 	rows := [][2]string{{"Schedule", p.File}, {"Sheet", p.Sheet}, {"SHA-256", p.SHA256}, {"Program", p.Program},
 		{"Standard", p.Standard}, {"National set", fmt.Sprintf("%s: γ_M0 %.2f, γ_M1 %.2f; %s", p.National.Name, p.National.GammaM0, p.National.GammaM1, p.National.Source)}}
@@ -41,7 +42,7 @@ func (d *document) basis() float64 {
 		if r[1] == "" {
 			continue
 		}
-		write(d.canvas, marginLeft, y+1.3*size, r[0], upright, size, left)
+		write(d.canvas, marginLeft, y+1.3*size, r[0], upright, size, atLeft)
 		y = d.paragraph(marginLeft+32, y, textWidth-32, r[1], upright, size)
 	}
 	y += 2
@@ -56,8 +57,8 @@ var listColumns = []struct {
 	head string
 	x    float64
 	at   anchor
-}{{"sheet", 7, right}, {"mark", 10, left}, {"place", 34, left}, {"section", 72, left}, {"grade", 103, left},
-	{"utilisation", 131, right}, {"", 133, left}, {"governs", 144, left}}
+}{{"sheet", 7, atRight}, {"mark", 10, atLeft}, {"place", 34, atLeft}, {"section", 72, atLeft}, {"grade", 103, atLeft},
+	{"utilisation", 131, atRight}, {"", 133, atLeft}, {"governs", 144, atLeft}}
 
 const (
 	listPitch = 4.0
@@ -104,7 +105,7 @@ func (d *document) listLine(s *working.Sheet, i int, y float64) {
 			next = listColumns[k+1].x
 		}
 		text := cells[k]
-		if col.at == left {
+		if col.at == atLeft {
 			text = cut(text, f, (next-col.x-1)/listSize)
 		}
 		write(d.canvas, marginLeft+col.x, y, text, f, listSize, col.at)
@@ -119,16 +120,12 @@ func (d *document) missing(y float64) {
 		return
 	}
 	y += 3
-	write(d.canvas, marginLeft, y, "Members without a sheet", bold, 8*pt, left)
+	write(d.canvas, marginLeft, y, "Members without a sheet", bold, 8*pt, atLeft)
 	for _, m := range d.project.Missing {
 		if y > bodyBottom-8 {
 			d.page("Contents")
 			y = marginTop + titleHeight + 2
 		}
-		name := m.Mark
-		if m.Place != "" {
-			name += ", " + m.Place
-		}
-		y = d.paragraph(marginLeft, y+0.6, textWidth, name+": "+m.Why, upright, listSize)
+		y = d.paragraph(marginLeft, y+0.6, textWidth, place(m.Column)+": "+m.Why, upright, listSize)
 	}
 }

@@ -3,27 +3,48 @@ package calcsheet
 import (
 	"fmt"
 	"io"
+	"runtime"
 	"strings"
 	"time"
 
 	"github.com/go-pdf/fpdf"
+	"golang.org/x/sync/errgroup"
 
 	"stanchion/design/working"
 	"stanchion/design/working/formula"
 )
+
+// PDFTitle opens the title of every PDF that this package writes.
+const PDFTitle = "Column calculations"
 
 // PDF writes the calculation sheets of a project: what was used, a list of the
 // sheets, the elevations of the stacks, and a sheet for every member. The same
 // input gives the same bytes.
 func PDF(w io.Writer, p *Project, sheets []*working.Sheet, stacks []*Stack) error {
 	d := newDocument(p, len(sheets))
+	how := fitAll(sheets)
 	d.contents(sheets)
-	d.formulas(sheets)
+	d.formulas(sheets, how)
 	d.stackPages(stacks)
 	for i, s := range sheets {
-		d.memberPages(s, i+1, len(sheets))
+		d.memberPages(s, how[i], i+1, len(sheets))
 	}
 	return d.pdf.Output(w)
+}
+
+// fitAll finds the density of every sheet, on all processors.
+func fitAll(sheets []*working.Sheet) []dense {
+	how := make([]dense, len(sheets))
+	var g errgroup.Group
+	g.SetLimit(runtime.GOMAXPROCS(0))
+	for i, s := range sheets {
+		g.Go(func() error {
+			how[i] = fit(s)
+			return nil
+		})
+	}
+	g.Wait()
+	return how
 }
 
 // document is a PDF that is being drawn.
@@ -47,7 +68,7 @@ func newDocument(p *Project, sheets int) *document {
 	pdf.SetModificationDate(epoch)
 	pdf.SetCatalogSort(true)
 	pdf.SetCompression(true)
-	pdf.SetTitle("Column calculations: "+p.title(), true)
+	pdf.SetTitle(printable(PDFTitle+": "+p.title()), true)
 	pdf.SetSubject(p.Standard, true)
 	pdf.SetCreator(p.Program, true)
 	pdf.SetProducer(p.Program, true)
@@ -77,18 +98,18 @@ func (d *document) titleBlock(sheet string) {
 	for _, at := range columns {
 		c.line(x+at, y, x+at, y+h, thinLine)
 	}
-	write(c, x+2, y+4.3, cut(p.title(), bold, 88/(10*pt)), bold, 10*pt, left)
-	write(c, x+2, y+7.3, cut("Steel columns, "+p.Standard+", national set "+p.National.Name, upright, 90/(6.4*pt)), upright, 6.4*pt, left)
+	write(c, x+2, y+4.3, cut(p.title(), bold, 88/(10*pt)), bold, 10*pt, atLeft)
+	write(c, x+2, y+7.3, cut("Steel columns, "+p.Standard+", national set "+p.National.Name, upright, 90/(6.4*pt)), upright, 6.4*pt, atLeft)
 	from := p.File
 	if p.Sheet != "" {
 		from += ", sheet " + p.Sheet
 	}
-	write(c, x+2, y+10, cut(from, upright, 90/(6.4*pt)), upright, 6.4*pt, left)
+	write(c, x+2, y+10, cut(from, upright, 90/(6.4*pt)), upright, 6.4*pt, atLeft)
 	for i, label := range []string{"Made by", "Checked by", "Date"} {
-		write(c, x+columns[i]+1, y+2.6, label, upright, 5.4*pt, left)
+		write(c, x+columns[i]+1, y+2.6, label, upright, 5.4*pt, atLeft)
 	}
-	write(c, x+columns[3]+1.5, y+5, sheet, bold, 8*pt, left)
-	write(c, x+columns[3]+1.5, y+9.4, fmt.Sprintf("page %d of %s", d.pages, pagesAlias), upright, 6.4*pt, left)
+	write(c, x+columns[3]+1.5, y+5, sheet, bold, 8*pt, atLeft)
+	write(c, x+columns[3]+1.5, y+9.4, fmt.Sprintf("page %d of %s", d.pages, pagesAlias), upright, 6.4*pt, atLeft)
 }
 
 // caution stands at the foot of every page.
@@ -99,14 +120,14 @@ func (d *document) caution() {
 	at := ""
 	for _, word := range strings.Fields(caution + " Made with " + d.project.Program + ".") {
 		if upright.width(at+" "+word)*size > textWidth {
-			write(d.canvas, marginLeft, y, at, upright, size, left)
+			write(d.canvas, marginLeft, y, at, upright, size, atLeft)
 			y += 2.2
 			at = word
 			continue
 		}
 		at = strings.TrimSpace(at + " " + word)
 	}
-	write(d.canvas, marginLeft, y, at, upright, size, left)
+	write(d.canvas, marginLeft, y, at, upright, size, atLeft)
 }
 
 // headBox sets "N_b,Rd kN": a symbol and its unit.

@@ -24,7 +24,7 @@ func elevation(c canvas, s *working.Sheet, x, y, w, h float64) {
 		v := view{canvas: c, sheet: s, axis: axis, x: x + each*(float64(i)+0.46), top: y + 14, bottom: y + h - 10, width: each}
 		v.draw(y)
 	}
-	write(c, x+w/2, y+h-0.4, "buckling lengths in mm, heights in m", upright, 5*pt, middle)
+	write(c, x+w/2, y+h-0.4, "buckling lengths in mm, heights in m", upright, 5*pt, atMiddle)
 }
 
 // twistDiffers reports whether the twist is held elsewhere than z-z is.
@@ -82,7 +82,7 @@ func (v *view) draw(y float64) {
 	if v.axis == "T" {
 		title = "torsion"
 	}
-	write(c, v.x, y+2.4, title, bold, 7*pt, middle)
+	write(c, v.x, y+2.4, title, bold, 7*pt, atMiddle)
 	v.moments()
 	rectangle(c, v.x-half, v.top, 2*half, v.bottom-v.top, 0.82)
 	frame(c, v.x-half, v.top, 2*half, v.bottom-v.top, usualLine)
@@ -126,7 +126,7 @@ func (v *view) twist() {
 func (v *view) held(p, height float64) {
 	v.canvas.polygon([]point{{v.x - half, p}, {v.x - half - 1.7, p - 0.9}, {v.x - half - 1.7, p + 0.9}}, 0)
 	v.canvas.line(v.x-half-1.7, p-1.3, v.x-half-1.7, p+1.3, usualLine)
-	write(v.canvas, v.x-half-2.2, p+0.7, metres(height), upright, labelSize, right)
+	write(v.canvas, v.x-half-2.2, p+0.7, metres(height), upright, labelSize, atRight)
 }
 
 // end draws an end: down is 1 at the bottom, -1 at the top.
@@ -163,7 +163,7 @@ func (v *view) end(e design.End, p, down float64) {
 	if down < 0 {
 		y = p - 3.6
 	}
-	write(c, v.x, y, word, upright, labelSize, middle)
+	write(c, v.x, y, word, upright, labelSize, atMiddle)
 }
 
 func (v *view) lengths() []working.Length {
@@ -196,7 +196,7 @@ func (v *view) segments() {
 			continue // no room
 		}
 		last = mid
-		write(v.canvas, x+1, mid, formula.Figures(l.Lcr, 5), f, labelSize, left)
+		write(v.canvas, x+1, mid, formula.Figures(l.Lcr, 5), f, labelSize, atLeft)
 	}
 }
 
@@ -225,7 +225,7 @@ func (v *view) load(y float64) {
 	c.line(v.x, tail, v.x, tip, usualLine)
 	head := math.Copysign(1.1, tail-tip)
 	c.polygon([]point{{v.x, tip}, {v.x - 0.6, tip + head}, {v.x + 0.6, tip + head}}, 0)
-	write(c, v.x+1.4, v.top-7.4, formula.Figures(math.Abs(n)/1e3, 4)+" kN", upright, labelSize, left)
+	write(c, v.x+1.4, v.top-7.4, formula.Figures(math.Abs(n)/1e3, 4)+" kN", upright, labelSize, atLeft)
 	for k, step := range comb.Steps {
 		below := comb.NEd
 		if k > 0 {
@@ -233,7 +233,7 @@ func (v *view) load(y float64) {
 		}
 		p := v.at(step.Height)
 		c.line(v.x-half-3, p, v.x-half, p, usualLine)
-		write(c, v.x-half-3.2, p-0.5, fmt.Sprintf("%+.0f", growth*(below-step.NEd)/1e3), upright, labelSize, right)
+		write(c, v.x-half-3.2, p-0.5, fmt.Sprintf("%+.0f", growth*(below-step.NEd)/1e3), upright, labelSize, atRight)
 	}
 }
 
@@ -258,7 +258,7 @@ func (v *view) moments() {
 	v.canvas.polyline([]point{{x(0), v.bottom}, {x(m.Bottom), v.bottom}, {x(m.Top), v.top}, {x(0), v.top}}, thinLine)
 	label := func(m, y float64) {
 		if m != 0 {
-			write(v.canvas, v.x-half-2.4, y, formula.Figures(m/1e6, 3)+" kNm", upright, 5*pt, right)
+			write(v.canvas, v.x-half-2.4, y, formula.Figures(m/1e6, 3)+" kNm", upright, 5*pt, atRight)
 		}
 	}
 	label(m.Top, v.top-0.6)

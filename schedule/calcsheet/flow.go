@@ -1,23 +1,57 @@
 package calcsheet
 
 import (
+	"slices"
 	"strings"
 
 	"stanchion/design/working"
 )
 
 // line is one line of a sheet, in em: what stands on it from the left, what
-// stands at its right edge, and whether it stays with the next one.
+// stands at its right edge, and whether it stays with the next one. Boxes are
+// put together when the line is drawn: most lines are set several times before
+// their size is settled.
 type line struct {
-	body, edge box
-	before     float64 // room above
-	keep       bool
+	parts    []placed
+	w        float64
+	up, down float64
+	scale    float64 // of all of it; 0 is 1
+	edge     box
+	before   float64 // room above
+	keep     bool
 }
 
-func (l *line) up() float64   { return max(l.body.up, l.edge.up, ascent) }
-func (l *line) down() float64 { return max(l.body.down, l.edge.down, descent) }
+// placed is a box at a place on a line.
+type placed struct {
+	b *box
+	x float64
+}
 
-func (l *line) height() float64 { return l.before + l.up() + l.down() }
+// put adds a box at a place.
+func (l *line) put(b *box, x float64) {
+	l.parts = append(l.parts, placed{b, x})
+	l.w = max(l.w, x+b.w)
+	l.up, l.down = max(l.up, b.up), max(l.down, b.down)
+}
+
+// body returns what stands on the line as one box.
+func (l *line) body() box {
+	var b box
+	for _, p := range l.parts {
+		b.put(*p.b, p.x, 0)
+	}
+	if b = compact(b); l.scale > 0 {
+		b = b.scaled(l.scale)
+	}
+	return b
+}
+
+// ascent and descent are the room above and below the baseline, without the
+// edge's own where it is less.
+func (l *line) ascent() float64  { return max(l.up, l.edge.up, ascent) }
+func (l *line) descent() float64 { return max(l.down, l.edge.down, descent) }
+
+func (l *line) height() float64 { return l.before + l.ascent() + l.descent() }
 
 // setter turns blocks into lines of a width, em. What it sets once it
 // remembers for other widths.
@@ -25,6 +59,13 @@ type setter struct {
 	width float64
 	bare  bool // numbers alone, where there are any
 	steps map[*working.Step]*setStep
+	given map[*working.Value]*setValue
+
+	checks *working.Block // the table of checks, made once
+}
+
+func newSetter() *setter {
+	return &setter{steps: map[*working.Step]*setStep{}, given: map[*working.Value]*setValue{}}
 }
 
 // setStep is a step set in type.
@@ -40,7 +81,7 @@ func (s *setter) of(step *working.Step) *setStep {
 		return t
 	}
 	t := &setStep{left: typeset(step.Left), clause: textBox(step.Clause, upright, 0.85)}
-	equals := row(textBox("=", upright, 1), gap(space))
+	equals := row(textBox("=", upright, 1), gap(around))
 	add := func(whole box, list []box) {
 		list[0] = row(equals, list[0])
 		t.parts = append(t.parts, list)
@@ -92,17 +133,21 @@ func words(s string, f face) []box {
 
 // block sets a block: its title and its items.
 func (s *setter) block(b *working.Block) []line {
-	lines := []line{{body: textBox(b.Title, bold, 1.05), before: 0.55, keep: true}}
+	title := textBox(b.Title, bold, 1.05)
+	lines := []line{{before: 0.55, keep: true}}
+	lines[0].put(&title, 0)
 	left := s.leftWidth(b)
 	for i, item := range b.Items {
 		var set []line
 		switch item := item.(type) {
 		case working.Values:
 			set = s.values(item, left)
+			if s.bare && i > 0 && len(set) == 1 && s.runOn(&lines[len(lines)-1], b.Items[i-1], s.values(item, 0)[0].parts, box{}) {
+				continue
+			}
 		case *working.Step:
-			if set = s.runIn(item, b.Items[:i], lines); set != nil {
-				lines = lines[:len(lines)-1]
-				break
+			if i > 0 && (s.bare || item.Formula == nil) && s.runOn(&lines[len(lines)-1], b.Items[i-1], s.oneLine(item), s.of(item).clause) {
+				continue
 			}
 			set = s.step(s.of(item), left)
 		case working.Table:
@@ -118,31 +163,60 @@ func (s *setter) block(b *working.Block) []line {
 	return lines
 }
 
-// runIn sets a ratio behind the values on the line before it, where both find
-// room; nil where not.
-func (s *setter) runIn(step *working.Step, before []working.Item, lines []line) []line {
-	if len(before) == 0 || step.Formula != nil {
-		return nil
-	}
-	values, ok := before[len(before)-1].(working.Values)
-	if !ok || len(values) == 0 {
-		return nil
-	}
+// oneLine sets a step on one line, from 0.
+func (s *setter) oneLine(step *working.Step) []placed {
 	t := s.of(step)
-	last := lines[len(lines)-1]
-	at := last.body.w + 1.5
-	list := []box{t.left}
-	for _, b := range t.whole {
-		list = append(list, gap(space), b)
+	list := []placed{{&t.left, 0}}
+	at := t.left.w + around
+	first := 0
+	if s.bare && t.formula {
+		first = 1
 	}
-	b := row(list...)
-	if at+b.w+0.3+t.clause.w > s.width || last.edge.w > 0 {
-		return nil
+	for i := first; i < len(t.whole); i++ {
+		list = append(list, placed{&t.whole[i], at})
+		at += t.whole[i].w + around
 	}
-	last.body.marks = append([]mark(nil), last.body.marks...)
-	last.body.put(b, at, 0)
-	last.edge = t.clause
-	return []line{last}
+	return list
+}
+
+// runOn adds what would stand on a line of its own to the line before it, where
+// both find room there, and reports whether they do: a ratio behind the force
+// in it, and where a sheet is full whatever is short enough.
+func (s *setter) runOn(last *line, before working.Item, parts []placed, clause box) bool {
+	const between = 1.5
+	if _, table := before.(working.Table); table || last.scale > 0 {
+		return false
+	}
+	if _, words := before.(working.Words); words || !s.bare && last.edge.w > 0 {
+		return false
+	}
+	from := parts[0].x
+	w := 0.0
+	for _, p := range parts {
+		w = max(w, p.x-from+p.b.w)
+	}
+	at := last.w + between
+	if last.edge.w > 0 {
+		at += 0.5 + last.edge.w
+	}
+	room := s.width
+	if clause.w > 0 {
+		room -= 0.5 + clause.w
+	}
+	if at+w > room {
+		return false
+	}
+	last.parts = slices.Clone(last.parts)
+	if last.edge.w > 0 {
+		edge := last.edge
+		last.put(&edge, last.w+0.5)
+		at = last.w + between
+	}
+	for _, p := range parts {
+		last.put(p.b, at+p.x-from)
+	}
+	last.edge = clause
+	return true
 }
 
 // leftWidth is where the signs = of a block stand: behind its widest left
@@ -153,9 +227,11 @@ func (s *setter) leftWidth(b *working.Block) float64 {
 		w := 0.0
 		switch item := item.(type) {
 		case working.Values:
-			w = typeset(item[0].Left).w
+			w = s.ofValue(&item[0]).symbol.w
 		case *working.Step:
-			w = s.of(item).left.w
+			if item.Formula != nil { // a ratio has its sign behind it
+				w = s.of(item).left.w
+			}
 		}
 		if w <= limit {
 			width = max(width, w)
@@ -177,16 +253,16 @@ func (f *filler) start(x float64) {
 	f.at = x
 }
 
-func (f *filler) put(b box) {
-	l := &f.lines[len(f.lines)-1]
-	l.body.put(b, f.at, 0)
+func (f *filler) put(b *box) {
+	f.lines[len(f.lines)-1].put(b, f.at)
 	f.at += b.w
 }
 
 // place puts a box on the line, or on a new one where it finds no room.
-func (f *filler) place(b box) {
+func (f *filler) place(b *box) {
 	if room := f.width - f.indent; b.w > room {
-		b = b.scaled(room / b.w) // one piece too long for a line
+		small := b.scaled(room / b.w) // one piece too long for a line
+		b = &small
 	}
 	if f.at+b.w > f.width && f.at > f.indent {
 		f.start(f.indent)
@@ -198,8 +274,8 @@ func (f *filler) place(b box) {
 func (s *setter) fill(list []box, x, indent float64) []line {
 	f := filler{width: s.width, indent: indent}
 	f.start(x)
-	for _, b := range list {
-		f.place(b)
+	for i := range list {
+		f.place(&list[i])
 	}
 	return f.lines
 }
@@ -209,16 +285,16 @@ func (s *setter) fill(list []box, x, indent float64) []line {
 func (s *setter) step(t *setStep, left float64) []line {
 	f := filler{width: s.width, indent: left}
 	f.start(0)
-	f.put(t.left)
+	f.put(&t.left)
 	f.at = max(left, t.left.w+space)
 	first := 0
 	if s.bare && t.formula {
 		first = 1
 	}
-	for i, whole := range t.whole[first:] {
-		i += first
+	for i := first; i < len(t.whole); i++ {
+		whole := &t.whole[i]
 		if i > first {
-			f.at += space
+			f.at += around
 		}
 		if f.at+whole.w <= f.width {
 			f.put(whole)
@@ -228,10 +304,10 @@ func (s *setter) step(t *setStep, left float64) []line {
 			f.place(whole)
 			continue
 		}
-		f.place(t.parts[i][0])
+		f.place(&t.parts[i][0])
 		f.indent = left + 1.2
-		for _, b := range t.parts[i][1:] {
-			f.place(b)
+		for k := range t.parts[i][1:] {
+			f.place(&t.parts[i][1+k])
 		}
 		f.indent = left
 	}
@@ -240,7 +316,7 @@ func (s *setter) step(t *setStep, left float64) []line {
 }
 
 // tightest is how far a line is made smaller so that its clause stands on it.
-const tightest = 0.92
+const tightest = 0.89
 
 // atEdge puts a clause at the right edge of the last line, or of an earlier
 // one that has room, or of a line of its own.
@@ -249,13 +325,12 @@ func (s *setter) atEdge(f *filler, clause box) {
 		return
 	}
 	last := &f.lines[len(f.lines)-1]
-	if k := (s.width - 0.3 - clause.w) / last.body.w; k < 1 && k >= tightest {
-		last.body = last.body.scaled(k)
-		last.edge = clause
+	if k := (s.width - 0.3 - clause.w) / last.w; k < 1 && k >= tightest {
+		last.scale, last.edge = k, clause
 		return
 	}
 	for i := len(f.lines) - 1; i >= 0; i-- {
-		if f.lines[i].body.w+0.5+clause.w <= s.width {
+		if f.lines[i].w+0.5+clause.w <= s.width {
 			f.lines[i].edge = clause
 			return
 		}
@@ -263,29 +338,46 @@ func (s *setter) atEdge(f *filler, clause box) {
 	f.lines = append(f.lines, line{edge: clause})
 }
 
+// setValue is a given value set in type.
+type setValue struct {
+	symbol, value, together box
+	note                    []box
+}
+
+func (s *setter) ofValue(v *working.Value) *setValue {
+	if t, ok := s.given[v]; ok {
+		return t
+	}
+	t := &setValue{symbol: typeset(v.Left), value: row(textBox("=", upright, 1), gap(space), resultBox(v.Number, v.Unit))}
+	t.together = row(t.symbol, gap(space), t.value)
+	if v.Note != "" {
+		t.note = words("("+v.Note+")", upright)
+	}
+	s.given[v] = t
+	return t
+}
+
 // values sets given values, as many on a line as find room.
 func (s *setter) values(list working.Values, left float64) []line {
 	f := filler{width: s.width, indent: 0}
-	for i, v := range list {
-		symbol := typeset(v.Left)
-		value := row(textBox("=", upright, 1), gap(space), resultBox(v.Number, v.Unit))
-		b := row(symbol, gap(space), value)
-		if i == 0 || f.at+1.2+b.w > f.width {
+	for i := range list {
+		t := s.ofValue(&list[i])
+		if i == 0 || f.at+1.2+t.together.w > f.width {
 			f.start(0)
-			f.put(symbol)
-			f.at = max(left, symbol.w+space)
-			f.put(value)
+			f.put(&t.symbol)
+			f.at = max(left, t.symbol.w+space)
+			f.put(&t.value)
 		} else {
 			f.at += 1.2
-			f.put(b)
+			f.put(&t.together)
 		}
-		if v.Note == "" {
+		if len(t.note) == 0 {
 			continue
 		}
 		f.at += space
 		f.indent = left
-		for _, w := range words("("+v.Note+")", upright) {
-			f.place(w)
+		for k := range t.note {
+			f.place(&t.note[k])
 		}
 		f.indent = 0
 	}
@@ -339,18 +431,17 @@ func (s *setter) tableRow(row []string, right []bool, widths []float64, between 
 		inner := setter{width: widths[j] + 0.01}
 		for k, l := range inner.fill(words(cell, f), 0, 0) {
 			if k == len(lines) {
-				lines = append(lines, line{})
+				lines = append(lines, line{scale: tableSize})
 			}
 			at := x
 			if right[j] {
-				at += widths[j] - l.body.w
+				at += widths[j] - l.w
 			}
-			lines[k].body.put(l.body, at, 0)
+			for _, p := range l.parts {
+				lines[k].put(p.b, at+p.x)
+			}
 		}
 		x += widths[j] + between
-	}
-	for i := range lines {
-		lines[i].body = lines[i].body.scaled(tableSize)
 	}
 	return lines
 }

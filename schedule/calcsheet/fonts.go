@@ -32,13 +32,14 @@ const (
 	axis    = 0.30 // of the fraction rule above the baseline
 )
 
-// metrics knows how wide the characters of a face are.
+// metrics knows how wide the characters of a face are, em: those up to known
+// without asking the font.
 type metrics struct {
-	widths sync.Map // rune to em
-	font   *sfnt.Font
-	mu     sync.Mutex
-	buf    sfnt.Buffer
+	table [known]float64
+	font  *sfnt.Font
 }
+
+const known = 0x2600
 
 var faces = sync.OnceValue(func() *[3]metrics {
 	list := new([3]metrics)
@@ -48,6 +49,10 @@ var faces = sync.OnceValue(func() *[3]metrics {
 			panic(err) // the fonts are part of the program
 		}
 		list[i].font = f
+		var buf sfnt.Buffer
+		for r := range list[i].table {
+			list[i].table[r] = list[i].ask(&buf, rune(r))
+		}
 	}
 	return list
 })
@@ -63,18 +68,22 @@ func (f face) width(s string) float64 {
 }
 
 func (m *metrics) advance(r rune) float64 {
-	if w, ok := m.widths.Load(r); ok {
-		return w.(float64)
+	if r >= 0 && r < known {
+		return m.table[r]
 	}
-	m.mu.Lock()
-	defer m.mu.Unlock()
+	return m.ask(new(sfnt.Buffer), r)
+}
+
+// ask asks the font.
+func (m *metrics) ask(buf *sfnt.Buffer, r rune) float64 {
 	const ppem = 1000
-	w := 0.5
-	if i, err := m.font.GlyphIndex(&m.buf, r); err == nil {
-		if a, err := m.font.GlyphAdvance(&m.buf, i, fixed.I(ppem), font.HintingNone); err == nil {
-			w = float64(a) / 64 / ppem
-		}
+	i, err := m.font.GlyphIndex(buf, r)
+	if err != nil {
+		return 0.5
 	}
-	m.widths.Store(r, w)
-	return w
+	a, err := m.font.GlyphAdvance(buf, i, fixed.I(ppem), font.HintingNone)
+	if err != nil {
+		return 0.5
+	}
+	return float64(a) / 64 / ppem
 }

@@ -10,18 +10,19 @@ const formulaList = "Formulas"
 
 // formulas lists the formulas of sheets that have no room for them, once each:
 // the fullest sheets show the numbers alone.
-func (d *document) formulas(sheets []*working.Sheet) {
+func (d *document) formulas(sheets []*working.Sheet, how []dense) {
 	var blocks []working.Block
 	seen := map[string]bool{}
-	for _, s := range sheets {
-		if _, how := d.fit(s); how.bare {
+	for i, s := range sheets {
+		if how[i].bare {
 			blocks = gather(blocks, s, seen)
 		}
 	}
 	if len(blocks) == 0 {
 		return
 	}
-	set := setter{width: columnWidth / (7 * pt), steps: map[*working.Step]*setStep{}}
+	set := newSetter()
+	set.width = columnWidth / (7 * pt)
 	var lines []line
 	for i := range blocks {
 		lines = append(lines, set.block(&blocks[i])...)
@@ -29,7 +30,7 @@ func (d *document) formulas(sheets []*working.Sheet) {
 	for len(lines) > 0 {
 		d.page(formulaList)
 		y := marginTop + titleHeight + 5
-		write(d.canvas, marginLeft, y, "Formulas of the sheets that show numbers alone", bold, 11*pt, left)
+		write(d.canvas, marginLeft, y, "Formulas of the sheets that show numbers alone", bold, 11*pt, atLeft)
 		for column := range 2 {
 			n := fitting(lines, (bodyBottom-y-2)/(7*pt), 0.2)
 			d.column(lines[:n], marginLeft+float64(column)*(columnWidth+columnGap), y+2, 7*pt, 0.2)

@@ -2,6 +2,9 @@ package calcsheet
 
 import (
 	"fmt"
+	"math"
+	"sort"
+	"strconv"
 
 	"stanchion/design"
 	"stanchion/design/working"
@@ -27,7 +30,7 @@ const (
 	bodyStart   = bodyTop + 1.2
 	bodyBottom  = pageHeight - marginBottom - footHeight
 
-	resultsHeight = 15.0
+	resultsHeight = 17.5
 )
 
 // dense is how closely a sheet is set.
@@ -55,14 +58,14 @@ var densities = func() (list []dense) {
 
 // memberPages draws the sheet of a member: one page, or more where not even
 // the smallest type keeps it to one.
-func (d *document) memberPages(s *working.Sheet, number, of int) {
-	lines, how := d.fit(s)
+func (d *document) memberPages(s *working.Sheet, how dense, number, of int) {
 	size := how.points * pt
+	lines := newSetter().sheet(s, how)
 	for first := true; first || len(lines) > 0; first = false {
 		d.page(fmt.Sprintf("Sheet %d of %d", number, of))
 		if first {
 			d.pdf.SetLink(d.canvas.links[number-1], 0, -1)
-			d.pdf.Bookmark(placeOf(s)+"  "+s.Section.Name(), 0, -1)
+			d.pdf.Bookmark(printable(place(s.Column)+"  "+s.Section.Name()), 0, -1)
 		}
 		d.memberHead(s, first)
 		top := bodyStart
@@ -87,23 +90,37 @@ func (d *document) memberPages(s *working.Sheet, number, of int) {
 	}
 }
 
-// fit sets a sheet in the first density with which it stands on one page.
-func (d *document) fit(s *working.Sheet) (lines []line, how dense) {
-	set := setter{steps: map[*working.Step]*setStep{}}
-	blocks := append(append([]working.Block(nil), s.Blocks...), checksBlock(s))
-	for _, how = range densities {
+// fit returns the first density with which a sheet stands on one page: all do
+// but those of Annex A under moments about both axes, which take two that are
+// easy to read.
+func fit(s *working.Sheet) dense {
+	set := newSetter()
+	n := sort.Search(len(densities), func(i int) bool {
+		how := densities[i]
+		lines := set.sheet(s, how)
 		size := how.points * pt
-		set.width, set.bare = columnWidth/size, how.bare
-		lines = lines[:0]
-		for i := range blocks {
-			lines = append(lines, set.block(&blocks[i])...)
-		}
 		n := fitting(lines, (bodyBottom-bodyStart-how.drawings)/size, how.leading)
-		if n += fitting(lines[n:], (bodyBottom-bodyStart)/size, how.leading); n == len(lines) {
-			break
-		}
+		n += fitting(lines[n:], (bodyBottom-bodyStart)/size, how.leading)
+		return n == len(lines)
+	})
+	if n == len(densities) {
+		return dense{6.6, 0.15, 62, false}
 	}
-	return lines, how
+	return densities[n]
+}
+
+// sheet sets all blocks of a sheet.
+func (s *setter) sheet(sheet *working.Sheet, how dense) []line {
+	s.width, s.bare = columnWidth/(how.points*pt), how.bare
+	var lines []line
+	for i := range sheet.Blocks {
+		lines = append(lines, s.block(&sheet.Blocks[i])...)
+	}
+	if s.checks == nil {
+		checks := checksBlock(sheet)
+		s.checks = &checks
+	}
+	return append(lines, s.block(s.checks)...)
 }
 
 // column draws lines one below the other.
@@ -113,10 +130,11 @@ func (d *document) column(lines []line, x, y, size, leading float64) {
 		if i > 0 {
 			y += l.before * size
 		}
-		y += l.up() * size
-		draw(d.canvas, &l.body, x, y, size)
+		y += l.ascent() * size
+		body := l.body()
+		draw(d.canvas, &body, x, y, size)
 		draw(d.canvas, &l.edge, x+columnWidth-l.edge.w*size, y, size)
-		y += (l.down() + leading) * size
+		y += (l.descent() + leading) * size
 	}
 }
 
@@ -124,8 +142,8 @@ func (d *document) column(lines []line, x, y, size, leading float64) {
 func (d *document) memberHead(s *working.Sheet, first bool) {
 	c := d.canvas
 	y := marginTop + titleHeight + 5.4
-	mark := s.Column.Mark
-	write(c, marginLeft, y, mark, bold, 13*pt, left)
+	mark := working.Short(s.Column.Mark)
+	write(c, marginLeft, y, mark, bold, 13*pt, atLeft)
 	rest := rest(s.Column)
 	if s.Column.Quantity > 1 {
 		rest += fmt.Sprintf("   %d off", s.Column.Quantity)
@@ -133,9 +151,9 @@ func (d *document) memberHead(s *working.Sheet, first bool) {
 	if !first {
 		rest += "   continued"
 	}
-	write(c, marginLeft+bold.width(mark)*13*pt+3, y, rest, upright, 9*pt, left)
-	write(c, pageWidth-marginRight, y, s.Section.Name()+"   "+s.Grade, bold, 11*pt, right)
-	write(c, marginLeft, y+4.6, verdict(s), upright, 8*pt, left)
+	write(c, marginLeft+bold.width(mark)*13*pt+3, y, rest, upright, 9*pt, atLeft)
+	write(c, pageWidth-marginRight, y, s.Section.Name()+"   "+s.Grade, bold, 11*pt, atRight)
+	write(c, marginLeft, y+4.6, verdict(s), upright, 8*pt, atLeft)
 	d.bar(s, pageWidth-marginRight-40, y+2.2, 40, 2.2)
 	c.line(marginLeft, y+6.4, pageWidth-marginRight, y+6.4, usualLine)
 }
@@ -160,25 +178,23 @@ func rest(c *design.Column) string {
 	return s
 }
 
-func placeOf(s *working.Sheet) string { return place(s.Column) }
-
 // drawings draws the elevation, the buckling curves and the main results.
 func (d *document) drawings(s *working.Sheet, height float64) {
 	split := 0.5 * columnWidth
 	elevation(d.canvas, s, marginLeft, bodyTop+1, split, height-4)
 	x := marginLeft + split + 1
 	chart(d.canvas, s, x, bodyTop+1, columnWidth-split-1, height-resultsHeight-6)
-	results(d.canvas, s, x+1, bodyTop+height-resultsHeight-3, columnWidth-split-2)
+	results(d.canvas, s, x+1, bodyTop+height-resultsHeight-2.4, columnWidth-split-2)
 	y := bodyTop + height - 2
 	d.canvas.line(marginLeft, y, marginLeft+columnWidth, y, faint)
 }
 
-// results is the table of what the schedule's result columns say, to the same
-// decimals.
+// results is the table of what the results hand over to other programs, to the
+// same figures.
 func results(c canvas, s *working.Sheet, x, y, w float64) {
-	size := 6.4 * pt
-	right := []float64{0.34 * w, 0.52 * w, 0.62 * w, 0.78 * w, w}
-	head := []string{"L_cr m", "λ̄", "", "χ", "N_b,Rd kN"}
+	const size = 6 * pt
+	right := []float64{0.38 * w, 0.60 * w, 0.80 * w, w}
+	head := []string{"L_cr m", "λ̄", "χ", "N_b,Rd kN"}
 	for i, h := range head {
 		cell(c, h, x+right[i], y+2.2, size)
 	}
@@ -192,19 +208,42 @@ func results(c canvas, s *working.Sheet, x, y, w float64) {
 		if row.b.Curve == "" {
 			continue
 		}
-		y += 2.8
-		write(c, x, y+2.8, row.name, upright, size, left)
-		for i, text := range []string{fmt.Sprintf("%.3f", row.b.Lcr/1e3), fmt.Sprintf("%.3f", row.b.LambdaBar), row.b.Curve,
-			fmt.Sprintf("%.3f", row.b.Chi), fmt.Sprintf("%.1f", row.b.NbRd/1e3)} {
-			write(c, x+right[i], y+2.8, text, upright, size, 2)
+		y += 2.7
+		write(c, x, y+2.8, row.name+" "+row.b.Curve, upright, size, atLeft)
+		for i, text := range []string{handed(row.b.Lcr / 1e3), handed(row.b.LambdaBar), handed(row.b.Chi), handed(row.b.NbRd / 1e3)} {
+			write(c, x+right[i], y+2.8, text, upright, size, atRight)
 		}
 	}
-	last := fmt.Sprintf("class %d, f_y %.0f N/mm², %.1f kg/m, %.1f kg", r.Class, r.Fy, r.MassPerM, r.Mass)
-	if r.MbRd > 0 {
-		last = fmt.Sprintf("M_b,Rd %.1f kNm, ", r.MbRd/1e6) + last
+	for _, text := range []string{
+		"utilisation " + handed(r.Utilisation) + moment(r) + critical(r),
+		fmt.Sprintf("class %d, f_y %s N/mm², %s kg/m, %s kg", r.Class, handed(r.Fy), handed(r.MassPerM), handed(r.Mass)),
+	} {
+		b := compact(row(words(text, upright)...))
+		y += 2.7
+		draw(c, &b, x, y+3.4, min(5.6*pt, w/b.w))
 	}
-	b := row(words(last, upright)...)
-	draw(c, &b, x, y+6.4, min(5.6*pt, w/b.w))
+}
+
+// handed writes a value as it is handed over to other programs.
+func handed(v float64) string {
+	if math.IsInf(v, 0) || math.IsNaN(v) {
+		return "-"
+	}
+	return strconv.FormatFloat(schedule.Round(v), 'f', -1, 64)
+}
+
+func moment(r *design.Result) string {
+	if r.MbRd == 0 {
+		return ""
+	}
+	return ", M_b,Rd " + handed(r.MbRd/1e6) + " kNm"
+}
+
+func critical(r *design.Result) string {
+	if r.Fire.CriticalTemperature == 0 {
+		return ""
+	}
+	return ", θ_cr " + handed(r.Fire.CriticalTemperature) + " °C"
 }
 
 // cell writes a heading of the table of results, its symbol set in type.

@@ -85,7 +85,7 @@ func combination(c *design.Column, i int) string {
 	case c.Combinations[i].Name == "" && len(c.Combinations) > 1:
 		return fmt.Sprint(i + 1)
 	}
-	return c.Combinations[i].Name
+	return working.Short(c.Combinations[i].Name)
 }
 
 // closing is what stands below the checks: mass, the reserve, the next lighter

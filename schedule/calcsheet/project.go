@@ -1,12 +1,15 @@
 package calcsheet
 
 import (
+	"path/filepath"
+	"strings"
+
 	"stanchion/design"
 )
 
 // Project is what stands in the title block and on the first page.
 type Project struct {
-	Title    string // of the job; empty: the name of the file
+	Title    string // of the job; empty: the name of the file without its ending
 	File     string // the schedule
 	Sheet    string // its sheet; empty: none
 	SHA256   string // of the schedule; empty: not known
@@ -19,12 +22,13 @@ type Project struct {
 
 // Missing is a member without a calculation sheet.
 type Missing struct {
-	Mark, Place, Why string
+	Column *design.Column
+	Why    string
 }
 
 func (p *Project) title() string {
 	if p.Title != "" {
 		return p.Title
 	}
-	return p.File
+	return strings.TrimSuffix(p.File, filepath.Ext(p.File))
 }

@@ -1,6 +1,7 @@
 package calcsheet
 
 import (
+	"slices"
 	"testing"
 
 	"github.com/stretchr/testify/require"
@@ -61,6 +62,7 @@ func sheetOf(t testing.TB, e *example) *working.Sheet {
 	c, err := ec3.NewCandidate(s, g, set)
 	require.NoError(t, err)
 	col := e.column
+	col.Combinations = slices.Clone(col.Combinations)
 	m, err := ec3.NewMember(&col, set)
 	require.NoError(t, err)
 	var a ec3.Assessment

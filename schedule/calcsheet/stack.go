@@ -1,6 +1,12 @@
 package calcsheet
 
-import "stanchion/design/working"
+import (
+	"io"
+
+	"stanchion/design"
+	"stanchion/design/search"
+	"stanchion/design/working"
+)
 
 // Stack is a column line: its lengths, the lowest first.
 type Stack struct {
@@ -8,4 +14,52 @@ type Stack struct {
 	Lengths []*working.Sheet
 }
 
-func (d *document) stackPages(stacks []*Stack) {}
+// Stacks puts sheets together whose columns stand on each other, in the order
+// of the lowest.
+func Stacks(sheets []*working.Sheet) []*Stack {
+	cols := make([]design.Column, len(sheets))
+	for i, s := range sheets {
+		cols[i] = *s.Column
+	}
+	below, above := search.Stand(cols)
+	var stacks []*Stack
+	for i := range sheets {
+		if below[i] >= 0 || above[i] < 0 {
+			continue
+		}
+		s := &Stack{Name: cols[i].Stack}
+		if s.Name == "" {
+			s.Name = cols[i].Mark
+		}
+		for k := i; k >= 0; k = above[k] {
+			s.Lengths = append(s.Lengths, sheets[k])
+		}
+		stacks = append(stacks, s)
+	}
+	return stacks
+}
+
+// height is the height of the stack, mm.
+func (s *Stack) height() float64 {
+	h := 0.0
+	for _, l := range s.Lengths {
+		h += l.Column.Length
+	}
+	return h
+}
+
+// The size of the elevation of a stack in a file of its own, mm.
+const (
+	svgWidth  = 84.0
+	svgLength = 27.0 // room for one length
+	svgRoom   = 22.0 // above and below
+)
+
+// SVG writes the elevation of a stack: levels, sections, splices, utilisation.
+func (s *Stack) SVG(w io.Writer) error {
+	c := new(svgCanvas)
+	h := svgRoom + svgLength*float64(len(s.Lengths))
+	stackElevation(c, s, 3, 3, svgWidth-6, h-6)
+	_, err := w.Write(c.bytes(svgWidth, h, "Stack "+s.Name))
+	return err
+}

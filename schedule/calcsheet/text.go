@@ -216,8 +216,13 @@ func passes(within bool) string {
 
 func rule(r rune) string { return strings.Repeat(string(r), TextWidth) }
 
-// place says which column it is.
+// place says which column it is, in at most some 70 characters.
 func place(c *design.Column) string {
+	short := *c
+	for _, name := range []*string{&short.Mark, &short.Stack, &short.From, &short.To} {
+		*name = strings.Join(strings.Fields(working.Short(*name)), " ")
+	}
+	c = &short
 	s := c.Mark
 	if c.Stack != "" && c.Stack != c.Mark {
 		s += ", " + c.Stack

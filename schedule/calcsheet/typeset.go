@@ -17,7 +17,8 @@ const (
 	supShift     = 0.36
 	fractionSize = 0.86
 	thin         = 0.15
-	space        = 0.24
+	space        = 0.278 // between words: that of the typeface
+	around       = 0.20  // about the signs of sums, and behind =
 	unitGap      = 0.20
 )
 
@@ -97,7 +98,7 @@ func setTerms(e formula.Sum, outside bool) []box {
 		case i == 0 && t.Minus:
 			list = append(list, textBox("−", upright, 1))
 		case i > 0:
-			list = append(list, gap(space), textBox(sign(t.Minus), upright, 1), gap(space))
+			list = append(list, gap(around), textBox(sign(t.Minus), upright, 1), gap(around))
 		}
 		list = append(list, setIn(t.Of, formula.TermBracketed(t.Of, i == 0, t.Minus), outside))
 	}

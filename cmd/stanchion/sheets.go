@@ -1,0 +1,198 @@
+package main
+
+import (
+	"bytes"
+	"context"
+	"fmt"
+	"io"
+	"os"
+	"path/filepath"
+	"strings"
+	"unicode"
+	"unicode/utf16"
+
+	"github.com/spf13/cobra"
+
+	"stanchion/design/search"
+	"stanchion/design/working"
+	"stanchion/schedule/calcsheet"
+	"stanchion/schedule/outfile"
+)
+
+// sheetsSuffix ends the name of the calculation sheets.
+const sheetsSuffix = "-sheets"
+
+// sheetsFlags say what the calculation sheets are to be.
+type sheetsFlags struct {
+	runFlags
+	title, elevations string
+}
+
+func sheetsCommand(con *console) *cobra.Command {
+	var f sheetsFlags
+	c := &cobra.Command{
+		Use:   "sheets FILE [MARK]...",
+		Short: "write calculation sheets for the one who checks",
+		Long: "Designs a column schedule as `size` does and writes calculation sheets as PDF, A4: one for every\n" +
+			"column, or for those with the marks given, with every formula, the numbers put in, the result and\n" +
+			"the clause, an elevation of the column and its place on the buckling curve; before them a list\n" +
+			"of the sheets and the elevations of the column lines.\n\n" +
+			settingsHelp() + "\n\n" + exitStatuses + "\n\n" + cautionHelp,
+		Example: `  stanchion sheets examples/ottermere-depot.xlsx
+  stanchion sheets loads.xlsx C12 C13 -o c12-c13.pdf --title "Ottermere Depot, frame B"
+  stanchion sheets loads.csv --elevations drawings`,
+		Args: func(c *cobra.Command, args []string) error {
+			if len(args) == 0 {
+				return usage(c, "no schedule: name the file")
+			}
+			return nil
+		},
+		RunE: func(c *cobra.Command, args []string) error {
+			return newRun(con, c, &f.runFlags, args[0], search.Size).sheets(c.Context(), &f, args[1:])
+		},
+	}
+	fl := c.Flags()
+	fl.StringVarP(&f.output, "output", "o", "", "write the sheets to `FILE` (default: beside the input, as NAME"+sheetsSuffix+".pdf)")
+	fl.StringVar(&f.title, "title", "", "`TEXT` in the title block (default: the name of the schedule)")
+	fl.StringVar(&f.elevations, "elevations", "", "write the elevation of every column line as SVG into `FOLDER` too")
+	fl.BoolVar(&f.force, "force", false, "replace an output that no earlier run wrote")
+	f.bindReading(c)
+	return c
+}
+
+// sheets writes the calculation sheets of the members with these marks.
+func (r *run) sheets(ctx context.Context, f *sheetsFlags, marks []string) error {
+	path, err := r.sheetsPath(f)
+	if err != nil {
+		return err
+	}
+	p, err := r.picked(ctx, marks)
+	if err != nil {
+		return err
+	}
+	project, err := r.project(f)
+	if err != nil {
+		return err
+	}
+	var count [4]int
+	var sheets []*working.Sheet
+	for _, i := range p.members {
+		count[p.all[i].result.Status]++
+		sheet, err := p.sheet(i)
+		if err != nil {
+			r.con.fail(err)
+			project.Missing = append(project.Missing, calcsheet.Missing{Column: &p.all[i].member.Column, Why: err.Error()})
+			continue
+		}
+		sheets = append(sheets, sheet)
+		if err := ctx.Err(); err != nil {
+			return err
+		}
+	}
+	stacks := calcsheet.Stacks(sheets)
+	if err := outfile.Write(ctx, path, func(w io.Writer) error { return calcsheet.PDF(w, project, sheets, stacks) }); err != nil {
+		return err
+	}
+	if err := writeElevations(ctx, f, stacks); err != nil {
+		return err
+	}
+	r.con.say("%s: %s", path, plural(len(sheets), "sheet"))
+	return verdict(&count)
+}
+
+// project gathers what stands on the first page and in the title block.
+func (r *run) project(f *sheetsFlags) (*calcsheet.Project, error) {
+	p := &calcsheet.Project{Title: f.title, File: "standard input", Sheet: r.plan.Sheet, Program: "stanchion " + versionText(),
+		Standard: standard, National: r.plan.Settings.Design.National}
+	if r.input != stdio {
+		sum, err := fileSum(r.input)
+		if err != nil {
+			return nil, err
+		}
+		p.File, p.SHA256 = filepath.Base(r.input), sum
+	}
+	for _, s := range r.plan.Settings.Used() {
+		if s.From != "default" && s.Value != "" && !strings.HasPrefix(s.From, "national set") {
+			p.Settings = append(p.Settings, [2]string{s.Name, s.Value})
+		}
+	}
+	return p, nil
+}
+
+// sheetsPath settles where the sheets go.
+func (r *run) sheetsPath(f *sheetsFlags) (string, error) {
+	path := f.output
+	if path == "" {
+		if r.input == stdio {
+			return "", usage(r.cmd, "the schedule comes from standard input: name the PDF with -o")
+		}
+		path = strings.TrimSuffix(r.input, filepath.Ext(r.input)) + sheetsSuffix + ".pdf"
+	}
+	switch {
+	case path == stdio:
+		return "", usage(r.cmd, "-o -: sheets do not go to standard output: name a file")
+	case !strings.EqualFold(filepath.Ext(path), ".pdf"):
+		return "", usage(r.cmd, "-o %s: name a file ending in .pdf", path)
+	}
+	return path, mayReplace(path, f.force, sheetsEarlier)
+}
+
+// sheetsEarlier reports whether an earlier run wrote a PDF: its title tells.
+func sheetsEarlier(path string) bool {
+	const tail = 8 << 10
+	file, err := os.Open(path)
+	if err != nil {
+		return false
+	}
+	defer file.Close()
+	if info, err := file.Stat(); err == nil && info.Size() > tail {
+		if _, err := file.Seek(-tail, io.SeekEnd); err != nil {
+			return false
+		}
+	}
+	data, err := io.ReadAll(io.LimitReader(file, tail))
+	if err != nil {
+		return false
+	}
+	var title []byte
+	for _, u := range utf16.Encode([]rune(calcsheet.PDFTitle)) {
+		title = append(title, byte(u>>8), byte(u))
+	}
+	return bytes.Contains(data, title)
+}
+
+// writeElevations writes the elevation of every stack into a folder.
+func writeElevations(ctx context.Context, f *sheetsFlags, stacks []*calcsheet.Stack) error {
+	if f.elevations == "" {
+		return nil
+	}
+	if err := os.MkdirAll(f.elevations, 0o777); err != nil {
+		return fmt.Errorf("--elevations: %w", plainCause(err))
+	}
+	taken := map[string]bool{}
+	for _, s := range stacks {
+		name := fileName(s.Name)
+		for n := 2; taken[strings.ToLower(name)]; n++ {
+			name = fmt.Sprintf("%s-%d", fileName(s.Name), n)
+		}
+		taken[strings.ToLower(name)] = true
+		if err := outfile.Write(ctx, filepath.Join(f.elevations, name+".svg"), s.SVG); err != nil {
+			return err
+		}
+	}
+	return nil
+}
+
+// fileName makes a name of a column line fit for a file.
+func fileName(s string) string {
+	name := strings.Map(func(r rune) rune {
+		if unicode.IsLetter(r) || unicode.IsDigit(r) || r == '-' || r == '_' {
+			return r
+		}
+		return '-'
+	}, s)
+	if name = strings.Trim(name, "-"); name == "" {
+		return "stack"
+	}
+	return name
+}

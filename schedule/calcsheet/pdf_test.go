@@ -1,0 +1,183 @@
+package calcsheet
+
+import (
+	"bytes"
+	"encoding/xml"
+	"errors"
+	"fmt"
+	"io"
+	"os"
+	"os/exec"
+	"path/filepath"
+	"slices"
+	"strings"
+	"testing"
+
+	"github.com/stretchr/testify/assert"
+	"github.com/stretchr/testify/require"
+
+	"stanchion/design"
+	"stanchion/design/ec3"
+	"stanchion/design/working"
+)
+
+func project() *Project {
+	uk, _ := ec3.NationalSet("UK")
+	return &Project{Title: "Ottermere Depot", File: "depot.xlsx", Sheet: "Columns", SHA256: strings.Repeat("0f", 32),
+		Program: "stanchion test", Standard: "EN 1993-1-1:2005 + A1:2014", National: uk, Settings: [][2]string{{"grade", "S355"}},
+		Missing: []Missing{{Column: &design.Column{Mark: "X1", From: "L1"}, Why: "N_Ed is missing"}}}
+}
+
+func sheets(t testing.TB) []*working.Sheet {
+	var list []*working.Sheet
+	for i := range examples {
+		list = append(list, sheetOf(t, &examples[i]))
+	}
+	return list
+}
+
+func pdfOf(t testing.TB, list []*working.Sheet) []byte {
+	var b bytes.Buffer
+	require.NoError(t, PDF(&b, project(), list, Stacks(list)))
+	return b.Bytes()
+}
+
+// pageTexts returns the text of every page, as another program finds it.
+func pageTexts(t *testing.T, pdf []byte) []string {
+	tool, err := exec.LookPath("pdftotext")
+	if err != nil {
+		t.Skip("pdftotext is not installed")
+	}
+	file := filepath.Join(t.TempDir(), "sheets.pdf")
+	require.NoError(t, os.WriteFile(file, pdf, 0o600))
+	out, err := exec.Command(tool, "-layout", file, "-").Output()
+	require.NoError(t, err)
+	return strings.Split(strings.TrimSuffix(string(out), "\f"), "\f")
+}
+
+// The same sheets give the same bytes.
+func TestPDFIsDeterministic(t *testing.T) {
+	list := sheets(t)
+	first := pdfOf(t, list)
+	for range 3 {
+		assert.True(t, bytes.Equal(first, pdfOf(t, list)))
+	}
+}
+
+// A page is found by its text, and says what the results say.
+func TestPDFText(t *testing.T) {
+	list := sheets(t)
+	pages := pageTexts(t, pdfOf(t, list))
+	assert.Contains(t, pages[0], "Ottermere Depot")
+	assert.Contains(t, pages[0], strings.Repeat("0f", 32))
+	assert.Contains(t, pages[0], "X1, L1: NEd is missing" /* set as a symbol */)
+	for _, p := range pages {
+		assert.Contains(t, p, "to be checked by a qualified engineer")
+	}
+	for i, s := range list {
+		page := ""
+		for _, p := range pages {
+			if strings.Contains(p, fmt.Sprintf("Sheet %d of %d", i+1, len(list))) {
+				page += p
+			}
+		}
+		r := s.Result
+		numbers := []string{s.Column.Mark, s.Section.Name(), s.Grade, working.Utilisation(r.Utilisation), r.Status.String()}
+		for _, b := range []*design.Buckling{&r.Y, &r.Z, &r.T} {
+			if b.Curve != "" {
+				numbers = append(numbers, handed(b.Lcr/1e3), handed(b.LambdaBar), handed(b.Chi), handed(b.NbRd/1e3))
+			}
+		}
+		for _, n := range numbers {
+			assert.Contains(t, page, n, s.Section.Name())
+		}
+	}
+}
+
+// A sheet is one page; that of Annex A under moments about both axes is two.
+func TestOnePageASheet(t *testing.T) {
+	front := 3 // contents, formulas, and no stacks: see below
+	pages := 0
+	list := sheets(t)
+	require.Empty(t, Stacks(list), "the examples share a level, so none stands on another")
+	for i := range examples {
+		pages++
+		if examples[i].name == "bent-annex-a" {
+			pages++
+		}
+	}
+	got := bytes.Count(pdfOf(t, list), []byte("/Type /Page\n"))
+	assert.Equal(t, front-1+pages, got)
+}
+
+// stack is a column line of three lengths.
+func stack(t testing.TB) []*working.Sheet {
+	var list []*working.Sheet
+	for i, section := range []string{"254x254x73 UKC", "203x203x60 UKC", "203x203x60 UKC"} {
+		col := design.Column{Mark: fmt.Sprintf("A1-%d", i+1), Stack: "A1 & <B>", From: fmt.Sprint("L", i), To: fmt.Sprint("L", i+1), Quantity: 1, Length: 4000,
+			Combinations: []design.Combination{{NEd: 1500e3 - 500e3*float64(i)}}}
+		list = append(list, sheetOf(t, &example{"", section, "S355", col, nil}))
+	}
+	return list
+}
+
+func TestStacks(t *testing.T) {
+	list := stack(t)
+	list[0], list[2] = list[2], list[0] // the order of the schedule does not count
+	stacks := Stacks(list)
+	require.Len(t, stacks, 1)
+	assert.Equal(t, "A1 & <B>", stacks[0].Name)
+	var marks []string
+	for _, l := range stacks[0].Lengths {
+		marks = append(marks, l.Column.Mark)
+	}
+	assert.Equal(t, []string{"A1-1", "A1-2", "A1-3"}, marks)
+
+	pages := pageTexts(t, pdfOf(t, list))
+	assert.Contains(t, pages[1], "Stack A1 & <B>")
+	assert.Equal(t, 1, strings.Count(pages[1], "splice"))
+}
+
+func TestSVG(t *testing.T) {
+	var b bytes.Buffer
+	require.NoError(t, Stacks(stack(t))[0].SVG(&b))
+	for d := xml.NewDecoder(bytes.NewReader(b.Bytes())); ; {
+		_, err := d.Token()
+		if errors.Is(err, io.EOF) {
+			break
+		}
+		require.NoError(t, err)
+	}
+	for _, text := range []string{"L0", "L3", "254x254x73 UKC S355", "splice", "A1 &amp; &lt;B&gt;"} {
+		assert.Contains(t, b.String(), text)
+	}
+}
+
+// What stands in a schedule may be anything.
+func TestPDFTakesAnyText(t *testing.T) {
+	e := examples[4]
+	long := strings.Repeat("Ж漢字😀 _λ̄_,)(__ ", 40)
+	e.column.Mark, e.column.Stack, e.column.From, e.column.To = "_", long, "a_", "\x00\u0304"
+	e.column.Combinations = slices.Clone(e.column.Combinations)
+	e.column.Combinations[0].Name = long
+	list := []*working.Sheet{sheetOf(t, &e)}
+	p := project()
+	p.Title, p.File, p.Settings = long, long, [][2]string{{long, long}}
+	var b bytes.Buffer
+	require.NoError(t, PDF(&b, p, list, []*Stack{{Name: long, Lengths: list}}))
+	require.NoError(t, Text(&b, list[0]))
+	require.NoError(t, (&Stack{Name: long, Lengths: list}).SVG(&b))
+}
+
+// BenchmarkPDF writes 500 sheets.
+func BenchmarkPDF(b *testing.B) {
+	var list []*working.Sheet
+	for i := range 500 {
+		list = append(list, sheetOf(b, &examples[i%len(examples)]))
+	}
+	size := 0
+	for b.Loop() {
+		size = len(pdfOf(b, list))
+	}
+	b.ReportMetric(float64(size)/1e6, "MB")
+}
