@@ -8,6 +8,7 @@ type decimalVote struct {
 	// Numbers such as 3,500 can be read either way. In a column of lengths
 	// only one of the two readings may be a length that a column can have.
 	likelyPoint, likelyComma int
+	open                     string // the first that nothing tells of
 }
 
 // see takes the evidence of one number. plausible tells whether a value of its
@@ -29,6 +30,8 @@ func (d *decimalVote) see(s string, plausible func(float64) bool) {
 		d.likelyPoint++
 	case plausible != nil && plausible(asComma) && !plausible(asPoint):
 		d.likelyComma++
+	case d.open == "":
+		d.open = strings.Clone(trim(s))
 	}
 }
 
@@ -59,6 +62,16 @@ func pick(point bool) byte {
 		return '.'
 	}
 	return ','
+}
+
+// unsure returns a number that is read with a decimal comma where nothing but
+// the form of the file speaks for it; "" where there is none. The other reading
+// is a thousand times greater.
+func (d *decimalVote) unsure(hint byte) string {
+	if d.point == d.comma && d.likelyPoint == d.likelyComma && d.mark(hint) == ',' {
+		return d.open
+	}
+	return ""
 }
 
 // mixed reports whether some numbers contradict the mark that was chosen, and

@@ -70,7 +70,7 @@ func (g *groupScan) clashes(links *rowLinks, set *Settings) groupClashes {
 		return sameFamilies(list)
 	})
 	grades := g.resolve(strings.Join(set.Design.Grades, " "), func(s string) string {
-		if name, err := parseGrade(s); err == nil {
+		if name, err := parseGrade(strengthName(s)); err == nil {
 			return name
 		}
 		return strings.ToUpper(s)

@@ -87,7 +87,7 @@ func (m *memberData) agree(i int, v *value) {
 	case len(have.heights) > 0 && m.sameHeights(have.heights, v.heights):
 	default:
 		b := &m.r.bindings[i]
-		m.problem(v.row, i, fmt.Sprintf("%s differs from %s of the same member", b.title(), rowList([]int{have.row})), "make the rows of one mark and level agree")
+		m.problem(v.row, i, fmt.Sprintf("%s differs from %s of the same member", b.title(), rowName(m.r.src, m.r.plan.Sheet, have.row)), "make the rows of one mark and level agree")
 	}
 }
 

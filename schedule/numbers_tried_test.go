@@ -29,3 +29,28 @@ func TestForcesInNewtons(t *testing.T) {
 	assert.Empty(t, readAll(t, sheetOf(header+" (kN)\nC1 | 3.6 | #95000")).Summary.Notes)
 	assert.Empty(t, readAll(t, sheetOf(header+"\nC1 | 3.6 | #95000\nC2 | 3.6 | 900")).Summary.Notes)
 }
+
+// hinted is a source whose form makes a decimal comma likely.
+type hinted struct{ Source }
+
+func (hinted) DecimalHint() byte { return ',' }
+
+func TestCommaThatNothingTellsOf(t *testing.T) {
+	notes := func(rows string) []string {
+		return readAll(t, hinted{sheetOf("Mark | Length | N_Ed" + rows)}).Summary.Notes
+	}
+	unsure := notes("\nC1 | 4 | 1,200\nC2 | 4 | 900")
+	assert.Len(t, unsure, 1)
+	assert.Contains(t, unsure[0], `"1,200" is read with a decimal comma`)
+	assert.Empty(t, notes("\nC1 | 4,2 | 1,200\nC2 | 4 | 900"))
+	assert.Empty(t, notes("\nC1 | 4,200 | 1,200\nC2 | 4 | 900"), "the length tells")
+	assert.Empty(t, readAll(t, sheetOf("Mark | Length | N_Ed\nC1 | 4 | 1,200")).Summary.Notes, "read as 1200, which is safe")
+}
+
+func TestGradesByTheirStrength(t *testing.T) {
+	c := good(t, "Mark | Length | N_Ed | Grade\nC1 | 4 | 900 | #355")
+	assert.Equal(t, []string{"S355"}, c.Grades)
+	c = good(t, "Mark | Length | N_Ed | Grade\nC1 | 4 | 900 | 275 / 355")
+	assert.Equal(t, []string{"S275", "S355"}, c.Grades)
+	problem(t, "Mark | Length | N_Ed | Grade\nC1 | 4 | 900 | 350")
+}

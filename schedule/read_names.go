@@ -41,11 +41,20 @@ func (r *reader) resolve(f fieldName, text string) (string, error) {
 	}
 }
 
+// strengthName puts the S before a grade that is given by its strength alone,
+// as in a column of numbers: 355.
+func strengthName(s string) string {
+	if len(s) == 3 && digitRun(s) == 3 {
+		return "S" + s
+	}
+	return s
+}
+
 // grades reads one grade, or several between commas, strokes or spaces.
 func (r *reader) grades(text string) ([]string, error) {
 	var list []string
 	for _, part := range strings.FieldsFunc(text, func(c rune) bool { return c == ',' || c == ';' || c == '/' || c == '|' }) {
-		name, err := parseGrade(trim(part))
+		name, err := parseGrade(strengthName(trim(part)))
 		if err == nil {
 			list = append(list, name)
 			continue
@@ -55,7 +64,7 @@ func (r *reader) grades(text string) ([]string, error) {
 			return nil, err
 		}
 		for _, w := range words {
-			name, wordErr := parseGrade(w)
+			name, wordErr := parseGrade(strengthName(w))
 			if wordErr != nil {
 				return nil, err
 			}

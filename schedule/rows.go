@@ -106,7 +106,7 @@ func (r *rows) remark(m *Member, index int) {
 	col := &m.Column
 	col.SpliceSaid = r.plan.has(spliceField)
 	if twin := r.links.twin[index]; twin >= 0 {
-		col.Notes = append(col.Notes, fmt.Sprintf("%s stands in row %d too, with nothing to tell them apart: two members", named(col), r.links.refs[twin].number))
+		col.Notes = append(col.Notes, fmt.Sprintf("%s stands in %s too, with nothing to tell them apart: two members", named(col), rowName(r.src, r.plan.Sheet, int(r.links.refs[twin].number))))
 	}
 	if text := r.groups[int32(index)]; text != "" {
 		p := &Problem{File: r.plan.File, Cell: col.Cell, Row: m.Rows[0], Col: -1, What: text, Do: "give a group one family and one grade"}
@@ -117,6 +117,14 @@ func (r *rows) remark(m *Member, index int) {
 		}
 		m.Problems = append(m.Problems, p)
 	}
+}
+
+// rowName names a row within its sheet: "row 5", "line 5" of a text.
+func rowName(src Source, sheet string, row int) string {
+	if rn, ok := src.(RowNamer); ok {
+		return rn.WhereRow(sheet, row)
+	}
+	return rowList([]int{row})
 }
 
 // named returns the member's mark and levels, for people.
