@@ -32,7 +32,16 @@ func (w *worker) given(col *design.Column, res *design.Result) {
 	w.member.Assess(l.Candidates[i], &w.assess)
 	w.fill(res)
 	if !ec3.Passes(res.Utilisation, limit) {
-		res.Status = design.Fails
+		failed(res)
+	}
+}
+
+// failed says of a result that its section does not pass and, where a rule
+// does not cover the section under these actions, which.
+func failed(res *design.Result) {
+	res.Status = design.Fails
+	if g := &res.Governing; g.Kind == design.Refused {
+		res.Notes = append(res.Notes, fmt.Sprintf("%s %s: %s (%s)", res.Section, res.Grade, g.Reason, g.Clause))
 	}
 }
 

@@ -110,6 +110,18 @@ func TestGivenSectionOutsideTheRulesFails(t *testing.T) {
 	assert.Zero(t, res.Reserve)
 }
 
+// A rule that does not cover the section under these actions is named too.
+func TestGivenSectionOutsideTheRulesUnderItsActions(t *testing.T) {
+	col := given(1e5, "200x90x30 UKPFC")
+	col.Combinations[0].My.Top = 1e6
+	e := engineOf(t, settingsOf(t, "UK"))
+	for _, res := range []design.Result{sizeOne(t, e, col), checkOne(t, e, col)} {
+		assert.Equal(t, design.Fails, res.Status)
+		assert.Contains(t, res.Notes, "200x90x30 UKPFC S355: moments on channels and angles are not covered: "+
+			"their shear centre is off the centroid (6.3.3)")
+	}
+}
+
 func TestWhatCannotBeDesignedIsNotRead(t *testing.T) {
 	e := engineOf(t, settingsOf(t, "UK"))
 	mechanism := pressed(1e5)

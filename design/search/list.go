@@ -20,10 +20,12 @@ type List struct {
 	Candidates []*ec3.Candidate
 	Refused    []Refused // what the rules do not cover, in the same order
 
-	rows  []axialRow
-	skip  skipTable
-	ratio float64 // gM0/gM1
-	by    design.Objective
+	rows   []axialRow
+	skip   skipTable
+	before []int    // how many were refused before each candidate
+	over   []string // what passedOver says of each candidate
+	ratio  float64  // gM0/gM1
+	by     design.Objective
 }
 
 // Refused is a candidate that the rules do not cover, and why.
@@ -98,7 +100,12 @@ func (l *List) add(s *catalogue.Section, grade string, o outcome) {
 		l.Refused = append(l.Refused, Refused{s, grade, o.refusal})
 		return
 	}
-	l.Candidates = append(l.Candidates, o.candidate)
+	l.addCandidate(o.candidate)
+}
+
+func (l *List) addCandidate(c *ec3.Candidate) {
+	l.Candidates = append(l.Candidates, c)
+	l.before = append(l.before, len(l.Refused))
 }
 
 // gradesOf reads a column's grades; without any they are the settings' own.
@@ -172,8 +179,10 @@ func (l *List) tabulate(set *design.Settings) {
 	l.by = set.Rates.Objective
 	l.ratio = set.National.GammaM0 / set.National.GammaM1
 	l.rows = make([]axialRow, len(l.Candidates))
+	l.over = make([]string, len(l.Candidates))
 	for i, c := range l.Candidates {
 		l.rows[i] = newAxialRow(c)
+		l.over[i] = l.passedOver(i)
 	}
 	l.skip = newSkipTable(l.rows, l.ratio)
 }

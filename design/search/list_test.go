@@ -106,6 +106,36 @@ func TestRefusedCandidatesAreKept(t *testing.T) {
 	assert.Contains(t, res.Notes[0], "left out: "+l.Refused[0].Section.Name())
 }
 
+// Sections that the rules do not cover, and that would have come before the
+// one chosen, are said of it with the reason; those before the next lighter
+// one are not, since that has been tried and fails.
+func TestRefusedBetweenTheNextLighterAndTheChoiceAreSaid(t *testing.T) {
+	set := settingsOf(t, "UK")
+	set.Families = []string{"L"}
+	set.Grades = []string{"S355"}
+	e := engineOf(t, set)
+	l, err := e.List(&design.Choice{}, nil)
+	require.NoError(t, err)
+	res := sizeOne(t, e, pressed(3e5))
+	require.Equal(t, design.Passes, res.Status)
+	chosen, err := e.Section(res.Section)
+	require.NoError(t, err)
+	next, err := e.Section(res.NextLighter)
+	require.NoError(t, err)
+	var between []string
+	for _, r := range l.Refused {
+		if catalogue.Compare(next, r.Section) < 0 && catalogue.Compare(r.Section, chosen) < 0 {
+			between = append(between, r.Section.Name())
+		}
+	}
+	require.NotEmpty(t, between, "150x150x15 is class 4 in S355: 10 > 11.5 x 0.814")
+	require.NotEmpty(t, res.Notes)
+	assert.Regexp(t, `^lighter, and left out: `+between[0]+` S355.*: class 4 in compression`, res.Notes[len(res.Notes)-1])
+
+	set.Families = []string{"UKC"}
+	assert.Empty(t, sizeOne(t, engineOf(t, set), pressed(3e5)).Notes)
+}
+
 func TestNothingWithinTheLimitsOfSize(t *testing.T) {
 	e := engineOf(t, settingsOf(t, "UK"))
 	col := pressed(1e5)

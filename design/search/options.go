@@ -101,7 +101,7 @@ func (t *team) assign(c *Chosen) {
 	for _, m := range t.mates {
 		m.res.Fixed = m.col.Given != ""
 		if !ec3.Passes(m.res.Utilisation, m.limit) {
-			m.res.Status = design.Fails
+			failed(m.res)
 		}
 	}
 	if c.Lighter == nil {

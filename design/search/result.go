@@ -4,6 +4,7 @@ import (
 	"errors"
 	"fmt"
 	"math"
+	"strings"
 
 	"stanchion/catalogue"
 	"stanchion/design"
@@ -105,26 +106,55 @@ func (l *List) empty() string {
 	return "no section can be used" + l.leftOut()
 }
 
-// leftOut says what the rules do not cover, reasons once each in the order in
-// which they first occur.
+// leftOut says what the rules do not cover in the whole list.
 func (l *List) leftOut() string {
+	if text := refusals(l.Refused); text != "" {
+		return "; left out: " + text
+	}
+	return ""
+}
+
+// refusals says what the rules do not cover, reasons once each in the order in
+// which they first occur.
+func refusals(refused []Refused) string {
 	var reasons []string
 	first := map[string]string{}
 	count := map[string]int{}
-	for _, r := range l.Refused {
+	for _, r := range refused {
 		reason := r.Refusal.Error()
 		if count[reason]++; count[reason] == 1 {
 			reasons = append(reasons, reason)
 			first[reason] = r.Section.Name() + " " + r.Grade
 		}
 	}
-	text := ""
-	for _, reason := range reasons {
-		text += "; left out: " + first[reason]
+	for i, reason := range reasons {
+		which := first[reason]
 		if n := count[reason]; n > 1 {
-			text += fmt.Sprintf(" and %d more", n-1)
+			which += fmt.Sprintf(" and %d more", n-1)
 		}
-		text += ": " + reason
+		reasons[i] = which + ": " + reason
 	}
-	return text
+	return strings.Join(reasons, "; left out: ")
+}
+
+// tellOver says of a chosen candidate which sections stand between it and the
+// next lighter one in the order, and were not tried since a rule does not
+// cover them.
+func (l *List) tellOver(res *design.Result, i int) {
+	if text := l.over[i]; text != "" {
+		res.Notes = append(res.Notes, text)
+	}
+}
+
+// passedOver says what was refused between a candidate and the next lighter
+// one; nothing where that is not so.
+func (l *List) passedOver(i int) string {
+	from := 0
+	if j := l.lighter(i); j >= 0 {
+		from = l.before[j]
+	}
+	if text := refusals(l.Refused[from:l.before[i]]); text != "" {
+		return "lighter, and left out: " + text
+	}
+	return ""
 }

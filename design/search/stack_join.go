@@ -31,7 +31,8 @@ func (s *settling) join(cluster []Chosen, cols []design.Column, results []design
 func (s *settling) enlist(n *node) bool {
 	var err error
 	if c := n.chosen.Candidate; c != nil {
-		n.list = &List{Candidates: []*ec3.Candidate{c}}
+		n.list = &List{}
+		n.list.addCandidate(c)
 		n.list.tabulate(&s.engine.settings)
 		return true
 	}

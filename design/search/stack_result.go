@@ -28,7 +28,7 @@ func (s *settling) fillNode(n *node) {
 func (s *settling) tellGiven(n *node) {
 	for _, m := range n.mates {
 		if !ec3.Passes(m.res.Utilisation, m.limit) {
-			m.res.Status = design.Fails
+			failed(m.res)
 		}
 		m.res.Fixed = m.col.Given != ""
 		if !m.res.Fixed {
@@ -56,6 +56,9 @@ func (s *settling) tellAside(n *node) {
 // above or below that depends on the section.
 func (s *settling) tellLighter(n *node) {
 	at := n.at
+	for _, m := range n.mates {
+		n.list.tellOver(m.res, at)
+	}
 	lighter := n.list.lighter(at)
 	if lighter < 0 {
 		return

@@ -154,14 +154,28 @@ func (l *List) in(other *List, set *design.Settings) *List {
 	for _, c := range other.Candidates {
 		has[c] = true
 	}
-	both := &List{Refused: l.Refused}
-	for _, c := range l.Candidates {
+	both := &List{}
+	from := 0
+	for i, c := range l.Candidates {
+		both.Refused = other.alsoRefuses(both.Refused, l.Refused[from:l.before[i]])
+		from = l.before[i]
 		if has[c] {
-			both.Candidates = append(both.Candidates, c)
+			both.addCandidate(c)
 		}
 	}
+	both.Refused = other.alsoRefuses(both.Refused, l.Refused[from:])
 	both.tabulate(set)
 	return both
+}
+
+// alsoRefuses appends those refusals that are the list's too.
+func (l *List) alsoRefuses(to, refused []Refused) []Refused {
+	for _, r := range refused {
+		if slices.ContainsFunc(l.Refused, func(o Refused) bool { return o.Section == r.Section && o.Grade == r.Grade }) {
+			to = append(to, r)
+		}
+	}
+	return to
 }
 
 // section returns the one section of a list of grades.

@@ -17,6 +17,9 @@ func (t *team) choose(l *List) {
 		return
 	}
 	t.fillAll(l.Candidates[i], design.Passes)
+	for _, m := range t.mates {
+		l.tellOver(m.res, i)
+	}
 	if j := l.lighter(i); j >= 0 {
 		t.evidence(l.Candidates[j])
 	}
@@ -142,7 +145,7 @@ func (t *team) keep(l *List, given *mate) {
 	}
 	for _, m := range t.mates {
 		if c != nil && !ec3.Passes(m.res.Utilisation, m.limit) {
-			m.res.Status = design.Fails
+			failed(m.res)
 		}
 		m.res.Fixed = m.col.Given != ""
 		if !m.res.Fixed {

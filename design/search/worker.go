@@ -83,6 +83,7 @@ func (w *worker) size(col *design.Column, res *design.Result) {
 	w.member.Assess(l.Candidates[i], &w.assess)
 	w.fill(res)
 	res.Status = design.Passes
+	l.tellOver(res, i)
 	if j := l.lighter(i); j >= 0 {
 		w.member.Assess(l.Candidates[j], &w.assess)
 		evidence(res, &w.assess)
