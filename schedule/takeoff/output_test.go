@@ -147,3 +147,17 @@ func TestPercent(t *testing.T) {
 		assert.Equal(t, want, Percent(part))
 	}
 }
+
+func TestShortList(t *testing.T) {
+	assert.Equal(t, "A; B", shortList([]string{"A", "B"}))
+	marks := make([]string, 1000)
+	for i := range marks {
+		marks[i] = fmt.Sprint("C", i)
+	}
+	s := shortList(marks)
+	assert.Less(t, len(s), 1300)
+	assert.Contains(t, s, "C0; C1; ")
+	assert.Regexp(t, `C\d+ and \d+ more$`, s)
+	long := strings.Repeat("x", 2000)
+	assert.Equal(t, long, shortList([]string{long}))
+}

@@ -235,6 +235,20 @@ func (p *page) remarks() {
 	p.Blank()
 }
 
+// shortList joins marks, as many as a cell shows whole; the CSV has them all.
+func shortList(marks []string) string {
+	const characters = 1200
+	n, size := 0, 0
+	for n < len(marks) && size+len(marks[n]) <= characters {
+		size += len(marks[n]) + len("; ")
+		n++
+	}
+	if n == len(marks) || n == 0 {
+		return strings.Join(marks, "; ")
+	}
+	return fmt.Sprintf("%s and %d more", strings.Join(marks[:n], "; "), len(marks)-n)
+}
+
 // cuttingSheet lists the pieces by section and length.
 func (t *TakeOff) cuttingSheet(file string) workbook.Sheet {
 	p := workbook.NewPage(CuttingSheet, "Cutting list", 10, 22, 10, 13, 11, 15, 12, 12, 60)
@@ -254,7 +268,7 @@ func (t *TakeOff) cuttingSheet(file string) workbook.Sheet {
 		p.Row(workbook.TextCell(FamilyName(c.Section)), workbook.TextCell(c.Section.Name()), workbook.TextCell(c.Grade),
 			workbook.NumberCell(float64(c.Length)/1e6, lengthFormat), workbook.NumberCell(float64(c.Number), wholeFormat),
 			workbook.NumberCell(c.Metres(), metreFormat), workbook.NumberCell(c.Tonnes(), tonneFormat), transport,
-			workbook.WordsCell(strings.Join(c.Marks, "; ")))
+			workbook.WordsCell(shortList(c.Marks)))
 	}
 	if len(p.Rows) > head {
 		p.Filter = fmt.Sprintf("A%d:I%d", head, len(p.Rows))

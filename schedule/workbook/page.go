@@ -36,8 +36,8 @@ func (p *Page) high(lines int) {
 	if p.Heights == nil {
 		p.Heights = map[int]float64{}
 	}
-	const points = 15.5 // of a line
-	p.Heights[len(p.Rows)] = points * float64(lines)
+	const points, most = 15.5, 409 // of a line; of a row, as spreadsheets have it
+	p.Heights[len(p.Rows)] = min(points*float64(lines), most)
 }
 
 // Blank leaves a row out.
