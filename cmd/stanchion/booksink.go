@@ -12,6 +12,7 @@ import (
 	"stanchion/schedule"
 	"stanchion/schedule/summary"
 	"stanchion/schedule/takeoff"
+	"stanchion/schedule/tradeoff"
 	"stanchion/schedule/workbook"
 )
 
@@ -60,14 +61,17 @@ func (s *bookSink) finish(ctx context.Context) error {
 	if err != nil {
 		return err
 	}
-	return place.WriteTo(&stopper{ctx, s.w}, s.sheets(info))
+	return place.WriteTo(&stopper{ctx, s.w}, s.sheets(info, place))
 }
 
 // sheets are the project's own: the summary, the take-off, and what a person
 // must look at.
-func (s *bookSink) sheets(info *summary.Info) []workbook.Sheet {
+func (s *bookSink) sheets(info *summary.Info, place *workbook.Plan) []workbook.Sheet {
 	overview, problems := summary.Sheets(info, s.run.tally, s.lines)
 	sheets := append([]workbook.Sheet{overview}, s.run.steelOf(s.lines).Sheets(info.File)...)
+	if len(s.run.curve) > 0 {
+		sheets = append(sheets, s.run.sizesTable().Page(place.SheetName(tradeoff.Sheet)))
+	}
 	return append(sheets, problems)
 }
 

@@ -102,7 +102,7 @@ func (r *run) decide(ctx context.Context, cols []design.Column) ([]design.Result
 	if d == nil {
 		return nil, err
 	}
-	r.curve = d.Curve
+	r.curve, r.anySizes = d.Curve, d.Any
 	return d.Results, err
 }
 

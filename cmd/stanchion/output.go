@@ -10,6 +10,8 @@ import (
 	"path/filepath"
 	"strings"
 
+	"github.com/spf13/cobra"
+
 	"stanchion/schedule/outfile"
 )
 
@@ -59,4 +61,39 @@ func writeNewFile(ctx context.Context, path string, force bool, write func(io.Wr
 		return err
 	}
 	return outfile.Write(ctx, path, write)
+}
+
+// writeApart writes results that are no annotated schedule: to the file that
+// was asked for, or to standard output. earlier tells what may be replaced.
+func (r *run) writeApart(ctx context.Context, earlier func(path string) bool, write func(io.Writer) error) error {
+	out := r.flags.output
+	if out == "" || out == stdio {
+		return write(r.con.out)
+	}
+	if sameFile(out, r.input) {
+		return fmt.Errorf("%s is the input itself: name another file with -o", out)
+	}
+	if err := mayReplace(out, r.flags.force, earlier); err != nil {
+		return err
+	}
+	return outfile.Write(ctx, out, write)
+}
+
+// apartFormat is the form of results that are no annotated schedule: the
+// extension of the output or, on standard output, the form that was asked for.
+func (r *run) apartFormat(format string) (form string, toFile bool) {
+	if out := r.flags.output; out != "" && out != stdio {
+		return strings.TrimPrefix(strings.ToLower(filepath.Ext(out)), "."), true
+	}
+	return format, false
+}
+
+// bindApart binds the flags of a command whose results are no annotated
+// schedule. forms are the extensions that the output may have.
+func (f *runFlags) bindApart(c *cobra.Command, what, forms string, format *string) {
+	fl := c.Flags()
+	fl.StringVarP(&f.output, "output", "o", "", "write "+what+" to `FILE` ("+forms+" says its form)")
+	fl.StringVar(format, "format", "text", "`FORM` on standard output: text or csv")
+	fl.BoolVar(&f.force, "force", false, "replace an output that no earlier run wrote")
+	f.bindReading(c)
 }

@@ -33,6 +33,7 @@ func (r *run) report(ctx context.Context) {
 	r.sayOutcome()
 	r.sayKept()
 	r.saySteel()
+	r.saySizes()
 	r.sayFailing(ctx)
 	r.sayNotRead()
 	r.sayWritten()
@@ -128,6 +129,14 @@ func (r *run) saySteel() {
 	}
 	r.print("")
 	r.print(t.lines()...)
+}
+
+// saySizes says what fewer sizes come to, where they are limited.
+func (r *run) saySizes() {
+	if len(r.curve) > 0 {
+		r.print("")
+		r.print(sizesLines(r.sizesTable(), "  ")...)
+	}
 }
 
 // sayFailing lists the members that fail, with what would pass in their place.

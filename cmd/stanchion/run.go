@@ -32,6 +32,7 @@ type run struct {
 	out      *outputs
 	keep     *keeping         // the old issue whose sections stay; nil: none
 	curve    []building.Trade // what fewer sizes come to, where they are limited
+	anySizes *building.Trade  // and what any number of them does
 	tally    *summary.Tally
 }
 

@@ -118,3 +118,23 @@ func sum(list []int) (total int) {
 	}
 	return total
 }
+
+// wrapList writes a list in lines of a width that break between its items.
+func wrapList(items []string, width int) []string {
+	lines := []string{""}
+	for i, item := range items {
+		if i+1 < len(items) {
+			item += ","
+		}
+		last := &lines[len(lines)-1]
+		switch {
+		case *last == "":
+			*last = item
+		case utf8.RuneCountInString(*last)+1+utf8.RuneCountInString(item) > width:
+			lines = append(lines, item)
+		default:
+			*last += " " + item
+		}
+	}
+	return lines
+}

@@ -3,7 +3,6 @@ package main
 import (
 	"bufio"
 	"context"
-	"fmt"
 	"io"
 	"os"
 	"path/filepath"
@@ -14,7 +13,6 @@ import (
 	"stanchion/catalogue"
 	"stanchion/design"
 	"stanchion/design/search"
-	"stanchion/schedule/outfile"
 	"stanchion/schedule/takeoff"
 	"stanchion/schedule/workbook"
 )
@@ -155,17 +153,7 @@ func (r *takeoffRun) book(w io.Writer) error {
 }
 
 func (r *takeoffRun) write(ctx context.Context, write func(io.Writer) error) error {
-	out := r.flags.output
-	if out == "" || out == stdio {
-		return write(r.con.out)
-	}
-	if sameFile(out, r.input) {
-		return fmt.Errorf("%s is the input itself: name another file with -o", out)
-	}
-	if err := mayReplace(out, r.flags.force, takeoffEarlier); err != nil {
-		return err
-	}
-	return outfile.Write(ctx, out, write)
+	return r.writeApart(ctx, takeoffEarlier, write)
 }
 
 // takeoffEarlier reports whether an earlier run wrote a take-off.

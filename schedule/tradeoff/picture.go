@@ -1,0 +1,86 @@
+package tradeoff
+
+import (
+	"fmt"
+	"image/color"
+	"io"
+	"strconv"
+
+	"gonum.org/v1/plot"
+	"gonum.org/v1/plot/plotter"
+	"gonum.org/v1/plot/vg"
+	"gonum.org/v1/plot/vg/draw"
+	_ "gonum.org/v1/plot/vg/vgimg" // png
+	_ "gonum.org/v1/plot/vg/vgsvg" // svg
+)
+
+// WritePicture draws the amounts over the number of sizes. format is svg or
+// png.
+func (t *Table) WritePicture(w io.Writer, format string) error {
+	var points plotter.XYs
+	for _, l := range t.Served() {
+		points = append(points, plotter.XY{X: float64(l.Most), Y: l.Amount})
+	}
+	if len(points) == 0 {
+		return fmt.Errorf("there is nothing to draw: so few sizes cannot serve every column")
+	}
+	p := plot.New()
+	p.Title.Text = headingOf(t.Quantity()) + " over the number of sizes: " + t.File
+	p.Title.Padding = vg.Points(8)
+	p.Title.TextStyle.Font.Size = vg.Points(11)
+	p.X.Label.Text, p.Y.Label.Text = "Sizes", headingOf(t.Quantity())
+	p.X.Padding, p.Y.Padding = vg.Points(6), vg.Points(6)
+	if err := t.drawLines(p, points); err != nil {
+		return err
+	}
+	p.X.Min, p.X.Max = points[0].X-0.5, points[len(points)-1].X+0.5
+	margin := max(0.08*(points[0].Y-t.Any.Amount), 0.02*points[0].Y)
+	p.Y.Min, p.Y.Max = min(t.Any.Amount, points[len(points)-1].Y)-margin, points[0].Y+margin
+	p.X.Tick.Marker = plot.ConstantTicks(wholeTicks(points))
+	out, err := p.WriterTo(16*vg.Centimeter, 10*vg.Centimeter, format)
+	if err != nil {
+		return err
+	}
+	_, err = out.WriteTo(w)
+	return err
+}
+
+// drawLines draws the amounts, a mark for each, and the amount of any number
+// of sizes, to which they fall.
+func (t *Table) drawLines(p *plot.Plot, points plotter.XYs) error {
+	line, marks, err := plotter.NewLinePoints(points)
+	if err != nil {
+		return err
+	}
+	least, err := plotter.NewLine(plotter.XYs{{X: points[0].X - 0.5, Y: t.Any.Amount}, {X: points[len(points)-1].X + 0.5, Y: t.Any.Amount}})
+	if err != nil {
+		return err
+	}
+	grid := plotter.NewGrid()
+	grid.Vertical.Width = 0
+	grid.Horizontal.Color = color.Gray{0xd8}
+	line.Color, line.Width = ink(lineColour), vg.Points(1.5)
+	marks.Color, marks.Shape, marks.Radius = ink(lineColour), draw.CircleGlyph{}, vg.Points(3)
+	least.Color, least.Width, least.Dashes = ink(leastColour), vg.Points(1), []vg.Length{vg.Points(5), vg.Points(3)}
+	p.Add(grid, least, line, marks)
+	p.Legend.Add("least for so many sizes", line, marks)
+	p.Legend.Add(fmt.Sprintf("any number of sizes (%d)", t.Any.Most), least)
+	p.Legend.Top = true
+	p.Legend.XOffs, p.Legend.YOffs = -vg.Points(8), -vg.Points(8)
+	return nil
+}
+
+// wholeTicks puts a tick at every number of sizes.
+func wholeTicks(points plotter.XYs) []plot.Tick {
+	var ticks []plot.Tick
+	for _, pt := range points {
+		ticks = append(ticks, plot.Tick{Value: pt.X, Label: strconv.Itoa(int(pt.X))})
+	}
+	return ticks
+}
+
+// ink is a colour from its six hexadecimal digits.
+func ink(hex string) color.RGBA {
+	v, _ := strconv.ParseUint(hex, 16, 32) // a constant of this package
+	return color.RGBA{uint8(v >> 16), uint8(v >> 8), uint8(v), 0xff}
+}
