@@ -38,6 +38,10 @@ type Segment struct {
 // Length returns the distance between the two points, mm.
 func (s *Segment) Length() float64 { return s.To - s.From }
 
+// Etas returns the distribution factors of its two ends, and whether one of
+// them sways, of a segment whose length was found from them.
+func (s *Segment) Etas() (bottom, top float64, sway bool) { return s.eta[0], s.eta[1], s.sway }
+
 // NcrOverEI returns the elastic critical force per EI, 1/mm2
 // (EN 1993-1-1:2005, 6.3.1.2; N_cr = pi2 EI/L_cr2).
 func (s *Segment) NcrOverEI() float64 {

@@ -52,30 +52,42 @@ func (w *writer) floor(c *design.Combination, at *catalogue.Section, beside *ec3
 func (w *writer) share(axis string, a, b float64, at *catalogue.Section, beside *ec3.Neighbour, end string) {
 	ey, ez := ec3.Eccentricities(at)
 	e, depth, half := ey, at.H, "D/2 + 100"
-	own := w.c.Section.Iy / w.m.Length
 	if axis == "z" {
-		e, depth, own = ez, at.Tw, w.c.Section.Iz/w.m.Length
+		e, depth = ez, at.Tw
 		if at.Shape == catalogue.ShapeRHS || at.Shape == catalogue.ShapeCHS {
 			depth = at.B
 		}
 	}
 	w.add(Values{w.noted("R_A", a, KN, "reactions on the two sides"), w.value("R_B", b, KN), w.noted("D", depth, Mm, at.Name())})
 	w.find("e_"+axis, half, e, Mm, "NCCI SN005")
-	k := 1.0
-	note := "nothing above: all of it"
-	if beside != nil {
-		other := beside.Section.Iy / beside.Column.Length
-		if axis == "z" {
-			other = beside.Section.Iz / beside.Column.Length
-		}
-		k = ec3.Share(own, other)
-		note = "share by I/L, half up to a ratio of 1.5"
-	}
-	w.add(Values{w.noted("k_share", k, None, note), w.value("g", w.m.Growth, None)})
+	k := w.sharing(axis, beside)
+	w.add(Values{w.noted("g", w.m.Growth, None, "growth")})
 	source := "g k_share (R_A - R_B) e_" + axis
 	moment := w.m.Growth * k * (a - b) * e
 	if end == "bottom" {
 		source, moment = "-"+source, -moment
 	}
 	w.find("M_"+axis+","+end, source, moment, KNm, "NCCI SN005")
+}
+
+// sharing writes the part of a floor's moment that goes to the column beside the
+// length on the other side of the floor.
+func (w *writer) sharing(axis string, beside *ec3.Neighbour) float64 {
+	if beside == nil {
+		w.add(Values{w.noted("k_share", 1, None, "nothing on the other side of the floor: all of it")})
+		return 1
+	}
+	own, other := w.c.Section.Iy, beside.Section.Iy
+	if axis == "z" {
+		own, other = w.c.Section.Iz, beside.Section.Iz
+	}
+	k := ec3.Share(own/w.m.Length, other/beside.Column.Length)
+	w.add(Values{w.noted("I_o", other, Cm4, "of the length on the other side, "+beside.Section.Name()), w.value("L_o", beside.Column.Length, Mm)})
+	w.derive("r_o", "(I_"+axis+"/L)/(I_o/L_o)", None, "")
+	if k == 0.5 {
+		w.add(Values{w.noted("k_share", k, None, "half: the stiffnesses differ by a factor up to 1.5")})
+		return k
+	}
+	w.find("k_share", "r_o/(1 + r_o)", k, None, "NCCI SN005").Note = "by stiffness"
+	return k
 }

@@ -2,6 +2,7 @@ package working
 
 import (
 	"math"
+	"strings"
 
 	"stanchion/catalogue"
 	"stanchion/design"
@@ -29,7 +30,7 @@ func (w *writer) shearAlong(axis string, av float64, c *design.Check) {
 	about := map[string]string{"z": "y", "y": "z"}[axis]
 	my, mz := w.m.EndMoments(w.c, c.Combination)
 	ends := map[string]design.EndMoments{"y": my, "z": mz}[about]
-	w.add(Values{w.noted("M_bottom", ends.Bottom, KNm, about+"-"+about+" "+w.combination(c.Combination)), w.value("M_top", ends.Top, KNm)})
+	w.add(Values{w.noted("M_bottom", ends.Bottom, KNm, strings.TrimSpace(about+"-"+about+" "+w.combination(c.Combination))), w.value("M_top", ends.Top, KNm)})
 	w.find("V_"+axis+",Ed", "abs(M_top - M_bottom)/L", c.Ed, KN, "")
 	w.find("A_v,"+axis, w.shearArea(axis), av, Mm2, "6.2.6(3)")
 	vpl := ec3.VplRd(av, w.c.Fy, w.c.GammaM0)

@@ -80,11 +80,19 @@ func anyColumn(t *rapid.T) *design.Column {
 	for _, h := range []*design.Hold{&col.Y, &col.Z} {
 		h.Bottom.Condition = rapid.SampledFrom([]design.Condition{design.Pinned, design.PartlyFixed, design.Fixed}).Draw(t, "bottom")
 		h.Top.Condition = rapid.SampledFrom([]design.Condition{design.Pinned, design.PartlyFixed, design.Fixed}).Draw(t, "top")
-		switch rapid.IntRange(0, 4).Draw(t, "hold") {
+		switch rapid.IntRange(0, 5).Draw(t, "hold") {
 		case 0:
 			h.Restraints = []float64{0.4 * L}
 		case 1:
 			h.Restraints = []float64{0.3 * L, 0.7 * L}
+		case 3:
+			if rapid.Bool().Draw(t, "stiffness") {
+				s := rapid.Float64Range(1e8, 1e11).Draw(t, "S")
+				h.Top.Stiffness = &s
+			} else {
+				eta := rapid.Float64Range(0, 1).Draw(t, "eta")
+				h.Bottom.Eta = &eta
+			}
 		case 2:
 			h.Lcr = rapid.Float64Range(1000, 15000).Draw(t, "Lcr")
 		}
