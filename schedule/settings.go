@@ -48,7 +48,7 @@ func (s *Settings) Used() []SettingLine { return s.lines }
 type UnknownSettingError struct{ Name string }
 
 func (e *UnknownSettingError) Error() string {
-	return fmt.Sprintf("unknown setting %q: the settings are %s", e.Name, strings.Join(settingNames(), ", "))
+	return e.brief() + ": the settings are " + strings.Join(settingNames(), ", ")
 }
 
 // settingsReader applies settings in layers: defaults, the file's, the command

@@ -154,3 +154,16 @@ func TestGivenNamesAreSettledByFamily(t *testing.T) {
 	assert.Equal(t, []string{"S275", "S355"}, good(t, "Mark | Length | N_Ed | Grade\nC1 | 4 | 900 | S275 S355").Grades)
 	assert.Equal(t, []string{"S355JR"}, good(t, "Mark | Length | N_Ed | Grade\nC1 | 4 | 900 | S355 JR").Grades)
 }
+
+func TestSettingsNearlySpelt(t *testing.T) {
+	for given, want := range map[string]string{"familes": "(families?)", "self-wieght": "(self-weight?)", "gamma M3": "(gamma_M0?)", "colour": `"colour":`, "x": `"x":`} {
+		assert.Contains(t, (&UnknownSettingError{given}).Error(), want)
+	}
+	// A note on the settings file names it: the schedule is another.
+	file := sheetOf("familes | UKB")
+	o := options()
+	o.SettingsFile = file
+	s, err := Read(sheetOf("Mark | Length | N_Ed\nC1 | 4 | 900"), o)
+	require.NoError(t, err)
+	assert.Equal(t, []string{`loads.xlsx, Columns!B1: unknown setting "familes" (families?): it is passed over`}, s.Summary.Notes)
+}

@@ -1,6 +1,10 @@
 package schedule
 
-import "strings"
+import (
+	"strings"
+
+	"github.com/agnivade/levenshtein"
+)
 
 // settingsSheet is the name of the sheet that holds settings.
 const settingsSheet = "Settings"
@@ -70,7 +74,11 @@ func readAllSettings(src Source, opts *Options) (*settingsReader, []string, erro
 			return nil, nil, settingRefusal(place.src.Name(), err)
 		}
 		for _, a := range unknown {
-			notes = append(notes, a.Where+": "+(&UnknownSettingError{a.Name}).brief()+": it is passed over")
+			where := a.Where
+			if place.src == opts.SettingsFile {
+				where = place.src.Name() + ", " + where
+			}
+			notes = append(notes, where+": "+(&UnknownSettingError{a.Name}).brief()+": it is passed over")
 		}
 	}
 	unknown, err := r.layer(opts.Settings)
@@ -108,7 +116,29 @@ func settingPlaces(src Source, opts *Options) []settingPlace {
 	return places
 }
 
-func (e *UnknownSettingError) brief() string { return `unknown setting "` + e.Name + `"` }
+// brief names the setting and the one that may have been meant.
+func (e *UnknownSettingError) brief() string {
+	text := `unknown setting "` + e.Name + `"`
+	if near := nearestSetting(e.Name); near != "" {
+		text += " (" + near + "?)"
+	}
+	return text
+}
+
+// nearestSetting returns the setting whose name differs from one by a slip of
+// the keyboard; "" where none does.
+func nearestSetting(name string) string {
+	const slip = 2
+	name = foldSetting(name)
+	for far := 1; far <= slip; far++ {
+		for _, s := range settingNames() {
+			if len(name) > slip && levenshtein.ComputeDistance(name, foldSetting(s)) == far {
+				return s
+			}
+		}
+	}
+	return ""
+}
 
 // settingRefusal says which setting is wrong, and where it was given.
 func settingRefusal(file string, err error) error {

@@ -88,6 +88,12 @@ func (p *pick) missing(file string) error {
 		message := fmt.Sprintf("%s: no column is marked %q", file, mark)
 		if near := nearest(mark, p.seen()); len(near) > 0 {
 			message += ": did you mean " + strings.Join(near, ", ") + "?"
+		} else if len(p.seen) > 0 {
+			const some = 5
+			message += ": its marks are " + strings.Join(p.seen[:min(some, len(p.seen))], ", ")
+			if more := len(p.seen) - some; more > 0 {
+				message += fmt.Sprintf(" and %d more", more)
+			}
 		}
 		return fmt.Errorf("%s", message)
 	}

@@ -47,7 +47,7 @@ func detect(r io.ReaderAt, size int64) (form, error) {
 		return form{}, err
 	}
 	if bytes.HasPrefix(sample, []byte("PK\x03\x04")) || bytes.HasPrefix(sample, []byte("\xd0\xcf\x11\xe0")) {
-		return form{}, fmt.Errorf("%w: it looks like a workbook; give it the ending .xlsx", errNotText)
+		return form{}, fmt.Errorf("%w: it looks like a workbook: give it as a file with the ending .xlsx", errNotText)
 	}
 	for _, f := range boms {
 		if bytes.HasPrefix(sample, f.bom) {
