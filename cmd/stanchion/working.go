@@ -86,12 +86,13 @@ func (p *pick) missing(file string) error {
 			continue
 		}
 		message := fmt.Sprintf("%s: no column is marked %q", file, mark)
-		if near := nearest(mark, p.seen()); len(near) > 0 {
+		seen := p.seen()
+		if near := nearest(mark, seen); len(near) > 0 {
 			message += ": did you mean " + strings.Join(near, ", ") + "?"
-		} else if len(p.seen) > 0 {
+		} else if len(seen) > 0 {
 			const some = 5
-			message += ": its marks are " + strings.Join(p.seen[:min(some, len(p.seen))], ", ")
-			if more := len(p.seen) - some; more > 0 {
+			message += ": its marks are " + strings.Join(seen[:min(some, len(seen))], ", ")
+			if more := len(seen) - some; more > 0 {
 				message += fmt.Sprintf(" and %d more", more)
 			}
 		}
