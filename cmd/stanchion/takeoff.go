@@ -27,8 +27,8 @@ func takeoffCommand(con *console) *cobra.Command {
 			"grade, by level, by family and by the lengths that are to be cut; with painted area, splices,\n" +
 			"the longest piece, and cost and embodied carbon where the settings have rates. The sections are\n" +
 			"those of the schedule's own column and, where it is blank, those of the results.\n\n" +
-			"Where the schedule says where the splices are, lengths between them are one piece; otherwise\n" +
-			"every length is.\n\n" +
+			"Where the schedule or the setting splices says where the splices are, lengths between them are\n" +
+			"one piece; otherwise every length is.\n\n" +
 			settingsHelp() + "\n\n" + takeoffStatuses,
 		Example: `  stanchion takeoff depot-sized.xlsx
   stanchion takeoff depot-sized.xlsx -o depot-steel.xlsx --set "cost=1850" --set "carbon=1.74"
@@ -107,6 +107,7 @@ func (r *run) takeoffOptions() takeoff.Options {
 	set := &r.plan.Settings
 	return takeoff.Options{
 		Rates: set.Design.Rates, Connections: set.TakeOff.Connections, Waste: set.TakeOff.Waste, Transport: set.TakeOff.Transport,
+		Splices: set.Together.Splices, Every: set.Together.Every,
 	}
 }
 

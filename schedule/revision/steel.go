@@ -60,5 +60,5 @@ func (c *comparer) steelOf(n int, at func(i int) (*Member, *catalogue.Section, s
 		}
 		items = append(items, takeoff.ItemOf(&m.Column, s, grade))
 	}
-	return takeoff.Of(items, leftOut, takeoff.Options{})
+	return takeoff.Of(items, leftOut, takeoff.Options{Splices: c.options.Splices, Every: c.options.Every})
 }

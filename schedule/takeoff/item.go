@@ -22,7 +22,8 @@ type Item struct {
 	Cell                  string // where it stands
 
 	// SpliceSaid: the schedule tells where the splices are, and Splice that
-	// there is one above this length. Otherwise every length is a piece.
+	// there is one above this length. Otherwise every length is a piece, unless
+	// Options.Splices says another rule.
 	SpliceSaid, Splice bool
 
 	Failing bool   // it is counted, and does not pass its checks

@@ -7,6 +7,8 @@ import (
 	"fmt"
 	"math/big"
 	"os"
+	"os/exec"
+	"path/filepath"
 	"strings"
 	"testing"
 
@@ -115,6 +117,33 @@ func TestSheets(t *testing.T) {
 		}
 	}
 	golden(t, "small.txt", strings.Join(lines, "\n")+"\n")
+}
+
+// Another program reads the same numbers, to the last gram.
+func TestSheetsInAnotherProgram(t *testing.T) {
+	office, err := exec.LookPath("soffice")
+	if err != nil || testing.Short() {
+		t.Skip("LibreOffice (soffice) is not installed, or the tests are to be short")
+	}
+	dir := t.TempDir()
+	in := filepath.Join(dir, "steel.xlsx")
+	f, err := os.Create(in)
+	require.NoError(t, err)
+	require.NoError(t, workbook.WriteNew(f, small(t).Sheets("depot-sized.xlsx")))
+	require.NoError(t, f.Close())
+	text, err := exec.Command(office, "-env:UserInstallation=file://"+filepath.ToSlash(filepath.Join(dir, "profile")),
+		"--headless", "--convert-to", "csv", "--outdir", dir, in).CombinedOutput()
+	require.NoError(t, err, string(text))
+	got, err := os.ReadFile(filepath.Join(dir, "steel.csv"))
+	require.NoError(t, err)
+	for _, line := range []string{
+		"net,,,6,7,33.0005,,1.470203,28.041741,1609.1445,2.57285525",
+		"UKC,254x254x89 UKC,S355,1,2,10.2,88.9,0.90678,15.334644,1360.17,1.586865",
+		"CHS CF,CHS 139.7x6.3 CF,S355,4,4,19.2,20.7,0.39744,8.426504,no rate,0.69552",
+		"all,,,6,7,33.0005,,1.470203,28.041741,1609.1445,2.57285525",
+	} {
+		assert.Contains(t, string(got), line)
+	}
 }
 
 func TestEmptySheets(t *testing.T) {

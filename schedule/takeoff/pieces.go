@@ -6,6 +6,7 @@ import (
 	"strings"
 
 	"stanchion/catalogue"
+	"stanchion/design/building"
 )
 
 // Piece is a piece of steel as it is delivered: one column length, or several
@@ -34,11 +35,12 @@ type Splice struct {
 
 // assemble puts column lengths together to pieces, and finds the splices
 // between those of one stack.
-func assemble(items []Item, one []Amounts) (pieces []Piece, splices []Splice) {
+func assemble(items []Item, one []Amounts, o *Options) (pieces []Piece, splices []Splice) {
 	above := stackLinks(items)
+	storey := storeys(above)
 	lower := make([]bool, len(items)) // something stands below, in the same piece
 	for i := range items {
-		if j := above[i]; j >= 0 && runsThrough(&items[i], &items[j]) {
+		if j := above[i]; j >= 0 && o.runsThrough(&items[i], &items[j], storey[i]) {
 			lower[j] = true
 		}
 	}
@@ -77,11 +79,40 @@ func spliceOf(lower, upper *Item) Splice {
 	}
 }
 
-// runsThrough reports whether one piece can go through two lengths: the
-// schedule says where the splices are, and there is none between them.
-func runsThrough(lower, upper *Item) bool {
-	return lower.SpliceSaid && !lower.Splice && lower.Section == upper.Section &&
-		lower.Grade == upper.Grade && lower.Quantity == upper.Quantity
+// runsThrough reports whether one piece goes through two lengths: their
+// section is one, and the rule for splices has none between them. storey counts
+// the lower length from the bottom of its line, from 0.
+func (o *Options) runsThrough(lower, upper *Item, storey int) bool {
+	if lower.Section != upper.Section || lower.Grade != upper.Grade || lower.Quantity != upper.Quantity {
+		return false
+	}
+	switch o.Splices {
+	case building.EveryNth:
+		return o.Every > 0 && (storey+1)%o.Every != 0
+	case building.WhereItPays:
+		return true
+	}
+	return lower.SpliceSaid && !lower.Splice
+}
+
+// storeys counts the lengths of every line from its bottom.
+func storeys(above []int) []int {
+	stands := make([]bool, len(above))
+	for _, j := range above {
+		if j >= 0 {
+			stands[j] = true
+		}
+	}
+	storey := make([]int, len(above))
+	for i := range above {
+		if stands[i] {
+			continue
+		}
+		for j, n := i, 0; j >= 0; j, n = above[j], n+1 {
+			storey[j] = n
+		}
+	}
+	return storey
 }
 
 // line names the column line that a length belongs to: its stack or, where

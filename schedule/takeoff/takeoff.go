@@ -8,6 +8,7 @@ import (
 
 	"stanchion/catalogue"
 	"stanchion/design"
+	"stanchion/design/building"
 )
 
 // Options say what is asked of a take-off.
@@ -16,6 +17,11 @@ type Options struct {
 	Connections float64      // allowance for plates, bolts and welds, as a part of the net mass
 	Waste       float64      // allowance for cutting, as a part of the net mass
 	Transport   float64      // longest piece that can be brought, mm; 0: not limited
+
+	// Splices is the rule by which the stacks were sized: as scheduled, above
+	// every n-th length (Every), or wherever the section changes.
+	Splices building.Splices
+	Every   int
 }
 
 // TakeOff is the steel of a schedule.
@@ -82,7 +88,7 @@ func Of(items []Item, leftOut []LeftOut, o Options) *TakeOff {
 	for i := range items {
 		one[i] = t.weigh(&items[i])
 	}
-	pieces, splices := assemble(items, one)
+	pieces, splices := assemble(items, one, &o)
 	t.Splices = splices
 	t.bySection(pieces)
 	t.byLevel(items, one)

@@ -12,6 +12,7 @@ import (
 
 	"stanchion/catalogue"
 	"stanchion/design"
+	"stanchion/design/building"
 )
 
 func section(t testing.TB, name string) *catalogue.Section {
@@ -295,4 +296,25 @@ func TestMarkName(t *testing.T) {
 	for _, c := range [][3]string{{"C1", "A/3", "C1 A/3"}, {"A3-01", "A3", "A3-01"}, {"C3", "C", "C3 C"}, {"A31", "A3", "A31 A3"}, {"A3", "A3", "A3"}, {"C1", "", "C1"}} {
 		assert.Equal(t, c[2], MarkName(c[0], c[1]))
 	}
+}
+
+// The setting for splices joins lengths as the schedule's own column does.
+func TestRulesForSplices(t *testing.T) {
+	var items []Item
+	for i, name := range []string{"254x254x89 UKC", "254x254x89 UKC", "254x254x89 UKC", "203x203x46 UKC", "203x203x46 UKC"} {
+		items = append(items, item(t, fmt.Sprint(i+1), "A", fmt.Sprint("L", i), fmt.Sprint("L", i+1), 1, 3000, name))
+	}
+	marks := func(o Options) (list []string) {
+		for _, c := range Of(items, nil, o).Cuts {
+			list = append(list, c.Marks...)
+		}
+		slices.Sort(list)
+		return list
+	}
+	assert.Equal(t, []string{"1", "2", "3", "4", "5"}, marks(Options{}))
+	assert.Equal(t, []string{"1 + 2", "3", "4", "5"}, marks(Options{Splices: building.EveryNth, Every: 2}))
+	assert.Equal(t, []string{"1 + 2 + 3", "4 + 5"}, marks(Options{Splices: building.EveryNth, Every: 3}))
+	assert.Equal(t, []string{"1 + 2 + 3", "4 + 5"}, marks(Options{Splices: building.WhereItPays}))
+	slices.Reverse(items)
+	assert.Equal(t, []string{"1 + 2", "3", "4", "5"}, marks(Options{Splices: building.EveryNth, Every: 2}))
 }
