@@ -15,6 +15,11 @@ const PassTolerance = 1e-9
 // Passes reports whether a utilisation is within a limit.
 func Passes(utilisation, limit float64) bool { return utilisation <= limit*(1+PassTolerance) }
 
+// exceeds reports whether a utilisation is greater than another by more than
+// the rounding of arithmetic: equal segments have lengths that differ in their
+// last digit, and that must not decide which of them governs.
+func exceeds(u, other float64) bool { return u > other*(1+PassTolerance) }
+
 // Limit returns the utilisation limit of a column: its own, else the
 // settings', else 1.
 func Limit(col *design.Column, set *design.Settings) float64 {
@@ -114,7 +119,7 @@ func (a *Assessment) refuse(clause, reason string) {
 // governs, since checks are made in that order. The class is that which the
 // check rests on.
 func (a *Assessment) record(check design.Check, class int) {
-	if a.Governing.Kind == design.KindNone || check.Utilisation > a.Utilisation {
+	if a.Governing.Kind == design.KindNone || exceeds(check.Utilisation, a.Utilisation) {
 		a.Governing, a.Utilisation, a.Class = check, check.Utilisation, class
 	}
 	a.Checks = append(a.Checks, check)

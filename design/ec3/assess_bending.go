@@ -104,7 +104,7 @@ func (m *Member) sections(c *Candidate, a *Assessment, b *bending) {
 			s := c.bendSection(n, my, mz, vz, vy)
 			check := design.Check{Kind: design.CrossSection, Clause: s.clause(c.Section.Shape), Combination: b.combination,
 				From: x, To: x, NEd: n, Utilisation: s.Utilisation}
-			if a.Section.Class == 0 || s.Utilisation > a.Section.Utilisation {
+			if a.Section.Class == 0 || exceeds(s.Utilisation, a.Section.Utilisation) {
 				a.Section = s
 			}
 			a.record(check, s.Class)
@@ -175,7 +175,7 @@ func (m *Member) lateralChecks(c *Candidate, a *Assessment, b *bending) {
 		class, _ := c.CombinedClass(n, true, mz > 0)
 		lt := c.lateral(my, s.Lcr, class, m.Settings)
 		lt.From, lt.To, lt.Combination = s.From, s.To, s.Combination
-		if a.Lateral.Class == 0 || lt.Utilisation > a.Lateral.Utilisation {
+		if a.Lateral.Class == 0 || exceeds(lt.Utilisation, a.Lateral.Utilisation) {
 			a.Lateral = lt
 		}
 		if bucklesLaterally(c.Section) {
@@ -226,7 +226,7 @@ func (m *Member) interaction(c *Candidate, a *Assessment, y, z, t *Segment, b *b
 		return
 	}
 	a.interactions = append(a.interactions, x)
-	if a.Interaction.Class == 0 || x.worst() > a.Interaction.worst() {
+	if a.Interaction.Class == 0 || exceeds(x.worst(), a.Interaction.worst()) {
 		a.Interaction = x
 	}
 }

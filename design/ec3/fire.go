@@ -226,7 +226,7 @@ func (f *fireAssessment) class4(modes []fireMode) {
 		nbRd := c.resistance(b.ncr, b.curve)
 		check := design.Check{Kind: b.kind, Clause: "EN 1993-1-2, 4.2.3.6", Combination: b.segment.Combination,
 			From: b.segment.From, To: b.segment.To, Ed: b.nEd, Rd: nbRd, Utilisation: b.nEd / nbRd}
-		if check.Utilisation > most.Utilisation {
+		if exceeds(check.Utilisation, most.Utilisation) {
 			most = check
 		}
 	}

@@ -111,7 +111,7 @@ func (a *Assessment) buckle(axis int, kind design.Kind, s *Segment, nEd, ncr flo
 	}
 	worst, from := a.slot(axis)
 	u, most := max(nEd, 0)/nbRd, worst.Utilisation()
-	if *from != nil && u <= most && (u > 0 || most > 0 || nbRd >= worst.NbRd) {
+	if *from != nil && !exceeds(u, most) && (u > 0 || most > 0 || !exceeds(worst.NbRd, nbRd)) {
 		return false
 	}
 	*worst, *from = Reduce(c.NRk, ncr, c.GammaM1, curve), s

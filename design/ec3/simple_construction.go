@@ -113,7 +113,7 @@ func (m *Member) simplified(c *Candidate, a *Assessment, b *bending) Simple {
 	for i := range a.SegT {
 		if s := &a.SegT[i]; s.Combination == b.combination {
 			lt := c.lateral(between(b.my, s.From, s.To, m.Length), s.Lcr, x.Class, m.Settings)
-			if x.MbRd == 0 || lt.Utilisation > x.TermY {
+			if x.MbRd == 0 || exceeds(lt.Utilisation, x.TermY) {
 				lt.From, lt.To, lt.Combination = s.From, s.To, s.Combination
 				x.TermY, x.MbRd, x.LT = lt.Utilisation, lt.MbRd, lt
 			}
@@ -148,7 +148,7 @@ func (m *Member) assessSimple(c *Candidate, a *Assessment) {
 		b, _ := m.moments(c, i)
 		x := m.simplified(c, a, &b)
 		x.PinnedBase = a.scopes[i].pinned
-		if a.Simple.Class == 0 || x.Utilisation > a.Simple.Utilisation {
+		if a.Simple.Class == 0 || exceeds(x.Utilisation, a.Simple.Utilisation) {
 			a.Simple = x
 		}
 		a.record(design.Check{Kind: design.SimpleConstruction, Clause: "NCCI SN048", Combination: i,
