@@ -8,7 +8,15 @@ import (
 
 // ResultColumns returns the result columns in their order.
 func ResultColumns(o ResultOptions) []ResultColumn {
-	cols := underGroup("Section", chosenColumns())
+	outcome := outcomeColumns()
+	status, note := outcome[:1], outcome[1:]
+	var cols []ResultColumn
+	if o.StatusFirst {
+		cols = underGroup("Outcome", append(status, chosenColumns()...))
+	} else {
+		cols = underGroup("Section", chosenColumns())
+		note = outcome
+	}
 	cols = append(cols, underGroup("Governing check", governingColumns())...)
 	cols = append(cols, underGroup("Buckling", bucklingColumns())...)
 	cols = append(cols, underGroup("Steel", sectionColumns())...)
@@ -19,7 +27,10 @@ func ResultColumns(o ResultOptions) []ResultColumn {
 	if o.Fire {
 		cols = append(cols, underGroup("Fire", fireColumns())...)
 	}
-	return append(cols, underGroup("Outcome", outcomeColumns())...)
+	if o.StatusFirst {
+		return append(cols, underGroup("Remarks", note)...)
+	}
+	return append(cols, underGroup("Outcome", note)...)
 }
 
 // underGroup puts columns under one heading.
@@ -151,6 +162,9 @@ func governingCombination(m *Member, r *design.Result) string {
 	}
 	return ""
 }
+
+// CombinationName names the combination of the governing check; empty: none.
+func CombinationName(m *Member, r *design.Result) string { return governingCombination(m, r) }
 
 func governingSegment(_ *Member, r *design.Result) string {
 	if r.Governing.Kind == design.KindNone || r.Governing.To <= r.Governing.From {

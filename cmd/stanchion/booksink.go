@@ -7,6 +7,7 @@ import (
 	"io"
 	"os"
 	"path/filepath"
+	"slices"
 
 	"stanchion/design"
 	"stanchion/schedule"
@@ -28,10 +29,13 @@ type bookSink struct {
 	cols  []schedule.ResultColumn
 	lines []summary.Line
 	rows  map[int]int // of the sheet, to the member
+
+	status int // column of the block that holds the status
 }
 
 func newBookSink(r *run, src *bookSource, w io.Writer, cols []schedule.ResultColumn) *bookSink {
-	return &bookSink{run: r, book: src.Book, w: w, cols: cols, rows: map[int]int{}}
+	status := slices.IndexFunc(cols, func(c schedule.ResultColumn) bool { return c.Name == "status" })
+	return &bookSink{run: r, book: src.Book, w: w, cols: cols, rows: map[int]int{}, status: status}
 }
 
 func (s *bookSink) put(m *schedule.Member, res *design.Result) error {
@@ -47,9 +51,15 @@ func (s *bookSink) finish(ctx context.Context) error {
 	for row := range s.rows {
 		last = max(last, row)
 	}
+	info, err := s.run.info()
+	if err != nil {
+		return err
+	}
+	var own *summary.Sheets
 	plan := s.run.plan
 	place, err := s.book.Plan(workbook.Block{
 		Sheet: plan.Sheet, Header: plan.Header, LastRow: last, Title: s.run.blockTitle(), Columns: s.cols, Cells: s.cells(),
+		Link: func(row int) (int, string) { return s.link(own, row) },
 	})
 	if err != nil {
 		return err
@@ -57,22 +67,31 @@ func (s *bookSink) finish(ctx context.Context) error {
 	for _, w := range place.Warnings() {
 		s.run.con.say("note: %s", w)
 	}
-	info, err := s.run.info()
-	if err != nil {
-		return err
-	}
-	return place.WriteTo(&stopper{ctx, s.w}, s.sheets(info, place))
+	info.SheetName = place.SheetName
+	own, sheets := s.ownSheets(info, place)
+	return place.WriteTo(&stopper{ctx, s.w}, sheets)
 }
 
-// sheets are the project's own: the summary, the take-off, and what a person
-// must look at.
-func (s *bookSink) sheets(info *summary.Info, place *workbook.Plan) []workbook.Sheet {
-	overview, problems := summary.Sheets(info, s.run.tally, s.lines)
-	sheets := append([]workbook.Sheet{overview}, s.run.steelOf(s.lines).Sheets(info.File)...)
-	if len(s.run.curve) > 0 {
-		sheets = append(sheets, s.run.sizesTable().Page(place.SheetName(tradeoff.Sheet)))
+// link leads from the status of a member to where more is said of it.
+func (s *bookSink) link(own *summary.Sheets, row int) (column int, place string) {
+	i, ok := s.rows[row]
+	if !ok || row != s.lines[i].Member.Rows[0] {
+		return 0, ""
 	}
-	return append(sheets, problems)
+	return s.status, own.Place(i)
+}
+
+// ownSheets are the project's own, in their order: what came of the run, the
+// members, the steel, what a person must look at, and the charts.
+func (s *bookSink) ownSheets(info *summary.Info, place *workbook.Plan) (*summary.Sheets, []workbook.Sheet) {
+	steel := s.run.steelOf(s.lines)
+	own := summary.NewSheets(info, s.run.tally, s.lines, steel)
+	list := []workbook.Sheet{own.Summary, own.Problems, own.Results, own.Sizes}
+	list = append(list, steel.Sheets(info.File)...)
+	if len(s.run.curve) > 0 {
+		list = append(list, s.run.sizesTable().Page(place.SheetName(tradeoff.Sheet)))
+	}
+	return own, append(list, own.Charts, own.ChartData)
 }
 
 // steelOf counts the steel of members as they were designed.
@@ -132,6 +151,7 @@ func (r *run) info() (*summary.Info, error) {
 		Settings: r.plan.Settings.Used(),
 		Reading:  &r.plan.Summary,
 		Cautions: []string{caution, notCovered},
+		Limit:    r.plan.Settings.Design.Limit,
 	}, nil
 }
 

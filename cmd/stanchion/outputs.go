@@ -213,8 +213,9 @@ func (r *run) scheduleSink(w io.Writer) (sink, error) {
 func (r *run) resultOptions() schedule.ResultOptions {
 	set := &r.plan.Settings.Design
 	return schedule.ResultOptions{
-		Reserve: r.mode == search.Check || r.plan.Settings.Together.Reserve,
-		Fire:    set.FireRatio > 0 || set.FirePeriod > 0 || r.hasField("eta_fi") || r.hasField("Fire period"),
+		Reserve:     r.mode == search.Check || r.plan.Settings.Together.Reserve,
+		StatusFirst: !r.isText(),
+		Fire:        set.FireRatio > 0 || set.FirePeriod > 0 || r.hasField("eta_fi") || r.hasField("Fire period"),
 	}
 }
 

@@ -5,6 +5,7 @@ import (
 	"strconv"
 
 	"stanchion/design"
+	"stanchion/schedule"
 	"stanchion/schedule/workbook"
 )
 
@@ -69,13 +70,8 @@ func (p *page) reading(info *Info) {
 	p.Blank()
 	p.Headings("Reading", "")
 	p.Row(workbook.TextCell("rows of members"), workbook.TextCell(strconv.Itoa(s.Rows)))
-	for _, c := range []struct {
-		what string
-		n    int
-	}{{"hidden rows, designed too", s.Hidden}, {"total rows passed over", s.Totals}, {"repeated headers passed over", s.Repeated}, {"footnotes passed over", s.Footnotes}} {
-		if c.n > 0 {
-			p.Row(workbook.TextCell(c.what), workbook.TextCell(strconv.Itoa(c.n)))
-		}
+	for _, c := range passedOver(s) {
+		p.Row(workbook.TextCell(c.what), workbook.TextCell(strconv.Itoa(c.n)))
 	}
 	for _, h := range s.LeftAlone {
 		p.Row(workbook.TextCell("left alone"), workbook.Cell{Value: fmt.Sprintf("%s %q: %s", h.Cell, h.Heading, h.Why)})
@@ -86,6 +82,23 @@ func (p *page) reading(info *Info) {
 	for _, n := range s.Notes {
 		p.Row(workbook.TextCell("note"), workbook.Cell{Value: n})
 	}
+}
+
+// counted is how many rows there are of a kind.
+type counted struct {
+	what string
+	n    int
+}
+
+// passedOver counts what is worth a look among the rows.
+func passedOver(s *schedule.Summary) []counted {
+	var out []counted
+	for _, c := range []counted{{"hidden rows, designed too", s.Hidden}, {"total rows passed over", s.Totals}, {"repeated headers passed over", s.Repeated}, {"footnotes passed over", s.Footnotes}} {
+		if c.n > 0 {
+			out = append(out, c)
+		}
+	}
+	return out
 }
 
 func (p *page) cautions(info *Info) {

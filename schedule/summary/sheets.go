@@ -3,6 +3,7 @@ package summary
 import (
 	"stanchion/design"
 	"stanchion/schedule"
+	"stanchion/schedule/takeoff"
 	"stanchion/schedule/workbook"
 )
 
@@ -17,18 +18,57 @@ type Info struct {
 	Settings []schedule.SettingLine
 	Reading  *schedule.Summary
 	Cautions []string
+	Limit    float64 // of utilisation, where a row gives none; 0: 1.00
+	// SheetName returns the name under which a sheet of ours will stand; nil:
+	// the one that it wants.
+	SheetName func(wanted string) string
+}
+
+func (i *Info) sheetName(wanted string) string {
+	if i.SheetName == nil {
+		return wanted
+	}
+	return i.SheetName(wanted)
 }
 
 // The names that the sheets want.
 const (
-	SummarySheet  = "Summary"
-	ProblemsSheet = "Problems"
+	SummarySheet   = "Summary"
+	ResultsSheet   = "Results"
+	SizesSheet     = "Sizes"
+	ProblemsSheet  = "Problems"
+	ChartsSheet    = "Charts"
+	ChartDataSheet = "Chart data"
 )
 
-// Sheets lays out the summary and what a person must look at. lines are all
-// members with their results.
-func Sheets(info *Info, t *Tally, lines []Line) (overview, problems workbook.Sheet) {
-	return summarySheet(info, t), problemsSheet(info, lines)
+// Sheets are the project's own sheets on what a run found.
+type Sheets struct {
+	Summary, Results, Sizes, Problems, Charts, ChartData workbook.Sheet
+
+	lines    []Line
+	problems map[*Line]string
+	results  string // name of the sheet of results
+}
+
+// NewSheets lays out the sheets. lines are all members with their results,
+// steel is what they come to.
+func NewSheets(info *Info, t *Tally, lines []Line, steel *takeoff.TakeOff) *Sheets {
+	s := &Sheets{lines: lines, results: info.sheetName(ResultsSheet)}
+	s.Problems, s.problems = problemsSheet(info, lines)
+	s.Summary = summarySheet(info, t)
+	s.Results = resultsSheet(info, lines, s.problems)
+	s.Sizes = sizesSheet(info, lines, steel)
+	s.Charts, s.ChartData = chartSheets(info, lines, steel)
+	return s
+}
+
+// Place returns where a member, numbered from 0, is to be looked at: among the
+// problems if it has one, else among the results.
+func (s *Sheets) Place(member int) string {
+	if to := s.problems[&s.lines[member]]; to != "" {
+		return to
+	}
+	return ResultsPlace(s.results, member)
 }
 
 // The number formats of the sheets.
@@ -46,5 +86,5 @@ func number(x float64, format string) workbook.Cell {
 // outcome is a status as the results show it.
 func outcome(s design.Status) workbook.Cell {
 	role := [...]workbook.Role{design.Passes: workbook.Passes, design.Fails: workbook.Fails, design.NoSection: workbook.NoSection, design.NotRead: workbook.NotRead}[s]
-	return workbook.Cell{Value: s.String(), Look: workbook.Look{Role: role}}
+	return workbook.Cell{Value: s.String(), Look: workbook.Look{Role: role, Align: workbook.Left}}
 }

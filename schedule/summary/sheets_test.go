@@ -5,10 +5,10 @@ import (
 	"testing"
 
 	"github.com/stretchr/testify/assert"
-	"github.com/stretchr/testify/require"
 
 	"stanchion/design"
 	"stanchion/schedule"
+	"stanchion/schedule/takeoff"
 	"stanchion/schedule/workbook"
 )
 
@@ -28,7 +28,7 @@ func TestSheets(t *testing.T) {
 			design.Result{Status: design.Passes, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: 0.9}},
 		{&schedule.Member{Column: design.Column{Mark: "B", Cell: "C'1!A3", Quantity: 1, Length: 4000}},
 			design.Result{Status: design.Fails, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: math.Inf(1), Notes: []string{"outside the rules"}}},
-		{&schedule.Member{Column: design.Column{Mark: "C", Cell: "C'1!A4"}, Problems: []*schedule.Problem{{Cell: "C'1!C4", What: "N_Ed is missing"}}},
+		{&schedule.Member{Column: design.Column{Mark: "C", Cell: "C'1!A4"}, Problems: []*schedule.Problem{{Cell: "C'1!C4", What: "N_Ed is missing", Do: "give it"}}},
 			design.Result{Status: design.NotRead}},
 	}
 	for i := range lines {
@@ -37,16 +37,25 @@ func TestSheets(t *testing.T) {
 	info := &Info{Program: "stanchion devel", File: "loads.xlsx", Sheet: "C'1", National: &design.National{Name: "UK", Source: "the annex"},
 		Settings: []schedule.SettingLine{{Name: "limit", Value: "1.00", From: "default"}}, Cautions: []string{"Check it."},
 		Reading: &schedule.Summary{Rows: 3, Totals: 1, Notes: []string{"a note"}}}
-	overview, problems := Sheets(info, y, lines)
+	steel := takeoff.Of(nil, nil, takeoff.Options{})
+	own := NewSheets(info, y, lines, steel)
 
-	assert.Subset(t, texts(&overview, 1), []any{"loads.xlsx", "C'1", "UK: the annex", 1.0, 3.0, "1.00"})
-	assert.Subset(t, texts(&overview, 0), []any{"passes", "fails", "no section", "not read", "UKC", "limit", "total rows passed over", "note", "Check it."})
+	assert.Subset(t, texts(&own.Summary, 1), []any{"loads.xlsx", "C'1", "UK: the annex", 1.0, 3.0, "1.00"})
+	assert.Subset(t, texts(&own.Summary, 0), []any{"passes", "fails", "no section", "not read", "UKC", "limit", "total rows passed over", "note", "Check it."})
 
-	require.Len(t, problems.Rows, 5) // title, blank, headings, two members
-	failing, unread := problems.Rows[3], problems.Rows[4]
+	failing, unread := own.Problems.Rows[3], own.Problems.Rows[4] // below title, blank, headings
 	assert.Equal(t, "'C''1'!A3", failing[0].Link)
+	assert.Equal(t, "'Results'!G6", failing[4].Link)
 	assert.Equal(t, "", failing[5].Value, "an endless utilisation is no number")
 	assert.Equal(t, "outside the rules", failing[7].Value)
+	assert.Equal(t, "'C''1'!C4", unread[0].Link, "to the cell that could not be read")
 	assert.Equal(t, "not read", unread[3].Value)
-	assert.Contains(t, unread[7].Value, "N_Ed is missing")
+	assert.Equal(t, []any{"N_Ed is missing", "give it"}, []any{unread[7].Value, unread[8].Value})
+	assert.Subset(t, texts(&own.Problems, 0), []any{"Passed over", "total rows passed over", "note: a note"})
+
+	assert.Equal(t, "'Results'!G5", own.Place(0))
+	assert.Equal(t, "'Problems'!A4", own.Place(1))
+	assert.Equal(t, "'Problems'!A4", own.Results.Rows[5][statusColumn].Link)
+	assert.Equal(t, "outside the rules", own.Results.Rows[5][statusColumn].Note)
+	assert.Equal(t, "passes", own.Results.Rows[4][statusColumn].Value)
 }

@@ -85,6 +85,16 @@ func (o *own) print(s *Sheet, name string) error {
 	if err := o.file.SetPageLayout(name, layout); err != nil {
 		return err
 	}
+	side, top, foot, mark := 0.4, 0.5, 0.6, 0.3 // inches
+	margins := &excelize.PageLayoutMarginsOptions{Left: &side, Right: &side, Top: &top, Bottom: &foot, Header: &mark, Footer: &mark}
+	if err := o.file.SetPageMargins(name, margins); err != nil {
+		return err
+	}
+	for _, row := range s.Breaks {
+		if err := o.file.InsertPageBreak(name, cellName(0, row)); err != nil {
+			return err
+		}
+	}
 	if s.RepeatRows > 0 {
 		err := o.file.SetDefinedName(&excelize.DefinedName{
 			Name: "_xlnm.Print_Titles", Scope: name,
@@ -166,6 +176,13 @@ func (o *own) rules(s *Sheet, name string) error {
 }
 
 func (o *own) charts(s *Sheet, name string) error {
+	if len(s.Charts) > 0 { // it asks the library how high the rows are
+		for _, r := range sortedKeys(s.Heights) {
+			if err := o.file.SetRowHeight(name, r, s.Heights[r]); err != nil {
+				return err
+			}
+		}
+	}
 	for _, c := range s.Charts {
 		if err := o.file.AddChart(name, c.Cell, c.Chart, c.Combo...); err != nil {
 			return err

@@ -6,39 +6,75 @@ import (
 )
 
 // Page is a Sheet being filled from the top.
-type Page struct{ Sheet }
+type Page struct {
+	Sheet
+	spans [][2]int // merged columns of the last row
+}
 
 // NewPage starts a page with a title and columns of these widths.
 func NewPage(name, title string, widths ...float64) *Page {
-	p := &Page{Sheet{Name: name, Widths: widths, PagesWide: 1}}
+	p := &Page{Sheet: Sheet{Name: name, Widths: widths, PagesWide: 1}}
 	p.Row(Cell{Value: title, Look: Look{Role: Title}})
 	return p
 }
 
-// Row adds a row, as high as its longest wrapped text needs: not every
-// spreadsheet program finds that by itself.
+// Row adds a row, high enough for the texts that may need several lines: not
+// every spreadsheet program sees to that on opening.
 func (p *Page) Row(cells ...Cell) {
 	p.Rows = append(p.Rows, cells)
-	lines := 1
-	for c := range cells {
-		if text, ok := cells[c].Value.(string); ok && cells[c].Look.Wrap && c < len(p.Widths) {
-			lines = max(lines, linesAt(splitWords(text), max(1, int(p.Widths[c])-2)))
-		}
-	}
-	p.high(lines)
+	p.spans = p.spans[:0]
+	p.fit()
 }
 
-// high makes the last row so many lines high.
-func (p *Page) high(lines int) {
-	if lines < 2 {
-		return
+// fit gives the last row the height that its texts need.
+func (p *Page) fit() {
+	n := len(p.Rows)
+	lines := 1
+	for i, c := range p.Rows[n-1] {
+		if text, ok := c.Value.(string); ok && c.Look.Wrap && i < len(p.Widths) {
+			lines = max(lines, linesIn(text, p.widthOf(i)-2))
+		}
 	}
+	delete(p.Heights, n)
+	if lines > 1 {
+		p.setHeight(n, lines)
+	}
+}
+
+// widthOf returns the width of a cell of the last row, merged or not.
+func (p *Page) widthOf(col int) float64 {
+	last := col
+	for _, s := range p.spans {
+		if s[0] == col {
+			last = s[1]
+		}
+	}
+	width := 0.0
+	for _, w := range p.Widths[col:min(last+1, len(p.Widths))] {
+		width += w
+	}
+	return width
+}
+
+// linesIn returns how many lines a text takes in a column of that width, by
+// the words that fit on each.
+func linesIn(text string, width float64) int {
+	lines := 0
+	for _, line := range strings.Split(text, "\n") {
+		lines += linesAt(splitWords(line), max(1, int(width)))
+	}
+	return lines
+}
+
+// setHeight makes a row high enough for so many lines.
+func (p *Page) setHeight(row, lines int) {
 	if p.Heights == nil {
 		p.Heights = map[int]float64{}
 	}
-	const points, most = 15.5, 409 // of a line; of a row, as spreadsheets have it
-	p.Heights[len(p.Rows)] = min(points*float64(lines), most)
+	p.Heights[row] = min(409, lineOfPage*float64(lines)) // 409 points is the most that a row can have
 }
+
+const lineOfPage = 15.5 // points
 
 // Blank leaves a row out.
 func (p *Page) Blank() { p.Row() }
@@ -58,6 +94,9 @@ func (p *Page) Headings(texts ...string) {
 	p.Row(cells...)
 }
 
+// HeadingLines gives the last row, of headings, room for so many lines.
+func (p *Page) HeadingLines(lines int) { p.setHeight(len(p.Rows), lines) }
+
 // Totals adds a row of sums.
 func (p *Page) Totals(cells ...Cell) {
 	for i := range cells {
@@ -69,12 +108,6 @@ func (p *Page) Totals(cells ...Cell) {
 // Across adds a text over the first columns of the page, as high as it needs.
 func (p *Page) Across(columns int, c Cell) {
 	p.Row(c)
-	p.Rows[len(p.Rows)-1][0].Look.Wrap = true
-	wide := 0.0
-	for _, w := range p.Widths[:min(columns, len(p.Widths))] {
-		wide += w
-	}
-	p.high(linesAt(splitWords(fmt.Sprint(c.Value)), max(1, int(wide)-2)))
 	p.Span(0, columns-1)
 }
 
@@ -82,6 +115,8 @@ func (p *Page) Across(columns int, c Cell) {
 func (p *Page) Span(from, to int) {
 	n := len(p.Rows)
 	p.Merges = append(p.Merges, fmt.Sprintf("%s%d:%s%d", columnName(from), n, columnName(to), n))
+	p.spans = append(p.spans, [2]int{from, to})
+	p.fit()
 }
 
 // Freeze keeps the rows so far in view and repeats them on every printed page.

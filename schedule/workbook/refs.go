@@ -41,7 +41,9 @@ func (a area) absolute() string {
 	return "$" + columnName(a.firstCol) + "$" + strconv.Itoa(a.firstRow) + ":$" + columnName(a.lastCol) + "$" + strconv.Itoa(a.lastRow)
 }
 
-// columnName returns the letters of a column counted from 0.
+// ColumnName returns the letters of a column counted from 0.
+func ColumnName(col int) string { return columnName(col) }
+
 func columnName(col int) string {
 	return string(appendColumn(nil, col))
 }
@@ -128,7 +130,9 @@ func parseArea(ref string) (area, bool) {
 	return a, n1 > 0 && n1 == len(from) && n2 > 0 && n2 == len(to) && a.lastCol < maxColumns
 }
 
-// quoted returns a sheet's name as it stands in a formula.
+// Quoted returns a sheet's name as it stands in a formula.
+func Quoted(sheet string) string { return quoted(sheet) }
+
 func quoted(sheet string) string {
 	return "'" + strings.ReplaceAll(sheet, "'", "''") + "'"
 }

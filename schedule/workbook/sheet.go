@@ -16,7 +16,8 @@ type Sheet struct {
 	Filter                 string // range with a filter on its first row
 	RepeatRows             int    // rows repeated on every printed page
 	Landscape              bool
-	PagesWide              int // pages that the width is fitted to; 0: as it comes
+	PagesWide              int   // pages that the width is fitted to; 0: as it comes
+	Breaks                 []int // rows, from 1, that begin a printed page
 	A3                     bool
 	Footer                 string // left part of the footer; the page number stands at the right
 
