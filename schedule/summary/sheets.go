@@ -35,7 +35,7 @@ func (i *Info) sheetName(wanted string) string {
 const (
 	SummarySheet   = "Summary"
 	ResultsSheet   = "Results"
-	SizesSheet     = "Sizes"
+	SizesSheet     = "Sizes used"
 	ProblemsSheet  = "Problems"
 	ChartsSheet    = "Charts"
 	ChartDataSheet = "Chart data"

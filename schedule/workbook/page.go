@@ -107,6 +107,7 @@ func (p *Page) Totals(cells ...Cell) {
 
 // Across adds a text over the first columns of the page, as high as it needs.
 func (p *Page) Across(columns int, c Cell) {
+	c.Look.Wrap = true
 	p.Row(c)
 	p.Span(0, columns-1)
 }
