@@ -106,7 +106,7 @@ func (c *Comparison) changesSheet(info *Info) workbook.Sheet {
 	}
 	for _, k := range c.Candidates {
 		old, new := &c.Old.Members[k.Old], &c.New.Members[k.New]
-		word := workbook.Cell{Value: bare(k.Likeness), Look: workbook.Look{Role: workbook.Perhaps}}
+		word := worded(bare(k.Likeness), workbook.Perhaps)
 		p.Row(append(memberCells(word, new, linked(new, info)), workbook.TextCell(old.SectionName()), blank(), blank(), blank(), blank(), blank(),
 			workbook.WordsCell(fmt.Sprintf("was %s? %s", old.Name(), k.Why)))...)
 	}
