@@ -52,36 +52,31 @@ func moduli(class int) (wy, wz string) {
 	return "W_eff,y", "W_eff,z"
 }
 
-// modulus writes the section moduli of a class about the axes that are bent.
+// modulus writes the section moduli of a class about the axes that are bent,
+// unless they stand above.
 func (w *writer) modulus(class int, y, z bool) {
 	s := w.c.Section
 	wy, wz := s.WplY, s.WplZ
-	switch {
-	case class == 3:
+	if class == 3 {
 		wy, wz = s.WelY, s.WelZ
-	case class == 4:
-		wy, wz = w.c.WEffY, w.c.WEffZ
 	}
 	symbolY, symbolZ := moduli(class)
-	var list Values
-	add := func(symbol string, modulus float64) {
-		if _, ok := w.known[formula.Sym(symbol)]; !ok {
-			list = append(list, w.value(symbol, modulus, Cm3))
-		}
+	unknown := func(symbol string) bool { _, ok := w.known[sym(symbol)]; return !ok }
+	y, z = y && unknown(symbolY), z && unknown(symbolZ)
+	if class == 4 {
+		w.effectiveModuli(y, z)
+		return
 	}
+	var list Values
 	if y {
-		add(symbolY, wy)
+		list = append(list, w.value(symbolY, wy, Cm3))
 	}
 	if z {
-		add(symbolZ, wz)
+		list = append(list, w.value(symbolZ, wz, Cm3))
 	}
-	if len(list) == 0 {
-		return // they stand above
+	if len(list) > 0 {
+		w.add(list)
 	}
-	if class == 4 {
-		list[0].Note = "EN 1993-1-5 4.4, each in bending about its axis alone"
-	}
-	w.add(list)
 }
 
 // combinedClass writes the class under an axial force together with moments.

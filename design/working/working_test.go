@@ -22,12 +22,6 @@ func settings(t require.TestingT) design.Settings {
 	return design.Settings{National: uk, Grades: []string{"S355"}, Families: []string{"UKC"}, Limit: 1, Growth: 1}
 }
 
-func section(t require.TestingT, name string) *catalogue.Section {
-	s, err := catalogue.Default().Find(name, catalogue.FindOptions{})
-	require.NoError(t, err)
-	return s
-}
-
 // sheetOf works a column out in a section, as a run would.
 func sheetOf(t require.TestingT, col *design.Column, s *catalogue.Section, grade string, set *design.Settings) *working.Sheet {
 	g, err := material.Parse(grade)

@@ -79,13 +79,8 @@ func (w *writer) noted(symbol string, exact float64, u Unit, note string) Value 
 	return v
 }
 
-// forget drops symbols, so that a formula with them cannot use a value that
-// belongs elsewhere.
-func (w *writer) forget(symbols ...string) {
-	for _, s := range symbols {
-		delete(w.known, formula.Sym(s))
-	}
-}
+// sym reads a symbol.
+func sym(s string) formula.Symbol { return formula.Sym(s) }
 
 func (w *writer) exact(s formula.Symbol) (float64, bool) {
 	k, ok := w.known[s]

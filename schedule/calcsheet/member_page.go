@@ -91,8 +91,8 @@ func (d *document) memberPages(s *working.Sheet, how dense, number, of int) {
 }
 
 // fit returns the first density with which a sheet stands on one page: all do
-// but those of Annex A under moments about both axes, which take two that are
-// easy to read.
+// but the fullest (Annex A or class 4 under moments about both axes), which take
+// two that are easy to read.
 func fit(s *working.Sheet) dense {
 	set := newSetter()
 	n := sort.Search(len(densities), func(i int) bool {

@@ -94,20 +94,21 @@ func TestPDFText(t *testing.T) {
 	}
 }
 
-// A sheet is one page; that of Annex A under moments about both axes is two.
+// A sheet is one page; the fullest, of Annex A and of class 4 under moments
+// about both axes, may take two.
 func TestOnePageASheet(t *testing.T) {
-	front := 3 // contents, formulas, and no stacks: see below
-	pages := 0
-	list := sheets(t)
-	require.Empty(t, Stacks(list), "the examples share a level, so none stands on another")
+	may := map[string]int{"bent-annex-a": 2, "bent-class4": 2, "bent-class4-hollow": 2}
 	for i := range examples {
-		pages++
-		if examples[i].name == "bent-annex-a" {
-			pages++
+		e := &examples[i]
+		list := []*working.Sheet{sheetOf(t, e)}
+		front := 1
+		if fit(list[0]).bare {
+			front++ // the list of formulas
 		}
+		got := bytes.Count(pdfOf(t, list), []byte("/Type /Page\n")) - front
+		assert.GreaterOrEqual(t, got, 1, e.name)
+		assert.LessOrEqual(t, got, max(1, may[e.name]), e.name)
 	}
-	got := bytes.Count(pdfOf(t, list), []byte("/Type /Page\n"))
-	assert.Equal(t, front-1+pages, got)
 }
 
 // stack is a column line of three lengths.

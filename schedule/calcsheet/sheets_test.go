@@ -44,6 +44,8 @@ var examples = []example{
 	{"bent", "254x254x89 UKC", "S355", bent(), nil},
 	{"bent-annex-a", "254x254x89 UKC", "S355", bent(), func(s *design.Settings) { s.Interaction = design.AnnexA }},
 	{"bent-hollow", "RHS 250x150x8", "S355", bent(), nil},
+	{"bent-class4", "406x140x39 UKB", "S355", bent(), nil},
+	{"bent-class4-hollow", "SHS 300x300x6.3", "S355", bent(), nil},
 }
 
 // sheetOf works an example out.
