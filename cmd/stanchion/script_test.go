@@ -34,6 +34,11 @@ func TestScripts(t *testing.T) {
 		Setup: func(e *testscript.Env) error {
 			examples, err := filepath.Abs("../../examples")
 			e.Setenv("EXAMPLES", examples)
+			if err != nil {
+				return err
+			}
+			independent, err := filepath.Abs("testdata/independent")
+			e.Setenv("INDEPENDENT", independent)
 			return err
 		},
 		Cmds: map[string]func(*testscript.TestScript, bool, []string){
@@ -44,6 +49,7 @@ func TestScripts(t *testing.T) {
 			"parts":  scriptParts,
 			"same":   scriptSame,
 			"addsup": scriptAddsUp,
+			"agrees": scriptAgrees,
 			"type":   scriptType,
 		},
 	})
