@@ -26,8 +26,12 @@ func (p *Problem) FewSizes(ctx context.Context, most int) ([]Solution, error) {
 	s := newSearch(r)
 	free := s.everySize()
 	var out []Solution
-	var warm []int32
+	least, warm := s.fewest(ctx)
 	for k := 1; k <= most; k++ {
+		if k < least {
+			out = append(out, Solution{K: k, Cost: math.Inf(1), Bound: math.Inf(1), Proven: true})
+			continue
+		}
 		share, stop := shareOf(ctx, most-k+1)
 		sol := s.solve(share, k, warm)
 		stop()
