@@ -47,7 +47,7 @@ func TestReadHeading(t *testing.T) {
 		"Length": "Length", "LENGTH (m)": "Length [m]", "Length, mm": "Length [mm]", "Length in mm": "Length [mm]", "Length mm": "Length [mm]",
 		"Base/Top level": "Level ?", "Lower / upper floor": "Level ?",
 		"Ly (m)": "L_cr,y ? [m]", "L z-z": "L_cr,z ?", "Unbraced length z-z": "L_cr,z ?", "Col. No.": "Mark", "Axial load G": " vetoed", "Axial Gk": " vetoed", "N_Ed G+Q": " vetoed", "N_Ed (1.35G+1.5Q)": "N_Ed {1.35G+1.5Q}",
-		"UC section": "Section ?", "M (kNm)": "", 
+		"UC section": "Section ?", "M (kNm)": "",
 		"Height": "Length", "Storey height": "Length", "L": "Length", "L [m]": "Length [m]", "Länge [m]": "Length [m]", "Column length L (m)": "Length [m]",
 		"Length (ft)": "Length ! the unit ft is not read for Length", "Length (kN)": "Length ! kN is not a unit of Length",
 		"Length (clear)": "Length", "Length (m) *": "Length [m]", "Total length": "", "Beam length": "", "Length of beam": "", "Max length": "",

@@ -192,8 +192,8 @@ func (d *document) drawings(s *working.Sheet, height float64) {
 // results is the table of what the results hand over to other programs, to the
 // same figures.
 func results(c canvas, s *working.Sheet, x, y, w float64) {
-	const size = 6 * pt
-	right := []float64{0.38 * w, 0.60 * w, 0.80 * w, w}
+	const size = 5.4 * pt // six figures fit their column, with room between
+	right := []float64{0.33 * w, 0.55 * w, 0.77 * w, w}
 	head := []string{"L_cr m", "λ̄", "χ", "N_b,Rd kN"}
 	for i, h := range head {
 		cell(c, h, x+right[i], y+2.2, size)
