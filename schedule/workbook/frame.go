@@ -14,7 +14,9 @@ import (
 func (p *Plan) frames() (before, behind []byte, err error) {
 	var edits markup.Edits
 	p.widenDimension(&edits)
+	p.freeze(&edits)
 	p.setColumns(&edits)
+	p.addFilter(&edits)
 	p.setMerges(&edits)
 	p.widenFilter(&edits)
 	p.setLinks(&edits)
@@ -225,6 +227,9 @@ func (p *Plan) widened(a area) area {
 	if len(p.place.old.columns) == 0 || a.lastCol != p.place.old.area.lastCol {
 		a.lastCol = max(a.lastCol, p.place.rows.lastCol)
 		return a
+	}
+	if before, ok := p.book.oldResults(p.sheet); ok && a.lastRow == before.lastRow {
+		a.lastRow = max(a.firstRow, p.block.LastRow) // the schedule has grown or shrunk
 	}
 	a.lastCol = p.place.rows.lastCol
 	return a

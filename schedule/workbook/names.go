@@ -89,7 +89,7 @@ func (p *Plan) moveViews(edits *markup.Edits, g *grafting) {
 	}
 }
 
-// editNames widens the filter and the print area of the schedule, takes out
+// editNames widens the filter of the schedule, takes out
 // what an earlier run left, and adds the names of this one.
 func (p *Plan) editNames(edits *markup.Edits, g *grafting) {
 	root := p.book.root
@@ -125,15 +125,33 @@ func (p *Plan) editName(edits *markup.Edits, g *grafting, n *markup.Element, s *
 			tag = markup.SetAttrs(n.Tag(), "localSheetId", strconv.Itoa(g.moved[i]))
 		}
 	}
-	if s == p.sheet && (n.Attr("name") == "_xlnm._FilterDatabase" || n.Attr("name") == "_xlnm.Print_Area") {
-		sheet, cells, ok := splitRef(n.Text())
-		if a, isArea := parseArea(cells); ok && isArea && p.reaches(a) {
-			text = markup.Escaped(quoted(sheet) + "!" + p.widened(a).absolute())
-		}
+	if s == p.sheet && builtIn(n) {
+		text = p.editRange(n, text)
 	}
 	if with := tag + text + string(n.Rest()[len(n.Content()):]); with != string(n.Raw()) {
 		edits.Replace(n, with)
 	}
+}
+
+// editRange returns the range of the schedule's filter widened, and that of its
+// print area as it is to be.
+func (p *Plan) editRange(n *markup.Element, text string) string {
+	sheet, cells, ok := splitRef(n.Text())
+	a, isArea := parseArea(cells)
+	if !ok || !isArea {
+		return text
+	}
+	switch n.Attr("name") {
+	case "_xlnm._FilterDatabase":
+		if p.reaches(a) {
+			return markup.Escaped(quoted(sheet) + "!" + p.widened(a).absolute())
+		}
+	case "_xlnm.Print_Area":
+		if with, ok := p.followedArea(a); ok {
+			return markup.Escaped(quoted(sheet) + "!" + with)
+		}
+	}
+	return text
 }
 
 // newNames returns the defined names that this run leaves.
@@ -147,7 +165,15 @@ func (p *Plan) newNames(g *grafting) string {
 		}
 		fmt.Fprintf(&b, `<%sdefinedName name="%s" localSheetId="%d"%s>%s</%sdefinedName>`, prefix, name, sheet, h, markup.Escaped(refersTo), prefix)
 	}
-	add(resultsName, g.moved[p.sheetIndex()], true, quoted(p.sheet.name)+"!"+p.place.rows.absolute())
+	here, at := quoted(p.sheet.name)+"!", g.moved[p.sheetIndex()]
+	// First those that stay when the schedule is annotated again.
+	if a, ok := p.newFilter(); ok && !p.hasName("_xlnm._FilterDatabase") {
+		add("_xlnm._FilterDatabase", at, true, here+a.absolute())
+	}
+	if cells, ok := p.printArea(); ok {
+		add("_xlnm.Print_Area", at, false, here+cells)
+	}
+	add(resultsName, at, true, here+p.place.rows.absolute())
 	for _, s := range g.sheets {
 		add(sheetName, s.index, true, `"`+strings.ReplaceAll(s.role, `"`, `""`)+`"`)
 		for _, n := range s.names {
@@ -155,6 +181,13 @@ func (p *Plan) newNames(g *grafting) string {
 		}
 	}
 	return b.String()
+}
+
+// hasName reports whether the schedule's sheet has a defined name of its own.
+func (p *Plan) hasName(name string) bool {
+	return slices.ContainsFunc(p.book.definedNames(), func(n *markup.Element) bool {
+		return n.Attr("name") == name && p.book.localTo(n) == p.sheet
+	})
 }
 
 func (p *Plan) sheetIndex() int { return slices.Index(p.book.sheets, p.sheet) }

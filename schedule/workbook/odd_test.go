@@ -139,7 +139,7 @@ func TestOwnSheetsOfAnEarlierRun(t *testing.T) {
 		switch n.Name {
 		case "_xlnm.Print_Area":
 			assert.Equal(t, "Columns", n.Scope)
-			assert.Equal(t, "'Columns'!$A$1:$K$14", n.RefersTo)
+			assert.Equal(t, "Columns!$A$1:$E$14", n.RefersTo)
 		case "_stanchion_sheet":
 			assert.Equal(t, "Sizes used", n.Scope)
 		}
