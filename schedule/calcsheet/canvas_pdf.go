@@ -4,7 +4,7 @@ import (
 	"strings"
 	"unicode"
 
-	"github.com/go-pdf/fpdf"
+	"codeberg.org/go-pdf/fpdf"
 )
 
 // pdfCanvas draws on the pages of a PDF. It keeps the state of the file, so
