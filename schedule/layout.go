@@ -200,9 +200,15 @@ func (h *headerScan) bind(l *layout, c *headerColumn) (vetoed bool) {
 // of it is needed.
 func (l *layout) rate(depth, vetoed int) {
 	names := map[key]int{}
+	combinations := map[string]bool{}
 	for i := range l.bindings {
-		names[l.bindings[i].key] = max(names[l.bindings[i].key], min(l.bindings[i].rank, 2))
+		b := &l.bindings[i]
+		names[b.key] = max(names[b.key], min(b.rank, 2))
+		if b.key.field == axialField && b.above == nil {
+			combinations[foldName(b.Combination)] = true
+		}
 	}
+	l.score += float64(max(0, len(combinations)-1)) // a row that tells combinations apart belongs to the header
 	for k, rank := range names {
 		l.score += float64(rank)
 		if k.field == lengthField || k.field == axialField {

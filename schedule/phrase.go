@@ -13,6 +13,7 @@ type phrase struct {
 	spans       [][2]int // what the words and noise take of the text
 	boundTokens []token
 	combos      []token // tokens of nouns that name a combination
+	last        token   // the one before
 }
 
 // parsePhrase takes a heading apart: at each place the longest spelling of the
@@ -44,10 +45,21 @@ func longestWord(toks []token) (word, int) {
 	return found, n
 }
 
-func (p *phrase) take(w word, toks []token) {
-	if n := len(p.left); n > 0 && len(toks) == 1 && len(toks[0].text) == 1 && p.left[n-1].end == toks[0].start {
-		w = word{} // the b of 6.10b
+// namesOn reports whether a single letter goes on with the name of a
+// combination: the b of 6.10b, the X of Wind X, the A of Case A.
+func (p *phrase) namesOn(letter token) bool {
+	if n := len(p.left); n > 0 && p.left[n-1] == p.last {
+		return p.last.end == letter.start || combinationWords[p.last.text]
 	}
+	n := len(p.combos)
+	return n > 0 && p.combos[n-1] == p.last
+}
+
+func (p *phrase) take(w word, toks []token) {
+	if len(toks) == 1 && len(toks[0].text) == 1 && p.namesOn(toks[0]) {
+		w = word{}
+	}
+	defer func() { p.last = toks[len(toks)-1] }()
 	span := [2]int{toks[0].start, toks[len(toks)-1].end}
 	switch w.kind {
 	case noun:

@@ -2,6 +2,7 @@ package schedule
 
 import (
 	"fmt"
+	"maps"
 	"math"
 	"slices"
 )
@@ -65,6 +66,13 @@ func (s *scanner) remarks(p *Plan) []string {
 	if p.Settings.Compression == "negative" && s.negative == 0 && s.positive > 0 {
 		list = append(list, "compression is set to negative, and every N_Ed is positive: every member is in tension")
 	}
+	for _, col := range slices.Sorted(maps.Keys(s.strays)) {
+		what := "a number stands"
+		if n := s.strays[col].rows; n > 1 {
+			what = fmt.Sprintf("numbers stand in %d rows", n)
+		}
+		list = append(list, fmt.Sprintf("%s: %s under no heading, and %s not read", s.strays[col].where, what, isOrAre(s.strays[col].rows)))
+	}
 	for i := range p.Header.Columns {
 		b := &p.Header.Columns[i]
 		if b.rank == 1 && (b.key.field == momentField || b.key.field == familyField || b.key.axis != noAxis) {
@@ -74,6 +82,13 @@ func (s *scanner) remarks(p *Plan) []string {
 		}
 	}
 	return list
+}
+
+func isOrAre(n int) string {
+	if n > 1 {
+		return "are"
+	}
+	return "is"
 }
 
 // refuse says why a run cannot go on with what was found.

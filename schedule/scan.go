@@ -64,6 +64,13 @@ type scanner struct {
 	heavy    int // N_Ed beyond any rolled column, in a unit that nobody named
 	width    int
 	cells    int
+	strays   map[int]*stray // by column
+}
+
+// stray is a column without a heading that members' rows have numbers in.
+type stray struct {
+	where string // of the first
+	rows  int
 }
 
 // decides is a column of numbers, and whether a value, in its unit, can be true.
@@ -74,7 +81,7 @@ type decides struct {
 }
 
 func newScanner(src Source, l *layout, opts *Options) *scanner {
-	s := &scanner{src: src, l: l, opts: opts, classes: newClassifier(l), marks: []int{-1, -1, -1, -1, -1}, comb: -1, width: l.width, cells: l.cells}
+	s := &scanner{src: src, l: l, opts: opts, strays: map[int]*stray{}, classes: newClassifier(l), marks: []int{-1, -1, -1, -1, -1}, comb: -1, width: l.width, cells: l.cells}
 	if _, ok := src.(Seeker); !ok {
 		s.keep = newRowStore(l)
 	}
@@ -164,10 +171,33 @@ func (s *scanner) member(r *Row) {
 		s.sign(r.at(b.Col))
 		s.weigh(r.at(b.Col), b)
 	}
+	s.stray(r)
 	s.cells = max(s.cells, len(r.Cells))
 	if len(r.Cells) > s.width {
 		s.widen(r)
 	}
+}
+
+// stray counts the numbers that stand under no heading: a second load case may
+// have lost its own.
+func (s *scanner) stray(r *Row) {
+	for col := range r.Cells {
+		if len(s.l.texts[col]) > 0 || r.Cells[col].Merged || !isNumber(&r.Cells[col]) {
+			continue
+		}
+		if s.strays[col] == nil {
+			s.strays[col] = &stray{where: s.src.Where(s.l.sheet, r.Number, col)}
+		}
+		s.strays[col].rows++
+	}
+}
+
+func isNumber(cell *Cell) bool {
+	if cell.Kind != Text {
+		return cell.Kind == Number
+	}
+	_, rest, err := splitNumber(cell.Text, '.')
+	return err == nil && isUnitOrNothing(rest)
 }
 
 // widen makes room for what a row holds to the right of the header.

@@ -73,6 +73,20 @@ C1   | 3.6    | 900  | 10         | -5     | 1          | 2      | S355
 	assert.Equal(t, []string{"S355"}, c.Grades)
 }
 
+// A second row that names combinations belongs to the header, even where a CSV
+// has lost the merge above it: a combination must not go unread.
+func TestCombinationsUnderOneHeading(t *testing.T) {
+	for _, names := range [][2]string{{"ULS1", "ULS2"}, {"Comb A", "Comb B"}, {"Wind X", "Wind Y"}, {"1.35G+1.5Q", "1.0G+1.5Q"}, {"Persistent", "Accidental"}} {
+		for _, units := range []string{"", " | m | kN | kN |\n"} {
+			c := good(t, "Mark | Length | Axial load | | Grade\n | | "+names[0]+" | "+names[1]+" |\n"+units+"C1 | 4 | 900 | 1500 | S355")
+			assert.Equal(t, []design.Combination{{Name: names[0], NEd: 900e3}, {Name: names[1], NEd: 1500e3}}, c.Combinations)
+		}
+	}
+	// Numbers under no heading at all are named.
+	s := readAll(t, sheetOf("Mark | Length | Axial load |\n | | Gravity | Uplift\nC1 | 4 | 900 | #-200\nC2 | 4 | 900 | -1,200 kN"))
+	assert.Contains(t, s.Summary.Notes[0], "Columns!D3: numbers stand in 2 rows under no heading, and are not read")
+}
+
 func TestUnits(t *testing.T) {
 	for name, text := range map[string]string{
 		"heading":  "Length (mm) | N_Ed [MN]\n3600 | 0.9",

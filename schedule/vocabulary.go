@@ -82,7 +82,7 @@ func addField(v map[string]word, f *field) {
 
 // weakNouns name a field where they stand alone, and say nothing beside
 // another: "Column length" is a length, "Load N_Ed" an N_Ed.
-var weakNouns = compactSet("column|columns|col|member|ref|reference|id|name|no|nr|number|nos|off|level|levels|floor|floors|storey|story|from|to|load|force|steel|n|l|h|b|t|case|profile|position|compression|end|ends")
+var weakNouns = compactSet("column|columns|col|member|ref|reference|id|name|no|nr|number|nos|off|level|levels|floor|floors|storey|story|from|to|load|force|steel|n|l|h|b|t|case|profile|position|compression|end|ends|k")
 
 // firmNouns are symbols of a design value: what stands beside them names a
 // combination.
@@ -107,4 +107,4 @@ var otherWords = compactSet("capacity|resistance|rd|ratio|utilisation|utilizatio
 const vetoWords = "sls|service|serviceability|unfactored|unfact|characteristic|char|dead|dead load|live|live load|imposed|imposed load|permanent|variable|gk|qk|ng|nq|superseded|previous|old|former|working load|nominal|g|q|gq|sdl"
 
 // combinationWords stand in the name of a combination.
-var combinationWords = compactSet("uls|lc|combo|comb|combination|co|case|str|equ|geo|set|eq|lk|lfk|max|min|wind|snow|maximum|minimum|acc|accidental")
+var combinationWords = compactSet("uls|lc|combo|comb|combination|co|case|str|equ|geo|set|eq|lk|lfk|max|min|wind|snow|maximum|minimum|acc|accidental|persistent|transient|seismic|construction|temporary|exceptional")
