@@ -2,6 +2,7 @@ package main
 
 import (
 	"context"
+	"errors"
 	"fmt"
 	"slices"
 	"strings"
@@ -194,7 +195,10 @@ func (p *pick) sheet(i int) (*working.Sheet, error) {
 	}
 	sheet, err := p.run.Sheet(i)
 	if err != nil {
-		if note := schedule.Note(m, res); note != "" {
+		switch note := schedule.Note(m, res); {
+		case strings.Contains(note, err.Error()):
+			err = errors.New(note) // a refusal: its note says all
+		case note != "":
 			err = fmt.Errorf("%w: %s", err, note)
 		}
 		return nil, fmt.Errorf("%s: %w", m.Column.Mark, err)

@@ -51,15 +51,15 @@ func TestForceOfEveryCheck(t *testing.T) {
 	assert.InDelta(t, 550e3+2441, a.Governing.NEd, 2)
 }
 
-// A rule that does not cover the member in the section is named with its clause.
-func TestRefusalIsNoted(t *testing.T) {
+// A rule that does not cover the member in the section is a check that names
+// the clause and the reason.
+func TestRefusalIsACheck(t *testing.T) {
 	set := settings()
 	col := loaded(4000, 100e3)
 	col.Combinations[0].My = design.EndMoments{Top: 5e6}
 	a := assess(t, col, candidate(t, channel(200, 90, 7, 14, 12), "S275", set), set)
 	require.Equal(t, design.Refused, a.Governing.Kind)
-	require.Len(t, a.Notes(), 1)
-	assert.Contains(t, a.Notes()[0], "moments on channels")
-	assert.Contains(t, a.Notes()[0], "(6.3.3)")
+	assert.Contains(t, a.Governing.Reason, "moments on channels")
+	assert.Equal(t, "6.3.3", a.Governing.Clause)
 	assert.Zero(t, a.Governing.NEd)
 }

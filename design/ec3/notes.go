@@ -56,13 +56,11 @@ func (m *Member) reactionsLeftOut() bool {
 }
 
 // Notes says what a person must know of how the checks were chosen in the
-// candidate: which rule does not cover the member, and where (6.61) and (6.62)
-// stand in the place of the criterion of simple construction, and why.
+// candidate: where (6.61) and (6.62) stand in the place of the criterion of
+// simple construction, and why. A rule that does not cover the member is a
+// check of its own, with the reason.
 func (a *Assessment) Notes() []string {
 	var notes []string
-	if g := &a.Governing; g.Kind == design.Refused {
-		notes = append(notes, g.Reason+" ("+g.Clause+")")
-	}
 	for i := range a.scopes {
 		reason := a.scopes[i].reason
 		if reason == "" {

@@ -17,7 +17,7 @@ func (w *writer) outcome() {
 			break
 		}
 	}
-	s.Notes = slices.Clone(w.m.Notes)
+	s.Notes = slices.Concat(w.m.Notes, w.a.Notes())
 	if my, mz := w.m.EndMoments(w.c, w.a.Governing.Combination); !my.Zero() || !mz.Zero() {
 		s.Diagram = &Diagram{my, mz}
 	}

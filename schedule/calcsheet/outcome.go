@@ -39,9 +39,6 @@ func checkTable(s *working.Sheet, checks []design.Check, governing int) working.
 		if i == governing {
 			mark = "governs"
 		}
-		if c.Kind == design.Refused {
-			mark = strings.TrimSpace(mark + " " + c.Reason)
-		}
 		t.Rows = append(t.Rows, []string{c.Clause, schedule.CheckName(c.Kind), segment(c.From, c.To), combination(s.Column, c.Combination),
 			ed, rd, unit, working.Utilisation(c.Utilisation), mark})
 	}
@@ -88,11 +85,17 @@ func combination(c *design.Column, i int) string {
 	return working.Short(c.Combinations[i].Name)
 }
 
-// closing is what stands below the checks: mass, the reserve, the next lighter
-// section, the caution.
+// closing is what stands below the checks: the rules that do not cover the
+// section, mass, the reserve, the next lighter section, the caution.
 func closing(s *working.Sheet) []string {
 	r := s.Result
-	lines := []string{fmt.Sprintf("Mass: %s kg/m × %s m = %.1f kg a piece.", formula.Figures(s.Section.Mass, 5), metres(s.Column.Length), r.Mass)}
+	var lines []string
+	for i := range s.Checks {
+		if c := &s.Checks[i]; c.Kind == design.Refused {
+			lines = append(lines, fmt.Sprintf("Outside the rules (%s): %s.", c.Clause, c.Reason))
+		}
+	}
+	lines = append(lines, fmt.Sprintf("Mass: %s kg/m × %s m = %.1f kg a piece.", formula.Figures(s.Section.Mass, 5), metres(s.Column.Length), r.Mass))
 	if r.Reserve > 0 {
 		lines = append(lines, fmt.Sprintf("Reserve: every axial force may grow by the factor %.3f (%s gives way first).", r.Reserve, schedule.CheckName(r.ReserveCheck)))
 	}
