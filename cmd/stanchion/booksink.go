@@ -30,12 +30,14 @@ type bookSink struct {
 	lines []summary.Line
 	rows  map[int]int // of the sheet, to the member
 
-	status int // column of the block that holds the status
+	section, note int // columns of the block that lead further
 }
 
 func newBookSink(r *run, src *bookSource, w io.Writer, cols []schedule.ResultColumn) *bookSink {
-	status := slices.IndexFunc(cols, func(c schedule.ResultColumn) bool { return c.Name == "status" })
-	return &bookSink{run: r, book: src.Book, w: w, cols: cols, rows: map[int]int{}, status: status}
+	column := func(name string) int {
+		return max(0, slices.IndexFunc(cols, func(c schedule.ResultColumn) bool { return c.Name == name }))
+	}
+	return &bookSink{run: r, book: src.Book, w: w, cols: cols, rows: map[int]int{}, section: column("section"), note: column("note")}
 }
 
 func (s *bookSink) put(m *schedule.Member, res *design.Result) error {
@@ -72,13 +74,19 @@ func (s *bookSink) finish(ctx context.Context) error {
 	return place.WriteTo(&stopper{ctx, s.w}, sheets)
 }
 
-// link leads from the status of a member to where more is said of it.
+// link leads from the section of a member, or from the note of one with a
+// problem, to where more is said of it. From the status none does: a link would
+// take its mark and colour off it in some spreadsheet programs.
 func (s *bookSink) link(own *summary.Sheets, row int) (column int, place string) {
 	i, ok := s.rows[row]
 	if !ok || row != s.lines[i].Member.Rows[0] {
 		return 0, ""
 	}
-	return s.status, own.Place(i)
+	place, problem := own.Place(i)
+	if problem {
+		return s.note, place
+	}
+	return s.section, place
 }
 
 // ownSheets are the project's own, in their order: what came of the run, the

@@ -73,7 +73,7 @@ func (p *chartPage) add(caption string, c *excelize.Chart, combo ...*excelize.Ch
 }
 
 // maxBars is how many bars a chart can hold and still be read.
-const maxBars = 40
+const maxBars = 30
 
 // tonnesBySection draws the mass of each size.
 func (p *chartPage) tonnesBySection(steel *takeoff.TakeOff) {
@@ -125,13 +125,7 @@ func (p *chartPage) bars(title, caption, of string, rows [][]workbook.Cell, firs
 	if len(rows) == 0 {
 		return
 	}
-	if n := len(rows); n > maxBars {
-		rest := 0.0
-		for _, r := range rows[maxBars-1:] {
-			rest += r[1].Value.(float64)
-		}
-		rows = append(rows[:maxBars-1:maxBars-1], bar(fmt.Sprintf("%d others", n-maxBars+1), rest))
-	}
+	rows = heaviest(rows)
 	if firstOnTop {
 		slices.Reverse(rows)
 	}
@@ -147,6 +141,30 @@ func (p *chartPage) bars(title, caption, of string, rows [][]workbook.Cell, firs
 		PlotArea: excelize.ChartPlotArea{ShowVal: true, NumFmt: excelize.ChartNumFmt{CustomNumFmt: "0.00"}},
 		GapWidth: &gap,
 	})
+}
+
+// heaviest keeps, of more bars than a chart can hold, the longest in their
+// order, and puts the others together.
+func heaviest(rows [][]workbook.Cell) [][]workbook.Cell {
+	if len(rows) <= maxBars {
+		return rows
+	}
+	tonnes := func(i int) float64 { return rows[i][1].Value.(float64) }
+	order := make([]int, len(rows))
+	for i := range order {
+		order[i] = i
+	}
+	slices.SortStableFunc(order, func(a, b int) int { return compareDown(tonnes(a), tonnes(b)) })
+	rest := 0.0
+	for _, i := range order[maxBars-1:] {
+		rest += tonnes(i)
+	}
+	kept := slices.Sorted(slices.Values(order[:maxBars-1]))
+	var out [][]workbook.Cell
+	for _, i := range kept {
+		out = append(out, rows[i])
+	}
+	return append(out, bar(fmt.Sprintf("%d others", len(rows)-len(kept)), rest))
 }
 
 // axis returns an axis of numbers with a grid. to 0: as it comes.

@@ -20,7 +20,7 @@ type resultColumn struct {
 // sheet holds the rest.
 var resultColumns = []resultColumn{
 	{"Member", "Row", 8, (*resultsPage).row},
-	{"Member", "Mark", 13, func(_ *resultsPage, l *Line) workbook.Cell { return workbook.TextCell(l.Member.Column.Mark) }},
+	{"Member", "Mark", 13, (*resultsPage).mark},
 	{"Member", "Stack", 9, func(_ *resultsPage, l *Line) workbook.Cell { return workbook.TextCell(l.Member.Column.Stack) }},
 	{"Member", "Level", 13, func(_ *resultsPage, l *Line) workbook.Cell { return workbook.TextCell(Level(&l.Member.Column)) }},
 	{"Member", ">No.", 6, func(_ *resultsPage, l *Line) workbook.Cell { return some(float64(l.Member.Column.Quantity), whole) }},
@@ -52,8 +52,11 @@ const kilonewtons = "#,##0.0"
 // of the schedule.
 const resultsHead = 4
 
-// statusColumn is where the status stands, counted from 0.
-const statusColumn = 6
+// Columns of the sheet, counted from 0.
+const (
+	markColumn   = 1
+	statusColumn = 6
+)
 
 // ResultsPlace returns the place on the sheet of results, named as it stands
 // in the workbook, of the member with that number from 0.
@@ -126,11 +129,17 @@ func (p *resultsPage) row(l *Line) workbook.Cell {
 	return c
 }
 
-// status says of a member that does not pass, in a note, why; and leads to
-// where that stands.
+// mark leads, from a member with a problem, to where that stands. The status
+// does not: a link would take the mark off it in some spreadsheet programs.
+func (p *resultsPage) mark(l *Line) workbook.Cell {
+	c := workbook.TextCell(l.Member.Column.Mark)
+	c.Link = p.problems[l]
+	return c
+}
+
+// status says of a member that does not pass, in a note, why.
 func (p *resultsPage) status(l *Line) workbook.Cell {
 	c := outcome(l.Result.Status)
-	c.Link = p.problems[l]
 	if l.Result.Status != design.Passes && p.notes < maxNotes {
 		if c.Note = schedule.Note(l.Member, &l.Result); c.Note != "" {
 			p.notes++

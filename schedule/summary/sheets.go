@@ -64,11 +64,11 @@ func NewSheets(info *Info, t *Tally, lines []Line, steel *takeoff.TakeOff) *Shee
 
 // Place returns where a member, numbered from 0, is to be looked at: among the
 // problems if it has one, else among the results.
-func (s *Sheets) Place(member int) string {
+func (s *Sheets) Place(member int) (to string, problem bool) {
 	if to := s.problems[&s.lines[member]]; to != "" {
-		return to
+		return to, true
 	}
-	return ResultsPlace(s.results, member)
+	return ResultsPlace(s.results, member), false
 }
 
 // The number formats of the sheets.

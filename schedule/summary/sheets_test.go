@@ -53,9 +53,13 @@ func TestSheets(t *testing.T) {
 	assert.Equal(t, []any{"N_Ed is missing", "give it"}, []any{unread[7].Value, unread[8].Value})
 	assert.Subset(t, texts(&own.Problems, 0), []any{"Passed over", "total rows passed over", "note: a note"})
 
-	assert.Equal(t, "'Results'!G5", own.Place(0))
-	assert.Equal(t, "'Problems'!A4", own.Place(1))
-	assert.Equal(t, "'Problems'!A4", own.Results.Rows[5][statusColumn].Link)
+	to, problem := own.Place(0)
+	assert.Equal(t, "'Results'!G5", to)
+	assert.False(t, problem)
+	to, problem = own.Place(1)
+	assert.Equal(t, "'Problems'!A4", to)
+	assert.True(t, problem)
+	assert.Equal(t, "'Problems'!A4", own.Results.Rows[5][markColumn].Link)
 	assert.Equal(t, "outside the rules", own.Results.Rows[5][statusColumn].Note)
 	assert.Equal(t, "passes", own.Results.Rows[4][statusColumn].Value)
 }
