@@ -1,6 +1,7 @@
 package schedule
 
 import (
+	"slices"
 	"strings"
 	"unicode"
 )
@@ -79,7 +80,7 @@ func (c *classifier) kind(r *Row) rowKind {
 		return headerRow
 	case numbers == 0 && !c.looksLikeMember(r):
 		return footnoteRow
-	case numbers+labels+others == 1 && c.single(r):
+	case numbers+labels+others == 1 && c.single(r), c.signOff(r):
 		return footnoteRow
 	default:
 		return memberRow
@@ -213,6 +214,26 @@ func looksLikeMark(s string) bool {
 		return false
 	}
 	return len([]rune(s)) <= 3 || strings.ContainsFunc(s, unicode.IsDigit)
+}
+
+// signOff reports whether a row is to be signed rather than designed: "Made by:
+// AB", "Checked:" over the columns of numbers, which hold none.
+func (c *classifier) signOff(r *Row) bool {
+	colon := false
+	for i := range r.Cells {
+		cell := &r.Cells[i]
+		if cell.empty() || cell.Merged || c.old[i] {
+			continue
+		}
+		if cell.Kind != Text {
+			return false
+		}
+		colon = colon || strings.HasSuffix(trim(cell.Text), ":")
+	}
+	if !colon {
+		return false
+	}
+	return !slices.ContainsFunc(c.numbers, func(col int) bool { return strings.ContainsFunc(r.at(col).text(), unicode.IsDigit) })
 }
 
 // single reports whether the only cell of a row is a note rather than what is

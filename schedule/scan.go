@@ -64,6 +64,7 @@ type scanner struct {
 	heavy    int // N_Ed beyond any rolled column, in a unit that nobody named
 	width    int
 	cells    int
+	headed   []bool         // columns with a text in the header
 	strays   map[int]*stray // by column
 }
 
@@ -106,6 +107,10 @@ func newScanner(src Source, l *layout, opts *Options) *scanner {
 				s.decides = append(s.decides, decides{col: b.Col})
 			}
 		}
+	}
+	for col := range l.texts {
+		s.headed = append(s.headed, make([]bool, max(0, col+1-len(s.headed)))...)
+		s.headed[col] = true
 	}
 	s.groups = newGroupScan(l)
 	return s
@@ -182,7 +187,7 @@ func (s *scanner) member(r *Row) {
 // have lost its own.
 func (s *scanner) stray(r *Row) {
 	for col := range r.Cells {
-		if len(s.l.texts[col]) > 0 || r.Cells[col].Merged || !isNumber(&r.Cells[col]) {
+		if col < len(s.headed) && s.headed[col] || r.Cells[col].Kind == Blank || r.Cells[col].Merged || !isNumber(&r.Cells[col]) {
 			continue
 		}
 		if s.strays[col] == nil {

@@ -87,6 +87,13 @@ func TestCombinationsUnderOneHeading(t *testing.T) {
 	assert.Contains(t, s.Summary.Notes[0], "Columns!D3: numbers stand in 2 rows under no heading, and are not read")
 }
 
+// What is to be signed below a schedule is no member of it.
+func TestSignOffRows(t *testing.T) {
+	s := readAll(t, sheetOf("Mark | Grid | Length | N_Ed\nC1 | A | 4 | 900\nMade by: AB | | Checked: |\nRoof | B | 4 | tbc\nDrawn | CD | Date: | 3 May"))
+	assert.Len(t, s.Members, 3)
+	assert.Equal(t, 1, s.Summary.Footnotes)
+}
+
 func TestUnits(t *testing.T) {
 	for name, text := range map[string]string{
 		"heading":  "Length (mm) | N_Ed [MN]\n3600 | 0.9",

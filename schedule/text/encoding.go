@@ -3,7 +3,6 @@ package text
 import (
 	"bytes"
 	"errors"
-	"fmt"
 	"io"
 	"unicode/utf8"
 
@@ -36,7 +35,7 @@ var boms = []form{
 const sampleSize = 64 << 10
 
 // errNotText says that a file holds something else.
-var errNotText = errors.New("not a text file")
+var errNotText = errors.New("not a text file: save the schedule as CSV (comma, semicolon or tab), or give the workbook itself")
 
 // detect finds the form of a file. Without a byte order mark it is UTF-16
 // where every other byte of the sample is 0, UTF-8 where the whole file is
@@ -47,7 +46,7 @@ func detect(r io.ReaderAt, size int64) (form, error) {
 		return form{}, err
 	}
 	if bytes.HasPrefix(sample, []byte("PK\x03\x04")) || bytes.HasPrefix(sample, []byte("\xd0\xcf\x11\xe0")) {
-		return form{}, fmt.Errorf("%w: it looks like a workbook: give it as a file with the ending .xlsx", errNotText)
+		return form{}, errors.New("not a text file: it looks like a workbook: give it as a file with the ending .xlsx")
 	}
 	for _, f := range boms {
 		if bytes.HasPrefix(sample, f.bom) {

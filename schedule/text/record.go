@@ -75,7 +75,7 @@ func (r *recordReader) find() (int, error) {
 			return r.last(data)
 		}
 		if len(data) > maxRecord {
-			return 0, fmt.Errorf("line %d is longer than a schedule's: is a quote opened and not closed?", r.line)
+			return 0, fmt.Errorf("line %d is longer than a schedule's: is a quote opened and not closed? Close it, or take it out", r.line)
 		}
 		if err := r.fill(); err != nil {
 			return 0, err
@@ -92,7 +92,7 @@ func (r *recordReader) last(data []byte) (int, error) {
 		return n, nil
 	}
 	if openQuote(data, r.delim, r.newline) {
-		return 0, fmt.Errorf("line %d: a quote is opened and not closed before the file ends", r.line)
+		return 0, fmt.Errorf("line %d: a quote is opened and not closed before the file ends: close it, or take it out", r.line)
 	}
 	return len(data), nil
 }
