@@ -12,8 +12,10 @@ import (
 // Piece is steel at hand: how many pieces of a section, and their length.
 type Piece struct {
 	Section *Section
+	Grade   string  // as the list has it; empty: it says none
 	Length  float64 // mm
 	Number  int
+	Line    int // of the list, from 1
 }
 
 // Pieces returns the pieces that a stock list counts, in its own order.
@@ -26,7 +28,7 @@ const (
 )
 
 // stockColumns are the headings that a stock list may have, for messages.
-const stockColumns = "section (or designation, size, name); or family with h_mm, b_mm, tw_mm, tf_mm, r_mm (hollow: d_mm or h_mm and b_mm, t_mm, finish; angles: h_mm, b_mm, t_mm, r1_mm, r2_mm) and mass_kg_m; number and length_m for pieces at hand"
+const stockColumns = "section (or designation, size, name); or family with h_mm, b_mm, tw_mm, tf_mm, r_mm (hollow: d_mm or h_mm and b_mm, t_mm, finish; angles: h_mm, b_mm, t_mm, r1_mm, r2_mm) and mass_kg_m; number, length_m and grade for pieces at hand"
 
 // Stock reads a list of the sections that may be used, as text in columns
 // (comma, semicolon or tab; UTF-8, UTF-16 or Windows-1252) with a header, or as
@@ -104,7 +106,7 @@ func (l *stockList) add(r *stockRow) error {
 		l.sections = append(l.sections, s)
 	}
 	if piece != nil && piece.Number > 0 {
-		piece.Section = s
+		piece.Section, piece.Grade, piece.Line = s, r.Grade, r.line
 		l.pieces = append(l.pieces, *piece)
 	}
 	return nil

@@ -34,6 +34,7 @@ type stockRow struct {
 	R1       string `csv:"r1_mm"`
 	R2       string `csv:"r2_mm"`
 	Mass     string `csv:"mass_kg_m"`
+	Grade    string `csv:"grade"`
 	Number   string `csv:"number"`
 	LengthM  string `csv:"length_m"`
 	LengthMM string `csv:"length_mm"`
@@ -54,6 +55,7 @@ var headings = map[string][]string{
 	"r1_mm":     {"r1mm"},
 	"r2_mm":     {"r2mm", "toeradiusmm"},
 	"mass_kg_m": {"masskgm", "masskgpm", "kgm"},
+	"grade":     {"grade", "steelgrade"},
 	"number":    {"number", "nooff", "qty", "quantity", "pieces"},
 	"length_m":  {"lengthm"},
 	"length_mm": {"lengthmm"},

@@ -90,17 +90,17 @@ box 1 CF,SHS,,150,150,,,,,"9,5",,,
 }
 
 func TestStockCountsPieces(t *testing.T) {
-	c, err := readStock("section,Qty,length_mm\n203x203x60 UKC,3,8200\n203x203x46 UKC,0,\nUC 203x203x60,1,4000\n152x152x23 UKC,,\n")
+	c, err := readStock("section,Qty,length_mm,Steel grade\n203x203x60 UKC,3,8200,S275\n203x203x46 UKC,0,,\nUC 203x203x60,1,4000,\n152x152x23 UKC,,,\n")
 	require.NoError(t, err)
 	s, err := Default().Find("203x203x60 UKC", FindOptions{})
 	require.NoError(t, err)
-	assert.Equal(t, []Piece{{s, 8200, 3}, {s, 4000, 1}}, c.Pieces())
+	assert.Equal(t, []Piece{{s, "S275", 8200, 3, 2}, {s, "", 4000, 1, 4}}, c.Pieces())
 	assert.ElementsMatch(t, []string{"203x203x60 UKC", "152x152x23 UKC"}, namesOf(c.Sections()), "none of the 203x203x46 is at hand")
 	assert.Empty(t, Default().Pieces())
 
 	c, err = readStock("section;number;length (m)\n203x203x60 UKC;2;8,2\n")
 	require.NoError(t, err)
-	assert.Equal(t, []Piece{{s, 8200, 2}}, c.Pieces())
+	assert.Equal(t, []Piece{{s, "", 8200, 2, 2}}, c.Pieces())
 }
 
 func TestStockNamesWhatIsWrong(t *testing.T) {

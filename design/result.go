@@ -86,7 +86,8 @@ type Result struct {
 	Notes   []string
 	Section string // Section.Name
 	Grade   string
-	Fixed   bool // the section was given, not chosen
+	Fixed   bool   // the section was given, not chosen
+	AtHand  string // the pieces of steel at hand that it is made of, for people; empty: bought new
 
 	Utilisation float64 // +Inf where a rule does not cover the section
 	Governing   Check

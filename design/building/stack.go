@@ -221,3 +221,25 @@ func sortedByHeight(cols []design.Column, line []int) ([]int, bool) {
 	}
 	return out, true
 }
+
+// Tied says which columns share a section with others, or stand in a stack
+// whose sections depend on one another: their sections are decided together.
+func Tied(cols []design.Column, o *Options, set *design.Settings) []bool {
+	out := make([]bool, len(cols))
+	members := map[string]int{}
+	for i := range cols {
+		if g := cols[i].Group; g != "" {
+			members[g]++
+		}
+	}
+	for i := range cols {
+		out[i] = members[cols[i].Group] > 1
+	}
+	all, _ := stacks(cols, o, set)
+	for _, s := range all {
+		for _, i := range s.lengths {
+			out[i] = true
+		}
+	}
+	return out
+}

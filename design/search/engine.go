@@ -20,6 +20,10 @@ type Engine struct {
 	// grow, as CheckAll does. Set it before the engine is used.
 	Reserve bool
 
+	// AtHand holds sections that no catalogue has and that a column may be given
+	// all the same: those of steel at hand. Set it before the engine is used.
+	AtHand *catalogue.Catalogue
+
 	catalogue *catalogue.Catalogue
 	settings  design.Settings
 	grades    []material.Grade // the settings' own

@@ -72,7 +72,7 @@ func (e *Engine) newGiven(col *design.Column, families []string) (*List, error) 
 }
 
 // find returns the section of a name. A given section need not be in the
-// stock list that others are chosen from.
+// stock list that others are chosen from, and may be of the steel at hand.
 func (e *Engine) find(name string, o catalogue.FindOptions) (*catalogue.Section, error) {
 	s, err := e.catalogue.Find(name, o)
 	if _, unknown := errors.AsType[*catalogue.UnknownSectionError](err); unknown {
