@@ -17,6 +17,9 @@ func ResultColumns(o ResultOptions) []ResultColumn {
 		cols = underGroup("Section", chosenColumns())
 		note = outcome
 	}
+	if o.AtHand {
+		cols = append(cols, underGroup("Section", atHandColumns())...)
+	}
 	cols = append(cols, underGroup("Governing check", governingColumns())...)
 	cols = append(cols, underGroup("Buckling", bucklingColumns())...)
 	cols = append(cols, underGroup("Steel", sectionColumns())...)
@@ -54,6 +57,10 @@ func chosenColumns() []ResultColumn {
 		text("grade", 8, func(_ *Member, r *design.Result) string { return r.Grade }).repeated(),
 		{Name: "utilisation", Decimals: 3, Numeric: true, Width: 10, Repeated: true, value: utilisation},
 	}
+}
+
+func atHandColumns() []ResultColumn {
+	return []ResultColumn{text("steel at hand", 24, func(_ *Member, r *design.Result) string { return r.AtHand }).repeated()}
 }
 
 func governingColumns() []ResultColumn {

@@ -94,6 +94,7 @@ func finite(x float64) bool { return !math.IsNaN(x) && !math.IsInf(x, 0) }
 type ResultOptions struct {
 	Reserve bool // by how much the load could still grow
 	Fire    bool // critical temperature
+	AtHand  bool // of which pieces at hand members are made
 	// StatusFirst puts the status before all else, where a person looks first;
 	// programs that read text find it before the note.
 	StatusFirst bool

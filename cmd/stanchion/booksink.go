@@ -115,6 +115,9 @@ func (r *run) steelOf(lines []summary.Line) *takeoff.TakeOff {
 		}
 		item := takeoff.ItemOf(col, section, res.Grade)
 		item.Failing = res.Status == design.Fails
+		if res.AtHand != "" {
+			item.Remark = "of steel at hand: " + res.AtHand
+		}
 		items = append(items, item)
 	}
 	return takeoff.Of(items, leftOut, r.takeoffOptions())

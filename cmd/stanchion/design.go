@@ -2,10 +2,13 @@ package main
 
 import (
 	"context"
+	"errors"
+	"fmt"
 	"iter"
 
 	"stanchion/design"
 	"stanchion/design/building"
+	"stanchion/design/reclaim"
 	"stanchion/design/search"
 	"stanchion/schedule"
 )
@@ -111,7 +114,28 @@ func (r *run) sized(ctx context.Context, cols []design.Column) (*building.Decisi
 	if r.keep != nil {
 		return r.decideKeeping(ctx, cols)
 	}
+	if r.atHand != nil {
+		return r.decideReclaiming(ctx, cols)
+	}
 	return building.Size(ctx, r.engine, cols, r.plan.Settings.Together.Options, r.flags.workers, nil)
+}
+
+// decideReclaiming takes what can be taken from the steel at hand.
+func (r *run) decideReclaiming(ctx context.Context, cols []design.Column) (*building.Decision, error) {
+	t := &r.plan.Settings.Together
+	d, err := reclaim.Size(ctx, r.engine, cols, t.Options, r.atHand, r.flags.workers)
+	if d == nil {
+		var few *building.TooFewSizesError
+		if err != nil && ctx.Err() == nil && !errors.As(err, &few) {
+			err = fmt.Errorf("reclaimed %s: %w", t.Reclaimed, err)
+		}
+		return nil, err
+	}
+	r.reclaim = d
+	for i := range cols {
+		r.quantities = append(r.quantities, cols[i].Quantity)
+	}
+	return d.Decision, err
 }
 
 // hasField reports whether the schedule has a column for a field.

@@ -15,9 +15,12 @@ func (r *run) stock(file string) (*catalogue.Catalogue, error) {
 }
 
 // section returns the section of a result. One that was given need not be in
-// stock.
+// stock, and one of the steel at hand need not be in any catalogue.
 func (r *run) section(name string) (*catalogue.Section, error) {
 	s, err := r.cat.Find(name, catalogue.FindOptions{})
+	if err != nil && r.atHand != nil {
+		s, err = r.atHand.Find(name, catalogue.FindOptions{})
+	}
 	if err != nil {
 		s, err = catalogue.Default().Find(name, catalogue.FindOptions{})
 	}

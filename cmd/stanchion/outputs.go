@@ -214,6 +214,7 @@ func (r *run) resultOptions() schedule.ResultOptions {
 	set := &r.plan.Settings.Design
 	return schedule.ResultOptions{
 		Reserve:     r.mode == search.Check || r.plan.Settings.Together.Reserve,
+		AtHand:      r.atHand != nil,
 		StatusFirst: !r.isText(),
 		Fire:        set.FireRatio > 0 || set.FirePeriod > 0 || r.hasField("eta_fi") || r.hasField("Fire period"),
 	}

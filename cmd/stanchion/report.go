@@ -12,6 +12,7 @@ import (
 	"stanchion/design/search"
 	"stanchion/schedule"
 	"stanchion/schedule/summary"
+	"stanchion/schedule/tradeoff"
 )
 
 const (
@@ -33,6 +34,7 @@ func (r *run) report(ctx context.Context) {
 	r.sayOutcome()
 	r.sayKept()
 	r.saySteel()
+	r.sayAtHand()
 	r.saySizes()
 	r.sayFailing(ctx)
 	r.sayNotRead()
@@ -129,6 +131,43 @@ func (r *run) saySteel() {
 	}
 	r.print("")
 	r.print(t.lines()...)
+}
+
+// sayAtHand says what is made of steel at hand, and what it saves.
+func (r *run) sayAtHand() {
+	d := r.reclaim
+	if d == nil {
+		return
+	}
+	mass := 0.0
+	for i := range d.Results {
+		if d.Results[i].AtHand != "" {
+			mass += d.Results[i].Mass * float64(r.quantities[i])
+		}
+	}
+	all := summary.Total(r.tally.Steel()).Mass
+	r.print("")
+	r.paragraph("", fmt.Sprintf("Steel at hand: %d of %s are used, %.2f t in columns; %.2f t are bought new", d.Used, plural(d.AtHand, "piece"), mass/1000, (all-mass)/1000))
+	name, unit, _ := strings.Cut(tradeoff.Of("", nil, nil, r.plan.Settings.Design.Rates.Objective).Quantity(), ", ")
+	proof := "proven the most that can be saved"
+	if !d.Proven {
+		proof = "not proven the most"
+		if d.Bound > d.Saved {
+			proof = fmt.Sprintf("the most that can be saved is proven to be within %.2g %% of it", 100*(d.Bound/d.Saved-1))
+		}
+	}
+	r.paragraph("", fmt.Sprintf("It saves %s of new %s: %s", saving(d.Saved, unit), name, proof))
+	if d.Tied > 0 {
+		r.paragraph("", fmt.Sprintf("%s of groups and stacks, whose sections are decided together, are sized new", plural(d.Tied, "column")))
+	}
+}
+
+// saving writes kg as t, and money as it is.
+func saving(x float64, unit string) string {
+	if unit == "" {
+		return fixed(x, 0)
+	}
+	return fixed(x/1000, 2) + " " + unit
 }
 
 // saySizes says what fewer sizes come to, where they are limited.

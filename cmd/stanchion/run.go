@@ -9,6 +9,7 @@ import (
 
 	"stanchion/catalogue"
 	"stanchion/design/building"
+	"stanchion/design/reclaim"
 	"stanchion/design/search"
 	"stanchion/schedule"
 	"stanchion/schedule/summary"
@@ -24,16 +25,19 @@ type run struct {
 
 	loadsOptional bool // a schedule without N_Ed will do
 
-	source   schedule.Source
-	plan     *schedule.Plan
-	cat      *catalogue.Catalogue
-	engine   *search.Engine
-	families map[string]string // of sections, by name
-	out      *outputs
-	keep     *keeping         // the old issue whose sections stay; nil: none
-	curve    []building.Trade // what fewer sizes come to, where they are limited
-	anySizes *building.Trade  // and what any number of them does
-	tally    *summary.Tally
+	source     schedule.Source
+	plan       *schedule.Plan
+	cat        *catalogue.Catalogue
+	atHand     *catalogue.Catalogue // the list of steel at hand; nil: none
+	reclaim    *reclaim.Decision    // what was made of it
+	quantities []int                // of its columns
+	engine     *search.Engine
+	families   map[string]string // of sections, by name
+	out        *outputs
+	keep       *keeping         // the old issue whose sections stay; nil: none
+	curve      []building.Trade // what fewer sizes come to, where they are limited
+	anySizes   *building.Trade  // and what any number of them does
+	tally      *summary.Tally
 }
 
 func newRun(con *console, c *cobra.Command, f *runFlags, input string, mode search.Mode) *run {
@@ -134,6 +138,15 @@ func (r *run) scan(ctx context.Context, assignments []schedule.Assignment) error
 		return fmt.Errorf("settings: %w", err)
 	}
 	r.engine.Reserve = set.Together.Reserve
+	if file := set.Together.Reclaimed; file != "" && r.mode == search.Size {
+		if r.keep != nil {
+			return usage(r.cmd, "--keep and the setting reclaimed both say where sections come from: give one of them")
+		}
+		if r.atHand, err = r.stock(file); err != nil {
+			return fmt.Errorf("reclaimed: %w", err)
+		}
+		r.engine.AtHand = r.atHand
+	}
 	return nil
 }
 

@@ -117,11 +117,8 @@ func (r *run) readLots() error {
 	place := map[string]int{}
 	for _, p := range r.list.Pieces() {
 		g, err := material.Parse(p.Grade)
-		switch known, unknown := catalogue.Default().Find(p.Section.Name(), catalogue.FindOptions{}); {
-		case p.Grade == "":
+		if p.Grade == "" {
 			err = errors.New("has no grade: give the one that the steel is known to have")
-		case err == nil && unknown == nil && known != p.Section:
-			err = fmt.Errorf("%s has other dimensions than the section of that name: give it another name", p.Section.Name())
 		}
 		if err != nil {
 			problems = append(problems, fmt.Errorf("line %d: %w", p.Line, err))
@@ -229,6 +226,7 @@ func (r *run) finish(s *Solution, d *building.Decision) *Decision {
 			from = append(from, fmt.Sprintf("%d of %.3f m (line %d)", u.Number, r.lots[u.Lot].Length/1000, r.lots[u.Lot].Line))
 		}
 		res.AtHand = strings.Join(from, ", ")
+		res.Notes = append(res.Notes, "of steel at hand: "+res.AtHand)
 	}
 	return out
 }

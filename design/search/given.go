@@ -76,8 +76,13 @@ func (e *Engine) newGiven(col *design.Column, families []string) (*List, error) 
 func (e *Engine) find(name string, o catalogue.FindOptions) (*catalogue.Section, error) {
 	s, err := e.catalogue.Find(name, o)
 	if _, unknown := errors.AsType[*catalogue.UnknownSectionError](err); unknown {
-		if s, err := catalogue.Default().Find(name, o); err == nil {
-			return s, nil
+		for _, c := range []*catalogue.Catalogue{e.AtHand, catalogue.Default()} {
+			if c == nil {
+				continue
+			}
+			if s, err := c.Find(name, o); err == nil {
+				return s, nil
+			}
 		}
 	}
 	return s, err
