@@ -8,7 +8,8 @@ import (
 )
 
 // Neighbour is the length of the same column line that stands on a member or
-// that it stands on. Its section may change between assessments.
+// that it stands on. Its section may change between assessments; nil is a
+// neighbour whose section is not known.
 type Neighbour struct {
 	Column  *design.Column
 	Section *catalogue.Section
@@ -137,7 +138,11 @@ func (m *Member) nominal(c *Candidate, i int, b *bending) {
 		b.mz.Top += z
 	}
 	if k := m.underfoot(i); k != nil {
-		y, z := m.floor(k, m.Below.Section, c.Section, m.Below)
+		at := m.Below.Section
+		if at == nil {
+			at = c.Section
+		}
+		y, z := m.floor(k, at, c.Section, m.Below)
 		b.my.Bottom -= y
 		b.mz.Bottom -= z
 	}
@@ -149,7 +154,7 @@ func (m *Member) nominal(c *Candidate, i int, b *bending) {
 func (m *Member) floor(k *design.Combination, at, s *catalogue.Section, n *Neighbour) (my, mz float64) {
 	ey, ez := Eccentricities(at)
 	shareY, shareZ := 1.0, 1.0
-	if n != nil {
+	if n != nil && n.Section != nil {
 		shareY = Share(s.Iy/m.Length, n.Section.Iy/n.Column.Length)
 		shareZ = Share(s.Iz/m.Length, n.Section.Iz/n.Column.Length)
 	}

@@ -173,3 +173,26 @@ func TestOwnWeightOfTheLengthsAbove(t *testing.T) {
 	assert.InDelta(t, 300e3+2*own, a.Z.NEd, 1e-6)
 	assert.InDelta(t, (300e3+2*own)/c.NcRd, worstOf(&a, design.Compression), 1e-12)
 }
+
+// Beside a length whose section is not known the floor's moment comes in whole:
+// never less than beside any section that could stand there.
+func TestUnknownSectionBelowBringsTheWholeMoment(t *testing.T) {
+	set := simpleSettings()
+	below := propped(900e3, 200e3, 50e3, 80e3, 0)
+	c := candidate(t, section(t, "203x203x60 UKC"), "S355", set)
+	bottom := func(s *catalogue.Section) (y, z float64) {
+		m, err := ec3.NewMember(loaded(3600, 500e3), set)
+		require.NoError(t, err)
+		m.Between(&ec3.Neighbour{Column: below, Section: s}, nil)
+		my, mz := m.EndMoments(c, 0)
+		return my.Bottom, mz.Bottom
+	}
+	y, z := bottom(nil)
+	assert.InEpsilon(t, -150e3*(209.6/2+100), y, 1e-12)
+	assert.InEpsilon(t, -80e3*(9.4/2+100), z, 1e-12)
+	for _, name := range []string{"152x152x23 UKC", "203x203x60 UKC", "254x254x107 UKC"} {
+		sy, sz := bottom(section(t, name))
+		assert.Less(t, -sy, -y, name)
+		assert.Less(t, -sz, -z, name)
+	}
+}

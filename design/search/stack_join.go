@@ -74,7 +74,7 @@ func (s *settling) link(cols []design.Column, st *standing) {
 	for _, n := range s.nodes {
 		for _, l := range n.lengths {
 			l.below, l.above = at[st.below[l.index]], at[st.above[l.index]]
-			l.member.Between(l.below.neighbour(), l.above.neighbour())
+			l.member.Between(l.standsOn(cols, st), l.above.neighbour())
 			l.demand.of(&l.member, l.limit)
 			l.missing(cols, st)
 		}
@@ -96,6 +96,15 @@ func (l *length) neighbour() *ec3.Neighbour {
 	return &l.as
 }
 
+// standsOn returns the neighbour below. One that has no section still brings in
+// the moments of the beams at its top.
+func (l *length) standsOn(cols []design.Column, st *standing) *ec3.Neighbour {
+	if i := st.below[l.index]; l.below == nil && i >= 0 {
+		return &ec3.Neighbour{Column: &cols[i]}
+	}
+	return l.below.neighbour()
+}
+
 // missing says that a neighbour could not be designed.
 func (l *length) missing(cols []design.Column, st *standing) {
 	for _, side := range []struct {
@@ -105,7 +114,7 @@ func (l *length) missing(cols []design.Column, st *standing) {
 	}{{"below", st.below[l.index], l.below}, {"above", st.above[l.index], l.above}} {
 		if side.index >= 0 && side.there == nil {
 			c := &cols[side.index]
-			l.member.Notes = append(l.member.Notes, fmt.Sprintf("designed without the length %s, %s (%s), which has no section", side.word, c.Mark, c.Cell))
+			l.member.Notes = append(l.member.Notes, fmt.Sprintf("the length %s, %s (%s), has no section: its weight is left out, and the moments of the floor between are taken in full", side.word, c.Mark, c.Cell))
 		}
 	}
 }

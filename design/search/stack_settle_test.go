@@ -327,9 +327,9 @@ func TestSettlingWithoutWhatCannotBeRead(t *testing.T) {
 		case "L1":
 			assert.Equal(t, design.NotRead, results[i].Status)
 		case "L0":
-			assert.Contains(t, fmt.Sprint(results[i].Notes), "without the length above, "+cols[bad].Mark+" ("+cols[bad].Cell+")")
+			assert.Contains(t, fmt.Sprint(results[i].Notes), "the length above, "+cols[bad].Mark+" ("+cols[bad].Cell+"), has no section")
 		case "L2":
-			assert.Contains(t, fmt.Sprint(results[i].Notes), "without the length below")
+			assert.Contains(t, fmt.Sprint(results[i].Notes), "the length below, "+cols[bad].Mark+" ("+cols[bad].Cell+"), has no section")
 		}
 	}
 }

@@ -23,7 +23,11 @@ func (w *writer) nominal() {
 		for i := range below.Column.Combinations {
 			if c := &below.Column.Combinations[i]; c.HasReactions {
 				w.say("Nominal moments at the bottom%s, from the floor there, in the opposite sense:", in(c.Name))
-				w.floor(c, below.Section, below, "bottom")
+				at := below.Section
+				if at == nil {
+					at = w.c.Section
+				}
+				w.floor(c, at, below, "bottom")
 				break
 			}
 		}
@@ -75,6 +79,10 @@ func (w *writer) share(axis string, a, b float64, at *catalogue.Section, beside 
 func (w *writer) sharing(axis string, beside *ec3.Neighbour) float64 {
 	if beside == nil {
 		w.add(Values{w.noted("k_share", 1, None, "nothing on the other side of the floor: all of it")})
+		return 1
+	}
+	if beside.Section == nil {
+		w.add(Values{w.noted("k_share", 1, None, "the section on the other side of the floor is not known: all of it")})
 		return 1
 	}
 	own, other := w.c.Section.Iy, beside.Section.Iy

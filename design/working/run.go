@@ -60,7 +60,7 @@ func (r *Run) Sheet(i int) (*Sheet, error) {
 	if err != nil {
 		return nil, err
 	}
-	m.Between(r.neighbour(r.below[i]), r.neighbour(r.above[i]))
+	m.Between(r.standsOn(r.below[i]), r.neighbour(r.above[i]))
 	m.Carried = r.carried(i)
 	m.Assess(c, &r.assessment)
 	return Of(&r.assessment, result), nil
@@ -77,6 +77,16 @@ func (r *Run) neighbour(i int) *ec3.Neighbour {
 		return nil
 	}
 	return &ec3.Neighbour{Column: &r.columns[i], Section: section}
+}
+
+// standsOn returns the neighbour below a column. One that has no section still
+// brings in the moments of the beams at its top.
+func (r *Run) standsOn(i int) *ec3.Neighbour {
+	n := r.neighbour(i)
+	if n == nil && i >= 0 {
+		n = &ec3.Neighbour{Column: &r.columns[i]}
+	}
+	return n
 }
 
 // carried returns the own weight of the lengths above a column, N, with its
