@@ -34,7 +34,8 @@ func compareCommand(con *console) *cobra.Command {
 			"A member that is gone and a new one that could be it under another name or in another place are\n" +
 			"named as candidates, and never taken for one: --renamed says what a name has become.\n\n" +
 			settingsHelp() + "\n\n" + compareStatuses + "\n\n" + cautionHelp,
-		Example: `  stanchion compare depot-P01-sized.xlsx depot-P02.xlsx
+		Example: `  stanchion compare examples/ottermere-depot.csv examples/ottermere-depot-ordered.csv
+  stanchion compare depot-P01-sized.xlsx depot-P02.xlsx
   stanchion compare P01.csv P02.csv -o changes.csv --renamed "L1=Level 01" --renamed C7=C7A`,
 		Args: twoFiles,
 		RunE: func(c *cobra.Command, args []string) error {

@@ -30,7 +30,7 @@ func takeoffCommand(con *console) *cobra.Command {
 			"Where the schedule or the setting splices says where the splices are, lengths between them are\n" +
 			"one piece; otherwise every length is.\n\n" +
 			settingsHelp() + "\n\n" + takeoffStatuses,
-		Example: `  stanchion takeoff depot-sized.xlsx
+		Example: `  stanchion takeoff examples/ottermere-depot-ordered.csv
   stanchion takeoff depot-sized.xlsx -o depot-steel.xlsx --set "cost=1850" --set "carbon=1.74"
   stanchion takeoff ordered.csv -o steel.csv --set connections=6 --set waste=2.5 --set "transport length=12"`,
 		Args: oneFile,
