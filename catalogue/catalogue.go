@@ -2,6 +2,7 @@ package catalogue
 
 import (
 	"cmp"
+	"fmt"
 	"slices"
 )
 
@@ -57,7 +58,7 @@ func (c *Catalogue) Filter(f Filter) ([]*Section, error) {
 	for _, name := range f.Exclude {
 		s, err := c.Find(name, FindOptions{ColdFormed: f.ColdFormed, Families: f.Families})
 		if err != nil {
-			return nil, err
+			return nil, fmt.Errorf("exclude: %w", err)
 		}
 		excluded[s] = true
 	}
