@@ -22,12 +22,17 @@ const (
 func columnsSheet(list []heading) workbook.Sheet {
 	s := workbook.Sheet{Name: "Columns", FreezeRows: unitRow, FreezeCols: 1, RepeatRows: unitRow, Landscape: true, A3: true, PagesWide: 1, Footer: "Column schedule"}
 	title := []workbook.Cell{{Value: "Column schedule", Look: workbook.Look{Role: workbook.Title}}}
-	hint := []workbook.Cell{{Value: "One row a column length. Axial force is factored and positive in compression. Blank cells take the default; " +
-		"the sheet Headings explains every heading. Columns may be left out, moved and added to.", Look: workbook.Look{Role: workbook.Remark}}}
+	hint := []workbook.Cell{{Value: "One row a column length. Axial force is factored and positive in compression. Dark headings must be filled in, blank cells below the others take the default; " +
+		"rest on a heading to see what it means, or see the sheet Headings. Columns may be left out, moved and added to.", Look: workbook.Look{Role: workbook.Remark}}}
 	names, units, blank := make([]workbook.Cell, len(list)), make([]workbook.Cell, len(list)), make([]workbook.Cell, len(list))
 	for i := range list {
 		h := &list[i]
-		names[i] = workbook.Cell{Value: h.name, Look: workbook.Look{Role: workbook.Heading, Align: workbook.Centre}}
+		look := workbook.Look{Role: workbook.Group, Wrap: true}
+		first := i == 0 || list[i-1].field.Name != h.field.Name // N_Ed stands once a combination
+		if h.field.Needed && first {
+			look = workbook.Look{Role: workbook.Heading, Align: workbook.Centre}
+		}
+		names[i] = workbook.Cell{Value: h.name, Look: look, Note: note(&h.field)}
 		units[i] = workbook.Cell{Value: h.field.Unit, Look: workbook.Look{Role: workbook.Unit, Align: workbook.Centre}}
 		blank[i] = workbook.Cell{Look: workbook.Look{Role: workbook.Input, Align: align(&h.field)}}
 		s.Widths = append(s.Widths, width(h))
@@ -39,6 +44,21 @@ func columnsSheet(list []heading) workbook.Sheet {
 	}
 	s.Heights = map[int]float64{headingRow: 32}
 	return s
+}
+
+// note says what a heading means, where the pointer rests on it.
+func note(f *schedule.FieldInfo) string {
+	text := f.Name + ": " + f.Meaning + "."
+	if f.Unit != "" {
+		text += "\nIn " + f.Unit + ", unless the row below says otherwise."
+	}
+	if len(f.Allowed) > 0 {
+		text += "\nOne of: " + strings.Join(f.Allowed, ", ") + "."
+	}
+	if f.Needed {
+		text += "\nMust be given."
+	}
+	return text
 }
 
 func align(f *schedule.FieldInfo) workbook.Align {
@@ -79,7 +99,7 @@ func headingsSheet() workbook.Sheet {
 	s := workbook.Sheet{Name: "Headings", FreezeRows: 3, RepeatRows: 3, Landscape: true, PagesWide: 1, Widths: []float64{22, 10, 9, 62, 46, 60}, Heights: map[int]float64{}}
 	head := func(texts ...string) (row []workbook.Cell) {
 		for _, t := range texts {
-			row = append(row, workbook.Cell{Value: t, Look: workbook.Look{Role: workbook.Heading}})
+			row = append(row, workbook.Cell{Value: t, Look: workbook.Look{Role: workbook.Heading, Align: workbook.Left}})
 		}
 		return row
 	}
@@ -89,7 +109,7 @@ func headingsSheet() workbook.Sheet {
 		head("Heading", "Unit", "Needed", "Meaning", "Values", "Other spellings, among others"),
 	}
 	cell := func(text string) workbook.Cell {
-		return workbook.Cell{Value: text, Look: workbook.Look{Role: workbook.Result, Wrap: true}}
+		return workbook.Cell{Value: text, Look: workbook.Look{Role: workbook.Result, Align: workbook.Left, Wrap: true}}
 	}
 	for _, f := range schedule.Fields() {
 		needed := ""
@@ -122,7 +142,7 @@ func settingsSheet() workbook.Sheet {
 		if i == 0 {
 			s.Rows = append(s.Rows, nil)
 		}
-		s.Rows[0] = append(s.Rows[0], workbook.Cell{Value: text, Look: workbook.Look{Role: workbook.Heading}})
+		s.Rows[0] = append(s.Rows[0], workbook.Cell{Value: text, Look: workbook.Look{Role: workbook.Heading, Align: workbook.Left}})
 	}
 	for _, info := range schedule.SettingInfos() {
 		if strings.ContainsAny(info.Name, "[") || strings.HasPrefix(info.Name, "map ") {
