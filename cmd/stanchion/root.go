@@ -53,7 +53,7 @@ func rootCommand(con *console) *cobra.Command {
 	root.CompletionOptions.HiddenDefaultCmd = true
 	root.SetFlagErrorFunc(func(c *cobra.Command, err error) error { return usage(c, "%v", err) })
 	root.AddCommand(sizeCommand(con), checkCommand(con), workingCommand(con), sheetsCommand(con), blankCommand(con), sectionsCommand(con), nationalCommand(con), versionCommand(con))
-	root.AddCommand(takeoffCommand(con), compareCommand(con), sizesCommand(con))
+	root.AddCommand(takeoffCommand(con), compareCommand(con), sizesCommand(con), scenariosCommand(con))
 	return root
 }
 

@@ -23,7 +23,8 @@ type run struct {
 	input string
 	mode  search.Mode
 
-	loadsOptional bool // a schedule without N_Ed will do
+	loadsOptional bool                  // a schedule without N_Ed will do
+	more          []schedule.Assignment // settings that beat those of the command line
 
 	source     schedule.Source
 	plan       *schedule.Plan
@@ -101,7 +102,7 @@ func (r *run) read(ctx context.Context) error {
 		r.source.Close()
 		return usage(r.cmd, "--sheet %q: a text schedule has no sheets", r.flags.sheet)
 	}
-	if err := r.scan(ctx, assignments); err != nil {
+	if err := r.scan(ctx, append(assignments, r.more...)); err != nil {
 		r.source.Close()
 		return err
 	}

@@ -147,7 +147,7 @@ func scriptSame(ts *testscript.TestScript, neg bool, args []string) {
 }
 
 // scriptType fills in cells of a workbook, as a person does: type FILE SHEET
-// CELL=VALUE...
+// CELL=VALUE... A sheet that is not there is added.
 func scriptType(ts *testscript.TestScript, neg bool, args []string) {
 	if neg || len(args) < 3 {
 		ts.Fatalf("usage: type FILE SHEET CELL=VALUE...")
@@ -155,6 +155,10 @@ func scriptType(ts *testscript.TestScript, neg bool, args []string) {
 	f, err := excelize.OpenFile(ts.MkAbs(args[0]))
 	ts.Check(err)
 	defer f.Close()
+	if i, err := f.GetSheetIndex(args[1]); err == nil && i < 0 {
+		_, err := f.NewSheet(args[1])
+		ts.Check(err)
+	}
 	for _, a := range args[2:] {
 		cell, text, _ := strings.Cut(a, "=")
 		var value any = text

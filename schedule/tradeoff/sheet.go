@@ -11,7 +11,7 @@ import (
 )
 
 // Sheet is the name that the sheet wants.
-const Sheet = "Sizes"
+const Sheet = "Few sizes"
 
 // columns of the sheet, from A
 const (

@@ -71,10 +71,10 @@ func TestSheetHasAChartOfItsNumbers(t *testing.T) {
 		var cells []string
 		for _, s := range page.Charts[0].Chart.Series {
 			for _, ref := range []string{s.Categories, s.Values} {
-				if !strings.HasPrefix(ref, "'Sizes'!$"+column+"$") || len(cells) > 0 {
+				if !strings.HasPrefix(ref, "'Few sizes'!$"+column+"$") || len(cells) > 0 {
 					continue
 				}
-				from, to, _ := strings.Cut(strings.ReplaceAll(strings.TrimPrefix(ref, "'Sizes'!"), "$", ""), ":")
+				from, to, _ := strings.Cut(strings.ReplaceAll(strings.TrimPrefix(ref, "'Few sizes'!"), "$", ""), ":")
 				_, first, err := excelize.CellNameToCoordinates(from)
 				require.NoError(t, err)
 				_, last, err := excelize.CellNameToCoordinates(to)
