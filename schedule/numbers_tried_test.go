@@ -47,6 +47,16 @@ func TestCommaThatNothingTellsOf(t *testing.T) {
 	assert.Empty(t, readAll(t, sheetOf("Mark | Length | N_Ed\nC1 | 4 | 1,200")).Summary.Notes, "read as 1200, which is safe")
 }
 
+// A spacing is one number, so that its comma is a decimal mark.
+func TestSpacingTellsTheDecimalMark(t *testing.T) {
+	s := readAll(t, sheetOf("Mark | Length (mm) | N_Ed (N) | Restraints z-z\nC1 | 6000 | 199.900 | every 1,5"))
+	assert.Empty(t, s.Members[0].Problems)
+	assert.Equal(t, []float64{1500, 3000, 4500}, s.Members[0].Column.Z.Restraints)
+	assert.InDelta(t, 199900, s.Members[0].Column.Combinations[0].NEd, 1e-6)
+	s = readAll(t, sheetOf("Mark | Length | N_Ed | Restraints z-z\nC1 | 6 | 900 | 1.5, 3, 4.5"))
+	assert.Equal(t, []float64{1500, 3000, 4500}, s.Members[0].Column.Z.Restraints)
+}
+
 func TestGradesByTheirStrength(t *testing.T) {
 	c := good(t, "Mark | Length | N_Ed | Grade\nC1 | 4 | 900 | #355")
 	assert.Equal(t, []string{"S355"}, c.Grades)

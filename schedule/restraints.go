@@ -30,16 +30,17 @@ var namedHeights = map[string][]float64{
 }
 
 var (
-	wordGaps  = regexp.MustCompile(`(?i)\b(mid|middle|third|quarter|fifth|ends|top)[ -]+(height|point|points|span|length|only)\b`)
-	everyWord = regexp.MustCompile(`(?i)(?:\bevery\b|@)\s*`)
-	centres   = regexp.MustCompile(`(?i)^(.*?)\s*(?:c/c|crs|centres|centers)\.?$`)
-	fraction  = regexp.MustCompile(`^(\d{1,3})\s*[/⁄]\s*(\d{1,3})(?:\s*(?:of\s*)?[LlHh])?$`)
-	lengthOf  = regexp.MustCompile(`^(\d{0,3})\s*[LH]\s*[/⁄]\s*(\d{1,3})$`) // L/2, 2L/3
-	partOf    = regexp.MustCompile(`^(.*\d)\s*(?:[LH]|%)$`)                 // 0.5L, 50 %
-	grouped   = regexp.MustCompile(`(?:^|[^\d.,])\d{1,3},\d{3}(?:[^\d]|$)`)
-	commaGap  = regexp.MustCompile(`,\s+|,$`)
-	loneUnit  = regexp.MustCompile(`(?i)(\d)\s+(mm|cm|m)\b`)
-	loneLen   = regexp.MustCompile(`(\d)\s+([LH%])`)
+	wordGaps    = regexp.MustCompile(`(?i)\b(mid|middle|third|quarter|fifth|ends|top)[ -]+(height|point|points|span|length|only)\b`)
+	everyNumber = regexp.MustCompile(`(?i)(?:\bevery\b|@)\s*(\d+[.,]\d+)\s*(?:m|mm)?\s*$`)
+	everyWord   = regexp.MustCompile(`(?i)(?:\bevery\b|@)\s*`)
+	centres     = regexp.MustCompile(`(?i)^(.*?)\s*(?:c/c|crs|centres|centers)\.?$`)
+	fraction    = regexp.MustCompile(`^(\d{1,3})\s*[/⁄]\s*(\d{1,3})(?:\s*(?:of\s*)?[LlHh])?$`)
+	lengthOf    = regexp.MustCompile(`^(\d{0,3})\s*[LH]\s*[/⁄]\s*(\d{1,3})$`) // L/2, 2L/3
+	partOf      = regexp.MustCompile(`^(.*\d)\s*(?:[LH]|%)$`)                 // 0.5L, 50 %
+	grouped     = regexp.MustCompile(`(?:^|[^\d.,])\d{1,3},\d{3}(?:[^\d]|$)`)
+	commaGap    = regexp.MustCompile(`,\s+|,$`)
+	loneUnit    = regexp.MustCompile(`(?i)(\d)\s+(mm|cm|m)\b`)
+	loneLen     = regexp.MustCompile(`(\d)\s+([LH%])`)
 )
 
 // parseRestraints reads a list of heights: "2.5; 5.0", "2500 mm", "1/2",

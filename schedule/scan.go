@@ -224,7 +224,11 @@ func (s *scanner) see(cell *Cell, d *decides) {
 		return
 	}
 	// In a list of heights a comma may be the separator: only a list parted
-	// otherwise tells of its marks.
+	// otherwise tells of its marks, or a spacing, which is one number.
+	if spacing := everyNumber.FindStringSubmatch(cell.Text); spacing != nil {
+		s.vote.see(spacing[1], nil)
+		return
+	}
 	items := strings.FieldsFunc(cell.Text, func(r rune) bool { return r == ';' || isSpace(r) })
 	for _, item := range items {
 		if strings.Contains(item, ".") || strings.Count(item, ",") == 1 && strings.Contains(cell.Text, ";") {
