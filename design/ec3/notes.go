@@ -33,7 +33,7 @@ func (m *Member) note() {
 		zero = zero && f.Least == 0 && f.Greatest == 0
 	}
 	if tension >= 0 {
-		m.Notes = append(m.Notes, "N_Ed is tension in "+m.combination(tension)+
+		m.Notes = append(m.Notes, "N_Ed is tension"+m.in(tension)+
 			": yielding of the gross section is checked (6.2.3), the net section at holes is not")
 	}
 	if zero {
@@ -66,12 +66,17 @@ func (a *Assessment) Notes() []string {
 		if reason == "" {
 			continue
 		}
-		if len(a.scopes) > 1 {
-			reason += " in " + a.Member.combination(i)
-		}
-		notes = append(notes, reason+": (6.61) and (6.62) are checked instead")
+		notes = append(notes, reason+a.Member.in(i)+": (6.61) and (6.62) are checked instead")
 	}
 	return notes
+}
+
+// in says in which combination, where there are several.
+func (m *Member) in(index int) string {
+	if len(m.Column.Combinations) == 1 {
+		return ""
+	}
+	return " in " + m.combination(index)
 }
 
 // combination names a combination for people.

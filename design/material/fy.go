@@ -41,7 +41,7 @@ func (g Grade) table(src design.StrengthSource, s *catalogue.Section) (*bands, e
 		return nil, &ScopeError{fmt.Sprintf("%s is a grade of hollow sections", g.Name)}
 	}
 	if s.Finish == catalogue.HotFinished && g.Delivery == Thermomechanical {
-		return nil, &ScopeError{fmt.Sprintf("%s: EN 10210-1 has no M grade for hot-finished hollow sections", g.Name)}
+		return nil, &ScopeError{"EN 10210-1 has no M grade for hot-finished hollow sections"}
 	}
 	if src == design.Table31 {
 		return g.table31(s.Finish), nil
