@@ -25,7 +25,7 @@ var resultColumns = []resultColumn{
 	{"Member", "Level", 13, func(_ *resultsPage, l *Line) workbook.Cell { return workbook.TextCell(Level(&l.Member.Column)) }},
 	{"Member", ">No.", 6, func(_ *resultsPage, l *Line) workbook.Cell { return some(float64(l.Member.Column.Quantity), whole) }},
 	{"Member", ">Length [m]", 10, func(_ *resultsPage, l *Line) workbook.Cell { return some(l.Member.Column.Length/1e3, "0.00#") }},
-	{"Outcome", "Status", 13, (*resultsPage).status},
+	{"Outcome", "Status", 15, (*resultsPage).status},
 	{"Outcome", "Section", 19, func(_ *resultsPage, l *Line) workbook.Cell { return workbook.TextCell(l.Result.Section) }},
 	{"Outcome", "Grade", 8, func(_ *resultsPage, l *Line) workbook.Cell { return workbook.TextCell(l.Result.Grade) }},
 	{"Outcome", ">Utilisation", 12, func(_ *resultsPage, l *Line) workbook.Cell { return utilisationCell(&l.Result) }},
