@@ -8,7 +8,7 @@ type decimalVote struct {
 	// Numbers such as 3,500 can be read either way. In a column of lengths
 	// only one of the two readings may be a length that a column can have.
 	likelyPoint, likelyComma int
-	open                     string // the first that nothing tells of
+	openPoint, openComma     string // the first with this mark that nothing tells of
 }
 
 // see takes the evidence of one number. plausible tells whether a value of its
@@ -30,8 +30,16 @@ func (d *decimalVote) see(s string, plausible func(float64) bool) {
 		d.likelyPoint++
 	case plausible != nil && plausible(asComma) && !plausible(asPoint):
 		d.likelyComma++
-	case d.open == "":
-		d.open = strings.Clone(trim(s))
+	case strings.IndexByte(s, ',') < 0:
+		keepFirst(&d.openPoint, s)
+	default:
+		keepFirst(&d.openComma, s)
+	}
+}
+
+func keepFirst(kept *string, s string) {
+	if *kept == "" {
+		*kept = strings.Clone(trim(s))
 	}
 }
 
@@ -64,14 +72,18 @@ func pick(point bool) byte {
 	return ','
 }
 
-// unsure returns a number that is read with a decimal comma where nothing but
-// the form of the file speaks for it; "" where there is none. The other reading
-// is a thousand times greater.
+// unsure returns a number that is read with a decimal mark where nothing but
+// custom speaks for it; "" where there is none. The other reading is a thousand
+// times greater.
 func (d *decimalVote) unsure(hint byte) string {
-	if d.point == d.comma && d.likelyPoint == d.likelyComma && d.mark(hint) == ',' {
-		return d.open
+	switch {
+	case d.point != d.comma || d.likelyPoint != d.likelyComma:
+		return ""
+	case d.mark(hint) == ',':
+		return d.openComma
+	default:
+		return d.openPoint
 	}
-	return ""
 }
 
 // mixed reports whether some numbers contradict the mark that was chosen, and

@@ -41,7 +41,11 @@ func TestCommaThatNothingTellsOf(t *testing.T) {
 	}
 	unsure := notes("\nC1 | 4 | 1,200\nC2 | 4 | 900")
 	assert.Len(t, unsure, 1)
-	assert.Contains(t, unsure[0], `"1,200" is read with a decimal comma`)
+	assert.Contains(t, unsure[0], `"1,200" is read with the decimal mark ','`)
+	point := readAll(t, sheetOf("Mark | Length | N_Ed\nC1 | 4 | 506.400\nC2 | 4 | 900")).Summary.Notes
+	assert.Len(t, point, 1)
+	assert.Contains(t, point[0], `"506.400" is read with the decimal mark '.'`)
+	assert.Empty(t, readAll(t, sheetOf("Mark | Length | N_Ed\nC1 | 4.2 | 506.400")).Summary.Notes)
 	assert.Empty(t, notes("\nC1 | 4,2 | 1,200\nC2 | 4 | 900"))
 	assert.Empty(t, notes("\nC1 | 4,200 | 1,200\nC2 | 4 | 900"), "the length tells")
 	assert.Empty(t, readAll(t, sheetOf("Mark | Length | N_Ed\nC1 | 4 | 1,200")).Summary.Notes, "read as 1200, which is safe")

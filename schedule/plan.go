@@ -36,7 +36,7 @@ func (s *scanner) plan(settings *Settings, notes []string) (*Plan, error) {
 	}
 	sum.Notes = append(notes, s.remarks(p)...)
 	if n := s.vote.unsure(hint); n != "" {
-		sum.Notes = append(sum.Notes, fmt.Sprintf("%q is read with a decimal comma, and no number tells that it is one: leave the comma out where it groups thousands", n))
+		sum.Notes = append(sum.Notes, fmt.Sprintf("%q is read with the decimal mark %q, and no number tells that it is one: leave it out where it groups thousands", n, p.Decimal))
 	}
 	return p, nil
 }
