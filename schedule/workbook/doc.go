@@ -6,5 +6,6 @@
 // compressed, passes the schedule's sheet through as a stream to which the
 // result cells are added, and adds to the others (styles, list of sheets) by
 // inserting, so that every byte of the user's stays. The project's own sheets
-// are made with excelize in a workbook of their own and grafted.
+// are made with excelize in a workbook of their own and grafted; their rows are
+// put in on the way, since the library takes long over many cells.
 package workbook
