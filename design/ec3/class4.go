@@ -37,7 +37,7 @@ func RhoOutstand(lambdaP float64) float64 {
 }
 
 // Rho returns the plate slenderness of an element in uniform compression and
-// the part of its width that is effective.
+// the part of its width that is effective. EN 1993-1-5:2006 4.4(2).
 func (e *Element) Rho(eps float64) (lambdaP, rho float64) {
 	if e.Internal {
 		lambdaP = LambdaP(e.Ratio, eps, kSigmaInternal)

@@ -48,8 +48,9 @@ func outstand(c, t, eps float64, count int) Element {
 }
 
 // Elements returns the parts of a section that classify it in pure
-// compression, eps being sqrt(235/fy). The clear width of the sides of a
-// rectangular hollow section is taken as h - 3t (common practice, no source).
+// compression, eps being sqrt(235/fy), fy in MPa. EN 1993-1-1:2005 Table 5.2.
+// The clear width of the sides of a rectangular hollow section is taken as
+// h - 3t (common practice, no source).
 func Elements(s *catalogue.Section, eps float64) []Element {
 	switch s.Shape {
 	case catalogue.ShapeI:

@@ -35,7 +35,8 @@ func kinds(a *ec3.Assessment) []design.Kind {
 
 // The criterion from its own resistances: 203x203x46 UKC in S355, by hand.
 // N_b,z,Rd over 4 m: lambdaBar_z = 4000/(51.3 x 76.41) = 1.020, curve c, chi =
-// 0.528, x 58.7 cm2 x 355 = 1101 kN. M_z: 1.5 x 5/(231 cm3 x 355) = 0.0915.
+// 0.528, x 58.7 cm2 x 355 = 1101 kN. M_z: 1.5 x 5/(231 cm3 x 355) = 0.0915. The
+// room of 0.5 % is that of three figures.
 func TestSimpleConstruction(t *testing.T) {
 	set := settings()
 	set.Interaction = design.SimpleInteraction
