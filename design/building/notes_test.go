@@ -155,3 +155,15 @@ func TestBridgeKeepsToTheStack(t *testing.T) {
 	got := p.bridge([]bool{false, false, true, false, false})
 	assert.ElementsMatch(t, []link{{0, 3, 1, "A"}, {1, 4, 1, "B"}}, got)
 }
+
+// What the rules do not cover between the section and the next lighter one is
+// said where the sizes are decided together, too.
+func TestWhatTheRulesDoNotCoverIsSaid(t *testing.T) {
+	e := engineOf(t, func(s *design.Settings) { s.Families, s.Grades = []string{"L"}, []string{"S355"} })
+	cols := []design.Column{length1("A1", 0, 3e5, 4000), length1("B1", 0, 2.5e5, 4000)}
+	d := size(t, e, cols, Options{MostSizes: 1})
+	for _, r := range d.Results {
+		require.Equal(t, design.Passes, r.Status)
+		assert.Contains(t, strings.Join(r.Notes, "; "), "lighter, and left out: L ")
+	}
+}

@@ -278,7 +278,8 @@ func (r *run) chosen(b *builder, p *problem, choice project.Choice) []search.Cho
 	for k := range out {
 		out[k] = search.Chosen{Set: r.plan.sets[k]}
 		if c := decided[k]; c != nil {
-			out[k].Candidate, out[k].Lighter, out[k].Why = c, b.options[k].List.Lighter(c), r.why()
+			l := b.options[k].List
+			out[k].Candidate, out[k].Lighter, out[k].Over, out[k].Why = c, l.Lighter(c), l.Over(c), r.why()
 		}
 	}
 	return out

@@ -63,6 +63,7 @@ type Chosen struct {
 	Set
 	Candidate *ec3.Candidate // nil: the set is sized by itself
 	Lighter   *ec3.Candidate // the next lighter one, as evidence; nil: none
+	Over      string         // what List.Over says of it
 	Why       string         // why a lighter one that passes was not taken
 }
 
@@ -102,6 +103,11 @@ func (t *team) assign(c *Chosen) {
 		m.res.Fixed = m.col.Given != ""
 		if !ec3.Passes(m.res.Utilisation, m.limit) {
 			failed(m.res)
+		}
+	}
+	for _, m := range t.mates {
+		if c.Over != "" {
+			m.res.Notes = append(m.res.Notes, c.Over)
 		}
 	}
 	if c.Lighter == nil {

@@ -128,6 +128,16 @@ func (l *List) lighter(i int) int {
 	return j
 }
 
+// Over says which sections stand between a candidate of the list and the next
+// lighter one and were left out, since a rule does not cover them, and why;
+// nothing where there is none.
+func (l *List) Over(c *ec3.Candidate) string {
+	if i := slices.Index(l.Candidates, c); i >= 0 {
+		return l.over[i]
+	}
+	return ""
+}
+
 // Lighter returns the candidate of the list that the choice would have
 // preferred next to c, nil if there is none.
 func (l *List) Lighter(c *ec3.Candidate) *ec3.Candidate {
