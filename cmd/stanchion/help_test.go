@@ -4,6 +4,7 @@ import (
 	"bytes"
 	"context"
 	"os"
+	"regexp"
 	"strings"
 	"testing"
 
@@ -24,7 +25,7 @@ func TestFirstExampleOfEveryCommandWorks(t *testing.T) {
 		}
 		t.Run(c.Name(), func(t *testing.T) {
 			line, _, _ := strings.Cut(strings.TrimSpace(c.Example), "\n")
-			words := strings.Fields(line)
+			words := typed(line)
 			require.NotEmpty(t, words, "no example")
 			require.Equal(t, "stanchion", words[0])
 			var out bytes.Buffer
@@ -33,4 +34,12 @@ func TestFirstExampleOfEveryCommandWorks(t *testing.T) {
 			assert.LessOrEqual(t, status, 1, "%s\n%s", line, out.String())
 		})
 	}
+}
+
+// typed splits a command line as a shell does that has double quotes alone.
+func typed(line string) (words []string) {
+	for _, w := range regexp.MustCompile(`(?:"[^"]*"|[^ "])+`).FindAllString(line, -1) {
+		words = append(words, strings.ReplaceAll(w, `"`, ""))
+	}
+	return words
 }
