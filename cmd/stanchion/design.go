@@ -11,6 +11,7 @@ import (
 	"stanchion/design/reclaim"
 	"stanchion/design/search"
 	"stanchion/schedule"
+	"stanchion/schedule/summary"
 )
 
 // design designs the members in their order and hands each to the outputs. The
@@ -20,6 +21,7 @@ func (r *run) design(ctx context.Context) error {
 	defer bar.done()
 	put := func(m *schedule.Member, res *design.Result) error {
 		r.tally.Add(m, res)
+		r.leastReserve(m, res)
 		bar.add()
 		return r.out.put(m, res)
 	}
@@ -29,6 +31,17 @@ func (r *run) design(ctx context.Context) error {
 	return search.Stream(ctx, r.engine, r.mode, r.flags.workers, r.jobs(), func(j *search.Job[*schedule.Member]) error {
 		return put(j.Tag, &j.Result)
 	})
+}
+
+// leastReserve keeps the member whose axial force can grow the least, of those
+// that pass.
+func (r *run) leastReserve(m *schedule.Member, res *design.Result) {
+	if res.Status != design.Passes || res.ReserveCheck == design.KindNone {
+		return
+	}
+	if r.least == nil || res.ReserveN < r.least.Result.ReserveN {
+		r.least = &summary.Line{Member: m, Result: *res}
+	}
 }
 
 // mustHold reports whether a decision needs all members at once.

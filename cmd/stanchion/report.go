@@ -12,6 +12,7 @@ import (
 	"stanchion/design/search"
 	"stanchion/schedule"
 	"stanchion/schedule/summary"
+	"stanchion/schedule/takeoff"
 	"stanchion/schedule/tradeoff"
 )
 
@@ -36,6 +37,7 @@ func (r *run) report(ctx context.Context) {
 	r.saySteel()
 	r.sayAtHand()
 	r.saySizes()
+	r.sayReserve()
 	r.sayFailing(ctx)
 	r.sayNotRead()
 	r.sayWritten()
@@ -176,6 +178,20 @@ func (r *run) saySizes() {
 		r.print("")
 		r.print(sizesLines(r.sizesTable(), "  ")...)
 	}
+}
+
+// sayReserve says which member can carry the least more.
+func (r *run) sayReserve() {
+	if r.least == nil {
+		return
+	}
+	res := &r.least.Result
+	factor := ""
+	if res.Reserve > 0 {
+		factor = fmt.Sprintf(" (factor %.3f)", res.Reserve)
+	}
+	r.print("")
+	r.paragraph("", fmt.Sprintf("Least reserve: %s, %.1f kN on N_Ed%s, then %s", takeoff.MemberName(&r.least.Member.Column), res.ReserveN/1000, factor, schedule.CheckName(res.ReserveCheck)))
 }
 
 // sayFailing lists the members that fail, with what would pass in their place.

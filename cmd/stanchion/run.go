@@ -38,6 +38,7 @@ type run struct {
 	keep       *keeping         // the old issue whose sections stay; nil: none
 	curve      []building.Trade // what fewer sizes come to, where they are limited
 	anySizes   *building.Trade  // and what any number of them does
+	least      *summary.Line    // the member with the least reserve, where it is looked for
 	tally      *summary.Tally
 }
 
