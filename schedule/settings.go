@@ -28,6 +28,7 @@ func ParseAssignment(s string) (Assignment, error) {
 type Settings struct {
 	Design      design.Settings
 	Compression string // positive, negative; empty: not said
+	Project     string // name of the project; empty: not said
 	Stock       string // file of the sections that may be used; empty: the whole catalogue
 	TakeOff     TakeOff
 	Together    Together

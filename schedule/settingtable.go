@@ -47,8 +47,23 @@ func init() {
 		offSetting("shadow factor", "shadow factor|k_sh", 0.01, 1, func(s *Settings) *float64 { return &s.Design.ShadowFactor }, "off"),
 		choiceSetting("objective", "objective", "mass", func(s *Settings) *design.Objective { return &s.Design.Rates.Objective }, "mass", "cost", "carbon"),
 	}
+	settingTable = append(settingTable, projectSetting())
 	settingTable = append(settingTable, togetherSettings()...)
 	settingTable = append(settingTable, takeOffSettings()...)
+}
+
+// projectSetting names the project on what is handed over.
+func projectSetting() setting {
+	const most = 120 // letters that a title block holds
+	return setting{"project", spell("project|project name|project title"), "", "the project's name, for title blocks and the summary",
+		func(r *settingsReader, v string) error {
+			if len([]rune(v)) > most {
+				return fmt.Errorf("is longer than the %d letters of a title block: shorten it", most)
+			}
+			r.set.Project = v
+			return nil
+		},
+		func(s *Settings) string { return s.Project }}
 }
 
 // SettingInfo describes one setting for people.

@@ -153,6 +153,7 @@ func (r *run) info() (*summary.Info, error) {
 		return nil, err
 	}
 	return &summary.Info{
+		Project:  r.plan.Settings.Project,
 		Program:  "stanchion " + versionText(),
 		Standard: standard,
 		National: &r.plan.Settings.Design.National,

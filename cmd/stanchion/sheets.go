@@ -53,7 +53,7 @@ func sheetsCommand(con *console) *cobra.Command {
 	}
 	fl := c.Flags()
 	fl.StringVarP(&f.output, "output", "o", "", "write the sheets to `FILE` (default: beside the input, as NAME"+sheetsSuffix+".pdf)")
-	fl.StringVar(&f.title, "title", "", "`TEXT` in the title block (default: the name of the schedule)")
+	fl.StringVar(&f.title, "title", "", "`TEXT` in the title block (default: the setting project, else the name of the schedule)")
 	fl.StringVar(&f.elevations, "elevations", "", "write the elevation of every column line as SVG into `FOLDER` too")
 	fl.BoolVar(&f.force, "force", false, "replace an output that no earlier run wrote")
 	f.bindReading(c)
@@ -104,6 +104,9 @@ func (r *run) sheets(ctx context.Context, f *sheetsFlags, marks []string) error 
 func (r *run) project(f *sheetsFlags) (*calcsheet.Project, error) {
 	p := &calcsheet.Project{Title: f.title, File: "standard input", Sheet: r.plan.Sheet, Program: "stanchion " + versionText(),
 		Standard: standard, National: r.plan.Settings.Design.National}
+	if p.Title == "" {
+		p.Title = r.plan.Settings.Project
+	}
 	if r.input != stdio {
 		sum, err := fileSum(r.input)
 		if err != nil {

@@ -231,7 +231,7 @@ func (p *page) settings() {
 	const name = "Settings"
 	_, err := p.NewSheet(name)
 	p.do(err)
-	rows := [][2]string{{"Setting", "Value"}, {"national", "UK"}, {"grade", "S355"}, {"families", "UKC"}, {"limit", "1.00"}, {"effective length", "segment"}}
+	rows := [][2]string{{"Setting", "Value"}, {"project", "Ottermere Depot"}, {"national", "UK"}, {"grade", "S355"}, {"families", "UKC"}, {"limit", "1.00"}, {"effective length", "segment"}}
 	for i, r := range rows {
 		style := p.styles["plain"]
 		if i == 0 {

@@ -18,11 +18,13 @@ func summarySheet(info *Info, t *Tally) workbook.Sheet {
 	p.Footer = info.File
 	p.Blank()
 	for _, pair := range [][2]string{
-		{"Schedule", info.File}, {"Sheet", info.Sheet}, {"SHA-256 of the schedule", info.SHA256},
+		{"Project", info.Project}, {"Schedule", info.File}, {"Sheet", info.Sheet}, {"SHA-256 of the schedule", info.SHA256},
 		{"Program", info.Program}, {"Standard", info.Standard},
 		{"National set", info.National.Name + ": " + info.National.Source},
 	} {
-		p.Row(workbook.LabelCell(pair[0]), workbook.Cell{Value: pair[1]})
+		if pair[0] != "Project" || pair[1] != "" {
+			p.Row(workbook.LabelCell(pair[0]), workbook.Cell{Value: pair[1]})
+		}
 	}
 	p.outcomes(t)
 	p.steel(t)

@@ -9,6 +9,7 @@ import (
 
 // Info is what the sheets say of the run beside its results.
 type Info struct {
+	Project  string // empty: not said
 	Program  string // name and version
 	Standard string
 	National *design.National
