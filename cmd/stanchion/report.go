@@ -190,8 +190,12 @@ func (r *run) sayReserve() {
 	if res.Reserve > 0 {
 		factor = fmt.Sprintf(" (factor %.3f)", res.Reserve)
 	}
+	whose := ""
+	if c := &r.tally.Count; c[design.Fails]+c[design.NoSection] > 0 {
+		whose = " of those that pass"
+	}
 	r.print("")
-	r.paragraph("", fmt.Sprintf("Least reserve: %s, %.1f kN on N_Ed%s, then %s", takeoff.MemberName(&r.least.Member.Column), res.ReserveN/1000, factor, schedule.CheckName(res.ReserveCheck)))
+	r.paragraph("", fmt.Sprintf("Least reserve%s: %s, %.1f kN on N_Ed%s, then %s", whose, takeoff.MemberName(&r.least.Member.Column), res.ReserveN/1000, factor, schedule.CheckName(res.ReserveCheck)))
 }
 
 // sayFailing lists the members that fail, with what would pass in their place.
