@@ -152,13 +152,15 @@ func (r *run) sayAtHand() {
 	r.paragraph("", fmt.Sprintf("Steel at hand: %d of %s are used, %.2f t in columns; %.2f t are bought new", d.Used, plural(d.AtHand, "piece"), mass/1000, (all-mass)/1000))
 	name, unit, _ := strings.Cut(tradeoff.Of("", nil, nil, r.plan.Settings.Design.Rates.Objective).Quantity(), ", ")
 	proof := "proven the most that can be saved"
-	if !d.Proven {
-		proof = "not proven the most"
-		if d.Bound > d.Saved {
-			proof = fmt.Sprintf("the most that can be saved is proven to be within %.2g %% of it", 100*(d.Bound/d.Saved-1))
-		}
+	if d.Bound > d.Saved {
+		proof = fmt.Sprintf("the most that can be saved is proven to be within %.2g %% of it", 100*(d.Bound/d.Saved-1))
 	}
-	r.paragraph("", fmt.Sprintf("It saves %s of new %s: %s", saving(d.Saved, unit), name, proof))
+	what := "It saves %s of new %s: %s"
+	if !d.Proven && d.Bound == d.Saved { // sizes are few, or lengths depend on each other
+		what = "Bought new, each column by itself, that would be %s of %s: %s"
+		proof = "with few sizes, or lengths that depend on each other, it is not proven the most"
+	}
+	r.paragraph("", fmt.Sprintf(what, saving(d.Saved, unit), name, proof))
 	if d.Tied > 0 {
 		r.paragraph("", fmt.Sprintf("%s of groups and stacks, whose sections are decided together, are sized new", plural(d.Tied, "column")))
 	}
