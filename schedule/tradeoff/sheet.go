@@ -2,6 +2,7 @@ package tradeoff
 
 import (
 	"fmt"
+	"math"
 	"strings"
 
 	"github.com/xuri/excelize/v2"
@@ -16,7 +17,7 @@ const Sheet = "Few sizes"
 // columns of the sheet, from A
 const (
 	colMost, colAmount, colAny = "A", "B", "C"
-	chartRows                  = 19 // that the chart stands over
+	chartRows                  = 20 // that the chart stands over
 )
 
 // Page lays the table out as a sheet of its own, with a chart. name is the one
@@ -107,8 +108,21 @@ func (t *Table) chart(sheet, cell string, first, last int) workbook.Chart {
 		Title:     excelize.ChartTitle{Paragraph: []excelize.RichTextRun{{Text: headingOf(t.Quantity()) + " over the number of sizes"}}},
 		Legend:    excelize.ChartLegend{Position: "bottom"},
 		XAxis:     excelize.ChartAxis{Font: font, Title: excelize.ChartTitle{Paragraph: []excelize.RichTextRun{{Text: "Sizes"}}}},
-		YAxis:     excelize.ChartAxis{Font: font, Title: excelize.ChartTitle{Paragraph: []excelize.RichTextRun{{Text: headingOf(t.Quantity())}}}, MajorGridLines: true},
+		YAxis:     excelize.ChartAxis{Font: font, Minimum: t.floor(), Title: excelize.ChartTitle{Paragraph: []excelize.RichTextRun{{Text: headingOf(t.Quantity())}}}, MajorGridLines: true},
 	}}
+}
+
+// floor is where the axis of amounts begins: a round number somewhat below all
+// of them, so that what sizes save is seen.
+func (t *Table) floor() *float64 {
+	served := t.Served()
+	span := served[0].Amount - t.Any.Amount
+	if !(span > 0) {
+		return nil
+	}
+	step := math.Pow(10, math.Floor(math.Log10(span)))
+	x := max(0, math.Floor((t.Any.Amount-0.3*span)/step)*step)
+	return &x
 }
 
 // The colours of the chart and the picture: a dark blue and an orange that

@@ -92,6 +92,13 @@ func TestSheetHasAChartOfItsNumbers(t *testing.T) {
 	}
 }
 
+func TestChartBeginsBelowWhatItShows(t *testing.T) {
+	assert.InDelta(t, 9, *table(design.ByMass).floor(), 1e-9) // 10 to 12 t
+	lines, any := curve()
+	lines[1].Total = 10000
+	assert.Nil(t, Of("x", lines, any, design.ByMass).floor(), "nothing is saved")
+}
+
 func TestPictures(t *testing.T) {
 	for format, begins := range map[string]string{"svg": "<?xml", "png": "\x89PNG"} {
 		var a, b bytes.Buffer
