@@ -1,6 +1,7 @@
 package main
 
 import (
+	"bufio"
 	"context"
 	"errors"
 	"fmt"
@@ -96,4 +97,16 @@ func (f *runFlags) bindApart(c *cobra.Command, what, forms string, format *strin
 	fl.StringVar(format, "format", "text", "`FORM` on standard output: text or csv")
 	fl.BoolVar(&f.force, "force", false, "replace an output that no earlier run wrote")
 	f.bindReading(c)
+}
+
+// beginsWith reports whether the first line of a text file is one that ours
+// begin with.
+func beginsWith(path string, ours func(line string) bool) bool {
+	f, err := os.Open(path)
+	if err != nil {
+		return false
+	}
+	defer f.Close()
+	line, _ := bufio.NewReaderSize(f, 64<<10).ReadSlice('\n')
+	return ours(string(line))
 }

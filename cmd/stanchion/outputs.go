@@ -1,8 +1,6 @@
 package main
 
 import (
-	"bufio"
-	"bytes"
 	"context"
 	"errors"
 	"fmt"
@@ -245,11 +243,7 @@ func (s *jsonSink) finish(context.Context) error                     { return s.
 // jsonEarlier reports whether an earlier run wrote a file of JSON lines: its
 // first line opens with the first keys.
 func jsonEarlier(path string) bool {
-	f, err := os.Open(path)
-	if err != nil {
-		return false
-	}
-	defer f.Close()
-	line, _ := bufio.NewReaderSize(f, 64<<10).ReadSlice('\n')
-	return bytes.HasPrefix(line, []byte(`{"mark":`)) && bytes.Contains(line, []byte(`"stack":`)) && bytes.Contains(line, []byte(`"next_lighter":`))
+	return beginsWith(path, func(line string) bool {
+		return strings.HasPrefix(line, `{"mark":`) && strings.Contains(line, `"stack":`) && strings.Contains(line, `"next_lighter":`)
+	})
 }

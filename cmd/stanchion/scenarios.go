@@ -1,12 +1,10 @@
 package main
 
 import (
-	"bufio"
 	"context"
 	"errors"
 	"fmt"
 	"io"
-	"os"
 	"path/filepath"
 	"strings"
 
@@ -270,14 +268,7 @@ func (s *scenariosRun) text(w io.Writer) error {
 
 // scenariosEarlier reports whether an earlier run wrote such a table.
 func scenariosEarlier(path string) bool {
-	if workbook.WrittenByUs(path) {
-		return true
-	}
-	f, err := os.Open(path)
-	if err != nil {
-		return false
-	}
-	defer f.Close()
-	line, _ := bufio.NewReaderSize(f, 4<<10).ReadString('\n')
-	return sidebyside.IsCSV(line) || strings.HasPrefix(line, scenariosTitle)
+	return workbook.WrittenByUs(path) || beginsWith(path, func(line string) bool {
+		return sidebyside.IsCSV(line) || strings.HasPrefix(line, scenariosTitle)
+	})
 }

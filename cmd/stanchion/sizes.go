@@ -1,12 +1,10 @@
 package main
 
 import (
-	"bufio"
 	"context"
 	"errors"
 	"fmt"
 	"io"
-	"os"
 	"path/filepath"
 	"strconv"
 	"strings"
@@ -146,16 +144,9 @@ func sizesLines(table *tradeoff.Table, indent string) []string {
 // sizesEarlier reports whether an earlier run wrote such a file. A picture
 // cannot be told.
 func sizesEarlier(path string) bool {
-	if workbook.WrittenByUs(path) {
-		return true
-	}
-	f, err := os.Open(path)
-	if err != nil {
-		return false
-	}
-	defer f.Close()
-	line, _ := bufio.NewReaderSize(f, 4<<10).ReadString('\n')
-	return tradeoff.IsCSV(line) || strings.HasPrefix(line, sizesTitle)
+	return workbook.WrittenByUs(path) || beginsWith(path, func(line string) bool {
+		return tradeoff.IsCSV(line) || strings.HasPrefix(line, sizesTitle)
+	})
 }
 
 // say tells a person what became of the run where the table went to a file,

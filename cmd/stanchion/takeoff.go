@@ -1,10 +1,8 @@
 package main
 
 import (
-	"bufio"
 	"context"
 	"io"
-	"os"
 	"path/filepath"
 	"strings"
 
@@ -159,16 +157,9 @@ func (r *takeoffRun) write(ctx context.Context, write func(io.Writer) error) err
 
 // takeoffEarlier reports whether an earlier run wrote a take-off.
 func takeoffEarlier(path string) bool {
-	if workbook.WrittenByUs(path) {
-		return true
-	}
-	f, err := os.Open(path)
-	if err != nil {
-		return false
-	}
-	defer f.Close()
-	line, _ := bufio.NewReaderSize(f, 4<<10).ReadString('\n')
-	return takeoff.IsCSV(line) || strings.HasPrefix(line, takeoffTitle)
+	return workbook.WrittenByUs(path) || beginsWith(path, func(line string) bool {
+		return takeoff.IsCSV(line) || strings.HasPrefix(line, takeoffTitle)
+	})
 }
 
 // say tells a person what became of the run where the results went to a file,
