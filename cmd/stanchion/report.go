@@ -285,7 +285,7 @@ func (r *run) sayNotRead() {
 		r.print(fmt.Sprintf("  and %d more: see the result column \"note\"", more))
 	}
 	if r.tally.Resized && r.mode == search.Check {
-		r.paragraph("  ", "The sections that an earlier run chose are results and not given: copy them into a column headed Section to have them checked.")
+		r.paragraph("  ", "The sections that an earlier run chose are results and not given. Set them against revised loads with stanchion compare OLD NEW, or copy them into a column headed Section to have them checked.")
 	}
 }
 
