@@ -14,7 +14,7 @@ import (
 // problem is a project.Problem and what its parts stand for.
 type problem struct {
 	project.Problem
-	sections []*catalogue.Section // by size
+	sections []*catalogue.Section // by size; graded, a section stands once for each of its grades
 	nodes    [][]int              // sets, by chain and node
 	pick     map[int][]*ec3.Candidate
 }
@@ -40,13 +40,15 @@ func (b *builder) silent() []bool {
 	return out
 }
 
-// build makes the problem of the sets that wanted names.
-func (b *builder) build(wanted []bool, spliceCost float64, links []link) *problem {
+// build makes the problem of the sets that wanted names. Its sizes are sections,
+// in whatever grade is cheapest for each set; graded, a section in two grades is
+// two sizes, with a splice between them.
+func (b *builder) build(wanted []bool, spliceCost float64, links []link, graded bool) *problem {
 	p := &problem{pick: map[int][]*ec3.Candidate{}}
-	p.sections = b.sections(wanted)
-	size := map[*catalogue.Section]int{}
-	for j, s := range p.sections {
-		size[s] = j
+	size := map[kind]int{}
+	for j, c := range b.kinds(wanted, graded) {
+		p.sections = append(p.sections, c.Section)
+		size[kindOf(c, graded)] = j
 	}
 	p.Sizes = len(p.sections)
 	p.MayStand = func(below, above int) bool { return mayStand(p.sections[below], p.sections[above]) }
@@ -57,7 +59,7 @@ func (b *builder) build(wanted []bool, spliceCost float64, links []link) *proble
 		place := map[int]int{}
 		for n, k := range sets {
 			place[k] = n
-			cost, pick := b.node(k, size)
+			cost, pick := b.node(k, size, graded)
 			p.pick[k] = pick
 			chain.Nodes = append(chain.Nodes, project.Node{Cost: cost})
 		}
@@ -72,10 +74,10 @@ func (b *builder) build(wanted []bool, spliceCost float64, links []link) *proble
 	return p
 }
 
-// sections returns every section that a wanted set may have, in the order in
-// which the search prefers them, at its best grade.
-func (b *builder) sections(wanted []bool) []*catalogue.Section {
-	best := map[*catalogue.Section]*ec3.Candidate{}
+// kinds returns every section that a wanted set may have, in the order in which
+// the search prefers them: at its best grade or, graded, once for each grade.
+func (b *builder) kinds(wanted []bool, graded bool) []*ec3.Candidate {
+	best := map[kind]*ec3.Candidate{}
 	for k := range b.options {
 		if !wanted[k] {
 			continue
@@ -85,8 +87,9 @@ func (b *builder) sections(wanted []bool) []*catalogue.Section {
 			if !o.Pass[i] && !o.Given {
 				continue
 			}
-			if had, ok := best[c.Section]; !ok || b.engine.Compare(c, had) < 0 {
-				best[c.Section] = c
+			k := kindOf(c, graded)
+			if had, ok := best[k]; !ok || b.engine.Compare(c, had) < 0 {
+				best[k] = c
 			}
 		}
 	}
@@ -95,33 +98,47 @@ func (b *builder) sections(wanted []bool) []*catalogue.Section {
 		all = append(all, c)
 	}
 	slices.SortFunc(all, b.engine.Compare)
-	out := make([]*catalogue.Section, len(all))
-	for j, c := range all {
-		out[j] = c.Section
-	}
-	return out
+	return all
 }
 
 // node returns the cost of every size for a set, in its cheapest grade that
-// passes, and the candidate that it stands for. A given section stays, whether
-// it passes or not.
-func (b *builder) node(k int, size map[*catalogue.Section]int) (cost []float64, pick []*ec3.Candidate) {
+// passes, and the candidate that it stands for. A given section stays where it
+// passes in no grade.
+func (b *builder) node(k int, size map[kind]int, graded bool) (cost []float64, pick []*ec3.Candidate) {
 	cost, pick = make([]float64, len(size)), make([]*ec3.Candidate, len(size))
 	for j := range cost {
 		cost[j] = math.Inf(1)
 	}
 	o := &b.options[k]
 	metres := b.metres(k)
+	stays := o.Given && !slices.Contains(o.Pass, true)
 	for i, c := range o.List.Candidates {
-		if !o.Pass[i] && !o.Given {
+		if !o.Pass[i] && !stays {
 			continue
 		}
-		j := size[c.Section]
+		j := size[kindOf(c, graded)]
 		if v := metres * b.engine.Objective(c); v < cost[j] {
 			cost[j], pick[j] = v, c
 		}
 	}
 	return cost, pick
+}
+
+// leaveOutUnserved takes out the chains that no choice of any number of sizes
+// serves, and returns their sets.
+func (p *problem) leaveOutUnserved() (out [][]int) {
+	choice, _ := p.Cheapest()
+	var chains []project.Chain
+	var nodes [][]int
+	for c := range choice {
+		if choice[c] == nil {
+			out = append(out, p.nodes[c])
+			continue
+		}
+		chains, nodes = append(chains, p.Chains[c]), append(nodes, p.nodes[c])
+	}
+	p.Chains, p.nodes = chains, nodes
+	return out
 }
 
 // metres returns the length of all pieces of a set.

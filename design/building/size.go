@@ -74,8 +74,7 @@ func (r *run) attempt(ctx context.Context, b *builder, progress func(int)) (*Dec
 	r.notes, r.curve, r.any = maps.Clone(r.doubts), nil, nil
 	silent := b.silent()
 	links := r.sound(b, r.plan.bridge(silent))
-	p := b.build(r.wanted(silent, links), r.spliceCost(), links)
-	choice, err := r.solve(ctx, p)
+	p, choice, err := r.solve(ctx, b, r.wanted(silent, links), links)
 	if err != nil {
 		return nil, nil, err
 	}
@@ -172,20 +171,40 @@ func (r *run) say(set int, text string) {
 	}
 }
 
-// solve finds the size of every node; a chain that no choice serves has none.
-func (r *run) solve(ctx context.Context, p *problem) (project.Choice, error) {
+// solve finds the size of every node of the problem of the wanted sets; a chain
+// that no choice serves has none. Where a splice may stand above any length, a
+// change of grade is one, so that the choice is made graded.
+func (r *run) solve(ctx context.Context, b *builder, wanted []bool, links []link) (*problem, project.Choice, error) {
+	graded := r.options.Splices == WhereItPays
+	p := b.build(wanted, r.spliceCost(), links, graded)
 	if r.options.MostSizes == 0 {
 		choice, _ := p.Cheapest()
 		for c := range choice {
 			if choice[c] == nil {
-				r.unserved(p, c)
+				r.unserved(p.nodes[c])
 			}
 		}
-		return choice, nil
+		return p, choice, nil
 	}
 	if err := r.servable(p); err != nil {
-		return nil, err
+		return nil, nil, err
 	}
+	if !graded {
+		choice, err := r.fewSizes(ctx, p, nil)
+		return p, choice, err
+	}
+	sections := b.build(wanted, r.spliceCost(), links, false)
+	sections.leaveOutUnserved()
+	choice, err := r.fewSizes(ctx, sections, p)
+	return p, choice, err
+}
+
+// fewSizes finds the choice of the fewest sizes that were asked for, and the
+// curve up to it. Sizes are the sections of p; graded, if not nil, is the same
+// problem with grades told apart: with the sections that p ends at it says
+// what they come to, and the choice is of its sizes. Changes of grade, which p
+// does not count, only add to the total, so that the bound of p holds.
+func (r *run) fewSizes(ctx context.Context, p, graded *problem) (project.Choice, error) {
 	limited := ctx
 	if r.options.TimeLimit > 0 {
 		var stop context.CancelFunc
@@ -200,7 +219,12 @@ func (r *run) solve(ctx context.Context, p *problem) (project.Choice, error) {
 		return nil, err
 	}
 	for i := range solutions {
-		r.curve = append(r.curve, trade(p, &solutions[i]))
+		named := p
+		if graded != nil {
+			graded.regrade(p, &solutions[i])
+			named = graded
+		}
+		r.curve = append(r.curve, trade(named, &solutions[i]))
 	}
 	last := &solutions[len(solutions)-1]
 	if last.Choice == nil {
@@ -212,20 +236,12 @@ func (r *run) solve(ctx context.Context, p *problem) (project.Choice, error) {
 // servable leaves out chains that no choice of any number of sizes serves, so
 // that they do not stand in the way of the others.
 func (r *run) servable(p *problem) error {
-	choice, _ := p.Cheapest()
-	var chains []project.Chain
-	var nodes [][]int
-	for c := range choice {
-		if choice[c] == nil {
-			r.unserved(p, c)
-			continue
-		}
-		chains, nodes = append(chains, p.Chains[c]), append(nodes, p.nodes[c])
+	for _, sets := range p.leaveOutUnserved() {
+		r.unserved(sets)
 	}
-	if len(chains) == 0 {
+	if len(p.Chains) == 0 {
 		return errors.New("no column has a section that passes: there is no choice of few sizes")
 	}
-	p.Chains, p.nodes = chains, nodes
 	r.any = unlimited(p)
 	return nil
 }
@@ -233,34 +249,23 @@ func (r *run) servable(p *problem) error {
 // unlimited is the trade of any number of sizes.
 func unlimited(p *problem) *Trade {
 	choice, total := p.Cheapest()
-	used := map[int]bool{}
-	for _, picks := range choice {
-		for _, j := range picks {
-			used[j] = true
-		}
-	}
-	t := &Trade{Most: len(used), Total: total, Bound: total, Proven: true}
-	for _, j := range slices.Sorted(maps.Keys(used)) {
-		t.Sizes = append(t.Sizes, p.sections[j].Name())
-	}
+	t := &Trade{Total: total, Bound: total, Proven: true}
+	t.Sizes = p.names(used(choice))
+	t.Most = len(t.Sizes)
 	return t
 }
 
 // unserved tells the columns of a chain that no choice serves: they are sized
 // by themselves.
-func (r *run) unserved(p *problem, c int) {
-	for _, k := range p.nodes[c] {
+func (r *run) unserved(sets []int) {
+	for _, k := range sets {
 		r.say(k, "no choice of sections keeps every one in the stack within the one below: each is sized by itself")
 	}
 }
 
 // trade carries a solution to what people read.
 func trade(p *problem, s *project.Solution) Trade {
-	t := Trade{Most: s.K, Total: s.Cost, Bound: s.Bound, Proven: s.Proven}
-	for _, j := range s.Sizes {
-		t.Sizes = append(t.Sizes, p.sections[j].Name())
-	}
-	return t
+	return Trade{Sizes: p.names(s.Sizes), Most: s.K, Total: s.Cost, Bound: s.Bound, Proven: s.Proven}
 }
 
 // chosen lists every set with what was decided for it.
@@ -269,8 +274,8 @@ func (r *run) chosen(b *builder, p *problem, choice project.Choice) []search.Cho
 	for c, picks := range choice {
 		for n, j := range picks {
 			k := p.nodes[c][n]
-			if !b.options[k].Given { // the search keeps a given section itself
-				decided[k] = p.pick[k][j]
+			if c := p.pick[k][j]; !b.options[k].Given || otherGrade(&b.options[k], c) {
+				decided[k] = c
 			}
 		}
 	}
@@ -279,7 +284,10 @@ func (r *run) chosen(b *builder, p *problem, choice project.Choice) []search.Cho
 		out[k] = search.Chosen{Set: r.plan.sets[k]}
 		if c := decided[k]; c != nil {
 			l := b.options[k].List
-			out[k].Candidate, out[k].Lighter, out[k].Over, out[k].Why = c, l.Lighter(c), l.Over(c), r.why()
+			out[k].Candidate = c
+			if !b.options[k].Given {
+				out[k].Lighter, out[k].Over, out[k].Why = l.Lighter(c), l.Over(c), r.why()
+			}
 		}
 	}
 	return out

@@ -102,7 +102,7 @@ func problemOf(t *testing.T, e *search.Engine, cols []design.Column, o Options) 
 	b := &builder{engine: e, cols: cols, plan: r.plan, options: options}
 	silent := b.silent()
 	links := r.sound(b, r.plan.bridge(silent))
-	p := b.build(r.wanted(silent, links), r.spliceCost(), links)
+	p := b.build(r.wanted(silent, links), r.spliceCost(), links, false)
 	require.NoError(t, r.servable(p))
 	return p
 }

@@ -156,6 +156,15 @@ func (p *Problem) Cheapest() (Choice, float64) {
 	return p.cheapestOf(newChainSolver(p), allSizes(p.Sizes))
 }
 
+// CheapestOf is Cheapest with the open sizes only, given rising.
+func (p *Problem) CheapestOf(open []int) (Choice, float64) {
+	sizes := make([]int32, len(open))
+	for i, j := range open {
+		sizes[i] = int32(j)
+	}
+	return p.cheapestOf(newChainSolver(p), sizes)
+}
+
 func (p *Problem) cheapestOf(s *chainSolver, open []int32) (Choice, float64) {
 	choice, total := make(Choice, len(p.Chains)), 0.0
 	for c := range p.Chains {
