@@ -13,7 +13,6 @@ import (
 	"stanchion/schedule"
 	"stanchion/schedule/summary"
 	"stanchion/schedule/takeoff"
-	"stanchion/schedule/tradeoff"
 )
 
 const (
@@ -150,28 +149,31 @@ func (r *run) sayAtHand() {
 	all := summary.Total(r.tally.Steel()).Mass
 	r.print("")
 	r.paragraph("", fmt.Sprintf("Steel at hand: %d of %s are used, %.2f t in columns; %.2f t are bought new", d.Used, plural(d.AtHand, "piece"), mass/1000, (all-mass)/1000))
-	name, unit, _ := strings.Cut(tradeoff.Of("", nil, nil, r.plan.Settings.Design.Rates.Objective).Quantity(), ", ")
+	by := r.plan.Settings.Design.Rates.Objective
+	name := [...]string{design.ByMass: "new steel", design.ByCost: "the cost of new steel", design.ByCarbon: "the CO2e of new steel"}[by]
 	proof := "proven the most that can be saved"
 	if d.Bound > d.Saved {
 		proof = fmt.Sprintf("the most that can be saved is proven to be within %.2g %% of it", 100*(d.Bound/d.Saved-1))
 	}
-	what := "It saves %s of new %s: %s"
+	what := "It saves %s of %s: %s"
 	if !d.Proven && d.Bound == d.Saved { // sizes are few, or lengths depend on each other
 		what = "Bought new, each column by itself, that would be %s of %s: %s"
 		proof = "with few sizes, or lengths that depend on each other, it is not proven the most"
 	}
-	r.paragraph("", fmt.Sprintf(what, saving(d.Saved, unit), name, proof))
+	if d.Used > 0 {
+		r.paragraph("", fmt.Sprintf(what, saving(d.Saved, by), name, proof))
+	}
 	if d.Tied > 0 {
 		r.paragraph("", fmt.Sprintf("%s of groups and stacks, whose sections are decided together, are sized new", plural(d.Tied, "column")))
 	}
 }
 
 // saving writes kg as t, and money as it is.
-func saving(x float64, unit string) string {
-	if unit == "" {
+func saving(x float64, by design.Objective) string {
+	if by == design.ByCost {
 		return fixed(x, 0)
 	}
-	return fixed(x/1000, 2) + " " + unit
+	return fixed(x/1000, 2) + " t"
 }
 
 // saySizes says what fewer sizes come to, where they are limited.

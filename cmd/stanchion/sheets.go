@@ -81,7 +81,9 @@ func (r *run) sheets(ctx context.Context, f *sheetsFlags, marks []string) error 
 		sheet, err := p.sheet(i)
 		if err != nil {
 			r.con.fail(err)
-			project.Missing = append(project.Missing, calcsheet.Missing{Column: &p.all[i].member.Column, Why: err.Error()})
+			col := &p.all[i].member.Column
+			why := strings.TrimPrefix(err.Error(), col.Mark+": ") // the list names the member itself
+			project.Missing = append(project.Missing, calcsheet.Missing{Column: col, Why: why})
 			continue
 		}
 		sheets = append(sheets, sheet)

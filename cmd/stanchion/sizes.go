@@ -86,7 +86,11 @@ func (r *sizesRun) do(ctx context.Context) error {
 
 // sizesTable is the trade-off of the run's sizes.
 func (r *run) sizesTable() *tradeoff.Table {
-	return tradeoff.Of(filepath.Base(r.input), r.curve, r.anySizes, r.plan.Settings.Design.Rates.Objective)
+	s := &r.plan.Settings
+	t := tradeoff.Of(filepath.Base(r.input), r.curve, r.anySizes, s.Design.Rates.Objective)
+	t.NewOnly = r.reclaim != nil && r.reclaim.Used > 0
+	t.Splices = s.Together.Splices == building.WhereItPays && s.Together.SpliceCost > 0
+	return t
 }
 
 // writer returns how the table is written.

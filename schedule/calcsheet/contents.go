@@ -58,7 +58,7 @@ var listColumns = []struct {
 	x    float64
 	at   anchor
 }{{"sheet", 7, atRight}, {"mark", 10, atLeft}, {"place", 34, atLeft}, {"section", 72, atLeft}, {"grade", 103, atLeft},
-	{"utilisation", 131, atRight}, {"", 133, atLeft}, {"governs", 144, atLeft}}
+	{"utilisation", 127, atRight}, {"", 129, atLeft}, {"governs", 146, atLeft}}
 
 const (
 	listPitch = 4.0

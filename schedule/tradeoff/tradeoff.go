@@ -19,6 +19,9 @@ type Table struct {
 	Lines []Line // by rising number of sizes
 	Any   Line   // with any number of sizes
 
+	NewOnly bool // steel at hand is not in the amounts
+	Splices bool // what splices cost is in the amounts
+
 	objective design.Objective
 }
 
@@ -74,7 +77,20 @@ func (t *Table) scale() float64 {
 
 // Quantity names what is counted, with its unit.
 func (t *Table) Quantity() string {
-	return [...]string{design.ByMass: "steel, t", design.ByCost: "cost", design.ByCarbon: "CO2e, t"}[t.objective]
+	name := [...]string{design.ByMass: "steel", design.ByCost: "cost", design.ByCarbon: "CO2e"}[t.objective]
+	switch {
+	case t.NewOnly && t.objective == design.ByMass:
+		name = "new steel"
+	case t.NewOnly:
+		name += " of new steel"
+	}
+	if t.Splices {
+		name += " and splices"
+	}
+	if t.objective == design.ByCost {
+		return name
+	}
+	return name + ", t"
 }
 
 // Decimals are those that amounts are shown with.

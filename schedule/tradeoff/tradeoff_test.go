@@ -44,6 +44,8 @@ func TestTableSaysWhatSizesSave(t *testing.T) {
 		"Where a gap stands, the search was given up before the least was proven: it lies no further below than the gap.",
 	}, y.Remarks())
 	assert.InDelta(t, 12000, table(design.ByCost).Served()[0].Amount, 0, "money as it is")
+	y.NewOnly, y.Splices = true, true
+	assert.Equal(t, "new steel and splices, t", y.Quantity())
 	assert.Equal(t, "CO2e [t]", headingOf(table(design.ByCarbon).Quantity()))
 }
 
