@@ -24,6 +24,10 @@ type Options struct {
 	Stock func(file string) (*catalogue.Catalogue, error)
 	// LoadsOptional reads a schedule without N_Ed too: for a take-off.
 	LoadsOptional bool
+	// EarlierSheet is the sheet, by what it was to the run that annotated the
+	// schedule, that holds the settings of that run; those that concern the
+	// steel hold where nothing else is said: for a take-off. Empty: none.
+	EarlierSheet string
 }
 
 // Member is what the schedule says of one member, from one row or from several

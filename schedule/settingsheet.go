@@ -63,6 +63,13 @@ func readAllSettings(src Source, opts *Options) (*settingsReader, []string, erro
 	if err != nil {
 		return nil, nil, err
 	}
+	earlier, err := readEarlier(src, opts.EarlierSheet)
+	if err != nil {
+		return nil, nil, err
+	}
+	if _, err := r.layer(earlier); err != nil {
+		return nil, nil, settingRefusal(src.Name(), err)
+	}
 	var notes []string
 	for _, place := range settingPlaces(src, opts) {
 		list, err := readSettings(place.src, place.sheet)

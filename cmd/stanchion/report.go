@@ -120,9 +120,9 @@ func (r *run) saySteel() {
 	if len(list) == 0 {
 		return
 	}
-	t := newTable("  Steel", ">pieces", ">length m", ">tonnes")
+	t := newTable("  Steel", ">lengths", ">length m", ">tonnes")
 	row := func(s summary.Steel) {
-		t.add("  "+s.Family, strconv.Itoa(s.Pieces), strconv.FormatFloat(s.Length, 'f', 1, 64), strconv.FormatFloat(s.Mass/1000, 'f', 2, 64))
+		t.add("  "+s.Family, strconv.Itoa(s.Lengths), strconv.FormatFloat(s.Length, 'f', 1, 64), strconv.FormatFloat(s.Mass/1000, 'f', 2, 64))
 	}
 	for _, s := range list {
 		row(s)

@@ -23,6 +23,7 @@ type run struct {
 	input string
 	mode  search.Mode
 
+	earlierSheet  string                // that holds settings of an earlier run which hold here too
 	loadsOptional bool                  // a schedule without N_Ed will do
 	more          []schedule.Assignment // settings that beat those of the command line
 
@@ -118,6 +119,7 @@ func (r *run) scan(ctx context.Context, assignments []schedule.Assignment) error
 		Stock:    r.stock,
 
 		LoadsOptional: r.loadsOptional,
+		EarlierSheet:  r.earlierSheet,
 	}
 	if r.flags.settings != "" {
 		s, err := openSource(ctx, r.con, r.flags.settings)

@@ -11,6 +11,7 @@ import (
 	"stanchion/catalogue"
 	"stanchion/design"
 	"stanchion/design/search"
+	"stanchion/schedule/summary"
 	"stanchion/schedule/takeoff"
 	"stanchion/schedule/workbook"
 )
@@ -26,7 +27,8 @@ func takeoffCommand(con *console) *cobra.Command {
 			"the longest piece, and cost and embodied carbon where the settings have rates. The sections are\n" +
 			"those of the schedule's own column and, where it is blank, those of the results.\n\n" +
 			"Where the schedule or the setting splices says where the splices are, lengths between them are\n" +
-			"one piece; otherwise every length is.\n\n" +
+			"one piece; otherwise every length is. What the run that annotated a workbook was told of\n" +
+			"splices, allowances and rates holds here too, where nothing else is said.\n\n" +
 			settingsHelp() + "\n\n" + takeoffStatuses,
 		Example: `  stanchion takeoff examples/ottermere-depot-ordered.csv
   stanchion takeoff depot-sized.xlsx -o depot-steel.xlsx --set "cost=1850" --set "carbon=1.74"
@@ -34,7 +36,7 @@ func takeoffCommand(con *console) *cobra.Command {
 		Args: oneFile,
 		RunE: func(c *cobra.Command, args []string) error {
 			r := newRun(con, c, &f, args[0], search.Check)
-			r.loadsOptional = true
+			r.loadsOptional, r.earlierSheet = true, summary.SummarySheet
 			return (&takeoffRun{run: r, format: format}).do(c.Context())
 		},
 	}

@@ -49,13 +49,13 @@ func (p *page) outcomes(t *Tally) {
 
 func (p *page) steel(t *Tally) {
 	p.Blank()
-	p.Headings("Steel", ">Pieces", ">Length [m]", ">Mass [t]")
+	p.Headings("Steel", ">Lengths", ">Length [m]", ">Mass [t]")
 	list := t.Steel()
 	for _, s := range list {
-		p.Row(workbook.TextCell(s.Family), number(float64(s.Pieces), whole), number(s.Length, metres), number(s.Mass/1000, tonnes))
+		p.Row(workbook.TextCell(s.Family), number(float64(s.Lengths), whole), number(s.Length, metres), number(s.Mass/1000, tonnes))
 	}
 	all := Total(list)
-	p.Totals(workbook.TextCell("all"), number(float64(all.Pieces), whole), number(all.Length, metres), number(all.Mass/1000, tonnes))
+	p.Totals(workbook.TextCell("all"), number(float64(all.Lengths), whole), number(all.Length, metres), number(all.Mass/1000, tonnes))
 }
 
 func (p *page) settings(info *Info) {

@@ -45,10 +45,10 @@ type Line struct {
 
 // Steel is the steel of one family that the members need.
 type Steel struct {
-	Family string
-	Pieces int
-	Length float64 // m
-	Mass   float64 // kg
+	Family  string
+	Lengths int
+	Length  float64 // m
+	Mass    float64 // kg
 }
 
 // NewTally starts a tally that keeps so many members of each kind that a
@@ -106,7 +106,7 @@ func (t *Tally) addSteel(m *schedule.Member, r *design.Result) {
 		t.steel[family] = s
 	}
 	n := float64(m.Column.Quantity)
-	s.Pieces += m.Column.Quantity
+	s.Lengths += m.Column.Quantity
 	s.Length += n * m.Column.Length / 1000
 	s.Mass += n * r.Mass
 }
@@ -144,7 +144,7 @@ func (t *Tally) Steel() []Steel {
 func Total(list []Steel) Steel {
 	all := Steel{Family: "all"}
 	for _, s := range list {
-		all.Pieces += s.Pieces
+		all.Lengths += s.Lengths
 		all.Length += s.Length
 		all.Mass += s.Mass
 	}

@@ -131,6 +131,15 @@ func (b *Book) HiddenSheets() []string {
 	return b.names(func(s *sheet) bool { return s.hidden && s.own == "" })
 }
 
+// OwnSheet names the sheet that an earlier run of the program added as what is
+// asked for, under whatever name it now has; "": none.
+func (b *Book) OwnSheet(what string) string {
+	for _, name := range b.names(func(s *sheet) bool { return s.own == what }) {
+		return name
+	}
+	return ""
+}
+
 func (b *Book) names(keep func(*sheet) bool) []string {
 	var out []string
 	for _, s := range b.sheets {
