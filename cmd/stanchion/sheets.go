@@ -91,7 +91,7 @@ func (r *run) sheets(ctx context.Context, f *sheetsFlags, marks []string) error 
 			return err
 		}
 	}
-	stacks := calcsheet.Stacks(sheets)
+	stacks := calcsheet.Stacks(sheets, r.plan.Settings.Together.Options)
 	if err := outfile.Write(ctx, path, func(w io.Writer) error { return calcsheet.PDF(w, project, sheets, stacks) }); err != nil {
 		return err
 	}

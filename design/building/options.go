@@ -41,6 +41,19 @@ func (o *Options) Validate() error {
 	return nil
 }
 
+// Through reports whether the rule lets a piece run through above a length, if
+// the section above is the same: said and splice are what the schedule says of
+// the length, storey counts it from the bottom of its stack, from 0.
+func (o *Options) Through(said, splice bool, storey int) bool {
+	switch o.Splices {
+	case EveryNth:
+		return o.Every > 0 && (storey+1)%o.Every != 0
+	case WhereItPays:
+		return true
+	}
+	return said && !splice
+}
+
 // Decision is the sections of all columns and what they come to.
 type Decision struct {
 	Results []design.Result // by column

@@ -17,6 +17,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"stanchion/design"
+	"stanchion/design/building"
 	"stanchion/design/ec3"
 	"stanchion/design/working"
 )
@@ -38,7 +39,7 @@ func sheets(t testing.TB) []*working.Sheet {
 
 func pdfOf(t testing.TB, list []*working.Sheet) []byte {
 	var b bytes.Buffer
-	require.NoError(t, PDF(&b, project(), list, Stacks(list)))
+	require.NoError(t, PDF(&b, project(), list, Stacks(list, building.Options{})))
 	return b.Bytes()
 }
 
@@ -125,7 +126,7 @@ func stack(t testing.TB) []*working.Sheet {
 func TestStacks(t *testing.T) {
 	list := stack(t)
 	list[0], list[2] = list[2], list[0] // the order of the schedule does not count
-	stacks := Stacks(list)
+	stacks := Stacks(list, building.Options{})
 	require.Len(t, stacks, 1)
 	assert.Equal(t, "A1 & <B>", stacks[0].Name)
 	var marks []string
@@ -136,12 +137,40 @@ func TestStacks(t *testing.T) {
 
 	pages := pageTexts(t, pdfOf(t, list))
 	assert.Contains(t, pages[1], "Stack A1 & <B>")
-	assert.Equal(t, 1, strings.Count(pages[1], "splice"))
+	assert.Equal(t, 2, strings.Count(pages[1], "splice"), "nothing says that a length runs through")
+}
+
+// Splices are drawn where a take-off counts them.
+func TestSplicesAreThoseOfTheRule(t *testing.T) {
+	for _, c := range []struct {
+		rule           building.Options
+		said, splice   bool
+		first, between bool // a splice where the section changes; where it stays
+	}{
+		{building.Options{}, false, false, true, true},
+		{building.Options{}, true, false, true, false},
+		{building.Options{}, true, true, true, true},
+		{building.Options{Splices: building.WhereItPays}, true, true, true, false},
+		{building.Options{Splices: building.EveryNth, Every: 2}, false, false, true, true},
+		{building.Options{Splices: building.EveryNth, Every: 3}, false, false, true, false},
+	} {
+		list := stack(t)
+		for _, l := range list {
+			l.Column.SpliceSaid, l.Column.Splice = c.said, c.splice
+		}
+		s := Stacks(list, c.rule)[0]
+		first, changes := s.spliced(1)
+		assert.True(t, changes)
+		assert.Equal(t, c.first, first, "%+v", c)
+		between, changes := s.spliced(2)
+		assert.False(t, changes)
+		assert.Equal(t, c.between, between, "%+v", c)
+	}
 }
 
 func TestSVG(t *testing.T) {
 	var b bytes.Buffer
-	require.NoError(t, Stacks(stack(t))[0].SVG(&b))
+	require.NoError(t, Stacks(stack(t), building.Options{})[0].SVG(&b))
 	for d := xml.NewDecoder(bytes.NewReader(b.Bytes())); ; {
 		_, err := d.Token()
 		if errors.Is(err, io.EOF) {

@@ -4,6 +4,7 @@ import (
 	"io"
 
 	"stanchion/design"
+	"stanchion/design/building"
 	"stanchion/design/search"
 	"stanchion/design/working"
 )
@@ -12,11 +13,12 @@ import (
 type Stack struct {
 	Name    string
 	Lengths []*working.Sheet
+	Rule    building.Options // for splices
 }
 
 // Stacks puts sheets together whose columns stand on each other, in the order
-// of the lowest.
-func Stacks(sheets []*working.Sheet) []*Stack {
+// of the lowest. Splices are drawn by the rule.
+func Stacks(sheets []*working.Sheet, rule building.Options) []*Stack {
 	cols := make([]design.Column, len(sheets))
 	for i, s := range sheets {
 		cols[i] = *s.Column
@@ -27,7 +29,7 @@ func Stacks(sheets []*working.Sheet) []*Stack {
 		if below[i] >= 0 || above[i] < 0 {
 			continue
 		}
-		s := &Stack{Name: cols[i].Stack}
+		s := &Stack{Name: cols[i].Stack, Rule: rule}
 		if s.Name == "" {
 			s.Name = cols[i].Mark
 		}
@@ -37,6 +39,15 @@ func Stacks(sheets []*working.Sheet) []*Stack {
 		stacks = append(stacks, s)
 	}
 	return stacks
+}
+
+// spliced reports whether a splice stands below length i: where section, grade
+// or number change (changes), or where the rule has one.
+func (s *Stack) spliced(i int) (splice, changes bool) {
+	below, above := s.Lengths[i-1], s.Lengths[i]
+	changes = below.Section != above.Section || below.Grade != above.Grade
+	c := below.Column
+	return changes || c.Quantity != above.Column.Quantity || !s.Rule.Through(c.SpliceSaid, c.Splice, i-1), changes
 }
 
 // height is the height of the stack, mm.

@@ -28,7 +28,7 @@ func stackElevation(c canvas, s *Stack, x, y, w, h float64) {
 		levelLine(c, l.Column.From, x, at, w)
 		stackLength(c, l, x, next, at, w)
 		if i > 0 {
-			splice(c, s.Lengths[i-1], l, x+stackAxis, at)
+			s.splice(c, i, x+stackAxis, at)
 		}
 		if i == len(s.Lengths)-1 {
 			levelLine(c, l.Column.To, x, next, w)
@@ -114,22 +114,20 @@ func greatest(l *working.Sheet) float64 {
 	return n
 }
 
-// splice marks where the section changes, or may change.
-func splice(c canvas, below, above *working.Sheet, x, y float64) {
-	changes := below.Section != above.Section || below.Grade != above.Grade
-	if !changes && !below.Column.Splice {
+// splice marks a splice below length i, the thicker where the section changes.
+func (s *Stack) splice(c canvas, i int, x, y float64) {
+	spliced, changes := s.spliced(i)
+	if !spliced {
 		return
 	}
-	half := math.Max(drawnHalf(below), drawnHalf(above)) + 0.9
-	s := usualLine
+	half := math.Max(drawnHalf(s.Lengths[i-1]), drawnHalf(s.Lengths[i])) + 0.9
+	stroke := usualLine
 	if changes {
-		s = thickLine
+		stroke = thickLine
 	}
-	c.line(x-half, y-0.6, x+half, y-0.6, s)
-	c.line(x-half, y-1.8, x+half, y-1.8, s)
-	if changes {
-		write(c, x-half-0.6, y-2.2, "splice", italic, 5.2*pt, atRight)
-	}
+	c.line(x-half, y-0.6, x+half, y-0.6, stroke)
+	c.line(x-half, y-1.8, x+half, y-1.8, stroke)
+	write(c, x-half-0.6, y-2.2, "splice", italic, 5.2*pt, atRight)
 }
 
 // The elevations of stacks on a page: three side by side, in two rows where

@@ -86,13 +86,8 @@ func (o *Options) runsThrough(lower, upper *Item, storey int) bool {
 	if lower.Section != upper.Section || lower.Grade != upper.Grade || lower.Quantity != upper.Quantity {
 		return false
 	}
-	switch o.Splices {
-	case building.EveryNth:
-		return o.Every > 0 && (storey+1)%o.Every != 0
-	case building.WhereItPays:
-		return true
-	}
-	return lower.SpliceSaid && !lower.Splice
+	rule := building.Options{Splices: o.Splices, Every: o.Every}
+	return rule.Through(lower.SpliceSaid, lower.Splice, storey)
 }
 
 // storeys counts the lengths of every line from its bottom.
