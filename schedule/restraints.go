@@ -232,12 +232,3 @@ func appendEvery(heights []float64, spacing, L float64) ([]float64, error) {
 func metres(mm float64) string {
 	return strconv.FormatFloat(math.Round(mm)/1000, 'f', -1, 64)
 }
-
-// FormatRestraints writes heights in mm as the schedule notes them, in m.
-func FormatRestraints(heights []float64, decimal byte) string {
-	parts := make([]string, len(heights))
-	for i, h := range heights {
-		parts[i] = strings.Replace(strconv.FormatFloat(h/1000, 'f', -1, 64), ".", string(decimal), 1)
-	}
-	return strings.Join(parts, "; ")
-}

@@ -1,6 +1,8 @@
 package schedule
 
 import (
+	"strconv"
+	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
@@ -79,7 +81,7 @@ func TestRestraintsReadBack(t *testing.T) {
 			}
 			want = append(want, x)
 		}
-		list, err := parseRestraints(FormatRestraints(want, decimal), decimal, length.defaultUnit())
+		list, err := parseRestraints(formatRestraints(want, decimal), decimal, length.defaultUnit())
 		require.NoError(t, err)
 		got, _, err := resolveHeights(list, L)
 		require.NoError(t, err)
@@ -154,4 +156,13 @@ func FuzzEnds(f *testing.F) {
 			t.Fatalf("%q gives %d, %d", s, bottom, top)
 		}
 	})
+}
+
+// formatRestraints writes heights in mm as the schedule notes them, in m.
+func formatRestraints(heights []float64, decimal byte) string {
+	parts := make([]string, len(heights))
+	for i, h := range heights {
+		parts[i] = strings.Replace(strconv.FormatFloat(h/1000, 'f', -1, 64), ".", string(decimal), 1)
+	}
+	return strings.Join(parts, "; ")
 }

@@ -35,18 +35,6 @@ func Sway(eta1, eta2 float64) float64 {
 	return math.Sqrt((1 - 0.2*sum - 0.12*product) / below)
 }
 
-// EtaOf turns a rotational stiffness S (N mm/rad) into the distribution factor
-// of a column of bending stiffness EI (N mm2) and length L (mm). In the
-// expressions' own terms a beam counts with the stiffness 4 EI/L of a member
-// fixed at its far end, as the column itself does.
-func EtaOf(S, EI, L float64) float64 {
-	k := 4 * EI / L
-	if k <= 0 {
-		return 0
-	}
-	return k / (k + S)
-}
-
 // springOf is the rotational spring, in EI/L, that a distribution factor
 // stands for; +Inf where it is 0.
 func springOf(eta float64) float64 {

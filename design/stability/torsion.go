@@ -14,6 +14,11 @@ import (
 // z-z restraints at factor 1.0, since twist is taken as held where z-z is.
 // An end that is free about z-z is free to twist: its own segment counts
 // double. A guided end holds the twist.
+//
+// Lateral-torsional buckling has the same segments: a point held about z-z
+// alone may lie in the tension flange and does not count, and one held against
+// twist alone does, since a beam that cannot twist there buckles in its next
+// mode.
 func Torsion(dst []Segment, col *design.Column) ([]Segment, error) {
 	if err := validateTorsion(col); err != nil {
 		return dst, err
@@ -32,15 +37,6 @@ func Torsion(dst []Segment, col *design.Column) ([]Segment, error) {
 	default:
 		return twistSegments(dst, col, z.Restraints), nil
 	}
-}
-
-// LateralTorsional appends to dst the segments of lateral-torsional buckling,
-// with their lengths in Lcr: those between points held against twist, which
-// are the segments of Torsion. A point held about z-z alone may lie in the
-// tension flange and does not count; a point held against twist alone does,
-// since a beam that cannot twist there buckles in its next mode.
-func LateralTorsional(dst []Segment, col *design.Column) ([]Segment, error) {
-	return Torsion(dst, col)
 }
 
 func twistSegments(dst []Segment, col *design.Column, heights []float64) []Segment {
