@@ -37,15 +37,19 @@ func (d *dual) ascend(ctx context.Context, s *search, k int, node branchNode, be
 			return outcome{closed: true}
 		}
 		c.count()
-		if c.scale < 0.02 || step >= effort.steps/2 {
+		if c.scale < effort.scale/4 || step >= effort.steps/2 {
 			bound = c.freePrices(s, k, bound)
 		}
 		if step >= effort.steps || c.scale < 1e-4 || ctx.Err() != nil {
 			break
 		}
-		if !d.step(s, c.scale*(aim(best.cost, bound)-bound)) {
+		if d.step(s, c.scale*(aim(best.cost, bound)-bound)) {
+			continue
+		}
+		if len(d.level) == 0 {
 			break // the relaxation's choice serves every node: its bound is its cost
 		}
+		c.freePrices(s, k, bound)
 	}
 	d.copy(c.keep)
 	j := branchOn(c.state, c.often)

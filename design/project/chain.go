@@ -1,7 +1,6 @@
 package project
 
 import (
-	"cmp"
 	"math"
 	"slices"
 )
@@ -14,7 +13,7 @@ type chainSolver struct {
 	fits  [2][]bool   // fits[0][above*sizes+below]: one may stand on the other; fits[1][below*sizes+above] likewise
 	cost  [][]float64 // by node and size: the part of the chain that ends there
 	from  [][]int32   // from[n][j]: size of n in the best choice with j where n hands on to
-	order []int32     // the open sizes, by their cost at the node at hand
+	order []ranked    // the open sizes that serve, by their cost at the node at hand
 	picks []int
 	paths []visit
 	trees map[*Chain][]visit
@@ -114,10 +113,13 @@ func (s *chainSolver) solve(c *Chain, open []int32, price [][]float64) (float64,
 // best size of v that goes with it.
 func (s *chainSolver) handOn(v visit, open []int32) {
 	cost, to, from := s.cost[v.node], s.cost[v.to], s.from[v.node]
-	s.order = append(s.order[:0], open...)
-	slices.SortFunc(s.order, func(a, b int32) int {
-		return cmp.Or(cmp.Compare(cost[a], cost[b]), cmp.Compare(a, b))
-	})
+	s.order = s.order[:0]
+	for _, j := range open {
+		if !math.IsInf(cost[j], 1) {
+			s.order = append(s.order, ranked{cost[j], j})
+		}
+	}
+	slices.SortFunc(s.order, byCost)
 	table := s.fits[0]
 	if v.down {
 		table = s.fits[1]
@@ -137,16 +139,33 @@ func (s *chainSolver) handOn(v visit, open []int32) {
 // through.
 func (s *chainSolver) bestWith(cost []float64, fits []bool, j int32, splice float64) (float64, int32) {
 	through := cost[j]
-	for _, i := range s.order {
-		w := cost[i] + splice
+	for _, o := range s.order {
+		w := o.cost + splice
 		if !(w < through) {
 			break
 		}
-		if fits[i] {
-			return w, i
+		if fits[o.size] {
+			return w, o.size
 		}
 	}
 	return through, j
+}
+
+// ranked is a size and the cost of the part of a chain that ends with it.
+type ranked struct {
+	cost float64
+	size int32
+}
+
+// byCost orders sizes by cost, and by size where that is equal.
+func byCost(a, b ranked) int {
+	switch {
+	case a.cost < b.cost:
+		return -1
+	case a.cost > b.cost:
+		return 1
+	}
+	return int(a.size - b.size)
 }
 
 // Cheapest returns the cheapest sizes of every chain where any number of sizes
