@@ -25,23 +25,52 @@ func (p *Problem) FewSizes(ctx context.Context, most int) ([]Solution, error) {
 	r := p.reduce()
 	s := newSearch(r)
 	free := s.everySize()
-	var out []Solution
+	var answers []answer
 	least, warm := s.fewest(ctx)
 	for k := 1; k <= most; k++ {
 		if k < least {
-			out = append(out, Solution{K: k, Cost: math.Inf(1), Bound: math.Inf(1), Proven: true})
+			answers = append(answers, answer{cost: math.Inf(1), bound: math.Inf(1), proven: true})
 			continue
 		}
-		share, stop := shareOf(ctx, most-k+1)
-		sol := s.solve(share, k, warm)
-		stop()
-		warm = sol.open
-		out = append(out, p.solution(r, k, sol))
-		if sol.cost <= free*(1+tolerance) || ctx.Err() != nil {
+		a := s.solveWithin(ctx, most-k+1, k, warm)
+		answers = append(answers, a)
+		warm = a.open
+		if a.cost <= free*(1+tolerance) || ctx.Err() != nil {
 			break
 		}
 	}
+	s.finish(ctx, answers)
+	out := make([]Solution, len(answers))
+	for i, a := range answers {
+		out[i] = p.solution(r, i+1, a)
+	}
 	return out, nil
+}
+
+// finish gives the time that is left to the K that had too little of it.
+func (s *search) finish(ctx context.Context, answers []answer) {
+	open := 0
+	for _, a := range answers {
+		if !a.proven {
+			open++
+		}
+	}
+	for i, a := range answers {
+		if a.proven || ctx.Err() != nil {
+			continue
+		}
+		again := s.solveWithin(ctx, open, i+1, a.open)
+		again.bound = max(again.bound, a.bound)
+		answers[i] = again
+		open--
+	}
+}
+
+// solveWithin solves for K in its part of the time that is left for so many.
+func (s *search) solveWithin(ctx context.Context, left, k int, warm []int32) answer {
+	share, stop := shareOf(ctx, left)
+	defer stop()
+	return s.solve(share, k, warm)
 }
 
 // shareOf gives one of several K its part of the time that is left, so that a
