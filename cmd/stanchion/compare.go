@@ -233,7 +233,7 @@ func (s *comparedBook) put(m *schedule.Member, _ *design.Result) error {
 func (s *comparedBook) finish(ctx context.Context) error {
 	plan := s.new.plan
 	place, err := s.book.Plan(workbook.Block{
-		Sheet: plan.Sheet, Header: plan.Header, LastRow: s.last, Columns: s.cols, Words: revision.Words(), Cells: s.cells,
+		Sheet: plan.Sheet, Header: plan.Header, LastRow: s.last, Columns: s.cols, Words: revision.Words(), Cells: s.cells, Printed: s.result.PrintedColumns(),
 		Title: "Changes since " + filepath.Base(s.old.input) + ", by " + standard + ", national set " + plan.Settings.Design.National.Name,
 	})
 	if err != nil {

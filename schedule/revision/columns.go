@@ -127,13 +127,13 @@ func (c *Comparison) Columns() []schedule.ResultColumn {
 		number(revised, "N_Ed before", "kN", 0, 9, func(r *Row) float64 { return r.force(r.Old) }),
 		number(revised, "N_Ed now", "kN", 0, 9, func(r *Row) float64 { return r.force(r.New) }),
 		number(revised, "change of N_Ed", "%", 1, 9, (*Row).rise),
-		text(before, "section before", 21, func(r *Row) string {
+		text(before, "section before", 20, func(r *Row) string {
 			if r.Old == nil {
 				return ""
 			}
 			return r.Old.SectionName()
 		}),
-		number(before, "utilisation of it", "", 3, 10, (*Row).Utilisation),
+		number(before, "its utilisation", "", 3, 10, (*Row).Utilisation),
 		text(before, "verdict", 15, func(r *Row) string {
 			if r.Verdict == NotChecked {
 				return ""
@@ -141,7 +141,7 @@ func (c *Comparison) Columns() []schedule.ResultColumn {
 			return r.Verdict.String()
 		}),
 		text(before, "governing check", 22, (*Row).Governs),
-		text(lighter, "lightest", 21, (*Row).LightestName),
+		text(lighter, "lightest", 20, (*Row).LightestName),
 		number(lighter, "it would save", "kg", 0, 9, func(r *Row) float64 { return blankZero(float64(r.Saving) / 1e3) }),
 		text(now, "section", 18, func(r *Row) string { return r.Kept.Result.Section }),
 		text(now, "grade", 8, func(r *Row) string { return r.Kept.Result.Grade }),
@@ -157,10 +157,14 @@ func (c *Comparison) Columns() []schedule.ResultColumn {
 			}
 			return r.Kept.Result.Status.String()
 		}),
+		text("Since the old issue", "what changed", 66, (*Row).What),
 		text("Remarks", "note", 30, (*Row).note),
-		text("Remarks", "what changed", 60, (*Row).What),
 	}
 }
+
+// PrintedColumns is how many of the columns, from the first, show on paper what
+// became of the schedule; the notes behind them would make the others small.
+func (c *Comparison) PrintedColumns() int { return len(c.Columns()) - 1 }
 
 // force is the greatest axial force of a member in kN; NaN for none.
 func (r *Row) force(m *Member) float64 {

@@ -31,7 +31,7 @@ func (c *Comparison) Sheets(info *Info) []workbook.Sheet {
 
 // overview is the page that says what came of the comparison.
 func (c *Comparison) overview(info *Info) workbook.Sheet {
-	p := workbook.NewPage(RevisionSheet, "Revision: two issues side by side", 26, 22, 14, 14, 60)
+	p := workbook.NewPage(RevisionSheet, "Revision: two issues side by side", 26, 22, 10, 12, 13, 44)
 	p.Footer = info.NewFile
 	p.Blank()
 	for _, pair := range [][2]string{
@@ -45,25 +45,30 @@ func (c *Comparison) overview(info *Info) workbook.Sheet {
 		fact(p, f[0], f[1])
 	}
 	p.Blank()
-	p.Headings("Steel", "", ">Pieces", ">Mass [t]", "")
+	p.Headings("Steel", "", ">Pieces", ">Mass [t]", ">Change [t]", "Remark")
 	p.Span(0, 1)
-	for _, t := range c.Tonnages() {
-		p.Row(workbook.TextCell(t.Name), workbook.TextCell(""), workbook.NumberCell(float64(t.Steel.Pieces), "#,##0"),
-			workbook.NumberCell(t.Steel.Net.Tonnes(), "#,##0.000"), workbook.TextCell(t.Remark()))
+	list := c.Tonnages()
+	for i, t := range list {
+		change := blank()
+		if i > 0 {
+			change = workbook.NumberCell(float64(t.Steel.Net.Mass-list[0].Steel.Net.Mass)/1e6, "+0.000;-0.000;0.000")
+		}
+		p.Row(workbook.TextCell(t.Name), blank(), workbook.NumberCell(float64(t.Steel.Pieces), "#,##0"),
+			workbook.NumberCell(t.Steel.Net.Tonnes(), "#,##0.000"), change, workbook.TextCell(t.Remark()))
 		p.Span(0, 1)
 	}
 	if len(info.Settings) > 0 {
 		p.Blank()
-		p.Headings("Settings that differ", "", "", "", "")
-		p.Span(0, 4)
+		p.Headings("Settings that differ", "", "", "", "", "")
+		p.Span(0, 5)
 		for _, s := range info.Settings {
-			p.Row(workbook.TextCell(s.Text), workbook.TextCell(""), workbook.TextCell(""), workbook.TextCell(""), workbook.TextCell(""))
-			p.Span(0, 4)
+			p.Row(workbook.WordsCell(s.Text), blank(), blank(), blank(), blank(), blank())
+			p.Span(0, 5)
 		}
 	}
 	p.Blank()
 	for _, s := range info.Cautions {
-		p.Across(5, workbook.Cell{Value: s, Look: workbook.Look{Role: workbook.Remark}})
+		p.Across(6, workbook.Cell{Value: s, Look: workbook.Look{Role: workbook.Remark}})
 	}
 	return p.Sheet
 }
@@ -86,7 +91,7 @@ func (t *Tonnage) Remark() string {
 // changesSheet lists what changed, what is weak or has steel to spare, what is
 // new, what is gone, and what could be the same.
 func (c *Comparison) changesSheet(info *Info) workbook.Sheet {
-	p := workbook.NewPage(ChangesSheet, "Changes, and what they mean for the sections of the old issue", 13, 15, 10, 14, 22, 13, 18, 24, 22, 12, 96)
+	p := workbook.NewPage(ChangesSheet, "Changes, and what they mean for the sections of the old issue", 13, 13, 9, 13, 22, 12, 18, 24, 22, 12, 56)
 	p.Landscape, p.A3, p.Footer = true, true, info.NewFile
 	p.Row(workbook.Cell{Value: info.OldFile + " → " + info.NewFile, Look: workbook.Look{Role: workbook.Remark}})
 	p.Blank()

@@ -78,6 +78,9 @@ func (p *Plan) headings() (cells []headingCell, merges []area) {
 	}
 	if pl.title > 0 {
 		a := area{pl.title, pl.title, pl.rows.firstCol, pl.rows.lastCol}
+		if n := p.block.Printed; n > 0 {
+			a.lastCol = pl.rows.firstCol + n - 1 // what is merged across the edge of the paper is cut there
+		}
 		cells, merges = spanned(cells, merges, a, p.block.Title, Look{Role: Heading, Align: Left, Edge: true})
 	}
 	return cells, merges

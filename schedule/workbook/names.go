@@ -133,23 +133,18 @@ func (p *Plan) editName(edits *markup.Edits, g *grafting, n *markup.Element, s *
 	}
 }
 
-// editRange returns the range of the schedule's filter widened, and that of its
-// print area as it is to be.
+// editRange returns the range of the schedule's filter widened, and what is
+// printed of it as it is to be.
 func (p *Plan) editRange(n *markup.Element, text string) string {
-	sheet, cells, ok := splitRef(n.Text())
-	a, isArea := parseArea(cells)
-	if !ok || !isArea {
-		return text
-	}
-	switch n.Attr("name") {
-	case "_xlnm._FilterDatabase":
-		if p.reaches(a) {
+	if n.Attr("name") == "_xlnm._FilterDatabase" {
+		sheet, cells, ok := splitRef(n.Text())
+		if a, isArea := parseArea(cells); ok && isArea && p.reaches(a) {
 			return markup.Escaped(quoted(sheet) + "!" + p.widened(a).absolute())
 		}
-	case "_xlnm.Print_Area":
-		if with, ok := p.followedArea(a); ok {
-			return markup.Escaped(quoted(sheet) + "!" + with)
-		}
+		return text
+	}
+	if with, ok := p.editPrinting(n); ok && with != n.Text() {
+		return markup.Escaped(with)
 	}
 	return text
 }
@@ -170,8 +165,11 @@ func (p *Plan) newNames(g *grafting) string {
 	if a, ok := p.newFilter(); ok && !p.hasName("_xlnm._FilterDatabase") {
 		add("_xlnm._FilterDatabase", at, true, here+a.absolute())
 	}
-	if cells, ok := p.printArea(); ok {
-		add("_xlnm.Print_Area", at, false, here+cells)
+	if refersTo, ok := p.printArea(); ok {
+		add(printAreaName, at, false, refersTo)
+	}
+	if refersTo, ok := p.printTitles(""); ok && !p.hasName(printTitlesName) {
+		add(printTitlesName, at, false, refersTo)
 	}
 	add(resultsName, at, true, here+p.place.rows.absolute())
 	for _, s := range g.sheets {

@@ -15,6 +15,9 @@ type Block struct {
 	Title   string // over the whole block, where there is room for it
 	Columns []schedule.ResultColumn
 	Words   map[string]Role // texts whose cells are drawn in a role; nil: the outcomes of a member
+	// Printed is how many of the columns, from the first, are printed on pages
+	// behind the schedule's own; 0: none, they have a sheet of their own for that.
+	Printed int
 	// Cells returns the results of a row, one a column; none where the row has
 	// no results. Rows are asked for in rising order, each once, and again for
 	// each time that the workbook is written.
