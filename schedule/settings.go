@@ -29,6 +29,7 @@ type Settings struct {
 	Design      design.Settings
 	Compression string // positive, negative; empty: not said
 	Project     string // name of the project; empty: not said
+	Paper       Paper  // that what is handed over is laid out for
 	Stock       string // file of the sections that may be used; empty: the whole catalogue
 	TakeOff     TakeOff
 	Together    Together

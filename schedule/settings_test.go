@@ -34,7 +34,7 @@ func TestDefaultSettings(t *testing.T) {
 	assert.Equal(t, map[string]string{
 		"national": "UK", "gamma_M0": "1.00", "gamma_M1": "1.00", "gamma_M,fi": "1.00", "strength": "product", "grade": "S355", "families": "UKC",
 		"hollow sections": "hot finished", "exclude": "", "stock": "", "compression": "positive (assumed)", "limit": "1.00", "effective length": "segment",
-		"moments": "analysis", "interaction": "annex B", "LTB": "rolled", "self-weight": "0", "growth": "1.00", "fire": "off", "fire period": "off", "shadow factor": "off", "objective": "mass", "project": "",
+		"moments": "analysis", "interaction": "annex B", "LTB": "rolled", "self-weight": "0", "growth": "1.00", "fire": "off", "fire period": "off", "shadow factor": "off", "objective": "mass", "project": "", "paper": "A4",
 		"splices": "as scheduled", "splice cost": "0", "sizes": "any", "time for sizes": "120", "reserve": "off", "reclaimed": "", "connections": "0", "waste": "0", "transport length": "off",
 	}, used(s))
 }

@@ -47,7 +47,7 @@ func init() {
 		offSetting("shadow factor", "shadow factor|k_sh", 0.01, 1, func(s *Settings) *float64 { return &s.Design.ShadowFactor }, "off"),
 		choiceSetting("objective", "objective", "mass", func(s *Settings) *design.Objective { return &s.Design.Rates.Objective }, "mass", "cost", "carbon"),
 	}
-	settingTable = append(settingTable, projectSetting())
+	settingTable = append(settingTable, projectSetting(), paperSetting())
 	settingTable = append(settingTable, togetherSettings()...)
 	settingTable = append(settingTable, takeOffSettings()...)
 }
@@ -64,6 +64,27 @@ func projectSetting() setting {
 			return nil
 		},
 		func(s *Settings) string { return s.Project }}
+}
+
+// Paper is a size of paper.
+type Paper uint8
+
+// The sizes of paper; A4 is the default.
+const (
+	A4 Paper = iota
+	A3
+)
+
+const paperName = "paper"
+
+// Layout reports whether the setting is of what is printed, not of the design.
+func (l *SettingLine) Layout() bool { return l.Name == paperName }
+
+// paperSetting says on what paper sheets and calculations are to be printed.
+func paperSetting() setting {
+	s := choiceSetting(paperName, "paper|paper size|page size", "A4", func(s *Settings) *Paper { return &s.Paper }, "A4", "A3")
+	s.values += ": of the program's own sheets and of calculation sheets"
+	return s
 }
 
 // SettingInfo describes one setting for people.

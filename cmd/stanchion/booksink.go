@@ -71,7 +71,7 @@ func (s *bookSink) finish(ctx context.Context) error {
 	}
 	info.SheetName = place.SheetName
 	own, sheets := s.ownSheets(info, place)
-	return place.WriteTo(&stopper{ctx, s.w}, sheets)
+	return place.WriteTo(&stopper{ctx, s.w}, workbook.Laid(sheets, plan.Settings.Paper))
 }
 
 // link leads from the section of a member, or from the note of one with a

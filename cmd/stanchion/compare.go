@@ -246,7 +246,7 @@ func (s *comparedBook) finish(ctx context.Context) error {
 	if err != nil {
 		return err
 	}
-	return place.WriteTo(&stopper{ctx, s.w}, s.result.Sheets(info))
+	return place.WriteTo(&stopper{ctx, s.w}, workbook.Laid(s.result.Sheets(info), plan.Settings.Paper))
 }
 
 func (s *comparedBook) cells(row int) []schedule.Value {

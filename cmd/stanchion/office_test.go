@@ -176,7 +176,7 @@ func TestChartsPointAtCellsThatHoldSomething(t *testing.T) {
 func TestAnotherProgramReadsTheSameResults(t *testing.T) {
 	path, members := sizedDepot(t)
 	f := openBook(t, office(t, path, "xlsx"))
-	assert.Equal(t, []string{"Columns", "Settings", "Summary", "Problems", "Results", "Sizes used", "Take-off", "Cutting list", "Charts", "Chart data"}, f.GetSheetList())
+	assert.Equal(t, []string{"Columns", "Settings", "Summary", "Problems", "Results", "Sizes used", "Take-off", "Splices", "Cutting list", "Charts", "Chart data"}, f.GetSheetList())
 	rows := sheetRows(t, f, "Results")
 	require.Equal(t, []string{"Row", "Mark"}, rows[3][:2])
 	for i, m := range members {

@@ -53,3 +53,18 @@ func TestChangesAreSeenOnPaper(t *testing.T) {
 	assert.Regexp(t, `L0 +L1`, changed, "and its levels")
 	assert.Regexp(t, `N_Ed ULS1 \d+ → 1556 kN`, changed)
 }
+
+func TestThePaperIsChosen(t *testing.T) {
+	for paper, size := range map[string]string{"A4": "595.304 x 841.89", "A3": "841.89 x 1190.55"} {
+		path := filepath.Join(t.TempDir(), "sized.xlsx")
+		runOf(t, 0, "size", depot, "-o", path, "--set", "paper="+paper, "--quiet")
+		pdf := office(t, path, "pdf")
+		program, err := exec.LookPath("pdfinfo")
+		if err != nil {
+			t.Skip("pdfinfo is not installed")
+		}
+		out, err := exec.Command(program, "-l", "4", pdf).Output()
+		require.NoError(t, err)
+		assert.Regexp(t, `Page +4 size: +`+size, string(out), "the summary, behind the user's own sheets")
+	}
+}

@@ -66,6 +66,7 @@ type scenariosRun struct {
 	texts   []string
 	table   *sidebyside.Table
 	decimal byte
+	paper   schedule.Paper // of the schedule as given
 	count   [4]int
 	unmet   bool
 }
@@ -94,6 +95,9 @@ func (s *scenariosRun) do(ctx context.Context) error {
 		return err
 	}
 	if out := s.flags.output; out != "" && out != stdio {
+		for _, remark := range s.table.Remarks() { // what the exit status rests on
+			s.con.say("%s", wrap("✗ "+remark, screenWidth-2, "  "))
+		}
 		s.con.say("Written: %s", out)
 	}
 	if s.unmet {
@@ -180,6 +184,9 @@ func (s *scenariosRun) try(ctx context.Context, sc *schedule.Scenario) error {
 		return err
 	}
 	defer r.source.Close()
+	if len(sc.Settings) == 0 {
+		s.paper = r.plan.Settings.Paper
+	}
 	s.decimal = r.plan.Decimal
 	all := &gathered{}
 	r.out, r.tally = &outputs{sinks: []sink{all}}, newTally(r)
@@ -235,7 +242,9 @@ func (s *scenariosRun) writer(r *run) (func(io.Writer) error, error) {
 	case format == "csv":
 		return func(w io.Writer) error { return s.table.WriteCSV(w, s.decimal) }, nil
 	case format == "xlsx" && toFile:
-		return func(w io.Writer) error { return workbook.WriteNew(w, []workbook.Sheet{s.table.Page()}) }, nil
+		return func(w io.Writer) error {
+			return workbook.WriteNew(w, workbook.Laid([]workbook.Sheet{s.table.Page()}, s.paper))
+		}, nil
 	case toFile:
 		return nil, usage(s.cmd, "-o %s: name a file ending in .xlsx, .csv or .txt", s.flags.output)
 	}

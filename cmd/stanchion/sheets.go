@@ -33,7 +33,7 @@ func sheetsCommand(con *console) *cobra.Command {
 	c := &cobra.Command{
 		Use:   "sheets FILE [MARK]...",
 		Short: "write calculation sheets for the one who checks",
-		Long: "Designs a column schedule as `size` does and writes calculation sheets as PDF, A4: one for every\n" +
+		Long: "Designs a column schedule as `size` does and writes calculation sheets as PDF: one for every\n" +
 			"column, or for those with the marks given, with every formula, the numbers put in, the result and\n" +
 			"the clause, an elevation of the column and its place on the buckling curve; before them a list\n" +
 			"of the sheets and the elevations of the column lines.\n\n" +
@@ -105,7 +105,7 @@ func (r *run) sheets(ctx context.Context, f *sheetsFlags, marks []string) error 
 // project gathers what stands on the first page and in the title block.
 func (r *run) project(f *sheetsFlags) (*calcsheet.Project, error) {
 	p := &calcsheet.Project{Title: f.title, File: "standard input", Sheet: r.plan.Sheet, Program: "stanchion " + versionText(),
-		Standard: standard, National: r.plan.Settings.Design.National}
+		Standard: standard, National: r.plan.Settings.Design.National, Paper: r.plan.Settings.Paper}
 	if p.Title == "" {
 		p.Title = r.plan.Settings.Project
 	}
@@ -117,7 +117,7 @@ func (r *run) project(f *sheetsFlags) (*calcsheet.Project, error) {
 		p.File, p.SHA256 = filepath.Base(r.input), sum
 	}
 	for _, s := range r.plan.Settings.Used() {
-		if s.From != "default" && s.Value != "" && !strings.HasPrefix(s.From, "national set") {
+		if s.From != "default" && s.Value != "" && !s.Layout() && !strings.HasPrefix(s.From, "national set") {
 			p.Settings = append(p.Settings, [2]string{s.Name, s.Value})
 		}
 	}

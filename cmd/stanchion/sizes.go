@@ -103,7 +103,7 @@ func (r *sizesRun) writer() (func(io.Writer) error, error) {
 		return func(w io.Writer) error { return r.table.WriteCSV(w, r.plan.Decimal) }, nil
 	case format == "xlsx" && toFile:
 		return func(w io.Writer) error {
-			return workbook.WriteNew(w, []workbook.Sheet{r.table.Page(tradeoff.Sheet)})
+			return workbook.WriteNew(w, workbook.Laid([]workbook.Sheet{r.table.Page(tradeoff.Sheet)}, r.plan.Settings.Paper))
 		}, nil
 	case (format == "svg" || format == "png") && toFile:
 		return func(w io.Writer) error { return r.table.WritePicture(w, format) }, nil

@@ -150,7 +150,7 @@ func (r *takeoffRun) writer() (func(io.Writer) error, error) {
 func (r *takeoffRun) csv(w io.Writer) error { return r.steel.WriteCSV(w, r.plan.Decimal) }
 
 func (r *takeoffRun) book(w io.Writer) error {
-	return workbook.WriteNew(w, r.steel.Sheets(filepath.Base(r.input)))
+	return workbook.WriteNew(w, workbook.Laid(r.steel.Sheets(filepath.Base(r.input)), r.plan.Settings.Paper))
 }
 
 func (r *takeoffRun) write(ctx context.Context, write func(io.Writer) error) error {

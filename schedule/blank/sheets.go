@@ -72,8 +72,8 @@ func width(h *heading) float64 {
 	switch {
 	case strings.HasPrefix(h.name, "Restraints"), strings.HasPrefix(h.name, "Ends"), h.name == "Section":
 		return 18
-	case len(h.name) > 14:
-		return 13
+	case len(h.name) > 14, !strings.Contains(h.name, " ") && len(h.name) > 9:
+		return 13 // the longest word stands whole, in bold
 	}
 	return 11
 }

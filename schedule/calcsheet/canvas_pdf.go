@@ -11,6 +11,7 @@ import (
 // that nothing is said twice.
 type pdfCanvas struct {
 	pdf   *fpdf.Fpdf
+	scale float64 // of the paper to A4
 	face  face
 	size  float64
 	set   bool
@@ -24,11 +25,11 @@ const fontName = "Go"
 
 var faceStyles = [...]string{upright: "", italic: "I", bold: "B"}
 
-func newPDFCanvas(pdf *fpdf.Fpdf) *pdfCanvas {
+func newPDFCanvas(pdf *fpdf.Fpdf, scale float64) *pdfCanvas {
 	for f, style := range faceStyles {
 		pdf.AddUTF8FontFromBytes(fontName, style, faceData[f])
 	}
-	return &pdfCanvas{pdf: pdf, lines: stroke{width: -1, dash: -1, grey: -1}, fill: -1}
+	return &pdfCanvas{pdf: pdf, scale: scale, lines: stroke{width: -1, dash: -1, grey: -1}, fill: -1}
 }
 
 // page starts a page: the state of the one before is gone.
@@ -39,12 +40,12 @@ func (c *pdfCanvas) page() {
 
 func (c *pdfCanvas) stroke(s stroke) {
 	if s.width != c.lines.width {
-		c.pdf.SetLineWidth(s.width)
+		c.pdf.SetLineWidth(s.width * c.scale)
 	}
 	if s.dash != c.lines.dash {
 		pattern := []float64{}
 		if s.dash > 0 {
-			pattern = []float64{s.dash, s.dash}
+			pattern = []float64{s.dash * c.scale, s.dash * c.scale}
 		}
 		c.pdf.SetDashPattern(pattern, 0)
 	}
@@ -57,7 +58,7 @@ func (c *pdfCanvas) stroke(s stroke) {
 
 func (c *pdfCanvas) line(x1, y1, x2, y2 float64, s stroke) {
 	c.stroke(s)
-	c.pdf.Line(x1, y1, x2, y2)
+	c.pdf.Line(x1*c.scale, y1*c.scale, x2*c.scale, y2*c.scale)
 }
 
 func (c *pdfCanvas) polyline(points []point, s stroke) {
@@ -76,9 +77,9 @@ func (c *pdfCanvas) polygon(points []point, grey float64) {
 func (c *pdfCanvas) path(points []point) {
 	for i, p := range points {
 		if i == 0 {
-			c.pdf.MoveTo(p.x, p.y)
+			c.pdf.MoveTo(p.x*c.scale, p.y*c.scale)
 		} else {
-			c.pdf.LineTo(p.x, p.y)
+			c.pdf.LineTo(p.x*c.scale, p.y*c.scale)
 		}
 	}
 }
@@ -92,10 +93,10 @@ func (c *pdfCanvas) grey(v float64) {
 
 func (c *pdfCanvas) text(x, y float64, s string, f face, size float64) {
 	if !c.set || f != c.face || size != c.size {
-		c.pdf.SetFont(fontName, faceStyles[f], size/pt)
+		c.pdf.SetFont(fontName, faceStyles[f], size/pt*c.scale)
 		c.face, c.size, c.set = f, size, true
 	}
-	c.pdf.Text(x, y, printable(s))
+	c.pdf.Text(x*c.scale, y*c.scale, printable(s))
 }
 
 // printable replaces what the file's fonts cannot address: control characters,
@@ -114,6 +115,6 @@ func printable(s string) string {
 
 func (c *pdfCanvas) link(x, y, w, h float64, to int) {
 	if to >= 0 && to < len(c.links) {
-		c.pdf.Link(x, y, w, h, c.links[to])
+		c.pdf.Link(x*c.scale, y*c.scale, w*c.scale, h*c.scale, c.links[to])
 	}
 }

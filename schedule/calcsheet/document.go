@@ -12,6 +12,7 @@ import (
 
 	"stanchion/design/working"
 	"stanchion/design/working/formula"
+	"stanchion/schedule"
 )
 
 // PDFTitle opens the title of every PDF that this package writes.
@@ -58,8 +59,16 @@ type document struct {
 // pagesAlias stands for the number of pages until that is known.
 const pagesAlias = "{nb}"
 
+// Pages are drawn in the measures of A4. On A3 they are as many and hold the
+// same, everything larger.
+const a3Scale = 297.0 / 210
+
 func newDocument(p *Project, sheets int) *document {
-	pdf := fpdf.New("P", "mm", "A4", "")
+	paper, scale := "A4", 1.0
+	if p.Paper == schedule.A3 {
+		paper, scale = "A3", a3Scale
+	}
+	pdf := fpdf.New("P", "mm", paper, "")
 	pdf.SetAutoPageBreak(false, 0)
 	pdf.SetMargins(0, 0, 0)
 	// Nothing in the file tells when it was made.
@@ -73,7 +82,7 @@ func newDocument(p *Project, sheets int) *document {
 	pdf.SetCreator(p.Program, true)
 	pdf.SetProducer(p.Program, true)
 	pdf.AliasNbPages(pagesAlias)
-	d := &document{pdf: pdf, canvas: newPDFCanvas(pdf), project: p}
+	d := &document{pdf: pdf, canvas: newPDFCanvas(pdf, scale), project: p}
 	for range sheets {
 		d.canvas.links = append(d.canvas.links, pdf.AddLink())
 	}

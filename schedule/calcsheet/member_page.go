@@ -11,7 +11,7 @@ import (
 	"stanchion/schedule"
 )
 
-// The page, mm: A4 with room for binding at the left.
+// The page, mm: A4 with room for binding at the left, or the same enlarged to A3.
 const (
 	pageWidth    = 210.0
 	pageHeight   = 297.0

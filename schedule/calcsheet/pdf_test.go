@@ -9,7 +9,9 @@ import (
 	"os"
 	"os/exec"
 	"path/filepath"
+	"regexp"
 	"slices"
+	"strconv"
 	"strings"
 	"testing"
 
@@ -20,6 +22,7 @@ import (
 	"stanchion/design/building"
 	"stanchion/design/ec3"
 	"stanchion/design/working"
+	"stanchion/schedule"
 )
 
 func project() *Project {
@@ -63,6 +66,55 @@ func TestPDFIsDeterministic(t *testing.T) {
 	for range 3 {
 		assert.True(t, bytes.Equal(first, pdfOf(t, list)))
 	}
+}
+
+// On A3 the same stands in the same places, everything larger by the paper.
+func TestPDFOnA3(t *testing.T) {
+	list := sheets(t)
+	p := project()
+	p.Paper = schedule.A3
+	var b bytes.Buffer
+	require.NoError(t, PDF(&b, p, list, Stacks(list, building.Options{})))
+	assert.Equal(t, bytes.Count(pdfOf(t, list), []byte("/Type /Page\n")), bytes.Count(b.Bytes(), []byte("/Type /Page\n")))
+	assert.Contains(t, b.String(), "/MediaBox [0 0 841.89 1190.55]")
+	// Words that stand once: where others are cut apart is the other program's guess.
+	a4, a3 := wordPlaces(t, pdfOf(t, list)), wordPlaces(t, b.Bytes())
+	compared := 0
+	for word, at := range a4 {
+		if len(at) != 1 || len(a3[word]) != 1 {
+			continue
+		}
+		compared++
+		for k := range at[0] {
+			// Places and sizes of type are printed to a hundredth of a point: of type
+			// of 7 pt that is 0.07 % of what stands before a word on its line.
+			assert.InDelta(t, at[0][k]*297/210, a3[word][0][k], 0.02+0.0007*a3[word][0][k], word)
+		}
+	}
+	assert.Greater(t, compared, 100)
+}
+
+// wordPlaces returns the words of a PDF and where they stand, in points, as
+// another program finds them.
+func wordPlaces(t *testing.T, pdf []byte) map[string][][4]float64 {
+	tool, err := exec.LookPath("pdftotext")
+	if err != nil {
+		t.Skip("pdftotext is not installed")
+	}
+	file := filepath.Join(t.TempDir(), "sheets.pdf")
+	require.NoError(t, os.WriteFile(file, pdf, 0o600))
+	out, err := exec.Command(tool, "-bbox", file, "-").Output()
+	require.NoError(t, err)
+	words := map[string][][4]float64{}
+	for _, m := range regexp.MustCompile(`<word xMin="([^"]+)" yMin="([^"]+)" xMax="([^"]+)" yMax="([^"]+)">([^<]*)`).FindAllStringSubmatch(string(out), -1) {
+		var box [4]float64
+		for k := range box {
+			box[k], err = strconv.ParseFloat(m[k+1], 64)
+			require.NoError(t, err)
+		}
+		words[m[5]] = append(words[m[5]], box)
+	}
+	return words
 }
 
 // A page is found by its text, and says what the results say.

@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"stanchion/design"
+	"stanchion/schedule"
 )
 
 // Project is what stands in the title block and on the first page.
@@ -16,6 +17,7 @@ type Project struct {
 	Program  string // name and version
 	Standard string
 	National design.National
+	Paper    schedule.Paper
 	Settings [][2]string // name and value of what the run used
 	Missing  []Missing   // members that have no sheet
 }

@@ -155,7 +155,7 @@ func SettingsThatDiffer(old, new *schedule.Settings) []Change {
 	}
 	var list []Change
 	for _, s := range new.Used() {
-		if v, ok := before[s.Name]; !strings.HasPrefix(s.Name, "map ") && (!ok && s.Value != "" || ok && v != s.Value) {
+		if v, ok := before[s.Name]; !strings.HasPrefix(s.Name, "map ") && !s.Layout() && (!ok && s.Value != "" || ok && v != s.Value) {
 			list = append(list, Change{Text: fmt.Sprintf("%s %s → %s", s.Name, orWord(v), orWord(s.Value))})
 		}
 	}

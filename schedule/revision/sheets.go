@@ -92,7 +92,7 @@ func (t *Tonnage) Remark() string {
 // new, what is gone, and what could be the same.
 func (c *Comparison) changesSheet(info *Info) workbook.Sheet {
 	p := workbook.NewPage(ChangesSheet, "Changes, and what they mean for the sections of the old issue", 13, 13, 9, 13, 22, 12, 18, 24, 22, 12, 56)
-	p.Landscape, p.A3, p.Footer = true, true, info.NewFile
+	p.Landscape, p.Footer = true, info.NewFile
 	p.Row(workbook.Cell{Value: info.OldFile + " → " + info.NewFile, Look: workbook.Look{Role: workbook.Remark}})
 	p.Blank()
 	p.Headings("Change", "Mark", "Grid", "Level", "Section before", ">Utilisation", "Verdict", "Governing check", "Lightest", ">Saves [kg]", "What changed")

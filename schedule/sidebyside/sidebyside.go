@@ -131,6 +131,14 @@ func (t *Table) Text() (headings []string, rows [][]string) {
 	return headings, rows
 }
 
+// counted writes a number with what it counts.
+func counted(n int, one, more string) string {
+	if n == 1 {
+		return "1 " + one
+	}
+	return fmt.Sprintf("%d %s", n, more)
+}
+
 // Remarks say what the numbers do not.
 func (t *Table) Remarks() []string {
 	var list []string
@@ -139,10 +147,14 @@ func (t *Table) Remarks() []string {
 		if r.Why != "" {
 			list = append(list, r.Name+": "+r.Why)
 		}
-		if n := r.NoSection + r.NotRead; n == 1 {
-			list = append(list, r.Name+": 1 member has no section, and its steel is not counted")
-		} else if n > 1 {
-			list = append(list, fmt.Sprintf("%s: %d members have no section, and their steel is not counted", r.Name, n))
+		if r.Failing > 0 {
+			list = append(list, r.Name+": "+counted(r.Failing, "member fails", "members fail"))
+		}
+		if r.NoSection > 0 {
+			list = append(list, r.Name+": "+counted(r.NoSection, "member has no section, and its steel is not counted", "members have no section, and their steel is not counted"))
+		}
+		if r.NotRead > 0 {
+			list = append(list, r.Name+": "+counted(r.NotRead, "member could not be read, and its steel is not counted", "members could not be read, and their steel is not counted"))
 		}
 		if r.AtHand && (r.HasCost || r.HasCarbon) {
 			list = append(list, r.Name+": steel at hand is counted at the rates of new steel")

@@ -20,6 +20,7 @@ func newDataPage(info *Info) *dataPage {
 	p := &dataPage{name: info.sheetName(ChartDataSheet)}
 	p.Name, p.Footer, p.Landscape, p.PagesWide = ChartDataSheet, info.File, true, 1
 	p.FreezeRows, p.RepeatRows = dataTop, dataTop
+	p.Heights = map[int]float64{dataTop: 31} // some headings take two lines
 	p.put(0, 0, workbook.Cell{Value: "What the charts are drawn from", Look: workbook.Look{Role: workbook.Title}})
 	return p
 }

@@ -10,6 +10,7 @@ import (
 // The names that the sheets want.
 const (
 	Sheet        = "Take-off"
+	SplicesSheet = "Splices"
 	CuttingSheet = "Cutting list"
 )
 
@@ -27,8 +28,7 @@ const (
 // Sheets lays the take-off out as sheets of a workbook. file is the name of
 // the schedule, for the foot of the page.
 func (t *TakeOff) Sheets(file string) []workbook.Sheet {
-	p := &page{Page: workbook.NewPage(Sheet, "Take-off", 17, 22, 10, 10, 10, 13, 9, 12, 15, 13, 12), t: t}
-	p.Landscape = true
+	p := &page{Page: workbook.NewPage(Sheet, "Take-off", 15, 21, 8, 9, 10, 12, 8, 12, 14, 11, 11), t: t}
 	p.Footer = file
 	p.Row(workbook.Cell{Value: "of " + file, Look: workbook.Look{Role: workbook.Remark}})
 	p.notCounted()
@@ -36,10 +36,13 @@ func (t *TakeOff) Sheets(file string) []workbook.Sheet {
 	p.bySection()
 	p.byLevel()
 	p.byFamily()
-	p.splices()
 	p.remarks()
 	p.Across(8, workbook.Cell{Value: exactness, Look: workbook.Look{Role: workbook.Remark}})
-	return []workbook.Sheet{p.Sheet, t.cuttingSheet(file)}
+	sheets := []workbook.Sheet{p.Sheet}
+	if len(t.Splices) > 0 {
+		sheets = append(sheets, t.splicesSheet(file))
+	}
+	return append(sheets, t.cuttingSheet(file))
 }
 
 // exactness says what the sums rest on.
@@ -87,6 +90,7 @@ func rated(x float64, format string) workbook.Cell {
 // the amounts.
 func (p *page) table(a, b, c string) {
 	p.Blank()
+	p.Begin()
 	headings := []string{a, b, c, ">Pieces", ">Lengths", ">Length [m]", ">kg/m", ">Mass [t]", ">Painted [m2]"}
 	if p.t.HasCost() {
 		headings = append(headings, ">Cost")
@@ -189,27 +193,19 @@ func (p *page) byFamily() {
 	p.total("all", p.t.Pieces, &p.t.Net)
 }
 
-// splices lists the splices by what they join.
-func (p *page) splices() {
-	if len(p.t.Splices) == 0 {
-		return
-	}
+// splicesSheet lists the splices by what they join.
+func (t *TakeOff) splicesSheet(file string) workbook.Sheet {
+	p := workbook.NewPage(SplicesSheet, "Splices", 16, 28, 28, 12)
+	p.Footer = file
+	p.Row(workbook.Cell{Value: "of " + file, Look: workbook.Look{Role: workbook.Remark}})
 	p.Blank()
-	p.Headings("Splices at", "Section below", "", "Section above", "", "", ">Number")
-	p.spliced()
-	for _, s := range p.t.SpliceKinds() {
-		p.Row(workbook.TextCell(s.Level), workbook.TextCell(s.Lower), workbook.TextCell(""), workbook.TextCell(s.Upper), workbook.TextCell(""),
-			workbook.TextCell(""), workbook.NumberCell(float64(s.Number), wholeFormat))
-		p.spliced()
+	p.Headings("Level", "Section below", "Section above", ">Number")
+	p.Freeze()
+	for _, s := range t.SpliceKinds() {
+		p.Row(workbook.TextCell(s.Level), workbook.TextCell(s.Lower), workbook.TextCell(s.Upper), workbook.NumberCell(float64(s.Number), wholeFormat))
 	}
-	p.Totals(workbook.TextCell("all"), workbook.Cell{}, workbook.Cell{}, workbook.Cell{}, workbook.Cell{}, workbook.Cell{},
-		workbook.NumberCell(float64(p.t.SpliceCount()), wholeFormat))
-}
-
-// spliced joins the cells of a section with its grade.
-func (p *page) spliced() {
-	p.Span(1, 2)
-	p.Span(3, 5)
+	p.Totals(workbook.TextCell("all"), workbook.Cell{}, workbook.Cell{}, workbook.NumberCell(float64(t.SpliceCount()), wholeFormat))
+	return p.Sheet
 }
 
 // remarks lists what a person should look at.
@@ -223,6 +219,7 @@ func (p *page) remarks() {
 			continue
 		}
 		p.Blank()
+		p.Begin()
 		p.Headings(list.heading, "Cell", "Why", "", "", "", "", "")
 		p.Span(2, 7)
 		for i := range list.lines {

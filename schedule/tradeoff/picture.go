@@ -37,10 +37,12 @@ func (t *Table) WritePicture(w io.Writer, format string) error {
 	margin := max(0.08*(points[0].Y-t.Any.Amount), 0.02*points[0].Y)
 	p.Y.Min, p.Y.Max = min(t.Any.Amount, points[len(points)-1].Y)-margin, points[0].Y+margin
 	p.X.Tick.Marker = plot.ConstantTicks(wholeTicks(points))
-	out, err := p.WriterTo(16*vg.Centimeter, 10*vg.Centimeter, format)
+	const width, height, edge = 17 * vg.Centimeter, 11 * vg.Centimeter, 5 * vg.Millimeter
+	out, err := draw.NewFormattedCanvas(width, height, format)
 	if err != nil {
 		return err
 	}
+	p.Draw(draw.Crop(draw.New(out), edge, -edge, edge, -edge))
 	_, err = out.WriteTo(w)
 	return err
 }
@@ -65,7 +67,7 @@ func (t *Table) drawLines(p *plot.Plot, points plotter.XYs) error {
 	p.Add(grid, least, line, marks)
 	p.Legend.Add("least for so many sizes", line, marks)
 	p.Legend.Add(fmt.Sprintf("any number of sizes (%d)", t.Any.Most), least)
-	p.Legend.Top = true
+	p.Legend.Top, p.Legend.Padding = true, vg.Points(3)
 	p.Legend.XOffs, p.Legend.YOffs = -vg.Points(8), -vg.Points(8)
 	return nil
 }

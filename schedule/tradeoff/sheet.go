@@ -93,17 +93,17 @@ func (t *Table) chart(sheet, cell string, first, last int) workbook.Chart {
 	heading := func(column string) string {
 		return fmt.Sprintf("'%s'!$%s$%d", strings.ReplaceAll(sheet, "'", "''"), column, first-1)
 	}
-	line := func(column, colour string, width float64, marker string) excelize.ChartSeries {
+	line := func(column, colour string, width float64, dash excelize.LineDashType, marker string) excelize.ChartSeries {
 		return excelize.ChartSeries{
 			Name: heading(column), Categories: in(colMost), Values: in(column), Fill: excelize.Fill{Type: "pattern", Pattern: 1, Color: []string{colour}},
-			Line:   excelize.LineOptions{Width: width, Fill: excelize.Fill{Type: "pattern", Pattern: 1, Color: []string{colour}}},
+			Line:   excelize.LineOptions{Width: width, Dash: dash, Fill: excelize.Fill{Type: "pattern", Pattern: 1, Color: []string{colour}}},
 			Marker: excelize.ChartMarker{Symbol: marker, Size: 7, Fill: excelize.Fill{Type: "pattern", Pattern: 1, Color: []string{colour}}},
 		}
 	}
 	font := excelize.Font{Color: inkColour, Size: 9}
 	return workbook.Chart{Cell: cell, Chart: &excelize.Chart{
 		Type:      excelize.Line,
-		Series:    []excelize.ChartSeries{line(colAmount, lineColour, 2.25, "circle"), line(colAny, leastColour, 1.5, "none")},
+		Series:    []excelize.ChartSeries{line(colAmount, lineColour, 2.25, excelize.LineDashSolid, "circle"), line(colAny, leastColour, 1.5, excelize.LineDashDash, "none")},
 		Dimension: excelize.ChartDimension{Width: 760, Height: 340},
 		Title:     excelize.ChartTitle{Paragraph: []excelize.RichTextRun{{Text: headingOf(t.Quantity()) + " over the number of sizes"}}},
 		Legend:    excelize.ChartLegend{Position: "bottom"},

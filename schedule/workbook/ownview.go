@@ -66,65 +66,6 @@ func (o *own) view(s *Sheet, name string) error {
 	return nil
 }
 
-func (o *own) print(s *Sheet, name string) error {
-	size, orientation := 9, "portrait" // A4
-	if s.A3 {
-		size = 8
-	}
-	if s.Landscape {
-		orientation = "landscape"
-	}
-	layout := &excelize.PageLayoutOptions{Size: &size, Orientation: &orientation}
-	if s.PagesWide > 0 {
-		tall, fit := 0, true
-		layout.FitToWidth, layout.FitToHeight = &s.PagesWide, &tall
-		if err := o.file.SetSheetProps(name, &excelize.SheetPropsOptions{FitToPage: &fit}); err != nil {
-			return err
-		}
-	}
-	if err := o.file.SetPageLayout(name, layout); err != nil {
-		return err
-	}
-	side, top, foot, mark := 0.4, 0.5, 0.6, 0.3 // inches
-	margins := &excelize.PageLayoutMarginsOptions{Left: &side, Right: &side, Top: &top, Bottom: &foot, Header: &mark, Footer: &mark}
-	if err := o.file.SetPageMargins(name, margins); err != nil {
-		return err
-	}
-	for _, row := range s.Breaks {
-		if err := o.file.InsertPageBreak(name, cellName(0, row)); err != nil {
-			return err
-		}
-	}
-	if s.RepeatRows > 0 {
-		err := o.file.SetDefinedName(&excelize.DefinedName{
-			Name: "_xlnm.Print_Titles", Scope: name,
-			RefersTo: fmt.Sprintf("%s!$1:$%d", quoted(name), s.RepeatRows),
-		})
-		if err != nil {
-			return err
-		}
-	}
-	footer := "&L&8" + escapeFooter(s.Footer) + "&R&8&A  &P/&N"
-	return o.file.SetHeaderFooter(name, &excelize.HeaderFooterOptions{OddFooter: footer})
-}
-
-// escapeFooter keeps a text from being read as codes.
-func escapeFooter(s string) string {
-	var out []rune
-	for _, r := range clipRunes(s, 180) {
-		if r == '&' {
-			out = append(out, '&')
-		}
-		out = append(out, r)
-	}
-	return string(out)
-}
-
-func clipRunes(s string, n int) []rune {
-	r := []rune(s)
-	return r[:min(len(r), n)]
-}
-
 func (o *own) validations(s *Sheet, name string) error {
 	for _, v := range s.Validations {
 		dv := excelize.NewDataValidation(true)

@@ -79,6 +79,10 @@ const lineOfPage = 15.5 // points
 // Blank leaves a row out.
 func (p *Page) Blank() { p.Row() }
 
+// Begin begins a table with the next row, and ends the one before: a table that
+// would be cut by the end of a printed page begins the next page.
+func (p *Page) Begin() { p.Tables = append(p.Tables, len(p.Rows)+1) }
+
 // Headings adds a row of headings over columns of text. One that opens with
 // ">" stands over numbers.
 func (p *Page) Headings(texts ...string) {

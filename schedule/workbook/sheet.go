@@ -2,6 +2,8 @@ package workbook
 
 import (
 	"github.com/xuri/excelize/v2"
+
+	"stanchion/schedule"
 )
 
 // Sheet is one of the project's own sheets, in neutral terms.
@@ -14,10 +16,11 @@ type Sheet struct {
 
 	FreezeRows, FreezeCols int
 	Filter                 string // range with a filter on its first row
-	RepeatRows             int    // rows repeated on every printed page
+	RepeatRows             int    // rows repeated on every printed page; the frozen columns are too where the width takes several
 	Landscape              bool
-	PagesWide              int   // pages that the width is fitted to; 0: as it comes
+	PagesWide              int   // pages that the width is fitted to, or more where it could not be read; 0: as it comes
 	Breaks                 []int // rows, from 1, that begin a printed page
+	Tables                 []int // rows, from 1, that begin a table: kept on one printed page where it can be
 	A3                     bool
 	Footer                 string // left part of the footer; the page number stands at the right
 
@@ -26,6 +29,14 @@ type Sheet struct {
 	Rules       []Rule
 	TabColour   string // of the tab; empty: none
 	Hidden      bool
+}
+
+// Laid returns the sheets laid out for a size of paper.
+func Laid(sheets []Sheet, on schedule.Paper) []Sheet {
+	for i := range sheets {
+		sheets[i].A3 = on == schedule.A3
+	}
+	return sheets
 }
 
 // Cell is one cell of a Sheet.
