@@ -83,7 +83,7 @@ func (r *run) sheets(ctx context.Context, f *sheetsFlags, marks []string) error 
 			r.con.fail(err)
 			col := &p.all[i].member.Column
 			why := strings.TrimPrefix(err.Error(), col.Mark+": ") // the list names the member itself
-			project.Missing = append(project.Missing, calcsheet.Missing{Column: col, Why: why})
+			project.Missing = append(project.Missing, calcsheet.Missing{Column: col, Status: p.all[i].result.Status, Why: why})
 			continue
 		}
 		sheets = append(sheets, sheet)
@@ -91,7 +91,7 @@ func (r *run) sheets(ctx context.Context, f *sheetsFlags, marks []string) error 
 			return err
 		}
 	}
-	stacks := calcsheet.Stacks(sheets, r.plan.Settings.Together.Options)
+	stacks := calcsheet.Stacks(sheets, project.Missing, r.plan.Settings.Together.Options)
 	if err := outfile.Write(ctx, path, func(w io.Writer) error { return calcsheet.PDF(w, project, sheets, stacks) }); err != nil {
 		return err
 	}

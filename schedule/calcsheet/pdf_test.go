@@ -42,7 +42,7 @@ func sheets(t testing.TB) []*working.Sheet {
 
 func pdfOf(t testing.TB, list []*working.Sheet) []byte {
 	var b bytes.Buffer
-	require.NoError(t, PDF(&b, project(), list, Stacks(list, building.Options{})))
+	require.NoError(t, PDF(&b, project(), list, Stacks(list, nil, building.Options{})))
 	return b.Bytes()
 }
 
@@ -74,7 +74,7 @@ func TestPDFOnA3(t *testing.T) {
 	p := project()
 	p.Paper = schedule.A3
 	var b bytes.Buffer
-	require.NoError(t, PDF(&b, p, list, Stacks(list, building.Options{})))
+	require.NoError(t, PDF(&b, p, list, Stacks(list, nil, building.Options{})))
 	assert.Equal(t, bytes.Count(pdfOf(t, list), []byte("/Type /Page\n")), bytes.Count(b.Bytes(), []byte("/Type /Page\n")))
 	assert.Contains(t, b.String(), "/MediaBox [0 0 841.89 1190.55]")
 	// Whole words that stand once: where symbols and numbers are cut apart is the
@@ -180,12 +180,12 @@ func stack(t testing.TB) []*working.Sheet {
 func TestStacks(t *testing.T) {
 	list := stack(t)
 	list[0], list[2] = list[2], list[0] // the order of the schedule does not count
-	stacks := Stacks(list, building.Options{})
+	stacks := Stacks(list, nil, building.Options{})
 	require.Len(t, stacks, 1)
 	assert.Equal(t, "A1 & <B>", stacks[0].Name)
 	var marks []string
 	for _, l := range stacks[0].Lengths {
-		marks = append(marks, l.Column.Mark)
+		marks = append(marks, l.Sheet.Column.Mark)
 	}
 	assert.Equal(t, []string{"A1-1", "A1-2", "A1-3"}, marks)
 
@@ -212,7 +212,7 @@ func TestSplicesAreThoseOfTheRule(t *testing.T) {
 		for _, l := range list {
 			l.Column.SpliceSaid, l.Column.Splice = c.said, c.splice
 		}
-		s := Stacks(list, c.rule)[0]
+		s := Stacks(list, nil, c.rule)[0]
 		first, changes := s.spliced(1)
 		assert.True(t, changes)
 		assert.Equal(t, c.first, first, "%+v", c)
@@ -224,7 +224,7 @@ func TestSplicesAreThoseOfTheRule(t *testing.T) {
 
 func TestSVG(t *testing.T) {
 	var b bytes.Buffer
-	require.NoError(t, Stacks(stack(t), building.Options{})[0].SVG(&b))
+	require.NoError(t, Stacks(stack(t), nil, building.Options{})[0].SVG(&b))
 	for d := xml.NewDecoder(bytes.NewReader(b.Bytes())); ; {
 		_, err := d.Token()
 		if errors.Is(err, io.EOF) {
@@ -248,9 +248,9 @@ func TestPDFTakesAnyText(t *testing.T) {
 	p := project()
 	p.Title, p.File, p.Settings = long, long, [][2]string{{long, long}}
 	var b bytes.Buffer
-	require.NoError(t, PDF(&b, p, list, []*Stack{{Name: long, Lengths: list}}))
+	require.NoError(t, PDF(&b, p, list, []*Stack{{Name: long, Lengths: []Length{{Sheet: list[0]}}}}))
 	require.NoError(t, Text(&b, list[0]))
-	require.NoError(t, (&Stack{Name: long, Lengths: list}).SVG(&b))
+	require.NoError(t, (&Stack{Name: long, Lengths: []Length{{Sheet: list[0]}}}).SVG(&b))
 }
 
 // BenchmarkPDF writes 500 sheets.

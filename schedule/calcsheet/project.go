@@ -25,6 +25,7 @@ type Project struct {
 // Missing is a member without a calculation sheet.
 type Missing struct {
 	Column *design.Column
+	Status design.Status
 	Why    string
 }
 

@@ -21,17 +21,27 @@ const (
 func stackElevation(c canvas, s *Stack, x, y, w, h float64) {
 	write(c, x, y+4, "Stack "+s.Name, bold, 9*pt, atLeft)
 	top, bottom := y+11, y+h-5
-	scale := (bottom - top) / s.height()
+	heights := s.heights()
+	sum := 0.0
+	for _, h := range heights {
+		sum += h
+	}
+	scale := (bottom - top) / sum
 	at := bottom
-	for i, l := range s.Lengths {
-		next := at - l.Column.Length*scale
-		levelLine(c, l.Column.From, x, at, w)
-		stackLength(c, l, x, next, at, w)
+	for i := range s.Lengths {
+		l := &s.Lengths[i]
+		next := at - heights[i]*scale
+		levelLine(c, l.column().From, x, at, w)
+		if l.Sheet != nil {
+			stackLength(c, l.Sheet, x, next, at, w)
+		} else {
+			stackGap(c, l.Missing, x, next, at, w)
+		}
 		if i > 0 {
 			s.splice(c, i, x+stackAxis, at)
 		}
 		if i == len(s.Lengths)-1 {
-			levelLine(c, l.Column.To, x, next, w)
+			levelLine(c, l.column().To, x, next, w)
 		}
 		at = next
 	}
@@ -89,6 +99,34 @@ func stackLength(c canvas, l *working.Sheet, x, top, bottom, w float64) {
 	}
 }
 
+// stackGap leaves a gap between two levels where a length has no sheet, with
+// its mark and the word for that.
+func stackGap(c canvas, m *Missing, x, top, bottom, w float64) {
+	const half = 1.2
+	for _, side := range []float64{-half, half} {
+		c.line(x+stackAxis+side, top+0.8, x+stackAxis+side, bottom-0.8, dashed)
+	}
+	mid, room := (top+bottom)/2, bottom-top
+	write(c, x+stackAxis, mid+1.1, "?", bold, 9*pt, atMiddle)
+	y := mid + 0.6
+	if room >= 9 {
+		y = mid - 0.8
+	}
+	width := func(points float64) float64 { return (w - stackTexts) / (points * pt) }
+	write(c, x+stackTexts, y, cut(m.Column.Mark+": "+m.Status.String(), bold, width(7.4)), bold, 7.4*pt, atLeft)
+	if room >= 9 {
+		write(c, x+stackTexts, y+3.1, cut(lengthSaid(m.Column), upright, width(6.2)), upright, 6.2*pt, atLeft)
+	}
+}
+
+// lengthSaid says how long a length without a sheet is, as far as that is known.
+func lengthSaid(c *design.Column) string {
+	if c.Length > 0 {
+		return "L = " + metres(c.Length) + " m"
+	}
+	return "its length is not known: not to scale"
+}
+
 // stackBar draws a utilisation against its limit.
 func stackBar(c canvas, l *working.Sheet, x, y, w float64) {
 	const h = 1.8
@@ -120,7 +158,7 @@ func (s *Stack) splice(c canvas, i int, x, y float64) {
 	if !spliced {
 		return
 	}
-	half := math.Max(drawnHalf(s.Lengths[i-1]), drawnHalf(s.Lengths[i])) + 0.9
+	half := math.Max(drawnHalf(s.Lengths[i-1].Sheet), drawnHalf(s.Lengths[i].Sheet)) + 0.9
 	stroke := usualLine
 	if changes {
 		stroke = thickLine
