@@ -28,10 +28,12 @@ func takeoffCommand(con *console) *cobra.Command {
 			"those of the schedule's own column and, where it is blank, those of the results.\n\n" +
 			"Where the schedule or the setting splices says where the splices are, lengths between them are\n" +
 			"one piece; otherwise every length is. What the run that annotated a workbook was told of\n" +
-			"splices, allowances and rates holds here too, where nothing else is said.\n\n" +
+			"splices, allowances and rates holds here too, where nothing else is said; a text schedule does\n" +
+			"not hold it: give it again with --set, or the same --settings.\n\n" +
 			settingsHelp() + "\n\n" + takeoffStatuses,
 		Example: `  stanchion takeoff examples/ottermere-depot-ordered.csv
   stanchion takeoff depot-sized.xlsx -o depot-steel.xlsx --set "cost=1850" --set "carbon=1.74"
+  stanchion takeoff loads-sized.csv --settings settings.csv
   stanchion takeoff ordered.csv -o steel.csv --set connections=6 --set waste=2.5 --set "transport length=12"`,
 		Args: oneFile,
 		RunE: func(c *cobra.Command, args []string) error {
@@ -173,9 +175,21 @@ func (r *takeoffRun) say() {
 	} else if r.con.screen && r.format == "text" {
 		return // the lists stand on the same screen, at the end
 	}
+	r.sayDefaults()
 	r.sayList("not counted", t.LeftOut)
 	r.sayList("counted, and they fail", t.Failing)
 	r.sayList("remarks", t.Remarks)
+}
+
+// sayDefaults warns of defaults that the run which annotated a text schedule may
+// have been told otherwise: text holds no settings.
+func (r *takeoffRun) sayDefaults() {
+	_, text := r.source.(*textSource)
+	if !text || len(r.plan.Header.Old) == 0 || len(r.flags.set) > 0 || r.flags.settings != "" {
+		return
+	}
+	r.con.say("%s", wrap("note: "+filepath.Base(r.input)+" does not hold what the run that annotated it was told of splices, allowances and rates: "+
+		"where that was not the default, give it again with --set or --settings", screenWidth-2, "  "))
 }
 
 // sayList names the first few of a list.
