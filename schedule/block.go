@@ -243,12 +243,21 @@ func ContinuedCells(to []Value, cols []ResultColumn, m *Member, r *design.Result
 		case cols[i].Repeated:
 			to = append(to, cols[i].value(m, r))
 		case cols[i].Name == "note":
-			to = append(to, Value{Kind: Text, Text: "one member with " + rowList(m.Rows[:1])})
+			to = append(to, Value{Kind: Text, Text: "one member with " + m.firstRow()})
 		default:
 			to = append(to, Value{})
 		}
 	}
 	return to
+}
+
+// firstRow names the first row of a member as messages do: "line 5" of a text,
+// which has no cells, "row 5" of a sheet.
+func (m *Member) firstRow() string {
+	if cell := m.Column.Cell; cell != "" && !strings.Contains(cell, "!") {
+		return cell
+	}
+	return rowList("row", m.Rows[:1])
 }
 
 // NotReadResult is the result of a member that could not be read. Its reasons

@@ -57,8 +57,9 @@ func (g *groupScan) number(r *Row, col int) uint32 {
 // groupClashes says, by the first row of a member, why its group is not one.
 type groupClashes map[int32]string
 
-// clashes finds the groups with several families or grades.
-func (g *groupScan) clashes(links *rowLinks, set *Settings) groupClashes {
+// clashes finds the groups with several families or grades. rowWord is what the
+// source calls its rows.
+func (g *groupScan) clashes(links *rowLinks, set *Settings, rowWord string) groupClashes {
 	if len(g.rows) == 0 {
 		return nil
 	}
@@ -76,8 +77,8 @@ func (g *groupScan) clashes(links *rowLinks, set *Settings) groupClashes {
 		return strings.ToUpper(s)
 	})
 	found := groupClashes{}
-	g.compare(links, "family", families, func(r groupRow) uint32 { return r.family }, found)
-	g.compare(links, "grade", grades, func(r groupRow) uint32 { return r.grade }, found)
+	g.compare(links, "family", rowWord, families, func(r groupRow) uint32 { return r.family }, found)
+	g.compare(links, "grade", rowWord, grades, func(r groupRow) uint32 { return r.grade }, found)
 	return found
 }
 
@@ -111,7 +112,7 @@ func (g *groupScan) member(links *rowLinks, first int32) groupRow {
 }
 
 // compare finds the groups whose members differ in one value.
-func (g *groupScan) compare(links *rowLinks, what string, values []string, of func(groupRow) uint32, found groupClashes) {
+func (g *groupScan) compare(links *rowLinks, what, rowWord string, values []string, of func(groupRow) uint32, found groupClashes) {
 	first := map[uint32]string{}
 	mixed := map[uint32]*groupValues{}
 	g.members(links, func(i int32, m groupRow) {
@@ -119,7 +120,7 @@ func (g *groupScan) compare(links *rowLinks, what string, values []string, of fu
 		if !ok {
 			first[m.group] = values[of(m)]
 		} else if v != values[of(m)] {
-			mixed[m.group] = &groupValues{}
+			mixed[m.group] = &groupValues{word: rowWord}
 		}
 	})
 	if len(mixed) == 0 {
@@ -151,6 +152,7 @@ func (g *groupScan) members(links *rowLinks, f func(int32, groupRow)) {
 
 // groupValues lists the values within a group and the rows that have them.
 type groupValues struct {
+	word  string
 	names []string
 	rows  [][]int
 	text  string
@@ -176,20 +178,20 @@ func (v *groupValues) String() string {
 	}
 	var parts []string
 	for i, name := range v.names {
-		parts = append(parts, name+" in "+rowList(v.rows[i]))
+		parts = append(parts, name+" in "+rowList(v.word, v.rows[i]))
 	}
 	v.text = strings.Join(parts, "; ")
 	return v.text
 }
 
-// rowList returns "row 5", or "rows 5, 6, 7 and 40 more".
-func rowList(rows []int) string {
+// rowList returns "row 5", or "rows 5, 6, 7 and 40 more"; "lines" by that word.
+func rowList(word string, rows []int) string {
 	if len(rows) == 1 {
-		return fmt.Sprintf("row %d", rows[0])
+		return fmt.Sprintf("%s %d", word, rows[0])
 	}
 	s := strings.Trim(strings.Join(strings.Fields(fmt.Sprint(rows[:min(len(rows), maxNamed)])), ", "), "[]")
 	if more := len(rows) - maxNamed; more > 0 {
 		s += fmt.Sprintf(" and %d more", more)
 	}
-	return "rows " + s
+	return word + "s " + s
 }

@@ -26,7 +26,7 @@ func (s *scanner) plan(settings *Settings, notes []string) (*Plan, error) {
 		p.Header.Old = append(p.Header.Old, o.col)
 	}
 	p.rows = &rows{src: s.src, plan: p, names: names, links: link(s.refs), keep: s.keep, old: s.l.old}
-	p.rows.groups = s.groups.clashes(p.rows.links, settings)
+	p.rows.groups = s.groups.clashes(p.rows.links, settings, rowWord(s.src, s.l.sheet))
 	sum := &p.Summary
 	sum.Rows, sum.LeftAlone, sum.Other = len(s.refs), s.l.left, s.l.other
 	for _, later := range p.rows.links.later {

@@ -2,6 +2,7 @@ package schedule
 
 import (
 	"fmt"
+	"strings"
 
 	"stanchion/design"
 )
@@ -124,7 +125,13 @@ func rowName(src Source, sheet string, row int) string {
 	if rn, ok := src.(RowNamer); ok {
 		return rn.WhereRow(sheet, row)
 	}
-	return rowList([]int{row})
+	return rowList("row", []int{row})
+}
+
+// rowWord is what a source calls its rows: "row", or "line" of a text.
+func rowWord(src Source, sheet string) string {
+	word, _, _ := strings.Cut(rowName(src, sheet, 1), " ")
+	return word
 }
 
 // named returns the member's mark and levels, for people.

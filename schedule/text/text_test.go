@@ -140,7 +140,14 @@ func TestContinuedRows(t *testing.T) {
 	assert.Contains(t, lines[1], ",184.4")
 	assert.NotContains(t, lines[3], ",184.4")
 	assert.Contains(t, lines[3], "203x203x46 UKC,S355,0.8754")
-	assert.Contains(t, lines[3], "one member with row 2")
+	assert.Contains(t, lines[3], "one member with line 2")
+}
+
+// Lines of other members are named as those of a file's own.
+func TestMembersThatDisagreeNameTheirLines(t *testing.T) {
+	out := annotate(t, open(t, "Schedule,,,,\nMark,Length,N_Ed,Group,Family\nC1,4,500,g,UKC\nC2,4,500,g,UKC\nC3,4,500,g,HE\n"))
+	assert.Contains(t, out, `line 5, column 4: group ""g"" has more than one family: UKC in lines 3, 4; HEA, HEB, HEM in line 5`)
+	assert.NotContains(t, out, " row ")
 }
 
 func TestEncodings(t *testing.T) {
