@@ -1,12 +1,10 @@
 package calcsheet
 
 import (
-	"slices"
 	"strconv"
 	"strings"
 	"unicode"
 
-	"stanchion/design/working"
 	"stanchion/design/working/formula"
 )
 
@@ -215,109 +213,4 @@ func setCall(e formula.Call, outside bool) box {
 		return bracket(row(args...), "|", "|")
 	}
 	return row(textBox(e.Name, upright, 1), bracket(row(args...), "(", ")"))
-}
-
-// pieces sets a formula as boxes between which a line may break.
-func pieces(e formula.Expr) []box {
-	switch e := e.(type) {
-	case formula.Sum:
-		return joined(setTerms(e, true))
-	case formula.Product:
-		return joined(setFactors(e, true))
-	case formula.Call:
-		return callPieces(e)
-	}
-	return []box{typeset(e)}
-}
-
-// joined puts every sign with the box behind it.
-func joined(list []box) []box {
-	var out []box
-	var held []box
-	for _, b := range list {
-		held = append(held, b)
-		if len(b.marks) == 1 && strings.ContainsAny(b.marks[0].text, "+−×") && len([]rune(b.marks[0].text)) == 1 || len(b.marks) == 0 {
-			continue
-		}
-		out = append(out, row(held...))
-		held = nil
-	}
-	return out
-}
-
-// callPieces breaks a function behind the commas of its arguments and inside
-// the first of them.
-func callPieces(e formula.Call) []box {
-	if e.Name == "abs" {
-		return []box{typeset(e)}
-	}
-	list := []box{textBox(e.Name+"(", upright, 1)}
-	for i, a := range e.Args {
-		parts := pieces(a)
-		list[len(list)-1] = row(list[len(list)-1], parts[0])
-		list = append(list, parts[1:]...)
-		end := ", "
-		if i == len(e.Args)-1 {
-			end = ")"
-		}
-		list[len(list)-1] = row(list[len(list)-1], textBox(end, upright, 1))
-		if i < len(e.Args)-1 {
-			list = append(list, gap(0))
-		}
-	}
-	return list
-}
-
-// resultBox sets a number with its unit.
-func resultBox(n formula.Number, u working.Unit) box {
-	n.Exponent = 0
-	b := setNumber(n)
-	if u.Name == "" {
-		return b
-	}
-	if power, name, ok := strings.Cut(u.Name, " "); ok && strings.HasPrefix(power, "×") {
-		return row(b, unitBox(power), gap(unitGap), unitBox(name))
-	}
-	return row(b, gap(unitGap), unitBox(u.Name))
-}
-
-// unitBox sets a unit; its raised figures are characters of their own.
-func unitBox(name string) box {
-	var list []box
-	rest := name
-	for rest != "" {
-		i := strings.IndexAny(rest, "²³⁴⁶⁹")
-		if i < 0 {
-			list = append(list, textBox(rest, upright, 1))
-			break
-		}
-		figure := []rune(rest[i:])[0]
-		plain := strconv.Itoa(slices.Index([]rune("⁰¹²³⁴⁵⁶⁷⁸⁹"), figure))
-		list = append(list, raised(textBox(rest[:i], upright, 1), textBox(plain, upright, scriptSize)))
-		rest = rest[i+len(string(figure)):]
-	}
-	return row(list...)
-}
-
-// textWithSymbols sets a word; what is spelt as a symbol ("N_fi,Ed", "λ̄_LT") is
-// set as one.
-func textWithSymbols(word string, f face) box {
-	at := strings.IndexByte(word, '_')
-	if at < 0 && !strings.ContainsRune(word, macron) {
-		return textBox(word, f, 1)
-	}
-	start := strings.LastIndexAny(word[:max(at, 0)], "(,/+") + 1
-	end := len(word)
-	if i := strings.IndexAny(word[start:], ")/:;="); i >= 0 {
-		end = start + i
-	}
-	end = start + len(strings.TrimRight(word[start:end], ",."))
-	rest := word[end:]
-	list := []box{textBox(word[:start], f, 1), setSymbol(formula.Sym(word[start:end]))}
-	if strings.ContainsRune(rest, '_') {
-		list = append(list, textBox(rest[:1], f, 1), textWithSymbols(rest[1:], f))
-	} else {
-		list = append(list, textBox(rest, f, 1))
-	}
-	return row(list...)
 }
