@@ -60,6 +60,11 @@ func TestNumbersPutIn(t *testing.T) {
 	}
 }
 
+func TestSpans(t *testing.T) {
+	assert.Equal(t, []Span{{"1 − ", Upright}, {"N", Letter}, {"cr,y", Subscript}, {"² / (2 ", Upright}, {"λ̄", Letter}, {")", Upright}},
+		Spans(Must("1 - N_cr,y^2/(2 λ̄)")))
+}
+
 // anyExpr draws a formula of symbols and numbers.
 func anyExpr(t *rapid.T, depth int) Expr {
 	kind := rapid.IntRange(0, 7).Draw(t, "kind")

@@ -140,75 +140,14 @@ func anySymbol(list []Expr) bool {
 
 // Text returns a formula as plain text.
 func Text(e Expr) string {
-	switch e := e.(type) {
-	case Symbol:
-		return e.String()
-	case Number:
-		return e.String()
-	case Sum:
-		return sumText(e)
-	case Product:
-		return productText(e)
-	case Quotient:
-		return bracketed(e.Above, AboveBracketed(e.Above)) + " / " + bracketed(e.Below, BelowBracketed(e.Below))
-	case Power:
-		return powerText(e)
-	case Root:
-		return "√(" + Text(e.Of) + ")"
-	case Call:
-		if e.Name == "abs" {
-			return "|" + Text(e.Args[0]) + "|"
-		}
-		args := make([]string, len(e.Args))
-		for i, a := range e.Args {
-			args[i] = Text(a)
-		}
-		return e.Name + "(" + strings.Join(args, ", ") + ")"
-	}
-	return ""
-}
-
-func bracketed(e Expr, brackets bool) string {
-	if brackets {
-		return "(" + Text(e) + ")"
-	}
-	return Text(e)
-}
-
-func sumText(e Sum) string {
 	var b strings.Builder
-	for i, t := range e.Terms {
-		switch {
-		case i == 0 && t.Minus:
-			b.WriteString("−")
-		case i > 0 && t.Minus:
-			b.WriteString(" − ")
-		case i > 0:
-			b.WriteString(" + ")
+	for _, s := range Spans(e) {
+		if s.Kind == Subscript {
+			b.WriteByte('_')
 		}
-		b.WriteString(bracketed(t.Of, TermBracketed(t.Of, i == 0, t.Minus)))
+		b.WriteString(s.Text)
 	}
 	return b.String()
-}
-
-func productText(e Product) string {
-	between := " "
-	if Times(e) {
-		between = " × "
-	}
-	parts := make([]string, len(e.Factors))
-	for i, f := range e.Factors {
-		parts[i] = bracketed(f, Bracketed(f, i == 0))
-	}
-	return strings.Join(parts, between)
-}
-
-func powerText(e Power) string {
-	base := bracketed(e.Base, BaseBracketed(e.Base))
-	if n, ok := e.Exponent.(Number); ok && n.Exponent == 0 && !strings.Contains(n.Figures, ".") {
-		return base + Raise(n.Figures)
-	}
-	return base + "^" + bracketed(e.Exponent, binding(e.Exponent) < bindAtom)
 }
 
 // AboveBracketed reports whether the upper side of a quotient on one line needs
