@@ -40,7 +40,7 @@ func (p *page) outcomes(t *Tally) {
 	for _, s := range []design.Status{design.Passes, design.Fails, design.NoSection, design.NotRead} {
 		name := workbook.TextCell(s.String())
 		if t.Count[s] > 0 {
-			name = outcome(s) // a colour is for what there is
+			name = workbook.OutcomeCell(s) // a colour is for what there is
 		}
 		p.Row(name, number(float64(t.Count[s]), whole))
 	}

@@ -139,7 +139,7 @@ func (p *resultsPage) mark(l *Line) workbook.Cell {
 
 // status says of a member that does not pass, in a note, why.
 func (p *resultsPage) status(l *Line) workbook.Cell {
-	c := outcome(l.Result.Status)
+	c := workbook.OutcomeCell(l.Result.Status)
 	if l.Result.Status != design.Passes && p.notes < maxNotes {
 		if c.Note = schedule.Note(l.Member, &l.Result); c.Note != "" {
 			p.notes++

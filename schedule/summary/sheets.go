@@ -83,9 +83,3 @@ const (
 func number(x float64, format string) workbook.Cell {
 	return workbook.NumberCell(schedule.Round(x), format)
 }
-
-// outcome is a status as the results show it.
-func outcome(s design.Status) workbook.Cell {
-	role := [...]workbook.Role{design.Passes: workbook.Passes, design.Fails: workbook.Fails, design.NoSection: workbook.NoSection, design.NotRead: workbook.NotRead}[s]
-	return workbook.Cell{Value: s.String(), Look: workbook.Look{Role: role, Align: workbook.Left}}
-}

@@ -189,13 +189,16 @@ func (p *Plan) swept(a area) bool {
 
 // links returns the block's links, so many at most.
 func (p *Plan) links(most int) []link {
-	if p.block.Link == nil {
+	if p.block.Links == nil {
 		return nil
 	}
 	var out []link
-	for row := p.place.heading + 1; row <= p.block.LastRow && len(out) < most; row++ {
-		if col, to := p.block.Link(row); to != "" {
-			out = append(out, link{cellName(p.place.rows.firstCol+col, row), to})
+	for row := p.place.heading + 1; row <= p.block.LastRow; row++ {
+		for _, l := range p.block.Links(row) {
+			if len(out) >= most {
+				return out
+			}
+			out = append(out, link{cellName(p.place.rows.firstCol+l.Column, row), l.Place})
 		}
 	}
 	return out

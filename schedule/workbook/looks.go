@@ -106,7 +106,10 @@ func (l Look) draw(s *excelize.Style) {
 		s.Font.Bold = true
 		fill(s, fillGroup)
 		box(s, lineSoft)
-		s.Alignment.Horizontal = "center"
+		if l.Align == Usual {
+			s.Alignment.Horizontal = "center"
+		}
+		l.indent(s)
 	case Heading:
 		s.Font.Bold, s.Font.Color = true, inkLight
 		fill(s, fillHead)

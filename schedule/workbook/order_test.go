@@ -27,7 +27,7 @@ var orders = map[string][]string{
 
 func TestElementsStandInTheOrderOfTheStandard(t *testing.T) {
 	block := richBlock()
-	block.Link = func(row int) (int, string) { return 0, "'Summary'!A1" }
+	block.Links = func(row int) []BlockLink { return []BlockLink{{0, "'Summary'!A1"}} }
 	for name, in := range map[string][]byte{
 		"rich": rich(t), "simple": packed(t, simple(t, 14)),
 		"bare": handmade(worksheet(`<row r="2"/>`, `<pageMargins left="1" right="1" top="1" bottom="1" header="1" footer="1"/>`), nil).bytes(t),
@@ -49,19 +49,20 @@ func TestElementsStandInTheOrderOfTheStandard(t *testing.T) {
 
 func TestLinksFromTheSchedule(t *testing.T) {
 	block := richBlock()
-	block.Link = func(row int) (int, string) {
+	block.Links = func(row int) []BlockLink {
 		if row%2 == 0 {
-			return 0, ""
+			return nil
 		}
-		return 1, "'It''s'!A1"
+		return []BlockLink{{1, "'It''s'!A1"}, {4, "'Working'!A7"}}
 	}
 	once := annotate(t, rich(t), block)
 	sheet := unpack(t, once)["xl/worksheets/sheet1.xml"]
 	assert.Contains(t, sheet, `<hyperlink ref="G9" location="'It''s'!A1"/>`)
+	assert.Contains(t, sheet, `<hyperlink ref="J9" location="'Working'!A7"/>`)
 	assert.Contains(t, sheet, `ref="E6" location="Notes!A1"`, "the user's own")
 	block.Header.Old = []int{5, 6, 7, 8, 9, 10}
 	requireSame(t, once, annotate(t, once, block))
-	block.Link = nil
+	block.Links = nil
 	sheet = unpack(t, annotate(t, once, block))["xl/worksheets/sheet1.xml"]
 	assert.Equal(t, 1, strings.Count(sheet, "<hyperlink "))
 }

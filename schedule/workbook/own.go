@@ -30,7 +30,7 @@ func newOwn(base lettering) *own {
 // a look in the workbook that the sheet goes to.
 func (o *own) filling(name string, style func(Look) int) *filling {
 	s := o.sheets[name]
-	return &filling{sheet: s.Sheet, style: style, links: linking{list: s.links}}
+	return &filling{sheet: s.Sheet, base: o.base, style: style, links: linking{list: s.links}}
 }
 
 // style returns the id of a look in the own workbook.

@@ -54,3 +54,24 @@ func TestMoreLinksThanASheetHolds(t *testing.T) {
 	l.before(&out, &markup.Token{Kind: markup.End}, 0)
 	assert.Equal(t, maxLinks, strings.Count(out.String(), "<hyperlink "))
 }
+
+func TestTextsInParts(t *testing.T) {
+	look := Look{Role: Result, Bold: true}
+	text := Rich{{Text: "N", Letter: true}, {Text: "cr,y", Subscript: true}, {Text: " = π² < 4 "}}
+	var out bytes.Buffer
+	require.NoError(t, WriteNew(&out, []Sheet{{Name: "Parts", Rows: [][]Cell{{{Value: text, Look: look}, {Value: Rich{{Text: strings.Repeat("x", 40_000)}}}, {Value: Rich{}}}}}}))
+	f, err := excelize.OpenReader(&out)
+	require.NoError(t, err)
+	whole, err := f.GetCellValue("Parts", "A1")
+	require.NoError(t, err)
+	assert.Equal(t, "Ncr,y = π² < 4 ", whole)
+	runs, err := f.GetCellRichText("Parts", "A1")
+	require.NoError(t, err)
+	require.Len(t, runs, 3)
+	assert.True(t, runs[0].Font.Italic)
+	assert.Equal(t, "subscript", runs[1].Font.VertAlign)
+	assert.Equal(t, []any{"Calibri", 11.0, true, false, ""}, []any{runs[2].Font.Family, runs[2].Font.Size, runs[2].Font.Bold, runs[2].Font.Italic, runs[2].Font.VertAlign})
+	long, err := f.GetCellValue("Parts", "B1")
+	require.NoError(t, err)
+	assert.Len(t, []rune(long), maxText)
+}

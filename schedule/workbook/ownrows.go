@@ -18,9 +18,11 @@ const maxText = 32_767
 // the cells of a sheet as long as a schedule.
 type filling struct {
 	sheet *Sheet
+	base  lettering
 	style func(Look) int
 	links linking
 	cells []byte
+	fonts map[Look]string // of texts in parts
 }
 
 // look returns how a cell is drawn.
@@ -160,6 +162,8 @@ func (f *filling) content(c *Cell) {
 		f.cells = append(f.cells, `</v></c>`...)
 	case string:
 		f.text(v)
+	case Rich:
+		f.rich(v, c.Look)
 	default:
 		f.text(fmt.Sprint(v))
 	}

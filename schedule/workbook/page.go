@@ -3,6 +3,8 @@ package workbook
 import (
 	"fmt"
 	"strings"
+
+	"stanchion/design"
 )
 
 // Page is a Sheet being filled from the top.
@@ -31,7 +33,7 @@ func (p *Page) fit() {
 	n := len(p.Rows)
 	lines := 1
 	for i, c := range p.Rows[n-1] {
-		if text, ok := c.Value.(string); ok && c.Look.Wrap && i < len(p.Widths) {
+		if text := c.text(); text != "" && c.Look.Wrap && i < len(p.Widths) {
 			lines = max(lines, linesIn(text, p.widthOf(i)-2))
 		}
 	}
@@ -138,6 +140,11 @@ func WordsCell(s string) Cell {
 // NumberCell is a number of a table, shown in a number format.
 func NumberCell(x float64, format string) Cell {
 	return Cell{Value: x, Look: Look{Role: Result, Align: Right, Format: format}}
+}
+
+// OutcomeCell is a status, drawn so that it stands out where it must.
+func OutcomeCell(s design.Status) Cell {
+	return Cell{Value: s.String(), Look: Look{Role: outcomes[s.String()], Align: Left}}
 }
 
 // LabelCell names what stands beside it.

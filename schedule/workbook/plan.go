@@ -22,10 +22,15 @@ type Block struct {
 	// no results. Rows are asked for in rising order, each once, and again for
 	// each time that the workbook is written.
 	Cells func(row int) []schedule.Value
-	// Link returns a column of the block, counted from 0, whose cell in a row
-	// leads to a place in the workbook ('Sheet'!A1); no place: it leads
-	// nowhere. nil: no cell does.
-	Link func(row int) (column int, place string)
+	// Links returns the cells of a row that lead to places in the workbook; nil:
+	// no cell does.
+	Links func(row int) []BlockLink
+}
+
+// BlockLink leads from a cell of the block to a place in the workbook.
+type BlockLink struct {
+	Column int    // of the block, counted from 0
+	Place  string // 'Sheet'!A1
 }
 
 // Plan says where results go in a workbook, before anything is written.

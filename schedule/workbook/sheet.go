@@ -41,7 +41,7 @@ func Laid(sheets []Sheet, on schedule.Paper) []Sheet {
 
 // Cell is one cell of a Sheet.
 type Cell struct {
-	Value   any    // string, bool, any number, or nil
+	Value   any    // string, Rich, bool, any number, or nil
 	Formula string // without =; its value is calculated on opening
 	Look    Look
 	Link    string // place in the workbook to go to: 'Sheet'!A1
