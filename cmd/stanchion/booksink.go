@@ -11,6 +11,7 @@ import (
 
 	"stanchion/design"
 	"stanchion/schedule"
+	"stanchion/schedule/calcsheet"
 	"stanchion/schedule/summary"
 	"stanchion/schedule/takeoff"
 	"stanchion/schedule/tradeoff"
@@ -23,21 +24,22 @@ const standard = "EN 1993-1-1:2005 + A1:2014"
 // bookSink writes a workbook: the results stand beside the schedule's rows, and
 // the project's own sheets behind the user's.
 type bookSink struct {
-	run   *run
-	book  *workbook.Book
-	w     io.Writer
-	cols  []schedule.ResultColumn
-	lines []summary.Line
-	rows  map[int]int // of the sheet, to the member
+	workings
+	run     *run
+	book    *workbook.Book
+	w       io.Writer
+	cols    []schedule.ResultColumn
+	rows    map[int]int         // of the sheet, to the member
+	working *calcsheet.Workings // nil: there is no such sheet
 
-	section, note int // columns of the block that lead further
+	section, check, note int // columns of the block that lead further
 }
 
 func newBookSink(r *run, src *bookSource, w io.Writer, cols []schedule.ResultColumn) *bookSink {
 	column := func(name string) int {
 		return max(0, slices.IndexFunc(cols, func(c schedule.ResultColumn) bool { return c.Name == name }))
 	}
-	return &bookSink{run: r, book: src.Book, w: w, cols: cols, rows: map[int]int{}, section: column("section"), note: column("note")}
+	return &bookSink{run: r, book: src.Book, w: w, cols: cols, rows: map[int]int{}, section: column("section"), check: column("governing check"), note: column("note")}
 }
 
 func (s *bookSink) put(m *schedule.Member, res *design.Result) error {
@@ -61,7 +63,7 @@ func (s *bookSink) finish(ctx context.Context) error {
 	plan := s.run.plan
 	place, err := s.book.Plan(workbook.Block{
 		Sheet: plan.Sheet, Header: plan.Header, LastRow: last, Title: s.run.blockTitle(), Columns: s.cols, Cells: s.cells(),
-		Link: func(row int) (int, string) { return s.link(own, row) },
+		Links: func(row int) []workbook.BlockLink { return s.links(own, row) },
 	})
 	if err != nil {
 		return err
@@ -70,23 +72,31 @@ func (s *bookSink) finish(ctx context.Context) error {
 		s.run.con.say("note: %s", w)
 	}
 	info.SheetName = place.SheetName
+	if info.Working, err = s.writeWorkings(ctx, place.SheetName(calcsheet.WorkingSheet), info); err != nil {
+		return err
+	}
 	own, sheets := s.ownSheets(info, place)
 	return place.WriteTo(&stopper{ctx, s.w}, workbook.Laid(sheets, plan.Settings.Paper))
 }
 
-// link leads from the section of a member, or from the note of one with a
-// problem, to where more is said of it. From the status none does: a link would
-// take its mark and colour off it in some spreadsheet programs.
-func (s *bookSink) link(own *summary.Sheets, row int) (column int, place string) {
+// links lead from the section of a member, or from the note of one with a
+// problem, to where more is said of it, and from its governing check to its
+// working. From the status none does: a link would take its mark and colour off
+// it in some spreadsheet programs.
+func (s *bookSink) links(own *summary.Sheets, row int) []workbook.BlockLink {
 	i, ok := s.rows[row]
 	if !ok || row != s.lines[i].Member.Rows[0] {
-		return 0, ""
+		return nil
 	}
 	place, problem := own.Place(i)
+	links := []workbook.BlockLink{{Column: s.section, Place: place}}
 	if problem {
-		return s.note, place
+		links[0].Column = s.note
 	}
-	return s.section, place
+	if to := s.lines[i].Working; to != "" {
+		links = append(links, workbook.BlockLink{Column: s.check, Place: to})
+	}
+	return links
 }
 
 // ownSheets are the project's own, in their order: what came of the run, the
@@ -94,7 +104,11 @@ func (s *bookSink) link(own *summary.Sheets, row int) (column int, place string)
 func (s *bookSink) ownSheets(info *summary.Info, place *workbook.Plan) (*summary.Sheets, []workbook.Sheet) {
 	steel := s.run.steelOf(s.lines)
 	own := summary.NewSheets(info, s.run.tally, s.lines, steel)
-	list := []workbook.Sheet{own.Summary, own.Problems, own.Results, own.Sizes}
+	list := []workbook.Sheet{own.Summary, own.Problems, own.Results}
+	if s.working != nil {
+		list = append(list, s.working.Sheet())
+	}
+	list = append(list, own.Sizes)
 	list = append(list, steel.Sheets(info.File)...)
 	if len(s.run.curve) > 0 {
 		list = append(list, s.run.sizesTable().Page(place.SheetName(tradeoff.Sheet)))

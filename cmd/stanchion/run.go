@@ -104,6 +104,12 @@ func (r *run) read(ctx context.Context) error {
 		r.source.Close()
 		return usage(r.cmd, "--sheet %q: a text schedule has no sheets", r.flags.sheet)
 	}
+	if r.isText() {
+		if err := r.flags.working.checkText(r.cmd); err != nil {
+			r.source.Close()
+			return err
+		}
+	}
 	if err := r.scan(ctx, append(assignments, r.more...)); err != nil {
 		r.source.Close()
 		return err

@@ -17,6 +17,7 @@ type runFlags struct {
 	workers             int
 	force, quiet        bool
 	keep                keepFlags
+	working             workingFlags
 }
 
 func (f *runFlags) bind(c *cobra.Command, suffix string) {
@@ -24,6 +25,7 @@ func (f *runFlags) bind(c *cobra.Command, suffix string) {
 	fl.StringVarP(&f.output, "output", "o", "", "write the annotated schedule to `FILE` (default: beside the input, as NAME"+suffix+"; - is standard output, for text)")
 	fl.StringVar(&f.json, "json", "", "write the results as JSON lines to `FILE` too (- is standard output)")
 	fl.BoolVar(&f.force, "force", false, "replace an output that no earlier run wrote, or the input itself")
+	f.working.bind(c)
 	f.bindReading(c)
 }
 
@@ -65,6 +67,9 @@ func (f *runFlags) check(c *cobra.Command) error {
 	}
 	if f.output == stdio && f.json == stdio {
 		return usage(c, "-o - and --json - both go to standard output: name a file for one of them")
+	}
+	if err := f.working.check(c); err != nil {
+		return err
 	}
 	return f.keep.check(c)
 }

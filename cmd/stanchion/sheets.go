@@ -77,11 +77,11 @@ func (r *run) sheets(ctx context.Context, f *sheetsFlags, marks []string) error 
 	var count [4]int
 	var sheets []*working.Sheet
 	for _, i := range p.members {
-		count[p.all[i].result.Status]++
+		count[p.lines[i].Result.Status]++
 		sheet, err := p.sheet(i)
 		if err != nil {
 			r.con.fail(err)
-			col := &p.all[i].member.Column
+			col := &p.lines[i].Member.Column
 			why := strings.TrimPrefix(err.Error(), col.Mark+": ") // the list names the member itself
 			project.Missing = append(project.Missing, calcsheet.Missing{Column: col, Status: p.all[i].result.Status, Why: why})
 			continue

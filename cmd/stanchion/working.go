@@ -2,7 +2,6 @@ package main
 
 import (
 	"context"
-	"errors"
 	"fmt"
 	"slices"
 	"strings"
@@ -12,9 +11,9 @@ import (
 
 	"stanchion/design"
 	"stanchion/design/search"
-	"stanchion/design/working"
 	"stanchion/schedule"
 	"stanchion/schedule/calcsheet"
+	"stanchion/schedule/summary"
 )
 
 func workingCommand(con *console) *cobra.Command {
@@ -49,66 +48,32 @@ func fileAndMarks(c *cobra.Command, args []string) error {
 	return nil
 }
 
-// designed is a member with its result.
-type designed struct {
-	member *schedule.Member
-	result design.Result
-}
-
 // pick keeps the members, and knows those with chosen marks: all where no
 // marks are given.
 type pick struct {
+	workings
 	marks   []string
-	all     []designed // in the order of the schedule
-	members []int      // the chosen ones
-	run     *working.Run
+	members []int // the chosen ones
 }
 
 func (p *pick) put(m *schedule.Member, res *design.Result) error {
-	if len(p.marks) == 0 || slices.ContainsFunc(p.marks, func(mark string) bool { return sameMark(mark, m.Column.Mark) }) {
-		p.members = append(p.members, len(p.all))
+	if len(p.marks) == 0 || marked(m, p.marks) {
+		p.members = append(p.members, len(p.lines))
 	}
-	p.all = append(p.all, designed{m, *res})
+	p.lines = append(p.lines, summary.Line{Member: m, Result: *res})
 	return nil
 }
 
 func (p *pick) finish(context.Context) error { return nil }
 
+// marked reports whether one of the marks was meant for a member.
+func marked(m *schedule.Member, marks []string) bool {
+	return slices.ContainsFunc(marks, func(mark string) bool { return sameMark(mark, m.Column.Mark) })
+}
+
 // sameMark reports whether a mark was meant, in whatever case.
 func sameMark(given, mark string) bool {
 	return strings.EqualFold(strings.TrimSpace(given), strings.TrimSpace(mark))
-}
-
-// missing returns an error that names a mark which no member has, and those
-// like it.
-func (p *pick) missing(file string) error {
-	for _, mark := range p.marks {
-		if slices.ContainsFunc(p.members, func(i int) bool { return sameMark(mark, p.all[i].member.Column.Mark) }) {
-			continue
-		}
-		message := fmt.Sprintf("%s: no column is marked %q", file, mark)
-		seen := p.seen()
-		if near := nearest(mark, seen); len(near) > 0 {
-			message += ": did you mean " + strings.Join(near, ", ") + "?"
-		} else if len(seen) > 0 {
-			const some = 5
-			message += ": its marks are " + strings.Join(seen[:min(some, len(seen))], ", ")
-			if more := len(seen) - some; more > 0 {
-				message += fmt.Sprintf(" and %d more", more)
-			}
-		}
-		return fmt.Errorf("%s", message)
-	}
-	return nil
-}
-
-// seen returns every mark.
-func (p *pick) seen() []string {
-	marks := make([]string, len(p.all))
-	for i := range p.all {
-		marks[i] = p.all[i].member.Column.Mark
-	}
-	return marks
 }
 
 // nearest returns up to three different marks that differ least from one.
@@ -146,21 +111,11 @@ func (r *run) picked(ctx context.Context, marks []string) (*pick, error) {
 	if err := r.design(ctx); err != nil {
 		return nil, err
 	}
-	if err := p.missing(r.input); err != nil {
+	if err := p.missing(r.input, marks); err != nil {
 		return nil, err
 	}
-	p.run = r.again(p.all)
+	p.again(r)
 	return p, nil
-}
-
-// again prepares the working of designed members.
-func (r *run) again(all []designed) *working.Run {
-	columns, results := make([]design.Column, len(all)), make([]design.Result, len(all))
-	for i := range all {
-		columns[i], results[i] = all[i].member.Column, all[i].result
-	}
-	set := r.engine.Settings()
-	return working.NewRun(r.section, &set, columns, results)
 }
 
 // working prints the working of the members with these marks.
@@ -171,7 +126,7 @@ func (r *run) working(ctx context.Context, marks []string) error {
 	}
 	var count [4]int
 	for _, i := range p.members {
-		count[p.all[i].result.Status]++
+		count[p.lines[i].Result.Status]++
 		sheet, err := p.sheet(i)
 		if err != nil {
 			r.con.fail(err)
@@ -185,23 +140,4 @@ func (r *run) working(ctx context.Context, marks []string) error {
 		}
 	}
 	return verdict(&count)
-}
-
-// sheet writes the working of a member down. The error says why there is none.
-func (p *pick) sheet(i int) (*working.Sheet, error) {
-	m, res := p.all[i].member, &p.all[i].result
-	if len(m.Problems) > 0 {
-		return nil, fmt.Errorf("%s: not read: %w", m.Column.Mark, m.Problems[0])
-	}
-	sheet, err := p.run.Sheet(i)
-	if err != nil {
-		switch note := schedule.Note(m, res); {
-		case strings.Contains(note, err.Error()):
-			err = errors.New(note) // a refusal: its note says all
-		case note != "":
-			err = fmt.Errorf("%w: %s", err, note)
-		}
-		return nil, fmt.Errorf("%s: %w", m.Column.Mark, err)
-	}
-	return sheet, nil
 }

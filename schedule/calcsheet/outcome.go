@@ -85,9 +85,17 @@ func combination(c *design.Column, i int) string {
 	return working.Short(c.Combinations[i].Name)
 }
 
-// closing is what stands below the checks: the rules that do not cover the
-// section, mass, the reserve, the next lighter section, the caution.
-func closing(s *working.Sheet) []string {
+// figures says how exact the numbers of a working are.
+const figures = "Numbers stand to as many figures as those before them support: worked out with the printed numbers, " +
+	"a line gives the printed result, but for one step of its last figure."
+
+// closing is what stands below the checks: what is known beyond them, and the
+// caution.
+func closing(s *working.Sheet) []string { return append(beyond(s), figures, caution) }
+
+// beyond is what is known beyond the checks: the rules that do not cover the
+// section, mass, the reserve, the next lighter section.
+func beyond(s *working.Sheet) []string {
 	r := s.Result
 	var lines []string
 	for i := range s.Checks {
@@ -103,7 +111,5 @@ func closing(s *working.Sheet) []string {
 		lines = append(lines, fmt.Sprintf("Next lighter: %s %s, utilisation %s in %s.", r.NextLighter, r.NextLighterGrade,
 			working.Utilisation(r.NextLighterUtilisation), schedule.CheckName(r.NextLighterCheck.Kind)))
 	}
-	return append(lines,
-		"Numbers stand to as many figures as those before them support: worked out with the printed numbers, a line gives the printed result, "+
-			"but for one step of its last figure.", caution)
+	return lines
 }

@@ -4,6 +4,7 @@ import (
 	"strconv"
 	"strings"
 	"unicode"
+	"unicode/utf8"
 
 	"stanchion/design/working/formula"
 )
@@ -52,7 +53,7 @@ func set(e formula.Expr, outside bool) box {
 func setSymbol(s formula.Symbol) box {
 	base, barred := strings.CutSuffix(s.Base, string(macron))
 	f := italic
-	if len(base) > 0 && !unicode.IsLetter([]rune(base)[0]) {
+	if !isLetter(base) {
 		f = upright
 	}
 	b := textBox(base, f, 1)
@@ -65,6 +66,13 @@ func setSymbol(s formula.Symbol) box {
 		b.put(sub, b.w+0.02, -subShift)
 	}
 	return b
+}
+
+// isLetter reports whether a symbol is drawn slanted: one that is no digit or
+// sign.
+func isLetter(base string) bool {
+	first, _ := utf8.DecodeRuneInString(base)
+	return base == "" || unicode.IsLetter(first)
 }
 
 // setNumber sets figures and a power of ten.

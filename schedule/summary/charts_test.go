@@ -25,7 +25,7 @@ func members(n int) []Line {
 		}
 		r.Y = design.Buckling{LambdaBar: 0.5, Chi: 0.88, NEd: 90, NbRd: 100}
 		r.Z = design.Buckling{LambdaBar: 0.9, Chi: 0.6, NEd: 90, NbRd: 80}
-		lines = append(lines, Line{&schedule.Member{Column: design.Column{Mark: fmt.Sprint("C", i+1), Quantity: 1}}, r})
+		lines = append(lines, Line{Member: &schedule.Member{Column: design.Column{Mark: fmt.Sprint("C", i+1), Quantity: 1}}, Result: r})
 	}
 	return lines
 }

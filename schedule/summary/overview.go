@@ -20,9 +20,9 @@ func summarySheet(info *Info, t *Tally) workbook.Sheet {
 	for _, pair := range [][2]string{
 		{"Project", info.Project}, {"Schedule", info.File}, {"Sheet", info.Sheet}, {"SHA-256 of the schedule", info.SHA256},
 		{"Program", info.Program}, {"Standard", info.Standard},
-		{"National set", info.National.Name + ": " + info.National.Source},
+		{"National set", info.National.Name + ": " + info.National.Source}, {"Working", info.Working},
 	} {
-		if pair[0] != "Project" || pair[1] != "" {
+		if pair[1] != "" || pair[0] != "Project" && pair[0] != "Working" {
 			p.Row(workbook.LabelCell(pair[0]), workbook.Cell{Value: pair[1]})
 		}
 	}

@@ -88,7 +88,7 @@ func (p *problemsPage) line(i int, l *Line, at, what, do string) {
 		section.Link = ResultsPlace(p.info.sheetName(ResultsSheet), i)
 	}
 	p.Row(cell, workbook.TextCell(c.Mark), workbook.TextCell(Level(c)), workbook.OutcomeCell(r.Status), section, utilisationCell(r),
-		workbook.TextCell(schedule.CheckName(r.Governing.Kind)), workbook.WordsCell(what), workbook.WordsCell(do))
+		checkCell(l), workbook.WordsCell(what), workbook.WordsCell(do))
 }
 
 // cell names a cell of the schedule and leads to it.

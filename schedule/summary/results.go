@@ -29,9 +29,7 @@ var resultColumns = []resultColumn{
 	{"Outcome", "Section", 19, func(_ *resultsPage, l *Line) workbook.Cell { return workbook.TextCell(l.Result.Section) }},
 	{"Outcome", "Grade", 8, func(_ *resultsPage, l *Line) workbook.Cell { return workbook.TextCell(l.Result.Grade) }},
 	{"Outcome", ">Utilisation", 12, func(_ *resultsPage, l *Line) workbook.Cell { return utilisationCell(&l.Result) }},
-	{"Governing check", "Check", 27, func(_ *resultsPage, l *Line) workbook.Cell {
-		return workbook.TextCell(schedule.CheckName(l.Result.Governing.Kind))
-	}},
+	{"Governing check", "Check", 27, func(_ *resultsPage, l *Line) workbook.Cell { return checkCell(l) }},
 	{"Governing check", "Combination", 15, func(_ *resultsPage, l *Line) workbook.Cell {
 		return workbook.TextCell(schedule.CombinationName(l.Member, &l.Result))
 	}},
@@ -95,7 +93,7 @@ func resultsSheet(info *Info, lines []Line, problems map[*Line]string) workbook.
 	p.Row(groups...)
 	p.spanGroups()
 	p.Headings(headings...)
-	p.HeadingLines(2)
+	p.SetLines(2)
 	p.Freeze()
 	for i := range lines {
 		row := make([]workbook.Cell, len(resultColumns))
@@ -144,6 +142,15 @@ func (p *resultsPage) status(l *Line) workbook.Cell {
 		if c.Note = schedule.Note(l.Member, &l.Result); c.Note != "" {
 			p.notes++
 		}
+	}
+	return c
+}
+
+// checkCell names the check that governs a member and leads to its working.
+func checkCell(l *Line) workbook.Cell {
+	c := workbook.TextCell(schedule.CheckName(l.Result.Governing.Kind))
+	if c.Value != "" {
+		c.Link = l.Working
 	}
 	return c
 }

@@ -19,6 +19,7 @@ type Info struct {
 	Settings []schedule.SettingLine
 	Reading  *schedule.Summary
 	Cautions []string
+	Working  string  // which members' workings the workbook holds
 	Limit    float64 // of utilisation, where a row gives none; 0: 1.00
 	// SheetName returns the name under which a sheet of ours will stand; nil:
 	// the one that it wants.

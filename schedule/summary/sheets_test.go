@@ -24,12 +24,12 @@ func texts(s *workbook.Sheet, column int) (out []any) {
 func TestSheets(t *testing.T) {
 	y := NewTally(10, func(string) string { return "UKC" })
 	lines := []Line{
-		{&schedule.Member{Column: design.Column{Mark: "A", Cell: "C'1!A2", Quantity: 1, Length: 4000}},
-			design.Result{Status: design.Passes, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: 0.9}},
-		{&schedule.Member{Column: design.Column{Mark: "B", Cell: "C'1!A3", Quantity: 1, Length: 4000}},
-			design.Result{Status: design.Fails, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: math.Inf(1), Notes: []string{"outside the rules"}}},
-		{&schedule.Member{Column: design.Column{Mark: "C", Cell: "C'1!A4"}, Problems: []*schedule.Problem{{Cell: "C'1!C4", What: "N_Ed is missing", Do: "give it"}}},
-			design.Result{Status: design.NotRead}},
+		{Member: &schedule.Member{Column: design.Column{Mark: "A", Cell: "C'1!A2", Quantity: 1, Length: 4000}}, Working: "'Working'!A4",
+			Result: design.Result{Status: design.Passes, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: 0.9}},
+		{Member: &schedule.Member{Column: design.Column{Mark: "B", Cell: "C'1!A3", Quantity: 1, Length: 4000}}, Working: "'Working'!A9",
+			Result: design.Result{Status: design.Fails, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: math.Inf(1), Notes: []string{"outside the rules"}}},
+		{Member: &schedule.Member{Column: design.Column{Mark: "C", Cell: "C'1!A4"}, Problems: []*schedule.Problem{{Cell: "C'1!C4", What: "N_Ed is missing", Do: "give it"}}},
+			Result: design.Result{Status: design.NotRead}},
 	}
 	for i := range lines {
 		y.Add(lines[i].Member, &lines[i].Result)
@@ -62,4 +62,9 @@ func TestSheets(t *testing.T) {
 	assert.Equal(t, "'Problems'!A4", own.Results.Rows[5][markColumn].Link)
 	assert.Equal(t, "outside the rules", own.Results.Rows[5][statusColumn].Note)
 	assert.Equal(t, "passes", own.Results.Rows[4][statusColumn].Value)
+
+	assert.Equal(t, "'Working'!A9", failing[6].Link)
+	for i, want := range []string{"'Working'!A4", "'Working'!A9", ""} {
+		assert.Equal(t, want, own.Results.Rows[4+i][10].Link)
+	}
 }

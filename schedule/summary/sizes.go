@@ -23,7 +23,7 @@ func sizesSheet(info *Info, lines []Line, steel *takeoff.TakeOff) workbook.Sheet
 	p.Blank()
 	p.Headings("Family", "Section", "Grade", ">kg/m", ">Members", ">Pieces", ">Length [m]", ">Mass [t]", ">of the mass", ">Greatest utilisation", "of member", ">Failing")
 	head := len(p.Rows)
-	p.HeadingLines(2)
+	p.SetLines(2)
 	p.Freeze()
 	var all size
 	for i := range steel.Sections {

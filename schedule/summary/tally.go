@@ -39,8 +39,9 @@ type Reason struct {
 
 // Line is one member with its result.
 type Line struct {
-	Member *schedule.Member
-	Result design.Result
+	Member  *schedule.Member
+	Result  design.Result
+	Working string // place of its working in the workbook; empty: there is none
 }
 
 // Steel is the steel of one family that the members need.
@@ -123,7 +124,7 @@ func (t *Tally) addWorst(m *schedule.Member, r *design.Result) {
 	if at >= t.keep {
 		return
 	}
-	t.Worst = slices.Insert(t.Worst, at, Line{m, *r})
+	t.Worst = slices.Insert(t.Worst, at, Line{Member: m, Result: *r})
 	t.Worst = t.Worst[:min(len(t.Worst), t.keep)]
 }
 

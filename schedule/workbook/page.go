@@ -39,7 +39,7 @@ func (p *Page) fit() {
 	}
 	delete(p.Heights, n)
 	if lines > 1 {
-		p.setHeight(n, lines)
+		p.setHeight(n, float64(lines))
 	}
 }
 
@@ -68,12 +68,15 @@ func linesIn(text string, width float64) int {
 	return lines
 }
 
+// SetLines gives the last row room for so many lines.
+func (p *Page) SetLines(lines float64) { p.setHeight(len(p.Rows), lines) }
+
 // setHeight makes a row high enough for so many lines.
-func (p *Page) setHeight(row, lines int) {
+func (p *Page) setHeight(row int, lines float64) {
 	if p.Heights == nil {
 		p.Heights = map[int]float64{}
 	}
-	p.Heights[row] = min(409, lineOfPage*float64(lines)) // 409 points is the most that a row can have
+	p.Heights[row] = min(409, lineOfPage*lines) // 409 points is the most that a row can have
 }
 
 const lineOfPage = 15.5 // points
@@ -99,9 +102,6 @@ func (p *Page) Headings(texts ...string) {
 	}
 	p.Row(cells...)
 }
-
-// HeadingLines gives the last row, of headings, room for so many lines.
-func (p *Page) HeadingLines(lines int) { p.setHeight(len(p.Rows), lines) }
 
 // Totals adds a row of sums.
 func (p *Page) Totals(cells ...Cell) {
