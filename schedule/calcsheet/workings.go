@@ -23,7 +23,7 @@ const (
 	workingColumns
 )
 
-var workingWidths = []float64{12, 30, 36, 11, 10, 12, 27}
+var workingWidths = []float64{12, 29, 41, 11, 11, 13, 30}
 
 // wordsOnALine is how long a sentence may be that stands on one line.
 const wordsOnALine = 120
@@ -119,6 +119,10 @@ func (w *Workings) head(s *working.Sheet) {
 	row[symbolColumn].Link = workbook.Place(w.schedule, s.Column.Cell)
 	row[numbersColumn].Value = s.Section.Name() + "  " + s.Grade
 	row[remarkColumn] = workbook.OutcomeCell(s.Result.Status)
+	if s.Governing >= 0 {
+		row[valueColumn] = headed(numberCell(utilisation(&s.Checks[s.Governing])))
+		row[clauseColumn] = headed(workbook.TextCell(s.Checks[s.Governing].Clause))
+	}
 	w.row(row...)
 	w.page.Span(symbolColumn, formulaColumn)
 	w.atLeast(1.3)
@@ -126,6 +130,12 @@ func (w *Workings) head(s *working.Sheet) {
 	for _, n := range s.Notes {
 		w.words("Note: " + n)
 	}
+}
+
+// headed draws a cell as one of a heading.
+func headed(c workbook.Cell) workbook.Cell {
+	c.Look.Role = workbook.Group
+	return c
 }
 
 // words adds a sentence: over all columns, or beyond its cell where it is short

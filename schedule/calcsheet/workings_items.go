@@ -2,7 +2,9 @@ package calcsheet
 
 import (
 	"fmt"
+	"strings"
 
+	"stanchion/design"
 	"stanchion/design/working"
 	"stanchion/design/working/formula"
 	"stanchion/schedule"
@@ -67,35 +69,48 @@ func (w *Workings) table(t *working.Table) {
 	}
 	for i, text := range t.Head {
 		c := head[places[i]]
-		c.Value = richText(text)
+		c.Value, c.Look.Align = richText(text), alignIn(places[i])
 		head[places[i]] = c
 	}
 	w.line(head)
 	for _, texts := range t.Rows {
 		cells := map[int]workbook.Cell{}
 		for i, text := range texts {
-			cells[places[i]] = wordsCell(text)
+			cells[places[i]] = tableCell(text, places[i])
 		}
 		w.line(cells)
 	}
 }
 
-// tablePlaces gives the columns of a table columns of the sheet: a name the
-// first, how something was found that of the remarks, the others the next.
+// alignIn returns where what is in a column of a table stands.
+func alignIn(column int) workbook.Align {
+	if column == valueColumn || column == unitColumn {
+		return workbook.Right
+	}
+	return workbook.Left
+}
+
+// tableCell is a cell of a table: a number where it holds one.
+func tableCell(text string, column int) workbook.Cell {
+	c := numberCell(formula.Number{Figures: strings.Replace(text, "−", "-", 1)})
+	if _, number := c.Value.(float64); !number {
+		c = wordsCell(text)
+	}
+	c.Look.Align = alignIn(column)
+	return c
+}
+
+// tablePlaces gives the columns of a table columns of the sheet.
 func tablePlaces(t *working.Table) []int {
-	free := []int{symbolColumn, formulaColumn, numbersColumn, valueColumn, unitColumn, clauseColumn, remarkColumn}
-	if len(t.Head) == 2 {
-		return free[1:3]
+	switch {
+	case len(t.Head) == 2: // combinations and their forces
+		return []int{formulaColumn, numbersColumn}
+	case len(t.Head) == 5 && !t.Right[3]: // axis, segment, length, how found, buckling length
+		return []int{symbolColumn, formulaColumn, unitColumn, numbersColumn, valueColumn}
 	}
 	places := make([]int, len(t.Head))
-	next := 0
-	for i := range t.Head {
-		if !t.Right[i] && i > 1 {
-			places[i] = remarkColumn
-			continue
-		}
-		places[i] = free[next]
-		next++
+	for i := range places {
+		places[i] = min(symbolColumn+i, remarkColumn)
 	}
 	return places
 }
@@ -106,6 +121,11 @@ func (w *Workings) checks(s *working.Sheet) {
 	for i := range s.Checks {
 		w.check(s, i)
 	}
+}
+
+// utilisation is that of a check as it is printed.
+func utilisation(c *design.Check) formula.Number {
+	return formula.Number{Figures: working.Utilisation(c.Utilisation)}
 }
 
 func (w *Workings) check(s *working.Sheet, i int) {
@@ -123,8 +143,8 @@ func (w *Workings) check(s *working.Sheet, i int) {
 	}
 	cells := map[int]workbook.Cell{
 		formulaColumn: workbook.WordsCell(schedule.CheckName(c.Kind)), numbersColumn: workbook.WordsCell(numbers),
-		valueColumn:  numberCell(formula.Number{Figures: working.Utilisation(c.Utilisation)}),
-		clauseColumn: workbook.WordsCell(c.Clause), remarkColumn: workbook.WordsCell(remark),
+		valueColumn:  numberCell(utilisation(c)),
+		clauseColumn: workbook.TextCell(c.Clause), remarkColumn: workbook.WordsCell(remark),
 	}
 	if i == s.Governing {
 		for k, cell := range cells {

@@ -25,9 +25,9 @@ func TestSheets(t *testing.T) {
 	y := NewTally(10, func(string) string { return "UKC" })
 	lines := []Line{
 		{Member: &schedule.Member{Column: design.Column{Mark: "A", Cell: "C'1!A2", Quantity: 1, Length: 4000}}, Working: "'Working'!A4",
-			Result: design.Result{Status: design.Passes, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: 0.9}},
+			Result: design.Result{Status: design.Passes, Governing: design.Check{Kind: design.Compression}, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: 0.9}},
 		{Member: &schedule.Member{Column: design.Column{Mark: "B", Cell: "C'1!A3", Quantity: 1, Length: 4000}}, Working: "'Working'!A9",
-			Result: design.Result{Status: design.Fails, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: math.Inf(1), Notes: []string{"outside the rules"}}},
+			Result: design.Result{Status: design.Fails, Governing: design.Check{Kind: design.Compression}, Section: "203x203x46 UKC", Mass: 184.4, Utilisation: math.Inf(1), Notes: []string{"outside the rules"}}},
 		{Member: &schedule.Member{Column: design.Column{Mark: "C", Cell: "C'1!A4"}, Problems: []*schedule.Problem{{Cell: "C'1!C4", What: "N_Ed is missing", Do: "give it"}}},
 			Result: design.Result{Status: design.NotRead}},
 	}

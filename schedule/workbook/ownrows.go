@@ -95,7 +95,7 @@ func (f *filling) rows(t *markup.Token, scan *markup.Scanner, out io.Writer) err
 }
 
 func (f *filling) row(i int) {
-	row, height := f.sheet.Rows[i], f.sheet.Heights[i+1]
+	row, height := f.sheet.Rows[i], f.height(i+1)
 	if len(row) == 0 && height == 0 {
 		return
 	}
@@ -111,6 +111,16 @@ func (f *filling) row(i int) {
 		f.cell(c, i+1, &row[c])
 	}
 	f.cells = append(f.cells, `</row>`...)
+}
+
+// height returns the height of a row, in points: given for the usual letters,
+// it grows with those of the workbook, unless charts stand on the rows.
+func (f *filling) height(row int) float64 {
+	h := f.sheet.Heights[row]
+	if len(f.sheet.Charts) > 0 {
+		return h
+	}
+	return min(tallest, math.Round(h*f.base.size/usualLettering.size*100)/100)
 }
 
 func (f *filling) cell(col, row int, c *Cell) {

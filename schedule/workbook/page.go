@@ -3,6 +3,7 @@ package workbook
 import (
 	"fmt"
 	"strings"
+	"unicode"
 
 	"stanchion/design"
 )
@@ -34,7 +35,11 @@ func (p *Page) fit() {
 	lines := 1
 	for i, c := range p.Rows[n-1] {
 		if text := c.text(); text != "" && c.Look.Wrap && i < len(p.Widths) {
-			lines = max(lines, linesIn(text, p.widthOf(i)-2))
+			width := p.widthOf(i) - 2
+			if c.Look.Bold {
+				width *= 8.0 / 9
+			}
+			lines = max(lines, linesIn(text, width))
 		}
 	}
 	delete(p.Heights, n)
@@ -63,9 +68,36 @@ func (p *Page) widthOf(col int) float64 {
 func linesIn(text string, width float64) int {
 	lines := 0
 	for _, line := range strings.Split(text, "\n") {
-		lines += linesAt(splitWords(line), max(1, int(width)))
+		lines++
+		used := -1.0
+		for word := range strings.SplitSeq(line, " ") {
+			w := textWidth(word)
+			if used >= 0 && used+narrow+w > width {
+				lines, used = lines+1, -narrow
+			}
+			used = max(0, used+narrow) + w
+		}
 	}
 	return lines
+}
+
+// narrow is the width of blanks and signs of little width, in figures.
+const narrow = 0.62
+
+// textWidth returns the width of a text, in figures, much as any typeface has
+// it.
+func textWidth(text string) float64 {
+	w := 0.0
+	for _, r := range text {
+		switch {
+		case unicode.Is(unicode.Mn, r):
+		case strings.ContainsRune(" .,:;|()⁻⁰¹²³⁴⁵⁶⁷⁸⁹", r):
+			w += narrow
+		default:
+			w++
+		}
+	}
+	return w
 }
 
 // SetLines gives the last row room for so many lines.
@@ -76,10 +108,13 @@ func (p *Page) setHeight(row int, lines float64) {
 	if p.Heights == nil {
 		p.Heights = map[int]float64{}
 	}
-	p.Heights[row] = min(409, lineOfPage*lines) // 409 points is the most that a row can have
+	p.Heights[row] = min(tallest, lineOfPage*lines)
 }
 
-const lineOfPage = 15.5 // points
+const (
+	lineOfPage = 15.5 // points
+	tallest    = 409  // points, the most that a row can have
+)
 
 // Blank leaves a row out.
 func (p *Page) Blank() { p.Row() }
