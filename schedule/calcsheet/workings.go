@@ -28,8 +28,12 @@ var workingWidths = []float64{12, 29, 41, 11, 11, 13, 30}
 // wordsOnALine is how long a sentence may be that stands on one line.
 const wordsOnALine = 120
 
-// maxRows is how many rows a sheet of a workbook has.
-const maxRows = 1_048_576
+// maxRows is how many rows a sheet of a workbook has, endRows how many of them
+// end this one.
+const (
+	maxRows = 1_048_576
+	endRows = 3
+)
 
 // Workings is the sheet of workings of a workbook: a block for every member,
 // the steps that Text prints, in columns.
@@ -81,7 +85,7 @@ func (w *Workings) Add(s *working.Sheet) (place string) {
 	for _, words := range beyond(s) {
 		w.words(words)
 	}
-	if len(p.Rows) > maxRows {
+	if len(p.Rows) > maxRows-endRows {
 		p.Rows, p.Merges = p.Rows[:before], p.Merges[:merges]
 		return ""
 	}
