@@ -14,6 +14,7 @@ func checkCommand(con *console) *cobra.Command {
 		Long: "Reads a column schedule whose columns have their sections, checks every one, and writes the\n" +
 			"schedule annotated beside it: utilisation, what governs, pass or fail, and by how much the axial\n" +
 			"force could still grow. Columns that fail are listed, with the lightest section that would pass.\n\n" +
+			workingHelp + "\n\n" +
 			settingsHelp() + "\n\n" + exitStatuses + "\n\n" + cautionHelp,
 		Example: `  stanchion check examples/ottermere-depot-ordered.csv
   stanchion check loads.xlsx --sheet Columns --set growth=1.10

@@ -8,6 +8,7 @@ import (
 	"os/exec"
 	"path/filepath"
 	"regexp"
+	"slices"
 	"strconv"
 	"strings"
 	"testing"
@@ -176,7 +177,7 @@ func TestChartsPointAtCellsThatHoldSomething(t *testing.T) {
 func TestAnotherProgramReadsTheSameResults(t *testing.T) {
 	path, members := sizedDepot(t)
 	f := openBook(t, office(t, path, "xlsx"))
-	assert.Equal(t, []string{"Columns", "Settings", "Summary", "Problems", "Results", "Sizes used", "Take-off", "Splices", "Cutting list", "Charts", "Chart data"}, f.GetSheetList())
+	assert.Equal(t, []string{"Columns", "Settings", "Summary", "Problems", "Results", "Working", "Sizes used", "Take-off", "Splices", "Cutting list", "Charts", "Chart data"}, f.GetSheetList())
 	rows := sheetRows(t, f, "Results")
 	require.Equal(t, []string{"Row", "Mark"}, rows[3][:2])
 	for i, m := range members {
@@ -234,4 +235,112 @@ func TestThePrintedWorkbook(t *testing.T) {
 	for _, title := range []string{"Utilisation by member", "Steel by section", "Steel by level", "Members on the buckling curves", "SHA-256 of the schedule"} {
 		assert.Contains(t, string(out), title)
 	}
+}
+
+// place splits where a link leads to, however the program that wrote it spells
+// it.
+func place(to string) (sheet, cell string) {
+	sheet, cell, _ = strings.Cut(strings.NewReplacer("'", "", "$", "", "#", "").Replace(to), "!")
+	return sheet, cell
+}
+
+// follow returns what stands where the link of a cell leads to, and the link of
+// that.
+func follow(t *testing.T, f *excelize.File, sheet, cell string) (text, back string) {
+	t.Helper()
+	linked, to, err := f.GetCellHyperLink(sheet, cell)
+	require.NoError(t, err)
+	require.True(t, linked, "%s!%s", sheet, cell)
+	sheet, cell = place(to)
+	text, err = f.GetCellValue(sheet, cell)
+	require.NoError(t, err)
+	_, back, err = f.GetCellHyperLink(sheet, cell)
+	require.NoError(t, err)
+	return text, back
+}
+
+// below returns the column of a sheet that has a heading.
+func below(t *testing.T, rows [][]string, heading string) string {
+	t.Helper()
+	for _, row := range rows {
+		if c := slices.Index(row, heading); c >= 0 {
+			name, err := excelize.ColumnNumberToName(c + 1)
+			require.NoError(t, err)
+			return name
+		}
+	}
+	t.Fatalf("no heading %q", heading)
+	return ""
+}
+
+func TestMembersAndWorkingsLeadToEachOther(t *testing.T) {
+	path, members := sizedDepot(t)
+	for _, path := range []string{path, office(t, path, "xlsx")} {
+		f := openBook(t, path)
+		check := below(t, sheetRows(t, f, "Columns"), "Result: governing check")
+		for i, m := range members {
+			cell := strings.TrimPrefix(m["cell"].(string), "Columns!")
+			row := strings.TrimLeft(cell, "ABCDEFGHIJKLMNOPQRSTUVWXYZ")
+			for _, from := range [][2]string{{"Columns", check + row}, {"Results", fmt.Sprint("K", 5+i)}} {
+				text, back := follow(t, f, from[0], from[1])
+				assert.True(t, strings.HasPrefix(text, m["mark"].(string)+", "), "%s: %s", from, text)
+				sheet, to := place(back)
+				assert.Equal(t, "Columns!"+cell, sheet+"!"+to)
+			}
+		}
+	}
+}
+
+// workingOf returns the rows of a member on the sheet of workings, and the rows
+// behind them.
+func workingOf(t *testing.T, rows [][]string, mark string) (own, rest [][]string) {
+	t.Helper()
+	heads := func(row []string) bool { return len(row) > 6 && row[2] != "" && row[1] == "" && row[0] != "" && row[4] == "" }
+	for i, row := range rows {
+		if !heads(row) || !strings.HasPrefix(row[0], mark+", ") {
+			continue
+		}
+		end := i + 1
+		for end < len(rows) && !heads(rows[end]) {
+			end++
+		}
+		return rows[i:end], rows[end:]
+	}
+	t.Fatalf("no working of %s", mark)
+	return nil, nil
+}
+
+// The sheet of workings, read by another program, holds the numbers of the JSON
+// lines.
+func TestTheSheetOfWorkings(t *testing.T) {
+	path, members := sizedDepot(t)
+	rest := sheetRows(t, openBook(t, office(t, path, "xlsx")), "Working")
+	var own [][]string
+	for _, m := range members {
+		own, rest = workingOf(t, rest, m["mark"].(string))
+		assert.Equal(t, m["section"].(string)+"  "+m["grade"].(string), own[0][2])
+		assert.Equal(t, m["status"], own[0][6])
+		u, err := strconv.ParseFloat(own[0][3], 64)
+		require.NoError(t, err)
+		assert.InDelta(t, m["utilisation"], u, 0.0005001, "three decimals, a half either way")
+		found := 0
+		for _, row := range own[1:] {
+			key := map[string]string{"Nb,y,Rd": "N_b_y_Rd_kN", "Nb,z,Rd": "N_b_z_Rd_kN", "χy": "chi_y", "χz": "chi_z", "λ̄y": "lambda_bar_y", "λ̄z": "lambda_bar_z", "fy": "fy_MPa"}[first(row)]
+			if key == "" {
+				continue
+			}
+			x, err := strconv.ParseFloat(row[3], 64)
+			require.NoError(t, err)
+			assert.InEpsilon(t, m[key], x, 5e-4, "%s of %s: four figures at least, a half either way", key, m["mark"])
+			found++
+		}
+		assert.GreaterOrEqual(t, found, 7, m["mark"])
+	}
+}
+
+func first(row []string) string {
+	if len(row) == 0 {
+		return ""
+	}
+	return row[0]
 }

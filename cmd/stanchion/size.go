@@ -15,10 +15,12 @@ func sizeCommand(con *console) *cobra.Command {
 			"column the lightest section that passes every check, and writes the schedule annotated beside it.\n" +
 			"A row that gives a section keeps it: it is checked. With --keep, sections stay as they are in an\n" +
 			"old issue of the schedule where they still pass, so that the fewest members change.\n\n" +
+			workingHelp + "\n\n" +
 			settingsHelp() + "\n\n" + exitStatuses + "\n\n" + cautionHelp,
 		Example: `  stanchion size examples/ottermere-depot.xlsx
   stanchion size loads.xlsx --set families="HEA, HEB" --set national=EN --set limit=0.95
   stanchion size loads.csv -o sized.csv --json sized.jsonl
+  stanchion size loads.xlsx --working C12 --working C13
   stanchion size loads-P02.xlsx --keep loads-P01-sized.xlsx
   stanchion size - < loads.csv > sized.csv`,
 		Args: oneFile,

@@ -16,6 +16,10 @@ import (
 // be written without being asked for: of more it would be long.
 const workingMembers = 300
 
+// workingHelp explains the sheet for the help of a command.
+const workingHelp = "An annotated workbook holds the working of its members, step by step, on a sheet named Working: a click\n" +
+	"on a member's governing check leads there. Of more than 300 members it is left out unless --working asks for it."
+
 // What --working may say beside marks.
 const (
 	workingAll  = "all"
@@ -59,7 +63,7 @@ func (f *workingFlags) leftOut(members int) string {
 	case len(f.given) == 1 && f.given[0] == workingNone:
 		return "left out, as asked for"
 	case len(f.given) == 0 && members > workingMembers:
-		return fmt.Sprintf("left out of more than %d members: give --working all, or --working MARK", workingMembers)
+		return fmt.Sprintf("left out, with more than %d members: give --working all, or --working MARK", workingMembers)
 	}
 	return ""
 }
@@ -69,6 +73,9 @@ func (f *workingFlags) leftOut(members int) string {
 func (s *bookSink) writeWorkings(ctx context.Context, name string, info *summary.Info) (string, error) {
 	f := &s.run.flags.working
 	if why := f.leftOut(len(s.lines)); why != "" {
+		if len(f.given) == 0 {
+			s.run.con.say("note: the working is %s", why)
+		}
 		return why, nil
 	}
 	marks := f.marks()

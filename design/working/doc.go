@@ -9,6 +9,6 @@
 // give back: whoever works a line out from what stands on the page finds what
 // stands behind it, but for one step of the last figure at most.
 //
-// A Sheet is neutral: package calcsheet of schedule prints it as text and as
-// PDF.
+// A Sheet is neutral: package calcsheet of schedule prints it as text, as PDF
+// and as a sheet of a workbook.
 package working

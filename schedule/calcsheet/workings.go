@@ -75,7 +75,9 @@ func (w *Workings) Sheet() workbook.Sheet {
 func (w *Workings) Add(s *working.Sheet) (place string) {
 	p := w.page
 	before, merges := len(p.Rows), len(p.Merges)
-	w.row()
+	if before > p.FreezeRows {
+		w.row()
+	}
 	w.parts = append(w.parts[:0], len(p.Rows)+1)
 	w.head(s)
 	for i := range s.Blocks {

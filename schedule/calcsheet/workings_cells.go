@@ -29,7 +29,7 @@ func numbersCell(e formula.Expr) workbook.Cell {
 	if e == nil {
 		return workbook.WordsCell("")
 	}
-	return workbook.WordsCell("= " + formula.Text(e))
+	return workbook.WordsCell(formula.Text(e))
 }
 
 // wordsCell sets a text; what is spelt as a symbol is set as one.

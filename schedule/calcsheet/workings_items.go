@@ -139,7 +139,7 @@ func (w *Workings) check(s *working.Sheet, i int) {
 	}
 	numbers := ""
 	if ed, rd, unit := amounts(c); unit != "" {
-		numbers = fmt.Sprintf("= %s / %s %s", ed, rd, unit)
+		numbers = fmt.Sprintf("%s / %s %s", ed, rd, unit)
 	}
 	cells := map[int]workbook.Cell{
 		formulaColumn: workbook.WordsCell(schedule.CheckName(c.Kind)), numbersColumn: workbook.WordsCell(numbers),

@@ -6,8 +6,7 @@ func (w *Workings) paginate() {
 	last := len(w.page.Rows)
 	first := w.parts[0]
 	height := w.heights(first, last)
-	between := w.heights(first-1, first-1)
-	w.used += between
+	w.used += w.heights(max(first-1, w.page.FreezeRows+1), first-1)
 	if w.used+height <= w.room {
 		w.used += height
 		return
