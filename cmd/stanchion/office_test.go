@@ -295,7 +295,9 @@ func TestMembersAndWorkingsLeadToEachOther(t *testing.T) {
 // behind them.
 func workingOf(t *testing.T, rows [][]string, mark string) (own, rest [][]string) {
 	t.Helper()
-	heads := func(row []string) bool { return len(row) > 6 && row[2] != "" && row[1] == "" && row[0] != "" && row[4] == "" }
+	heads := func(row []string) bool {
+		return len(row) > 6 && row[2] != "" && row[1] == "" && row[0] != "" && row[4] == ""
+	}
 	for i, row := range rows {
 		if !heads(row) || !strings.HasPrefix(row[0], mark+", ") {
 			continue

@@ -83,7 +83,7 @@ func (r *run) sheets(ctx context.Context, f *sheetsFlags, marks []string) error 
 			r.con.fail(err)
 			col := &p.lines[i].Member.Column
 			why := strings.TrimPrefix(err.Error(), col.Mark+": ") // the list names the member itself
-			project.Missing = append(project.Missing, calcsheet.Missing{Column: col, Status: p.all[i].result.Status, Why: why})
+			project.Missing = append(project.Missing, calcsheet.Missing{Column: col, Status: p.lines[i].Result.Status, Why: why})
 			continue
 		}
 		sheets = append(sheets, sheet)

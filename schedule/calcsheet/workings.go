@@ -41,10 +41,6 @@ type Workings struct {
 	page     *workbook.Page
 	name     string // under which the sheet will stand
 	schedule string // sheet of the schedule
-
-	parts []int   // of the block being written: the first row of each subject
-	room  float64 // on a printed page
-	used  float64 // of the last one
 }
 
 // NewWorkings starts the sheet. name is the one under which it will stand.
@@ -58,7 +54,7 @@ func NewWorkings(name string, project *Project) *Workings {
 	p.Headings("Symbol", "Formula", "With numbers", ">Value", "Unit", "Clause", "Remark")
 	p.SetLines(1.2)
 	p.Freeze()
-	return &Workings{page: p, name: name, schedule: project.Sheet, room: p.PageRoom() - blankRow}
+	return &Workings{page: p, name: name, schedule: project.Sheet}
 }
 
 // Sheet ends the sheet and returns it.
@@ -74,30 +70,28 @@ func (w *Workings) Sheet() workbook.Sheet {
 // none where the sheet has no rows left for it.
 func (w *Workings) Add(s *working.Sheet) (place string) {
 	p := w.page
-	before, merges := len(p.Rows), len(p.Merges)
-	if before > p.FreezeRows {
+	before := p.Sheet
+	if len(p.Rows) > p.FreezeRows {
 		w.row()
 	}
-	w.parts = append(w.parts[:0], len(p.Rows)+1)
+	p.Chapter()
 	w.head(s)
 	for i := range s.Blocks {
-		w.subject(&s.Blocks[i], i == 0)
+		if i > 0 { // the first stays with the heading
+			p.Begin()
+		}
+		w.subject(&s.Blocks[i])
 	}
 	w.checks(s)
 	for _, words := range beyond(s) {
 		w.words(words)
 	}
 	if len(p.Rows) > maxRows-endRows {
-		p.Rows, p.Merges = p.Rows[:before], p.Merges[:merges]
+		p.Sheet = before
 		return ""
 	}
-	w.paginate()
-	return fmt.Sprintf("%s!A%d", workbook.Quoted(w.name), w.parts[0])
+	return fmt.Sprintf("%s!A%d", workbook.Quoted(w.name), p.Chapters[len(p.Chapters)-1])
 }
-
-// blankRow is the height, in points, of the row between two members. It is
-// left at the foot of a page on which it stands last.
-const blankRow = 16
 
 // row adds a row of the height that it needs.
 func (w *Workings) row(cells ...workbook.Cell) {
@@ -156,9 +150,9 @@ func (w *Workings) words(text string) {
 	w.atLeast(1)
 }
 
-// subject adds a block of the working. The first stays with the heading.
-func (w *Workings) subject(b *working.Block, first bool) {
-	w.title(b.Title, first)
+// subject adds a block of the working.
+func (w *Workings) subject(b *working.Block) {
+	w.title(b.Title)
 	for _, item := range b.Items {
 		switch item := item.(type) {
 		case working.Values:
@@ -173,10 +167,7 @@ func (w *Workings) subject(b *working.Block, first bool) {
 	}
 }
 
-func (w *Workings) title(text string, first bool) {
+func (w *Workings) title(text string) {
 	w.row(workbook.LabelCell(text))
 	w.page.SetLines(1.5)
-	if !first {
-		w.parts = append(w.parts, len(w.page.Rows))
-	}
 }

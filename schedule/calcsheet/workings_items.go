@@ -117,7 +117,8 @@ func tablePlaces(t *working.Table) []int {
 
 // checks adds the list of all checks.
 func (w *Workings) checks(s *working.Sheet) {
-	w.title("All checks", false)
+	w.page.Begin()
+	w.title("All checks")
 	for i := range s.Checks {
 		w.check(s, i)
 	}

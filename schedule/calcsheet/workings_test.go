@@ -151,36 +151,23 @@ func TestPlacesOfWorkings(t *testing.T) {
 	}
 }
 
-// A printed page begins with a member or a subject, and none is split that
-// finds room on one.
-func TestPagesOfWorkings(t *testing.T) {
+// A printed page can begin with every member, and with every subject but the
+// first.
+func TestPartsOfWorkings(t *testing.T) {
 	w := workingsOf(t)
-	short := sheetOf(t, &examples[3])
-	short.Blocks, short.Checks, short.Governing = short.Blocks[:1], nil, -1
-	starts := map[int]bool{}
-	for i := range 30 {
-		s := short
-		if i%7 == 3 {
-			s = sheetOf(t, &examples[i%len(examples)])
-		}
+	for i := range examples {
+		s := sheetOf(t, &examples[i])
+		tables := len(w.page.Tables)
 		w.Add(s)
-		for _, row := range w.parts {
-			starts[row] = true
+		assert.Contains(t, w.page.Rows[w.page.Chapters[i]-1][0].Value, examples[i].column.Mark)
+		var titles, want []string
+		for _, row := range w.page.Tables[tables:] {
+			titles = append(titles, w.page.Rows[row-1][0].Value.(string))
 		}
-		if s == short {
-			assert.NotContains(t, w.page.Breaks, w.parts[0]+1)
-			last := w.parts[0]
-			for _, b := range w.page.Breaks {
-				assert.LessOrEqual(t, b, last, "a short one is not split")
-			}
+		for _, b := range s.Blocks[1:] {
+			want = append(want, b.Title)
 		}
-	}
-	require.Greater(t, len(w.page.Breaks), 5)
-	from := w.page.RepeatRows + 1
-	for _, b := range w.page.Breaks {
-		assert.True(t, starts[b])
-		assert.LessOrEqual(t, w.heights(from, b-1), w.room+blankRow)
-		from = b
+		assert.Equal(t, append(want, "All checks"), titles)
 	}
 }
 
@@ -191,6 +178,7 @@ func TestFullSheetOfWorkings(t *testing.T) {
 	assert.Empty(t, w.Add(sheetOf(t, &examples[0])))
 	assert.Len(t, w.page.Rows, rows)
 	assert.Len(t, w.page.Merges, merges)
+	assert.Empty(t, w.page.Chapters)
 	sheet := w.Sheet()
 	assert.LessOrEqual(t, len(sheet.Rows), maxRows)
 }

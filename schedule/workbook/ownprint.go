@@ -33,7 +33,7 @@ func (o *own) print(s *Sheet, name string) error {
 	if err := o.file.SetPageMargins(name, margins); err != nil {
 		return err
 	}
-	for _, row := range append(s.tableBreaks(), s.Breaks...) {
+	for _, row := range append(s.pageBreaks(), s.Breaks...) {
 		if err := o.file.InsertPageBreak(name, cellName(0, row)); err != nil {
 			return err
 		}
@@ -129,50 +129,4 @@ func (s *Sheet) printTitles(here string) string {
 		parts = append(parts, fmt.Sprintf("%s$1:$%d", here, s.RepeatRows))
 	}
 	return strings.Join(parts, ",")
-}
-
-// tableBreaks returns the rows, from 1, that begin a printed page so that
-// tables which fit on a page are not cut by its end.
-func (s *Sheet) tableBreaks() []int {
-	across, down := s.page()
-	width, _ := s.width()
-	room := down * 72 // points
-	if s.PagesWide > 0 {
-		room /= min(1, float64(s.pagesWide())*across*characters/width)
-	}
-	var breaks []int
-	page := 1 // the row that begins it
-	for i, from := range s.Tables {
-		end := len(s.Rows) + 1
-		if i+1 < len(s.Tables) {
-			end = s.Tables[i+1]
-		}
-		if s.high(page, end) <= room {
-			continue
-		}
-		if from > page && s.high(from, end) <= room {
-			breaks = append(breaks, from)
-			page = from
-			continue
-		}
-		for r := page; r < end; r++ { // it runs over
-			if s.high(page, r+1) > room {
-				page = r
-			}
-		}
-	}
-	return breaks
-}
-
-// high returns the height of rows, the last left out, in points.
-func (s *Sheet) high(from, end int) float64 {
-	h := 0.0
-	for r := from; r < end; r++ {
-		if x := s.Heights[r]; x > 0 {
-			h += x
-		} else {
-			h += usualRowHeight
-		}
-	}
-	return h
 }

@@ -54,13 +54,43 @@ func TestTablesAreKeptOnAPage(t *testing.T) {
 	// A4 portrait holds (297/25.4 - 1.1) x 72/15 = 50 rows of 15 points.
 	table(p, 30)
 	table(p, 19)
-	assert.Empty(t, p.tableBreaks(), "1 + 30 + 19 rows fill the page")
+	assert.Empty(t, p.pageBreaks(), "1 + 30 + 19 rows fill the page")
 	table(p, 1)
-	assert.Equal(t, []int{51}, p.tableBreaks())
+	assert.Equal(t, []int{51}, p.pageBreaks())
 	table(p, 60)
-	assert.Equal(t, []int{51}, p.tableBreaks(), "what no page holds begins where it may")
+	assert.Equal(t, []int{51}, p.pageBreaks(), "what no page holds begins where it may")
 	table(p, 45)
-	assert.Equal(t, []int{51, 112}, p.tableBreaks(), "60 rows from the second of a page leave 39 for the next")
+	assert.Equal(t, []int{51, 112}, p.pageBreaks(), "60 rows from the second of a page leave 39 for the next")
 	p.Heights = map[int]float64{3: 1000}
-	assert.NotEqual(t, []int{51, 112}, p.tableBreaks(), "rows are as high as they are said to be")
+	assert.NotEqual(t, []int{51, 112}, p.pageBreaks(), "rows are as high as they are said to be")
+}
+
+func TestChaptersAreKeptOnAPage(t *testing.T) {
+	chapter := func(p *Page, tables ...int) {
+		p.Chapter()
+		for i, rows := range tables {
+			if i > 0 {
+				p.Begin()
+			}
+			for range rows {
+				p.Row(TextCell("x"))
+			}
+		}
+	}
+	p := NewPage("Chapters", "Chapters", 20, 20)
+	p.Freeze() // one row, on every page: 49 are left of 50
+	chapter(p, 40)
+	chapter(p, 9)
+	assert.Empty(t, p.pageBreaks(), "the page is full")
+	chapter(p, 20, 20)
+	assert.Equal(t, []int{51}, p.pageBreaks())
+	chapter(p, 6, 4)
+	assert.Equal(t, []int{51, 91}, p.pageBreaks(), "nine rows are left: it is not split between its tables")
+	chapter(p, 30, 30)
+	assert.Equal(t, []int{51, 91, 101, 131}, p.pageBreaks(), "no page holds it: it begins one, and is split between its tables")
+
+	long := NewPage("Long", "Long", 20, 20)
+	long.Freeze()
+	chapter(long, 60, 10)
+	assert.Empty(t, long.pageBreaks(), "the page has hardly begun: the sixty go on to the next, which holds the ten too")
 }

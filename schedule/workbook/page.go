@@ -123,6 +123,10 @@ func (p *Page) Blank() { p.Row() }
 // would be cut by the end of a printed page begins the next page.
 func (p *Page) Begin() { p.Tables = append(p.Tables, len(p.Rows)+1) }
 
+// Chapter begins a chapter with the next row: tables that are kept on one
+// printed page where they can be, and else begin one.
+func (p *Page) Chapter() { p.Chapters = append(p.Chapters, len(p.Rows)+1) }
+
 // Headings adds a row of headings over columns of text. One that opens with
 // ">" stands over numbers.
 func (p *Page) Headings(texts ...string) {

@@ -20,6 +20,7 @@ type Sheet struct {
 	Landscape              bool
 	PagesWide              int   // pages that the width is fitted to, or more where it could not be read; 0: as it comes
 	Breaks                 []int // rows, from 1, that begin a printed page
+	Chapters               []int // rows, from 1, that begin what is kept on one printed page where it can be, and else begins one
 	Tables                 []int // rows, from 1, that begin a table: kept on one printed page where it can be
 	A3                     bool
 	Footer                 string // left part of the footer; the page number stands at the right
