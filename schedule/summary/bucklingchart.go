@@ -129,7 +129,7 @@ func (p *chartPage) curveSeries(far float64) []excelize.ChartSeries {
 		}
 		rows = append(rows, row)
 	}
-	headings, widths := []string{">lambda_bar"}, []float64{12}
+	headings, widths := []string{">lambda_bar"}, []float64{14}
 	for _, c := range curveLooks {
 		headings, widths = append(headings, ">curve "+c.curve.String()), append(widths, 11)
 	}
@@ -155,7 +155,7 @@ func (p *chartPage) pointSeries(points [3][]point) []excelize.ChartSeries {
 			rows = append(rows, []workbook.Cell{number(q.lambdaBar, ratio), number(q.chi, ratio)})
 		}
 		look := pointLooks[k]
-		t := p.data.table([]string{">lambda_bar", ">" + look.name}, []float64{12, 11}, rows)
+		t := p.data.table([]string{">lambda_bar", ">" + look.name}, []float64{14, 11}, rows)
 		out = append(out, excelize.ChartSeries{
 			Name: t.heading(1), Categories: t.column(0), Values: t.column(1), Fill: solid(inkDark),
 			Line: excelize.LineOptions{Type: excelize.LineNone},

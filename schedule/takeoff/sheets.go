@@ -37,13 +37,16 @@ func (t *TakeOff) Sheets(file string) []workbook.Sheet {
 	p.byLevel()
 	p.byFamily()
 	p.remarks()
-	p.Across(8, workbook.Cell{Value: exactness, Look: workbook.Look{Role: workbook.Remark}})
+	p.Across(tableColumns, workbook.Cell{Value: exactness, Look: workbook.Look{Role: workbook.Remark}})
 	sheets := []workbook.Sheet{p.Sheet}
 	if len(t.Splices) > 0 {
 		sheets = append(sheets, t.splicesSheet(file))
 	}
 	return append(sheets, t.cuttingSheet(file))
 }
+
+// tableColumns are the columns of the tables, without those of rates.
+const tableColumns = 9
 
 // exactness says what the sums rest on.
 const exactness = "Mass is the published mass per metre times the length, each piece to the gram; every table adds up to the same total. " +
@@ -127,7 +130,7 @@ func (p *page) notCounted() {
 	if n == 0 {
 		return
 	}
-	p.Across(8, workbook.Cell{Value: plural(int64(n), "member is", "members are") + " not counted: see below", Look: workbook.Look{Role: workbook.NotRead}})
+	p.Across(tableColumns, workbook.Cell{Value: plural(int64(n), "member is", "members are") + " not counted: see below", Look: workbook.Look{Role: workbook.NotRead}})
 }
 
 // totals says what all of it comes to.
@@ -220,16 +223,24 @@ func (p *page) remarks() {
 		}
 		p.Blank()
 		p.Begin()
-		p.Headings(list.heading, "Cell", "Why", "", "", "", "", "")
-		p.Span(2, 7)
+		p.Headings(list.heading, "", "Cell", "", "Why", "", "", "", "")
+		p.remarkSpans()
 		for i := range list.lines {
 			l := &list.lines[i]
-			p.Row(workbook.TextCell(l.Name), workbook.TextCell(l.Cell), workbook.TextCell(l.Why), workbook.TextCell(""), workbook.TextCell(""),
-				workbook.TextCell(""), workbook.TextCell(""), workbook.TextCell(""))
-			p.Span(2, 7)
+			none := workbook.TextCell("")
+			p.Row(workbook.TextCell(l.Name), none, workbook.TextCell(l.Cell), none, workbook.WordsCell(l.Why), none, none, none, none)
+			p.remarkSpans()
 		}
 	}
 	p.Blank()
+}
+
+// remarkSpans joins the cells of a member's name, of its cell and of what is
+// said of it.
+func (p *page) remarkSpans() {
+	p.Span(0, 1)
+	p.Span(2, 3)
+	p.Span(4, tableColumns-1)
 }
 
 // shortList joins marks, as many as a cell shows whole; the CSV has them all.

@@ -40,6 +40,7 @@ func (t *Table) Page(name string) workbook.Sheet {
 	}
 	p.Headings(">Sizes", ">"+headingOf(t.Quantity()), ">with any number", ">above it", ">one more saves", "Least", "Sections")
 	high(p, 2)
+	p.RepeatFrom, p.RepeatRows = len(p.Rows), len(p.Rows) // on the pages behind the chart's
 	for i := range served {
 		t.row(p, &served[i])
 	}

@@ -105,7 +105,8 @@ func (s *Sheet) width() (width, repeated float64) {
 }
 
 // pagesWide returns how many pages the width is fitted to: those that are asked
-// for, or as many as it takes to be read.
+// for, or, of a list whose first columns say of which row each page is, as many
+// as it takes to be read.
 func (s *Sheet) pagesWide() int {
 	if s.PagesWide == 0 {
 		return 0
@@ -113,7 +114,7 @@ func (s *Sheet) pagesWide() int {
 	page, _ := s.page()
 	room := page * characters / leastPrinted
 	width, repeated := s.width()
-	if width <= room*float64(s.PagesWide) || repeated >= room/2 {
+	if s.FreezeCols == 0 || width <= room*float64(s.PagesWide) || repeated >= room/2 {
 		return s.PagesWide
 	}
 	return int(math.Ceil((width - repeated) / (room - repeated)))
@@ -126,7 +127,7 @@ func (s *Sheet) printTitles(here string) string {
 		parts = append(parts, here+wholeColumns(0, s.FreezeCols-1))
 	}
 	if s.RepeatRows > 0 {
-		parts = append(parts, fmt.Sprintf("%s$1:$%d", here, s.RepeatRows))
+		parts = append(parts, fmt.Sprintf("%s$%d:$%d", here, max(1, s.RepeatFrom), s.RepeatRows))
 	}
 	return strings.Join(parts, ",")
 }

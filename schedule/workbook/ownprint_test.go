@@ -38,6 +38,11 @@ func TestAWidePageIsPrintedOverSeveral(t *testing.T) {
 		assert.Equal(t, c.pages, s.pagesWide(), "%d columns", c.columns)
 		assert.Equal(t, c.wantTitles, s.printTitles(""), "%d columns", c.columns)
 	}
+	loose := widePage(40).Sheet
+	loose.FreezeCols = 0
+	assert.Equal(t, 1, loose.pagesWide(), "nothing would tell of which row a page is")
+	loose.RepeatFrom, loose.RepeatRows = 3, 4
+	assert.Equal(t, "$3:$4", loose.printTitles(""), "headings below a picture")
 	asItComes := widePage(40).Sheet
 	asItComes.PagesWide = 0
 	assert.Zero(t, asItComes.pagesWide())

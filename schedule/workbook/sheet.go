@@ -16,7 +16,10 @@ type Sheet struct {
 
 	FreezeRows, FreezeCols int
 	Filter                 string // range with a filter on its first row
-	RepeatRows             int    // rows repeated on every printed page; the frozen columns are too where the width takes several
+	// Rows repeated on every printed page: from RepeatFrom (0: the first of the
+	// sheet) to RepeatRows (0: none). The frozen columns are repeated where the
+	// width takes several pages.
+	RepeatFrom, RepeatRows int
 	Landscape              bool
 	PagesWide              int   // pages that the width is fitted to, or more where it could not be read; 0: as it comes
 	Breaks                 []int // rows, from 1, that begin a printed page
