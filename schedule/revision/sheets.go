@@ -73,8 +73,10 @@ func (c *Comparison) overview(info *Info) workbook.Sheet {
 	return p.Sheet
 }
 
+// fact is a line of a name and of what is said of it, over the other columns.
 func fact(p *workbook.Page, name, value string) {
-	p.Row(workbook.LabelCell(name), workbook.Cell{Value: value})
+	p.Row(workbook.LabelCell(name), workbook.Cell{Value: value, Look: workbook.Look{Wrap: true}})
+	p.Span(1, len(p.Widths)-1)
 }
 
 // Remark says how many members a tonnage leaves out.
