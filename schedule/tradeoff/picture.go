@@ -10,7 +10,7 @@ import (
 	"gonum.org/v1/plot/plotter"
 	"gonum.org/v1/plot/vg"
 	"gonum.org/v1/plot/vg/draw"
-	_ "gonum.org/v1/plot/vg/vgimg" // png
+	"gonum.org/v1/plot/vg/vgimg"
 	_ "gonum.org/v1/plot/vg/vgsvg" // svg
 )
 
@@ -37,14 +37,24 @@ func (t *Table) WritePicture(w io.Writer, format string) error {
 	margin := max(0.08*(points[0].Y-t.Any.Amount), 0.02*points[0].Y)
 	p.Y.Min, p.Y.Max = min(t.Any.Amount, points[len(points)-1].Y)-margin, points[0].Y+margin
 	p.X.Tick.Marker = plot.ConstantTicks(wholeTicks(points))
-	const width, height, edge = 17 * vg.Centimeter, 11 * vg.Centimeter, 5 * vg.Millimeter
-	out, err := draw.NewFormattedCanvas(width, height, format)
+	out, err := canvas(format)
 	if err != nil {
 		return err
 	}
+	const edge = 5 * vg.Millimeter
 	p.Draw(draw.Crop(draw.New(out), edge, -edge, edge, -edge))
 	_, err = out.WriteTo(w)
 	return err
+}
+
+// canvas is what a picture is drawn on: as wide as a text on A4, and with so
+// many dots that it prints sharp.
+func canvas(format string) (vg.CanvasWriterTo, error) {
+	const width, height, dots = 17 * vg.Centimeter, 11 * vg.Centimeter, 240 // an inch
+	if format == "png" {
+		return vgimg.PngCanvas{Canvas: vgimg.NewWith(vgimg.UseWH(width, height), vgimg.UseDPI(dots))}, nil
+	}
+	return draw.NewFormattedCanvas(width, height, format)
 }
 
 // drawLines draws the amounts, a mark for each, and the amount of any number
@@ -68,7 +78,10 @@ func (t *Table) drawLines(p *plot.Plot, points plotter.XYs) error {
 	p.Legend.Add("least for so many sizes", line, marks)
 	p.Legend.Add(fmt.Sprintf("any number of sizes (%d)", t.Any.Most), least)
 	p.Legend.Top, p.Legend.Padding = true, vg.Points(3)
-	p.Legend.XOffs, p.Legend.YOffs = -vg.Points(8), -vg.Points(8)
+	// The texts stand behind their lines, so that another typeface, which a
+	// reader of the SVG may have, does not run over them.
+	p.Legend.Left = true
+	p.Legend.XOffs, p.Legend.YOffs = 8*vg.Centimeter, -vg.Points(8)
 	return nil
 }
 
