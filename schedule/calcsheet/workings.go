@@ -39,8 +39,9 @@ const (
 // the steps that Text prints, in columns.
 type Workings struct {
 	page     *workbook.Page
-	name     string // under which the sheet will stand
-	schedule string // sheet of the schedule
+	name     string                   // under which the sheet will stand
+	schedule string                   // sheet of the schedule
+	formulas map[string]workbook.Rich // by their text
 }
 
 // NewWorkings starts the sheet. name is the one under which it will stand.
@@ -54,7 +55,7 @@ func NewWorkings(name string, project *Project) *Workings {
 	p.Headings("Symbol", "Formula", "With numbers", ">Value", "Unit", "Clause", "Remark")
 	p.SetLines(1.2)
 	p.Freeze()
-	return &Workings{page: p, name: name, schedule: project.Sheet}
+	return &Workings{page: p, name: name, schedule: project.Sheet, formulas: map[string]workbook.Rich{}}
 }
 
 // Sheet ends the sheet and returns it.

@@ -9,19 +9,27 @@ import (
 	"stanchion/schedule/workbook"
 )
 
-// formulaCell sets a formula; nil is an empty cell.
-func formulaCell(e formula.Expr) workbook.Cell {
+// formulaCell sets a formula; nil is an empty cell. Members have most of them
+// in common, so that each is held once.
+func (w *Workings) formulaCell(e formula.Expr) workbook.Cell {
 	c := workbook.WordsCell("")
 	if e == nil {
 		return c
 	}
-	var rich workbook.Rich
+	text := formula.Text(e)
+	if w.formulas[text] == nil {
+		w.formulas[text] = formulaRich(e)
+	}
+	c.Value = w.formulas[text]
+	return c
+}
+
+func formulaRich(e formula.Expr) (rich workbook.Rich) {
 	for _, s := range formula.Spans(e) {
 		letter := s.Kind == formula.Letter && isLetter(s.Text)
 		rich = append(rich, workbook.Run{Text: s.Text, Letter: letter, Subscript: s.Kind == formula.Subscript})
 	}
-	c.Value = rich
-	return c
+	return rich
 }
 
 // numbersCell writes a formula with numbers.

@@ -31,7 +31,7 @@ func (w *Workings) values(list working.Values) {
 		cells := map[int]workbook.Cell{
 			valueColumn: numberCell(v.Number), unitColumn: workbook.TextCell(v.Unit.Name), remarkColumn: wordsCell(v.Note),
 		}
-		cells[w.leftOf(v.Left)] = formulaCell(v.Left)
+		cells[w.leftOf(v.Left)] = w.formulaCell(v.Left)
 		w.line(cells)
 	}
 }
@@ -48,7 +48,7 @@ func (w *Workings) leftOf(e formula.Expr) int {
 // step adds a step of the working.
 func (w *Workings) step(s *working.Step) {
 	cells := map[int]workbook.Cell{
-		formulaColumn: formulaCell(s.Formula), numbersColumn: numbersCell(s.Numbers),
+		formulaColumn: w.formulaCell(s.Formula), numbersColumn: numbersCell(s.Numbers),
 		valueColumn: numberCell(s.Result), unitColumn: workbook.TextCell(s.Unit.Name),
 		clauseColumn: workbook.WordsCell(s.Clause), remarkColumn: remarkCell(s),
 	}
@@ -56,7 +56,7 @@ func (w *Workings) step(s *working.Step) {
 	if s.Formula != nil {
 		left = symbolColumn
 	}
-	cells[left] = formulaCell(s.Left)
+	cells[left] = w.formulaCell(s.Left)
 	w.line(cells)
 }
 

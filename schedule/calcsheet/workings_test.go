@@ -16,7 +16,7 @@ import (
 	"stanchion/schedule/workbook"
 )
 
-func workingsOf(t *testing.T) *Workings {
+func workingsOf(t testing.TB) *Workings {
 	t.Helper()
 	return NewWorkings("It's working", &Project{File: "loads.xlsx", Sheet: "Columns", Standard: "EN 1993-1-1", National: design.National{Name: "UK"}})
 }
@@ -73,6 +73,18 @@ func TestWorkings(t *testing.T) {
 			require.NoError(t, err)
 			assert.Equal(t, string(want), b.String())
 		})
+	}
+}
+
+// BenchmarkWorkings writes the working of one more member.
+func BenchmarkWorkings(b *testing.B) {
+	s := sheetOf(b, &examples[4])
+	w := workingsOf(b)
+	b.ReportAllocs()
+	for b.Loop() {
+		if w.Add(s) == "" {
+			w = workingsOf(b)
+		}
 	}
 }
 

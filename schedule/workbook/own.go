@@ -19,7 +19,8 @@ type own struct {
 // ownSheet is what the library has not been told of a sheet.
 type ownSheet struct {
 	*Sheet
-	links []link
+	links  []link
+	merges []area
 }
 
 func newOwn(base lettering) *own {
@@ -30,7 +31,7 @@ func newOwn(base lettering) *own {
 // a look in the workbook that the sheet goes to.
 func (o *own) filling(name string, style func(Look) int) *filling {
 	s := o.sheets[name]
-	return &filling{sheet: s.Sheet, base: o.base, style: style, links: linking{list: s.links}}
+	return &filling{sheet: s.Sheet, base: o.base, style: style, merges: lateMerges(s.merges), links: lateLinks(s.links)}
 }
 
 // style returns the id of a look in the own workbook.

@@ -49,7 +49,7 @@ func TestLinksOfOwnSheets(t *testing.T) {
 }
 
 func TestMoreLinksThanASheetHolds(t *testing.T) {
-	l := linking{list: make([]link, maxLinks+1)}
+	l := lateLinks(make([]link, maxLinks+1))
 	var out bytes.Buffer
 	l.before(&out, &markup.Token{Kind: markup.End}, 0)
 	assert.Equal(t, maxLinks, strings.Count(out.String(), "<hyperlink "))

@@ -33,7 +33,8 @@ func (o *own) print(s *Sheet, name string) error {
 	if err := o.file.SetPageMargins(name, margins); err != nil {
 		return err
 	}
-	for _, row := range append(s.pageBreaks(), s.Breaks...) {
+	breaks := append(s.pageBreaks(), s.Breaks...)
+	for _, row := range breaks[:min(len(breaks), maxBreaks)] {
 		if err := o.file.InsertPageBreak(name, cellName(0, row)); err != nil {
 			return err
 		}
@@ -47,6 +48,10 @@ func (o *own) print(s *Sheet, name string) error {
 	footer := "&L&8" + escapeFooter(s.Footer) + "&R&8&A  &P/&N"
 	return o.file.SetHeaderFooter(name, &excelize.HeaderFooterOptions{OddFooter: footer})
 }
+
+// maxBreaks is how many page breaks a sheet may have in every spreadsheet
+// program.
+const maxBreaks = 1000
 
 // escapeFooter keeps a text from being read as codes.
 func escapeFooter(s string) string {

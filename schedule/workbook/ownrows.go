@@ -13,16 +13,17 @@ import (
 // maxText is the longest text that a cell may hold, in UTF-16 units.
 const maxText = 32_767
 
-// filling puts the rows and the links of a sheet of ours into the frame that
+// filling puts the rows, merged cells and links of a sheet of ours into the frame that
 // the library made for it. The library would take several times as long over
 // the cells of a sheet as long as a schedule.
 type filling struct {
 	sheet *Sheet
 	base  lettering
 	style func(Look) int
-	links linking
-	cells []byte
 	fonts map[Look]string // of texts in parts
+	cells []byte
+
+	merges, links late
 }
 
 // look returns how a cell is drawn.
@@ -34,7 +35,7 @@ func (c *Cell) look() Look {
 
 // copy passes a sheet's part through. retag may change tags; nil: none.
 func (f *filling) copy(in io.Reader, out io.Writer, retag func(*markup.Token) string) error {
-	f.links.done = false
+	f.merges.done, f.links.done = false, false
 	scan := markup.NewScanner(in)
 	for {
 		t, err := scan.Next()
@@ -44,6 +45,7 @@ func (f *filling) copy(in io.Reader, out io.Writer, retag func(*markup.Token) st
 		if err != nil {
 			return err
 		}
+		f.merges.before(out, t, scan.Depth())
 		f.links.before(out, t, scan.Depth())
 		opens := t.Kind == markup.Start || t.Kind == markup.Empty
 		switch {

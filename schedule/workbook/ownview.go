@@ -21,8 +21,8 @@ func (o *own) sizes(s *Sheet, name string) error {
 		if !ok {
 			return fmt.Errorf("cannot merge %q", m)
 		}
-		if err := o.file.MergeCell(name, cellName(a.firstCol, a.firstRow), cellName(a.lastCol, a.lastRow)); err != nil {
-			return err
+		if a.firstCol < a.lastCol || a.firstRow < a.lastRow {
+			o.sheets[name].merges = append(o.sheets[name].merges, a)
 		}
 	}
 	return nil

@@ -1,5 +1,7 @@
 package workbook
 
+import "slices"
+
 // paging finds where printed pages must begin so that what belongs together is
 // not cut by the end of one.
 type paging struct {
@@ -55,13 +57,9 @@ func (p *paging) chapter(from, end int) {
 	if p.fits(from, end) || p.high(p.page, from) > hardly*p.room {
 		p.turn(from)
 	}
-	inside := []int{from}
-	for _, t := range p.Tables {
-		if t > from && t < end {
-			inside = append(inside, t)
-		}
-	}
-	p.tables(inside, end)
+	first, _ := slices.BinarySearch(p.Tables, from+1)
+	last, _ := slices.BinarySearch(p.Tables, end)
+	p.tables(append([]int{from}, p.Tables[first:last]...), end)
 }
 
 // tables keeps tables whole.
