@@ -51,7 +51,7 @@ func (b *builder) build(wanted []bool, spliceCost float64, links []link, graded 
 		size[kindOf(c, graded)] = j
 	}
 	p.Sizes = len(p.sections)
-	p.MayStand = func(below, above int) bool { return mayStand(p.sections[below], p.sections[above]) }
+	p.MayStand = mayStandIn(p.sections)
 
 	merged := merged(links, spliceCost)
 	for _, sets := range chains(wanted, merged) {

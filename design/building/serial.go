@@ -36,6 +36,18 @@ func serialOf(s *catalogue.Section) serial {
 // mayStand reports whether a section may stand on another at a splice: it is
 // neither heavier nor of a larger serial size.
 func mayStand(below, above *catalogue.Section) bool {
-	b, a := serialOf(below), serialOf(above)
-	return above.Mass <= below.Mass && a.depth <= b.depth && a.width <= b.width
+	return mayStandIn([]*catalogue.Section{below, above})(0, 1)
+}
+
+// mayStandIn is mayStand for sections told by their place, whose names are read
+// once.
+func mayStandIn(sections []*catalogue.Section) func(below, above int) bool {
+	serials := make([]serial, len(sections))
+	for j, s := range sections {
+		serials[j] = serialOf(s)
+	}
+	return func(below, above int) bool {
+		b, a := serials[below], serials[above]
+		return sections[above].Mass <= sections[below].Mass && a.depth <= b.depth && a.width <= b.width
+	}
 }

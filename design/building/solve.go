@@ -47,6 +47,7 @@ func (r *run) fewSizes(ctx context.Context, p, graded *problem) (project.Choice,
 		limited, stop = context.WithTimeout(ctx, r.options.TimeLimit)
 		defer stop()
 	}
+	p.Workers = r.workers
 	solutions, err := p.FewSizes(limited, r.options.MostSizes)
 	if err != nil {
 		return nil, err

@@ -12,7 +12,9 @@ type outcome struct {
 	closed bool
 	bound  float64
 	state  []int8
-	branch int
+	f      *field      // what is left open
+	at     multipliers // those of the bound
+	branch int         // a size
 }
 
 // ascent says how hard a node's bound is worked at: the number of steps, and
@@ -24,40 +26,39 @@ type ascent struct {
 
 // ascend raises the bound of a node by subgradient steps, settles sizes by
 // their reduced costs and improves best by the sizes that the relaxation picks.
-func (d *dual) ascend(ctx context.Context, s *search, k int, node branchNode, best *answer, effort ascent) outcome {
-	c := newClimb(s, d, node, effort)
+func (s *search) ascend(ctx context.Context, k int, node branchNode, best *answer, effort ascent) outcome {
+	c := newClimb(s, k, node, effort)
 	for step := 0; ; step++ {
-		bound := d.evaluate(s, k, c.state)
-		if math.IsInf(bound, 1) {
+		bound := c.r.bound(c.state)
+		if impossible(bound) {
 			return outcome{closed: true}
 		}
-		s.improve(d.pick, best)
-		bound = c.compare(s, k, bound)
-		if max(c.top, node.bound) >= cutoff(best.cost) || !settle(c.state, d, k, bound, best.cost) {
+		s.improve(c.f, c.r.picked, best)
+		bound = c.compare(bound)
+		if max(c.top, node.bound) >= cutoff(best.cost) || !c.settle(bound, best.cost) {
 			return outcome{closed: true}
 		}
 		c.count()
 		if c.scale < effort.scale/4 || step >= effort.steps/2 {
-			bound = c.freePrices(s, k, bound)
+			bound = c.freePrices(bound)
 		}
 		if step >= effort.steps || c.scale < 1e-4 || ctx.Err() != nil {
 			break
 		}
-		if d.step(s, c.scale*(aim(best.cost, bound)-bound)) {
-			continue
+		if !c.r.step(s, &c.direction, c.scale*(aim(best.cost, bound)-bound)) {
+			if len(c.at.level) == 0 {
+				break // the relaxation's choice serves every node: its bound is its cost
+			}
+			c.freePrices(bound)
 		}
-		if len(d.level) == 0 {
-			break // the relaxation's choice serves every node: its bound is its cost
-		}
-		c.freePrices(s, k, bound)
+		c.shrink()
 	}
-	d.copy(c.keep)
-	j := branchOn(c.state, c.often)
+	j := c.branchOn()
 	if j < 0 {
-		s.improveBy(c.state, best)
+		s.improveBy(c.f, c.state, best)
 		return outcome{closed: true}
 	}
-	return outcome{bound: max(c.top, node.bound), state: c.state, branch: j}
+	return outcome{bound: max(c.top, node.bound), state: c.state, f: c.f, at: c.keep, branch: j}
 }
 
 // aim is the bound that a step is meant to reach: a little above the best cost
@@ -71,19 +72,28 @@ func aim(cost, bound float64) float64 {
 
 // climb is an ascent under way.
 type climb struct {
-	d, keep *dual     // keep: the multipliers of the best bound
-	top     float64   // the best bound
-	scale   float64   // part of Polyak's length
-	stale   int       // steps since the best bound
-	state   []int8    // what is settled about each size
-	often   []float64 // how often each size was picked of late
+	s         *search
+	k         int
+	f         *field
+	r         *relaxation
+	at        *multipliers
+	keep      multipliers // those of the best bound
+	direction multipliers // of the last step
+	top       float64     // the best bound
+	scale     float64     // part of Polyak's length
+	stale     int         // steps since the best bound
+	state     []int8      // by size: what is settled about it
+	often     []float64   // by size: how often it was picked of late
 }
 
-func newClimb(s *search, d *dual, node branchNode, effort ascent) *climb {
-	d.worth, d.pick = make([]float64, s.m), make([]bool, s.m)
-	d.rest()
-	return &climb{d: d, keep: d.clone(), top: math.Inf(-1), scale: effort.scale,
+func newClimb(s *search, k int, node branchNode, effort ascent) *climb {
+	at := node.at.clone()
+	c := &climb{s: s, k: k, f: node.f, at: &at, keep: node.at.clone(), direction: at.zero(),
+		top: math.Inf(-1), scale: effort.scale,
 		state: slices.Clone(node.state), often: make([]float64, s.m)}
+	c.r = newRelaxation(s, c.f, k, c.at)
+	c.narrow(1)
+	return c
 }
 
 // patience is how many steps may fail to raise the bound before they are halved.
@@ -92,81 +102,108 @@ const patience = 12
 // compare keeps the multipliers where the bound is the best so far, and goes
 // back to the best with shorter steps where it has long not been. It returns
 // the bound of the multipliers as they then stand.
-func (c *climb) compare(s *search, k int, bound float64) float64 {
+func (c *climb) compare(bound float64) float64 {
 	if bound > c.top+1e-12*math.Abs(bound) {
 		c.top, c.stale = bound, 0
-		c.keep.copy(c.d)
+		c.keep.copy(c.at)
 		return bound
 	}
 	if c.stale++; c.stale < patience {
 		return bound
 	}
 	c.scale, c.stale = c.scale/2, 0
-	c.d.copy(c.keep)
-	c.d.rest()
-	return c.d.evaluate(s, k, c.state)
+	c.at.copy(&c.keep)
+	c.direction = c.at.zero()
+	return c.r.bound(c.state)
 }
 
 // count notes what the relaxation picks.
 func (c *climb) count() {
-	for j, in := range c.d.pick {
-		c.often[j] *= 0.9
-		if in {
-			c.often[j] += 0.1
+	for j, size := range c.f.sizes {
+		c.often[size] *= 0.9
+		if c.r.pick[j] {
+			c.often[size] += 0.1
 		}
 	}
 }
 
-// freePrices lets every price of a chain's node move on its own, once one level
+// freePrices lets every price of a strand's node move on its own, once one level
 // a node has raised the bound as far as it goes.
-func (c *climb) freePrices(s *search, k int, bound float64) float64 {
-	if len(c.d.level) == 0 {
+func (c *climb) freePrices(bound float64) float64 {
+	if len(c.at.level) == 0 {
 		return bound
 	}
-	c.d.copy(c.keep)
-	bound = c.d.evaluate(s, k, c.state)
-	c.d.level, c.keep.level = nil, nil
+	c.at.copy(&c.keep)
+	bound = c.r.bound(c.state)
+	c.at.free(c.f)
+	c.keep, c.direction = c.at.clone(), c.at.zero()
 	c.scale, c.stale = 1.2, 0
 	return bound
 }
 
-// improveBy takes the sizes that are settled as open, where all are settled.
-func (s *search) improveBy(state []int8, best *answer) {
-	pick := make([]bool, len(state))
-	for j, st := range state {
-		pick[j] = st == opened
+// shrink leaves closed sizes out of the field once enough are closed to make
+// that worth its while. Until then they may still be taken, which only lowers
+// the bound.
+func (c *climb) shrink() { c.narrow(0.9) }
+
+// narrow leaves closed sizes out where no more than this part of them is left.
+func (c *climb) narrow(part float64) {
+	var cols []int32
+	for j, size := range c.f.sizes {
+		if c.state[size] != closed {
+			cols = append(cols, int32(j))
+		}
 	}
-	s.improve(pick, best)
+	if len(cols) == len(c.f.sizes) || float64(len(cols)) > part*float64(len(c.f.sizes)) {
+		return
+	}
+	c.f = c.f.only(cols)
+	*c.at = c.at.only(cols)
+	c.keep, c.direction = c.keep.only(cols), c.direction.only(cols)
+	c.r = newRelaxation(c.s, c.f, c.k, c.at)
+}
+
+// improveBy takes the sizes that are settled as open, where all are settled.
+func (s *search) improveBy(f *field, state []int8, best *answer) {
+	var open []int32
+	for j, size := range f.sizes {
+		if state[size] == opened {
+			open = append(open, int32(j))
+		}
+	}
+	s.improve(f, open, best)
 }
 
 // settle closes and opens sizes that a better answer cannot or must have, by
 // what the bound rises to when they are forced the other way. It reports false
 // where nothing better can lie below.
-func settle(state []int8, d *dual, k int, bound, cost float64) bool {
+func (c *climb) settle(bound, cost float64) bool {
 	limit := cutoff(cost)
 	least, next, open := math.Inf(1), 0.0, 0
-	for _, j := range d.order {
+	for j, size := range c.f.sizes {
 		switch {
-		case state[j] == opened:
+		case c.state[size] == closed:
+		case c.state[size] == opened:
 			open++
-		case d.pick[j]:
-			least = min(least, d.worth[j])
+		case c.r.pick[j]:
+			least = min(least, c.r.worth[j])
 		default:
-			next = max(next, d.worth[j])
+			next = max(next, c.r.worth[j])
 		}
 	}
-	if open > k {
+	if open > c.k {
 		return false
 	}
-	for _, j := range d.order {
-		if state[j] != undecided {
+	for j, size := range c.f.sizes {
+		if c.state[size] != undecided {
 			continue
 		}
+		worth := c.r.worth[j]
 		switch {
-		case !d.pick[j] && (open == k || bound+least-d.worth[j] >= limit):
-			state[j] = closed
-		case d.pick[j] && bound+d.worth[j]-next >= limit:
-			state[j] = opened
+		case !c.r.pick[j] && (open == c.k || bound+least-worth >= limit):
+			c.state[size] = closed
+		case c.r.pick[j] && bound+worth-next >= limit:
+			c.state[size] = opened
 		}
 	}
 	return true
@@ -174,13 +211,13 @@ func settle(state []int8, d *dual, k int, bound, cost float64) bool {
 
 // branchOn chooses the undecided size about which the ascent was most in doubt,
 // -1 where none is undecided.
-func branchOn(state []int8, often []float64) int {
+func (c *climb) branchOn() int {
 	branch, doubt := -1, -1.0
-	for j, st := range state {
+	for j, st := range c.state {
 		if st != undecided {
 			continue
 		}
-		if v := min(often[j], 1-often[j]); v > doubt {
+		if v := min(c.often[j], 1-c.often[j]); v > doubt {
 			branch, doubt = j, v
 		}
 	}

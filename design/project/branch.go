@@ -1,7 +1,6 @@
 package project
 
 import (
-	"cmp"
 	"context"
 	"math"
 	"slices"
@@ -16,74 +15,29 @@ const (
 
 // search is the branch and bound over one reduced problem.
 type search struct {
-	r  *reduced
-	m  int
-	dp *chainSolver
-
-	offers [][]offer // of each row, the sizes that serve it, cheapest first
+	f       *field // with every size
+	m       int    // its sizes
+	workers int
+	parts   []part
 
 	// The root of the least cost of a row or node, by which its multiplier's
 	// step is scaled: the multipliers of heavy nodes have further to go.
-	rowScale  []float64
-	nodeScale [][]float64
+	rowScale, nodeScale []float64
+
+	tried map[string]bool // choices of sizes that improve has seen
 }
 
-// offer is a size that serves a row, and its cost there.
-type offer struct {
-	size int32
-	cost float64
+func newSearch(f *field, workers int) *search {
+	return &search{f: f, m: len(f.sizes), workers: max(1, workers), parts: partsOf(f),
+		rowScale: scales(f.rows), nodeScale: scales(f.cost), tried: map[string]bool{}}
 }
 
-// offersOf lists the sizes that serve a row, cheapest first.
-func offersOf(row []float64) []offer {
-	var out []offer
-	for j, v := range row {
-		if !math.IsInf(v, 1) {
-			out = append(out, offer{int32(j), v})
-		}
+func scales(cost grid) []float64 {
+	out := make([]float64, cost.rows())
+	for i := range out {
+		out[i] = math.Sqrt(slices.Min(cost.row(i)))
 	}
-	slices.SortStableFunc(out, func(a, b offer) int { return cmp.Compare(a.cost, b.cost) })
 	return out
-}
-
-func newSearch(r *reduced) *search {
-	inner := &Problem{Sizes: len(r.sizes), Chains: r.chains, MayStand: r.stand}
-	s := &search{r: r, m: len(r.sizes), dp: newChainSolver(inner)}
-	for _, row := range r.rows {
-		s.rowScale = append(s.rowScale, math.Sqrt(slices.Min(row)))
-		s.offers = append(s.offers, offersOf(row))
-	}
-	for _, c := range r.chains {
-		scale := make([]float64, len(c.Nodes))
-		for n, node := range c.Nodes {
-			scale[n] = math.Sqrt(slices.Min(node.Cost))
-		}
-		s.nodeScale = append(s.nodeScale, scale)
-	}
-	return s
-}
-
-// everySize is the cost where the number of sizes is not limited.
-func (s *search) everySize() float64 { return s.costOf(allSizes(s.m)) }
-
-// costOf is the least cost with the open sizes, +Inf where they do not serve.
-func (s *search) costOf(open []int32) float64 {
-	total := 0.0
-	for _, row := range s.r.rows {
-		best := math.Inf(1)
-		for _, j := range open {
-			best = min(best, row[j])
-		}
-		total += best
-	}
-	if math.IsInf(total, 1) {
-		return total
-	}
-	for c := range s.r.chains {
-		v, _ := s.dp.solve(&s.r.chains[c], open, nil)
-		total += v
-	}
-	return total
 }
 
 // branchNode is a part of the search tree: what is settled, the bound that its
@@ -91,12 +45,13 @@ func (s *search) costOf(open []int32) float64 {
 type branchNode struct {
 	state []int8
 	bound float64
-	dual  *dual
+	f     *field // what the parent left open
+	at    multipliers
 }
 
 func (s *search) solve(ctx context.Context, k int, warm []int32) answer {
 	best := s.heuristic(k, warm)
-	stack := []branchNode{{state: make([]int8, s.m), bound: 0, dual: newDual(s, best)}}
+	stack := []branchNode{{make([]int8, s.m), 0, s.f, startFrom(s.f, best.open)}}
 	first := true
 	for len(stack) > 0 {
 		if ctx.Err() != nil {
@@ -111,20 +66,19 @@ func (s *search) solve(ctx context.Context, k int, warm []int32) answer {
 		if node.bound >= cutoff(best.cost) {
 			continue
 		}
-		d := node.dual.clone()
 		effort := ascent{steps: 150, scale: 0.3} // the parent's multipliers are near
 		if first {
 			effort = ascent{steps: 800, scale: 1.2}
 		}
-		out := d.ascend(ctx, s, k, node, &best, effort)
+		out := s.ascend(ctx, k, node, &best, effort)
 		first = false
 		if out.closed {
 			continue
 		}
 		j := out.branch
-		without := branchNode{slices.Clone(out.state), out.bound, d}
+		without := branchNode{slices.Clone(out.state), out.bound, out.f, out.at}
 		without.state[j] = closed
-		with := branchNode{slices.Clone(out.state), out.bound, d}
+		with := branchNode{slices.Clone(out.state), out.bound, out.f, out.at}
 		with.state[j] = opened
 		stack = append(stack, without, with)
 	}

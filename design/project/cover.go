@@ -4,7 +4,6 @@ import (
 	"cmp"
 	"context"
 	"math"
-	"math/bits"
 	"slices"
 )
 
@@ -30,37 +29,6 @@ func (s *search) fewest(ctx context.Context) (least int, sizes []int32) {
 	return s.m + 1, nil
 }
 
-// bitset is a set of sizes.
-type bitset []uint64
-
-func (b bitset) has(j int32) bool { return b[j/64]>>(j%64)&1 == 1 }
-
-func (b bitset) count() int {
-	n := 0
-	for _, w := range b {
-		n += bits.OnesCount64(w)
-	}
-	return n
-}
-
-func (b bitset) within(o bitset) bool {
-	for i, w := range b {
-		if w&^o[i] != 0 {
-			return false
-		}
-	}
-	return true
-}
-
-func (b bitset) meets(o bitset) bool {
-	for i, w := range b {
-		if w&o[i] != 0 {
-			return true
-		}
-	}
-	return false
-}
-
 // cover is a hitting-set problem: each row must hold one of the sizes picked.
 type cover struct {
 	m    int
@@ -71,21 +39,15 @@ type cover struct {
 // one is served by none.
 func (s *search) coverProblem() *cover {
 	var rows []bitset
-	add := func(cost []float64) {
-		b := make(bitset, (s.m+63)/64)
-		for j, v := range cost {
-			if !math.IsInf(v, 1) {
-				b[j/64] |= 1 << (j % 64)
+	for _, cost := range []grid{s.f.rows, s.f.cost} {
+		for i := range cost.rows() {
+			b := newBitset(s.m)
+			for j, v := range cost.row(i) {
+				if !math.IsInf(v, 1) {
+					b.add(int32(j))
+				}
 			}
-		}
-		rows = append(rows, b)
-	}
-	for _, row := range s.r.rows {
-		add(row)
-	}
-	for _, c := range s.r.chains {
-		for _, n := range c.Nodes {
-			add(n.Cost)
+			rows = append(rows, b)
 		}
 	}
 	slices.SortStableFunc(rows, func(a, b bitset) int { return cmp.Compare(a.count(), b.count()) })
@@ -103,14 +65,12 @@ func (s *search) coverProblem() *cover {
 
 // packing is a number of rows of which no two share a size: each needs its own.
 func (c *cover) packing(rows []bitset) int {
-	used := make(bitset, (c.m+63)/64)
+	used := newBitset(c.m)
 	n := 0
 	for _, b := range rows {
 		if !b.meets(used) {
 			n++
-			for i, w := range b {
-				used[i] |= w
-			}
+			used.join(b)
 		}
 	}
 	return n
@@ -152,10 +112,10 @@ func (c *cover) branches(rows []bitset) []int32 {
 		if !rows[0].has(j) {
 			continue
 		}
-		h := make(bitset, (len(rows)+63)/64)
+		h := newBitset(len(rows))
 		for i, b := range rows {
 			if b.has(j) {
-				h[i/64] |= 1 << (i % 64)
+				h.add(int32(i))
 			}
 		}
 		hits[j] = h

@@ -22,8 +22,8 @@ func (p *Problem) FewSizes(ctx context.Context, most int) ([]Solution, error) {
 	if err := p.Validate(); err != nil {
 		return nil, err
 	}
-	r := p.reduce()
-	s := newSearch(r)
+	live, f := p.reduce()
+	s := newSearch(f, p.Workers)
 	free := s.everySize()
 	var answers []answer
 	least, warm := s.fewest(ctx)
@@ -42,7 +42,7 @@ func (p *Problem) FewSizes(ctx context.Context, most int) ([]Solution, error) {
 	s.finish(ctx, answers)
 	out := make([]Solution, len(answers))
 	for i, a := range answers {
-		out[i] = p.solution(r, i+1, a)
+		out[i] = p.solution(live, i+1, a)
 	}
 	return out, nil
 }
@@ -88,17 +88,17 @@ func shareOf(ctx context.Context, left int) (context.Context, context.CancelFunc
 const tolerance = 1e-9
 
 // solution carries a reduced answer back to the problem's own sizes.
-func (p *Problem) solution(r *reduced, k int, a answer) Solution {
+func (p *Problem) solution(live []int, k int, a answer) Solution {
 	sol := Solution{K: k, Cost: a.cost, Bound: a.bound, Proven: a.proven}
 	if math.IsInf(a.cost, 1) {
 		return sol
 	}
-	open := make([]int32, len(a.open))
+	open := make([]int, len(a.open))
 	for i, j := range a.open {
-		open[i] = int32(r.sizes[j])
+		open[i] = live[j]
 	}
 	slices.Sort(open)
-	sol.Choice, sol.Cost = p.cheapestOf(newChainSolver(p), open)
+	sol.Choice, sol.Cost = p.CheapestOf(open)
 	sol.Bound = min(sol.Bound, sol.Cost)
 	used := map[int]bool{}
 	for _, chain := range sol.Choice {

@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"math"
 	"math/rand/v2"
+	"slices"
 	"testing"
 	"time"
 
@@ -50,21 +51,17 @@ func office(rng *rand.Rand, members, sizes, deepest int) *Problem {
 
 // bruteForce tries every set of at most k sizes.
 func bruteForce(p *Problem, k int) float64 {
-	dp, best := newChainSolver(p), math.Inf(1)
-	var try func(from int32, open []int32)
-	try = func(from int32, open []int32) {
-		if len(open) > 0 {
-			total := 0.0
-			for c := range p.Chains {
-				v, _ := dp.solve(&p.Chains[c], open, nil)
-				total += v
-			}
+	best := math.Inf(1)
+	var try func(from int, open []int)
+	try = func(from int, open []int) {
+		choice, total := p.CheapestOf(open)
+		if !slices.ContainsFunc(choice, func(c []int) bool { return c == nil }) {
 			best = min(best, total)
 		}
 		if len(open) == k {
 			return
 		}
-		for j := from; j < int32(p.Sizes); j++ {
+		for j := from; j < p.Sizes; j++ {
 			try(j+1, append(open[:len(open):len(open)], j))
 		}
 	}

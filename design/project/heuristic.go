@@ -1,6 +1,7 @@
 package project
 
 import (
+	"encoding/binary"
 	"math"
 	"slices"
 )
@@ -16,8 +17,8 @@ func (s *search) heuristic(k int, warm []int32) answer {
 		}
 		open = append(open, j)
 	}
-	best := answer{open: open, cost: s.costOf(open)}
-	for len(s.r.chains) == 0 && s.exchange(&best) {
+	best := answer{open: open, cost: s.costOf(s.f, open)}
+	for len(s.f.strands) == 0 && s.exchange(&best) {
 	}
 	return best
 }
@@ -40,23 +41,66 @@ func (a *score) add(v float64) {
 	}
 }
 
+// everySize is the cost where the number of sizes is not limited.
+func (s *search) everySize() float64 { return s.costOf(s.f, columns(s.m)) }
+
+// costOf is the least cost with the open columns, +Inf where they do not serve.
+func (s *search) costOf(f *field, open []int32) float64 {
+	sc := s.scoreOf(f, open)
+	if sc.unserved > 0 {
+		return math.Inf(1)
+	}
+	return sc.cost
+}
+
+// scoreOf is the least cost of the rows and strands that the open columns serve.
+func (s *search) scoreOf(f *field, open []int32) score {
+	scores := make([]score, len(s.parts))
+	solvers := f.solversOf(open, s.workers)
+	each(s.workers, len(s.parts), func(w, i int) { f.scorePart(solvers[w], open, &s.parts[i], &scores[i]) })
+	var sum score
+	for _, sc := range scores {
+		sum.unserved += sc.unserved
+		sum.cost += sc.cost
+	}
+	return sum
+}
+
+// solversOf makes solvers that know the open columns only.
+func (f *field) solversOf(open []int32, workers int) []*chainSolver {
+	o := &field{longest: f.longest}
+	o.relate(f.relation.only(open))
+	return o.solvers(workers)
+}
+
+// scorePart adds up one part.
+func (f *field) scorePart(solver *chainSolver, open []int32, p *part, sc *score) {
+	for i := p.rows[0]; i < p.rows[1]; i++ {
+		row, best := f.rows.row(i), math.Inf(1)
+		for _, j := range open {
+			best = min(best, row[j])
+		}
+		sc.add(best)
+	}
+	for c := p.strands[0]; c < p.strands[1]; c++ {
+		st := &f.strands[c]
+		for n := range st.count {
+			own, cost := f.cost.row(st.first+n), solver.cost[n]
+			for k, j := range open {
+				cost[k] = own[j]
+			}
+		}
+		sc.add(solver.value(st))
+	}
+}
+
 func (s *search) bestAddition(open []int32) (int32, bool) {
-	served := s.served(open)
 	best, found := int32(-1), score{unserved: math.MaxInt}
 	for j := range int32(s.m) {
 		if slices.Contains(open, j) {
 			continue
 		}
-		var sc score
-		for i, row := range s.r.rows {
-			sc.add(min(served[i], row[j]))
-		}
-		trial := append(slices.Clone(open), j)
-		for c := range s.r.chains {
-			v, _ := s.dp.solve(&s.r.chains[c], trial, nil)
-			sc.add(v)
-		}
-		if sc.less(found) {
+		if sc := s.scoreOf(s.f, append(slices.Clone(open), j)); sc.less(found) {
 			best, found = j, sc
 		}
 	}
@@ -65,11 +109,11 @@ func (s *search) bestAddition(open []int32) (int32, bool) {
 
 // served is the cheapest open size's cost in each row.
 func (s *search) served(open []int32) []float64 {
-	out := make([]float64, len(s.r.rows))
-	for i, row := range s.r.rows {
+	out := make([]float64, s.f.rows.rows())
+	for i := range out {
 		out[i] = math.Inf(1)
 		for _, j := range open {
-			out[i] = min(out[i], row[j])
+			out[i] = min(out[i], s.f.rows.row(i)[j])
 		}
 	}
 	return out
@@ -85,8 +129,8 @@ func (s *search) exchange(best *answer) bool {
 				continue
 			}
 			cost := 0.0
-			for i, row := range s.r.rows {
-				cost += min(served[i], row[j])
+			for i := range served {
+				cost += min(served[i], s.f.rows.row(i)[j])
 			}
 			if cost < cutoff(best.cost) {
 				*best = answer{open: append(others, j), cost: cost}
@@ -97,16 +141,30 @@ func (s *search) exchange(best *answer) bool {
 	return false
 }
 
-// improve takes the sizes that the relaxation picked as the best answer where
+// improve takes the columns that the relaxation picked as the best answer where
 // they cost less.
-func (s *search) improve(pick []bool, best *answer) {
-	var open []int32
-	for j, in := range pick {
-		if in {
-			open = append(open, int32(j))
-		}
+func (s *search) improve(f *field, picked []int32, best *answer) {
+	open := f.sizesOf(picked)
+	slices.Sort(open)
+	if !s.first(open) {
+		return
 	}
-	if cost := s.costOf(open); cost < best.cost {
+	cols := slices.Clone(picked)
+	slices.Sort(cols)
+	if cost := s.costOf(f, cols); cost < best.cost {
 		*best = answer{open: open, cost: cost}
 	}
+}
+
+// first reports whether improve has not seen these sizes before.
+func (s *search) first(open []int32) bool {
+	var key []byte
+	for _, j := range open {
+		key = binary.AppendUvarint(key, uint64(j))
+	}
+	if s.tried[string(key)] {
+		return false
+	}
+	s.tried[string(key)] = true
+	return true
 }

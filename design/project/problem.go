@@ -35,8 +35,12 @@ type Problem struct {
 	Sizes  int
 	Chains []Chain
 	// MayStand reports whether size above may stand on size below at a splice;
-	// it is not asked for above == below. Nil allows every pair.
+	// it is not asked for above == below. Nil allows every pair. It must be an
+	// order: what may stand on a size may stand on whatever that may stand on.
 	MayStand func(below, above int) bool
+	// Workers is the number of goroutines that FewSizes may use (0: one). The
+	// answers do not depend on it.
+	Workers int
 }
 
 // Choice is a size for every node, chain by chain.
@@ -61,9 +65,9 @@ func (s *Solution) Gap() float64 {
 }
 
 // Validate reports the first thing that is wrong with the problem's shape: a
-// chain without nodes, a cost list of the wrong length, or a cost that is
-// negative or not a number, or links
-// that do not join the nodes.
+// chain without nodes, a cost list of the wrong length, a cost that is negative
+// or not a number, links that do not join the nodes, or sizes whose standing on
+// each other is no order.
 func (p *Problem) Validate() error {
 	for c, chain := range p.Chains {
 		if len(chain.Nodes) == 0 {
@@ -83,5 +87,17 @@ func (p *Problem) Validate() error {
 			}
 		}
 	}
+	if a, b, c, found := p.relationOf(p.all()).broken(); found {
+		return fmt.Errorf("size %d may stand on %d and that on %d, but not the first on the last", c, b, a)
+	}
 	return nil
+}
+
+// all lists every size.
+func (p *Problem) all() []int {
+	sizes := make([]int, p.Sizes)
+	for j := range sizes {
+		sizes[j] = j
+	}
+	return sizes
 }

@@ -1,46 +1,71 @@
 package project
 
 import (
+	"cmp"
 	"encoding/binary"
 	"math"
+	"slices"
 )
 
-// reduced is a problem with the same optima for every K and less in it: nodes
+// reduce makes a field with the same optima for every K and less in it: nodes
 // that stand alone and rule out the same sizes at proportional costs are added
-// up, and sizes that another one can always replace are left out.
-type reduced struct {
-	sizes  []int       // live sizes, as indices of the problem
-	rows   [][]float64 // nodes that stand alone: cost by live size
-	chains []Chain     // chains of two nodes and more, by live size
-	stand  func(below, above int) bool
+// up, and sizes that another one can always replace are left out. live are the
+// problem's sizes that are left. Their order is kept, so that equal costs fall
+// the same way.
+func (p *Problem) reduce() (live []int, f *field) {
+	rows, chains := p.split()
+	live = p.undominated(rows, chains)
+	f = &field{rows: newGrid(len(rows), len(live)), sizes: columns(len(live))}
+	for i, row := range rows {
+		pickOut(f.rows.row(i), row, live)
+		f.offers = append(f.offers, offersOf(f.rows.row(i)))
+	}
+	nodes := 0
+	for _, c := range chains {
+		f.strands = append(f.strands, c.strand(nodes))
+		nodes += len(c.Nodes)
+	}
+	f.longest = longest(f.strands)
+	f.cost = newGrid(nodes, len(live))
+	for k, c := range chains {
+		for n := range c.Nodes {
+			pickOut(f.cost.row(f.strands[k].first+n), c.Nodes[n].Cost, live)
+		}
+	}
+	r := &relation{m: len(live)}
+	if f.longest > 1 {
+		r = p.relationOf(live)
+	}
+	f.relate(r)
+	return live, f
 }
 
-// reduce keeps the order of sizes, so that equal costs fall the same way.
-func (p *Problem) reduce() *reduced {
-	rows, chains := p.split()
-	live := p.undominated(rows, chains)
-	r := &reduced{sizes: live}
-	keep := func(cost []float64) []float64 {
-		out := make([]float64, len(live))
-		for k, j := range live {
-			out[k] = cost[j]
+// pickOut writes the costs of the live sizes to row.
+func pickOut(row, cost []float64, live []int) {
+	for k, j := range live {
+		row[k] = cost[j]
+	}
+}
+
+// columns counts from 0.
+func columns(n int) []int32 {
+	cols := make([]int32, n)
+	for j := range cols {
+		cols[j] = int32(j)
+	}
+	return cols
+}
+
+// offersOf lists the columns that serve a row, cheapest first.
+func offersOf(row []float64) []offer {
+	var out []offer
+	for j, v := range row {
+		if !math.IsInf(v, 1) {
+			out = append(out, offer{int32(j), v})
 		}
-		return out
 	}
-	for _, row := range rows {
-		r.rows = append(r.rows, keep(row))
-	}
-	for _, c := range chains {
-		nodes := make([]Node, len(c.Nodes))
-		for n := range nodes {
-			nodes[n].Cost = keep(c.Nodes[n].Cost)
-		}
-		r.chains = append(r.chains, Chain{Nodes: nodes, SpliceCost: c.SpliceCost, Links: c.Links})
-	}
-	if p.MayStand != nil {
-		r.stand = func(below, above int) bool { return p.MayStand(live[below], live[above]) }
-	}
-	return r
+	slices.SortStableFunc(out, func(a, b offer) int { return cmp.Compare(a.cost, b.cost) })
+	return out
 }
 
 // split adds up the lone nodes that are alike and returns them as rows, and the

@@ -4,8 +4,6 @@ import (
 	"cmp"
 	"math"
 	"slices"
-
-	"gonum.org/v1/gonum/floats"
 )
 
 // solveRings is solve for a chain whose links close rings. A ring is opened at
@@ -13,26 +11,22 @@ import (
 // cuts its links, until a tree is left. That is exact; sizes that cannot lead
 // to less than what has been found are passed over, which keeps it short for
 // the few rings that a building has.
-func (s *chainSolver) solveRings(c *Chain, open []int32, price [][]float64) (float64, []int) {
-	r := ringSearch{s: s, open: open, best: math.Inf(1), pick: make([]int, len(c.Nodes))}
-	cost := make([][]float64, len(c.Nodes))
+func (s *chainSolver) solveRings(st *strand) (float64, []int32) {
+	r := ringSearch{s: s, best: math.Inf(1), pick: make([]int32, st.count)}
+	cost := make([][]float64, st.count)
 	for n := range cost {
-		cost[n] = slices.Clone(c.Nodes[n].Cost)
-		if price != nil {
-			floats.Add(cost[n], price[n])
-		}
+		cost[n] = slices.Clone(s.cost[n]) // the trees that are left are solved in its place
 	}
-	r.settle(cost, c.Links)
+	r.settle(cost, st.links)
 	return r.best, r.found
 }
 
 // ringSearch is the work of one solveRings.
 type ringSearch struct {
 	s     *chainSolver
-	open  []int32
 	best  float64
-	pick  []int
-	found []int
+	pick  []int32
+	found []int32
 }
 
 // settle finds the cheapest choice of nodes with these costs (+Inf: ruled out)
@@ -46,7 +40,10 @@ func (r *ringSearch) settle(cost [][]float64, links []Link) {
 		r.forest(cost, links)
 		return
 	}
-	order := slices.Clone(r.open)
+	order := make([]int32, len(cost[n]))
+	for j := range order {
+		order[j] = int32(j)
+	}
 	slices.SortStableFunc(order, func(a, b int32) int { return cmp.Compare(cost[n][a], cost[n][b]) })
 	for _, j := range order {
 		if math.IsInf(cost[n][j], 1) {
@@ -61,11 +58,8 @@ func (r *ringSearch) settle(cost [][]float64, links []Link) {
 func (r *ringSearch) least(cost [][]float64) float64 {
 	total := 0.0
 	for _, row := range cost {
-		best := math.Inf(1)
-		for _, j := range r.open {
-			best = min(best, row[j])
-		}
-		total += best
+		v, _ := leastOf(row)
+		total += v
 	}
 	return total
 }
@@ -77,19 +71,20 @@ func (r *ringSearch) cut(cost [][]float64, links []Link, n int, j int32) ([][]fl
 	out[n] = only(cost[n], j)
 	var rest []Link
 	for _, l := range links {
-		other, table := l.Above, r.s.fits[1]
+		v := visit{node: l.Above, to: l.Below, down: true}
 		switch n {
 		case l.Below:
 		case l.Above:
-			other, table = l.Below, r.s.fits[0]
+			v = visit{node: l.Below, to: l.Above}
 		default:
 			rest = append(rest, l)
 			continue
 		}
+		other := v.node
 		row := slices.Clone(out[other])
-		for _, i := range r.open {
-			switch {
-			case !table[int(j)*r.s.sizes+int(i)]:
+		for i := range row {
+			switch i := int32(i); {
+			case !r.s.fits(&v, i, j):
 				row[i] = math.Inf(1)
 			case i != j:
 				row[i] += l.SpliceCost
@@ -118,13 +113,15 @@ func (r *ringSearch) forest(cost [][]float64, links []Link) {
 		for k, n := range nodes {
 			place[n] = k
 			tree.Nodes = append(tree.Nodes, Node{cost[n]})
+			copy(r.s.cost[k], cost[n])
 		}
 		for _, l := range links {
 			if k, ok := place[l.Below]; ok {
 				tree.Links = append(tree.Links, Link{k, place[l.Above], l.SpliceCost})
 			}
 		}
-		v, picks := r.s.solve(&tree, r.open, nil)
+		st := tree.strand(0)
+		v, picks := r.s.solve(&st)
 		if total += v; picks == nil || total >= r.best {
 			return
 		}

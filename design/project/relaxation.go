@@ -1,0 +1,145 @@
+package project
+
+import (
+	"math"
+	"slices"
+)
+
+// relaxation is a field with the constraint "a node's size is among the K"
+// relaxed, and what its optimum comes to at the multipliers as they stand.
+type relaxation struct {
+	*multipliers
+	f  *field
+	k  int
+	at placement
+
+	worth  []float64 // by column: what all nodes would pay for it to be open
+	pick   []bool    // the K columns that are worth most
+	picked []int32   // the same
+	taken  []int32   // by node: the column of the strand's own optimum
+	tasks  []task    // by part
+}
+
+// placement is what the workers of a relaxation share.
+type placement struct {
+	workers int
+	parts   []part
+	solvers []*chainSolver // by worker
+}
+
+// task is what one part comes to.
+type task struct {
+	total  float64
+	worth  []float64
+	square float64 // of the step
+}
+
+func newRelaxation(s *search, f *field, k int, m *multipliers) *relaxation {
+	r := &relaxation{multipliers: m, f: f, k: k, at: placement{s.workers, s.parts, f.solvers(s.workers)}}
+	r.worth, r.pick = make([]float64, len(f.sizes)), make([]bool, len(f.sizes))
+	r.taken = make([]int32, f.cost.rows())
+	r.tasks = make([]task, len(s.parts))
+	for i := range r.tasks {
+		r.tasks[i].worth = make([]float64, len(f.sizes))
+	}
+	return r
+}
+
+// bound evaluates the relaxation: the sum over nodes at their prices, less the
+// worth of the K best columns. +Inf: no column of the field serves some node.
+func (r *relaxation) bound(state []int8) float64 {
+	each(r.at.workers, len(r.tasks), func(w, i int) { r.evaluate(r.at.solvers[w], &r.at.parts[i], &r.tasks[i]) })
+	clear(r.worth)
+	total := 0.0
+	for i := range r.tasks {
+		t := &r.tasks[i]
+		total += t.total
+		for j, v := range t.worth {
+			r.worth[j] += v
+		}
+	}
+	r.choose(state)
+	for _, j := range r.picked {
+		total -= r.worth[j]
+	}
+	return total
+}
+
+// evaluate computes one part.
+func (r *relaxation) evaluate(s *chainSolver, p *part, t *task) {
+	clear(t.worth)
+	t.total = 0
+	for i := p.rows[0]; i < p.rows[1]; i++ {
+		u := r.u[i]
+		t.total += u
+		for _, o := range r.f.offers[i] {
+			if o.cost >= u {
+				break
+			}
+			t.worth[o.col] += u - o.cost
+		}
+	}
+	for c := p.strands[0]; c < p.strands[1]; c++ {
+		st := &r.f.strands[c]
+		for n := range st.count {
+			r.charge(st.first+n, s.cost[n], t.worth)
+		}
+		v, picks := s.solve(st)
+		if t.total += v; picks == nil {
+			return
+		}
+		copy(r.taken[st.first:], picks)
+	}
+}
+
+// charge writes a node's costs with its prices added to cost, and adds the
+// prices to worth.
+func (r *relaxation) charge(node int, cost, worth []float64) {
+	own := r.f.cost.row(node)
+	cost, worth = cost[:len(own)], worth[:len(own)]
+	if len(r.level) > 0 {
+		level := r.level[node]
+		for j, v := range own {
+			if v < level {
+				worth[j] += level - v
+				v = level
+			}
+			cost[j] = v
+		}
+		return
+	}
+	price := r.price.row(node)[:len(own)]
+	for j, v := range own {
+		cost[j] = v + price[j]
+		worth[j] += price[j]
+	}
+}
+
+// choose picks the columns that are settled as open and the worthiest others.
+func (r *relaxation) choose(state []int8) {
+	order := columns(len(r.f.sizes))
+	order = slices.DeleteFunc(order, func(j int32) bool { return state[r.f.sizes[j]] == closed })
+	slices.SortStableFunc(order, func(a, b int32) int {
+		i, j := state[r.f.sizes[a]] == opened, state[r.f.sizes[b]] == opened
+		switch {
+		case i != j:
+			if i {
+				return -1
+			}
+			return 1
+		case r.worth[a] > r.worth[b]:
+			return -1
+		case r.worth[a] < r.worth[b]:
+			return 1
+		}
+		return 0
+	})
+	clear(r.pick)
+	r.picked = order[:min(r.k, len(order))]
+	for _, j := range r.picked {
+		r.pick[j] = true
+	}
+}
+
+// impossible is the bound of a field that does not serve some node.
+func impossible(bound float64) bool { return math.IsInf(bound, 1) }
