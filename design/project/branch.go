@@ -3,6 +3,7 @@ package project
 import (
 	"context"
 	"math"
+	"runtime"
 	"slices"
 )
 
@@ -28,7 +29,10 @@ type search struct {
 }
 
 func newSearch(f *field, workers int) *search {
-	return &search{f: f, m: len(f.sizes), workers: max(1, workers), parts: partsOf(f),
+	if workers < 1 {
+		workers = runtime.GOMAXPROCS(0)
+	}
+	return &search{f: f, m: len(f.sizes), workers: workers, parts: partsOf(f),
 		rowScale: scales(f.rows), nodeScale: scales(f.cost), tried: map[string]bool{}}
 }
 

@@ -38,8 +38,8 @@ type Problem struct {
 	// it is not asked for above == below. Nil allows every pair. It must be an
 	// order: what may stand on a size may stand on whatever that may stand on.
 	MayStand func(below, above int) bool
-	// Workers is the number of goroutines that FewSizes may use (0: one). The
-	// answers do not depend on it.
+	// Workers is the number of goroutines that FewSizes may use, 0 for one a
+	// processor. The answers do not depend on it.
 	Workers int
 }
 
