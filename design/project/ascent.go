@@ -34,7 +34,7 @@ func (s *search) ascend(ctx context.Context, k int, node branchNode, best *answe
 			return outcome{closed: true}
 		}
 		s.improve(c.f, c.r.picked, best)
-		bound = c.compare(bound)
+		bound = c.compare(bound, best)
 		if max(c.top, node.bound) >= cutoff(best.cost) || !c.settle(bound, best.cost) {
 			return outcome{closed: true}
 		}
@@ -82,6 +82,7 @@ type climb struct {
 	top       float64     // the best bound
 	scale     float64     // part of Polyak's length
 	stale     int         // steps since the best bound
+	streak    int         // steps that raised it, one after the other
 	state     []int8      // by size: what is settled about it
 	often     []float64   // by size: how often it was picked of late
 }
@@ -96,26 +97,41 @@ func newClimb(s *search, k int, node branchNode, effort ascent) *climb {
 	return c
 }
 
-// patience is how many steps may fail to raise the bound before they are halved.
-const patience = 12
+// patience is how many steps may fail to raise the bound before they are
+// halved; so many that raise it one after the other make them longer.
+const (
+	patience = 12
+	streak   = 4
+	longer   = 1.3
+)
 
 // compare keeps the multipliers where the bound is the best so far, and goes
-// back to the best with shorter steps where it has long not been. It returns
-// the bound of the multipliers as they then stand.
-func (c *climb) compare(bound float64) float64 {
+// back to the best with shorter steps where it has long not been, and meanwhile
+// looks for a better answer. It returns the bound of the multipliers as they
+// then stand.
+func (c *climb) compare(bound float64, best *answer) float64 {
 	if bound > c.top+1e-12*math.Abs(bound) {
 		c.top, c.stale = bound, 0
 		c.keep.copy(c.at)
+		if c.streak++; c.streak >= streak {
+			c.scale, c.streak = min(2, c.scale*longer), 0
+		}
 		return bound
 	}
+	c.streak = 0
 	if c.stale++; c.stale < patience {
 		return bound
 	}
 	c.scale, c.stale = c.scale/2, 0
 	c.at.copy(&c.keep)
 	c.direction = c.at.zero()
-	return c.r.bound(c.state)
+	bound = c.r.bound(c.state)
+	c.s.exchangeFor(c.f.sizesOf(c.r.worthiest(c.k+others)), best)
+	return bound
 }
+
+// others is how many sizes beside the K worthiest are tried for a better answer.
+const others = 16
 
 // count notes what the relaxation picks.
 func (c *climb) count() {

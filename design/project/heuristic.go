@@ -141,6 +141,26 @@ func (s *search) exchange(best *answer) bool {
 	return false
 }
 
+// exchangeFor replaces open sizes of the best answer by some of these while that
+// lowers the cost.
+func (s *search) exchangeFor(sizes []int32, best *answer) {
+	for better := true; better; {
+		better = false
+		for at := range best.open {
+			for _, j := range sizes {
+				if slices.Contains(best.open, j) {
+					continue
+				}
+				open := slices.Clone(best.open)
+				open[at] = j
+				had := best.cost
+				s.improve(s.f, open, best)
+				better = better || best.cost < had
+			}
+		}
+	}
+}
+
 // improve takes the columns that the relaxation picked as the best answer where
 // they cost less.
 func (s *search) improve(f *field, picked []int32, best *answer) {

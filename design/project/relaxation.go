@@ -15,7 +15,8 @@ type relaxation struct {
 
 	worth  []float64 // by column: what all nodes would pay for it to be open
 	pick   []bool    // the K columns that are worth most
-	picked []int32   // the same
+	order  []int32   // the columns that may be picked, the worthiest first
+	picked []int32   // the K first of them
 	taken  []int32   // by node: the column of the strand's own optimum
 	tasks  []task    // by part
 }
@@ -135,11 +136,14 @@ func (r *relaxation) choose(state []int8) {
 		return 0
 	})
 	clear(r.pick)
-	r.picked = order[:min(r.k, len(order))]
+	r.order, r.picked = order, order[:min(r.k, len(order))]
 	for _, j := range r.picked {
 		r.pick[j] = true
 	}
 }
+
+// worthiest are the first n columns by their worth.
+func (r *relaxation) worthiest(n int) []int32 { return r.order[:min(n, len(r.order))] }
 
 // impossible is the bound of a field that does not serve some node.
 func impossible(bound float64) bool { return math.IsInf(bound, 1) }
