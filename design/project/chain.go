@@ -21,7 +21,7 @@ type chainSolver struct {
 func newChainSolver(r *relation, k *ranking, longest int) *chainSolver {
 	s := &chainSolver{relation: r, ranking: k, picks: make([]int32, longest)}
 	if k != nil {
-		s.least = make([]float64, len(k.ranks))
+		s.least = make([]float64, len(k.first))
 	}
 	room := newGrid(longest, r.m)
 	for n := range longest {

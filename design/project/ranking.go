@@ -11,14 +11,15 @@ import (
 // (transitive reduction; Aho, Garey and Ullman, SIAM Journal on Computing 1
 // (1972), 131-137).
 type ranking struct {
-	ranks []rank // each after all that it may stand on
+	first       []int32   // by rank: its first size; each rank follows all that it may stand on
+	more        [][]int32 // by rank: its other sizes, nil where no rank has any
+	under, over neighbours
 }
 
-type rank struct {
-	size        int32   // the first size of the rank
-	more        []int32 // the others
-	under, over []int32 // ranks next below and next above
-}
+// neighbours lists ranks by rank: those of n are list[from[n]:from[n+1]].
+type neighbours struct{ from, list []int32 }
+
+func (k neighbours) of(n int) []int32 { return k.list[k.from[n]:k.from[n+1]] }
 
 func newRanking(r *relation) *ranking {
 	above := r.above()
@@ -42,67 +43,90 @@ func newRanking(r *relation) *ranking {
 // gather makes ranks of the sizes in an order in which each follows what it may
 // stand on: those that stand on each other both ways have as many below them.
 func (k *ranking) gather(order []int32, above []bitset) {
+	twins := map[int][]int32{}
 	for _, j := range order {
-		at := slices.IndexFunc(k.ranks, func(r rank) bool { return above[j].has(r.size) && above[r.size].has(j) })
+		at := slices.IndexFunc(k.first, func(i int32) bool { return above[j].has(i) && above[i].has(j) })
 		if at < 0 {
-			k.ranks = append(k.ranks, rank{size: j})
+			k.first = append(k.first, j)
 			continue
 		}
-		k.ranks[at].more = append(k.ranks[at].more, j)
+		twins[at] = append(twins[at], j)
+	}
+	if len(twins) == 0 {
+		return
+	}
+	k.more = make([][]int32, len(k.first))
+	for at, sizes := range twins {
+		k.more[at] = sizes
 	}
 }
 
-// reduce links each rank to those next below it.
+// reduce links each rank to those next below and next above it.
 func (k *ranking) reduce(above []bitset) {
-	below := make([]bitset, len(k.ranks)) // by rank, all ranks below it
-	for n := range k.ranks {
-		below[n] = newBitset(len(k.ranks))
+	under, over := make([][]int32, len(k.first)), make([][]int32, len(k.first))
+	below := make([]bitset, len(k.first)) // by rank, all ranks below it
+	for n := range k.first {
+		below[n] = newBitset(len(k.first))
 		for q := n - 1; q >= 0; q-- {
-			if !above[k.ranks[q].size].has(k.ranks[n].size) || below[n].has(int32(q)) {
+			if !above[k.first[q]].has(k.first[n]) || below[n].has(int32(q)) {
 				continue
 			}
-			k.ranks[n].under = append(k.ranks[n].under, int32(q))
-			k.ranks[q].over = append(k.ranks[q].over, int32(n))
+			under[n] = append(under[n], int32(q))
+			over[q] = append(over[q], int32(n))
 			below[n].add(int32(q))
 			below[n].join(below[q])
 		}
 	}
+	k.under, k.over = neighboursOf(under), neighboursOf(over)
+}
+
+func neighboursOf(lists [][]int32) neighbours {
+	k := neighbours{from: []int32{0}}
+	for _, list := range lists {
+		k.list = append(k.list, list...)
+		k.from = append(k.from, int32(len(k.list)))
+	}
+	return k
 }
 
 // handOn adds to each size of to the cheaper of cost for the same size and, a
 // splice dearer, the least cost of any size that it may stand on or, down, that
 // may stand on it. least is room for one number a rank.
 func (k *ranking) handOn(cost, to, least []float64, splice float64, down bool) {
-	if !down {
-		for n := range k.ranks {
-			r := &k.ranks[n]
-			least[n] = r.leastOf(cost, least, r.under)
-			r.addTo(to, cost, least[n]+splice)
+	if down {
+		for n := len(k.first) - 1; n >= 0; n-- {
+			k.handRank(n, k.over.of(n), cost, to, least, splice)
 		}
 		return
 	}
-	for n := len(k.ranks) - 1; n >= 0; n-- {
-		r := &k.ranks[n]
-		least[n] = r.leastOf(cost, least, r.over)
-		r.addTo(to, cost, least[n]+splice)
+	for n := range k.first {
+		k.handRank(n, k.under.of(n), cost, to, least, splice)
 	}
 }
 
-// leastOf is the least cost of the rank's sizes and of its neighbours.
-func (r *rank) leastOf(cost, least []float64, neighbours []int32) float64 {
-	v := cost[r.size]
-	for _, j := range r.more {
-		v = min(v, cost[j])
+func (k *ranking) handRank(n int, next []int32, cost, to, least []float64, splice float64) {
+	j := k.first[n]
+	own := cost[j]
+	v := own
+	if k.more != nil {
+		for _, j := range k.more[n] {
+			v = min(v, cost[j])
+		}
 	}
-	for _, q := range neighbours {
-		v = min(v, least[q])
+	for _, q := range next {
+		if w := least[q]; w < v { // the built-in min costs more: it asks for NaN
+			v = w
+		}
 	}
-	return v
-}
-
-func (r *rank) addTo(to, cost []float64, changed float64) {
-	to[r.size] += min(cost[r.size], changed)
-	for _, j := range r.more {
-		to[j] += min(cost[j], changed)
+	least[n] = v
+	v += splice
+	if k.more != nil {
+		for _, j := range k.more[n] {
+			to[j] += min(cost[j], v)
+		}
 	}
+	if own < v {
+		v = own
+	}
+	to[j] += v
 }
