@@ -29,7 +29,7 @@ type ascent struct {
 func (s *search) ascend(ctx context.Context, k int, node branchNode, best *answer, effort ascent) outcome {
 	c := newClimb(s, k, node, effort)
 	for step := 0; ; step++ {
-		bound := c.r.bound(c.state)
+		bound := c.r.bound(c.s, c.state)
 		if impossible(bound) {
 			return outcome{closed: true}
 		}
@@ -78,18 +78,18 @@ type climb struct {
 	r         *relaxation
 	at        *multipliers
 	keep      multipliers // those of the best bound
-	direction multipliers // of the last step
-	top       float64     // the best bound
-	scale     float64     // part of Polyak's length
-	stale     int         // steps since the best bound
-	streak    int         // steps that raised it, one after the other
-	state     []int8      // by size: what is settled about it
-	often     []float64   // by size: how often it was picked of late
+	direction direction
+	top       float64   // the best bound
+	scale     float64   // part of Polyak's length
+	stale     int       // steps since the best bound
+	streak    int       // steps that raised it, one after the other
+	state     []int8    // by size: what is settled about it
+	often     []float64 // by size: how often it was picked of late
 }
 
 func newClimb(s *search, k int, node branchNode, effort ascent) *climb {
 	at := node.at.clone()
-	c := &climb{s: s, k: k, f: node.f, at: &at, keep: node.at.clone(), direction: at.zero(),
+	c := &climb{s: s, k: k, f: node.f, at: &at, keep: node.at.clone(), direction: at.ahead(len(s.parts)),
 		top: math.Inf(-1), scale: effort.scale,
 		state: slices.Clone(node.state), often: make([]float64, s.m)}
 	c.r = newRelaxation(s, c.f, k, c.at)
@@ -124,8 +124,8 @@ func (c *climb) compare(bound float64, best *answer) float64 {
 	}
 	c.scale, c.stale = c.scale/2, 0
 	c.at.copy(&c.keep)
-	c.direction = c.at.zero()
-	bound = c.r.bound(c.state)
+	c.direction = c.at.ahead(len(c.s.parts))
+	bound = c.r.bound(c.s, c.state)
 	c.s.exchangeFor(c.f.sizesOf(c.r.worthiest(c.k+others)), best)
 	return bound
 }
@@ -150,9 +150,9 @@ func (c *climb) freePrices(bound float64) float64 {
 		return bound
 	}
 	c.at.copy(&c.keep)
-	bound = c.r.bound(c.state)
+	bound = c.r.bound(c.s, c.state)
 	c.at.free(c.f)
-	c.keep, c.direction = c.at.clone(), c.at.zero()
+	c.keep, c.direction = c.at.clone(), c.at.ahead(len(c.s.parts))
 	c.scale, c.stale = 1.2, 0
 	return bound
 }
@@ -175,8 +175,10 @@ func (c *climb) narrow(part float64) {
 	}
 	c.f = c.f.only(cols)
 	*c.at = c.at.only(cols)
-	c.keep, c.direction = c.keep.only(cols), c.direction.only(cols)
+	c.keep, c.direction = c.keep.only(cols), c.direction.only(cols, c.s.parts, c.f.strands)
+	due := c.r.due
 	c.r = newRelaxation(c.s, c.f, c.k, c.at)
+	c.r.due, c.r.along = due, &c.direction
 }
 
 // improveBy takes the sizes that are settled as open, where all are settled.

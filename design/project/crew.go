@@ -32,6 +32,15 @@ func partsOf(f *field) []part {
 	return parts
 }
 
+// nodes are those of a part's strands.
+func (p *part) nodes(strands []strand) (from, to int) {
+	if p.strands[0] == p.strands[1] {
+		return 0, 0
+	}
+	last := &strands[p.strands[1]-1]
+	return strands[p.strands[0]].first, last.first + last.count
+}
+
 // each calls work for every i below n, on so many workers at once.
 func each(workers, n int, work func(worker, i int)) {
 	if workers = min(workers, n); workers < 2 {

@@ -19,6 +19,10 @@ type relaxation struct {
 	picked []int32   // the K first of them
 	taken  []int32   // by node: the column of the strand's own optimum
 	tasks  []task    // by part
+
+	// The step that the next bound takes first: so far along this direction.
+	due   float64
+	along *direction
 }
 
 // placement is what the workers of a relaxation share.
@@ -46,10 +50,16 @@ func newRelaxation(s *search, f *field, k int, m *multipliers) *relaxation {
 	return r
 }
 
-// bound evaluates the relaxation: the sum over nodes at their prices, less the
+// bound takes the step that is due and evaluates the relaxation: the sum over nodes at their prices, less the
 // worth of the K best columns. +Inf: no column of the field serves some node.
-func (r *relaxation) bound(state []int8) float64 {
-	each(r.at.workers, len(r.tasks), func(w, i int) { r.evaluate(r.at.solvers[w], &r.at.parts[i], &r.tasks[i]) })
+func (r *relaxation) bound(s *search, state []int8) float64 {
+	each(r.at.workers, len(r.tasks), func(w, i int) {
+		if r.due != 0 {
+			r.move(s, &r.at.parts[i])
+		}
+		r.evaluate(s, r.at.solvers[w], &r.at.parts[i], &r.tasks[i])
+	})
+	r.due = 0
 	clear(r.worth)
 	total := 0.0
 	for i := range r.tasks {
@@ -66,8 +76,21 @@ func (r *relaxation) bound(state []int8) float64 {
 	return total
 }
 
+// move takes the step that is due for the rows and levels of one part; prices
+// are moved as they are charged.
+func (r *relaxation) move(s *search, p *part) {
+	for i := p.rows[0]; i < p.rows[1]; i++ {
+		r.u[i] += r.due * s.rowScale[i] * r.along.u[i]
+	}
+	if from, to := p.nodes(r.f.strands); len(r.level) > 0 {
+		for i := from; i < to; i++ {
+			r.level[i] += r.due * s.nodeScale[i] * r.along.level[i]
+		}
+	}
+}
+
 // evaluate computes one part.
-func (r *relaxation) evaluate(s *chainSolver, p *part, t *task) {
+func (r *relaxation) evaluate(s *search, solver *chainSolver, p *part, t *task) {
 	clear(t.worth)
 	t.total = 0
 	for i := p.rows[0]; i < p.rows[1]; i++ {
@@ -83,19 +106,19 @@ func (r *relaxation) evaluate(s *chainSolver, p *part, t *task) {
 	for c := p.strands[0]; c < p.strands[1]; c++ {
 		st := &r.f.strands[c]
 		for n := range st.count {
-			r.charge(st.first+n, s.cost[n], t.worth)
+			r.charge(st.first+n, s.nodeScale[st.first+n], solver.cost[n], t.worth)
 		}
-		v, picks := s.solve(st)
+		v, picks := solver.solve(st)
 		if t.total += v; picks == nil {
-			return
+			continue // the total is +Inf; the prices of the others are moved all the same
 		}
 		copy(r.taken[st.first:], picks)
 	}
 }
 
 // charge writes a node's costs with its prices added to cost, and adds the
-// prices to worth.
-func (r *relaxation) charge(node int, cost, worth []float64) {
+// prices to worth, once they have taken the step that is due.
+func (r *relaxation) charge(node int, scale float64, cost, worth []float64) {
 	own := r.f.cost.row(node)
 	cost, worth = cost[:len(own)], worth[:len(own)]
 	if len(r.level) > 0 {
@@ -110,9 +133,22 @@ func (r *relaxation) charge(node int, cost, worth []float64) {
 		return
 	}
 	price := r.price.row(node)[:len(own)]
+	if r.due == 0 {
+		for j, v := range own {
+			cost[j] = v + price[j]
+			worth[j] += price[j]
+		}
+		return
+	}
+	turn, far := r.along.price.row(node)[:len(own)], r.due*scale*r.along.fade
 	for j, v := range own {
-		cost[j] = v + price[j]
-		worth[j] += price[j]
+		p := price[j] + far*turn[j]
+		if p < 0 {
+			p = 0
+		}
+		price[j] = p
+		cost[j] = v + p
+		worth[j] += p
 	}
 }
 

@@ -5,40 +5,71 @@ package project
 // 26-34): plain subgradients zigzag.
 const momentum = 0.9
 
-// step moves the multipliers along the subgradient, and the direction of the
-// last step, by Polyak's length: the distance to the target over the square of
-// the direction. It reports false where that is nil.
-func (r *relaxation) step(s *search, direction *multipliers, distance float64) bool {
-	each(r.at.workers, len(r.tasks), func(_, i int) { r.turn(s, direction, &r.at.parts[i], &r.tasks[i]) })
+// direction is that of the last step. Of the many prices few are turned at a
+// time, while momentum fades all: the prices' part is kept as if nothing had
+// faded, 1/fade times too large, and its square beside it. An ascent takes
+// hundreds of steps, so that fade stays far above the smallest number.
+type direction struct {
+	multipliers
+	fade   float64
+	square []float64 // by part, of the prices
+}
+
+// ahead is no direction yet.
+func (m *multipliers) ahead(parts int) direction {
+	return direction{multipliers: m.zero(), fade: 1, square: make([]float64, parts)}
+}
+
+// only keeps the prices of these columns.
+func (d *direction) only(cols []int32, parts []part, strands []strand) direction {
+	o := direction{multipliers: d.multipliers.only(cols), fade: d.fade, square: make([]float64, len(d.square))}
+	for i := range parts {
+		from, to := parts[i].nodes(strands)
+		for n := from; n < to && len(o.price.flat) > 0; n++ {
+			for _, g := range o.price.row(n) {
+				o.square[i] += g * g * o.fade * o.fade
+			}
+		}
+	}
+	return o
+}
+
+// step turns the direction by the subgradient, and sets the length of the step
+// that the next bound takes along it by Polyak's rule: the distance to the
+// target over the square of the direction. It reports false where that is nil.
+func (r *relaxation) step(s *search, d *direction, distance float64) bool {
+	d.fade *= momentum
+	each(r.at.workers, len(r.tasks), func(_, i int) { r.turn(s, d, i) })
 	square := 0.0
 	for i := range r.tasks {
-		square += r.tasks[i].square
+		square += r.tasks[i].square + d.square[i]
 	}
 	if square == 0 {
 		return false
 	}
-	t := distance / square
-	each(r.at.workers, len(r.tasks), func(_, i int) { r.move(s, direction, &r.at.parts[i], t) })
+	r.due, r.along = distance/square, d
 	return true
 }
 
 // turn adds the subgradient of one part to the direction, and takes its square.
-func (r *relaxation) turn(s *search, direction *multipliers, p *part, t *task) {
+func (r *relaxation) turn(s *search, d *direction, part int) {
+	p, t := &r.at.parts[part], &r.tasks[part]
 	t.square = 0
 	for i := p.rows[0]; i < p.rows[1]; i++ {
-		g := momentum*direction.u[i] + s.rowScale[i]*r.shortOf(i)
-		direction.u[i] = g
+		g := momentum*d.u[i] + s.rowScale[i]*r.shortOf(i)
+		d.u[i] = g
 		t.square += g * g
 	}
-	from, to := r.nodes(p)
+	d.square[part] *= momentum * momentum
+	from, to := p.nodes(r.f.strands)
 	for i := from; i < to; i++ {
 		if len(r.level) > 0 {
-			g := momentum*direction.level[i] + s.nodeScale[i]*r.levelShortOf(i)
-			direction.level[i] = g
+			g := momentum*d.level[i] + s.nodeScale[i]*r.levelShortOf(i)
+			d.level[i] = g
 			t.square += g * g
 			continue
 		}
-		t.square += r.turnPrices(i, direction.price.row(i), s.nodeScale[i])
+		d.square[part] += r.turnPrices(i, d, s.nodeScale[i])
 	}
 }
 
@@ -74,51 +105,22 @@ func (r *relaxation) levelShortOf(node int) float64 {
 
 // turnPrices is the same where every price of a node moves on its own: up where
 // it takes a column that is not among the K, down where a column is open and
-// the node pays for it without taking it.
-func (r *relaxation) turnPrices(node int, direction []float64, scale float64) float64 {
-	for j := range direction {
-		direction[j] *= momentum
+// the node pays for it without taking it. It returns what that adds to the
+// square of the direction.
+func (r *relaxation) turnPrices(node int, d *direction, scale float64) (square float64) {
+	turn, price, taken := d.price.row(node), r.price.row(node), r.taken[node]
+	add := func(j int32, g float64) {
+		had := turn[j] * d.fade
+		turn[j] += g / d.fade
+		square += (had+g)*(had+g) - had*had
 	}
-	price, taken := r.price.row(node), r.taken[node]
 	for _, j := range r.picked {
 		if j != taken && price[j] > 0 {
-			direction[j] -= scale
+			add(j, -scale)
 		}
 	}
 	if !r.pick[taken] {
-		direction[taken] += scale
-	}
-	square := 0.0
-	for _, g := range direction {
-		square += g * g
+		add(taken, scale)
 	}
 	return square
-}
-
-// move goes t times the direction in one part.
-func (r *relaxation) move(s *search, direction *multipliers, p *part, t float64) {
-	for i := p.rows[0]; i < p.rows[1]; i++ {
-		r.u[i] += t * direction.u[i] * s.rowScale[i]
-	}
-	from, to := r.nodes(p)
-	for i := from; i < to; i++ {
-		scaled := t * s.nodeScale[i]
-		if len(r.level) > 0 {
-			r.level[i] += scaled * direction.level[i]
-			continue
-		}
-		price, step := r.price.row(i), direction.price.row(i)
-		for j := range price {
-			price[j] = max(0, price[j]+scaled*step[j])
-		}
-	}
-}
-
-// nodes are those of a part's strands.
-func (r *relaxation) nodes(p *part) (from, to int) {
-	if p.strands[0] == p.strands[1] {
-		return 0, 0
-	}
-	last := &r.f.strands[p.strands[1]-1]
-	return r.f.strands[p.strands[0]].first, last.first + last.count
 }
