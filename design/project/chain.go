@@ -12,7 +12,7 @@ type chainSolver struct {
 	// there before the work; then the cost of the part of the chain that ends
 	// at the node.
 	cost  [][]float64
-	least []float64 // by rank
+	least []uint64 // by rank, the bits
 	picks []int32
 }
 
@@ -21,7 +21,7 @@ type chainSolver struct {
 func newChainSolver(r *relation, k *ranking, longest int) *chainSolver {
 	s := &chainSolver{relation: r, ranking: k, picks: make([]int32, longest)}
 	if k != nil {
-		s.least = make([]float64, len(k.first))
+		s.least = make([]uint64, len(k.up.first))
 	}
 	room := newGrid(longest, r.m)
 	for n := range longest {
@@ -66,7 +66,11 @@ func (s *chainSolver) handDown(st *strand) (float64, int32) {
 	last := len(st.visits) - 1
 	for i := range st.visits[:last] {
 		v := &st.visits[i]
-		s.ranking.handOn(s.cost[v.node], s.cost[v.to], s.least, v.splice, v.down)
+		sweep := &s.ranking.up
+		if v.down {
+			sweep = &s.ranking.down
+		}
+		sweep.handOn(s.cost[v.node], s.cost[v.to], s.least, v.splice)
 	}
 	return leastOf(s.cost[st.visits[last].node])
 }
