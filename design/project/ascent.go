@@ -126,7 +126,7 @@ func (c *climb) compare(bound float64, best *answer) float64 {
 	c.at.copy(&c.keep)
 	c.direction = c.at.ahead(len(c.s.parts))
 	bound = c.r.bound(c.s, c.state)
-	c.s.exchangeFor(c.f.sizesOf(c.r.worthiest(c.k+others)), best)
+	c.s.polish(c.f.sizesOf(c.r.worthiest(c.k+others)), best)
 	return bound
 }
 

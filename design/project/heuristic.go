@@ -9,7 +9,16 @@ import (
 // heuristic finds a good choice of k sizes to begin with: the last answer and
 // the size that lowers its cost most, then exchanges while one helps.
 func (s *search) heuristic(k int, warm []int32) answer {
-	open := slices.Clone(warm)
+	open := s.added(k, warm)
+	best := answer{open: open, cost: s.costOf(s.f, open)}
+	for len(s.f.strands) == 0 && s.exchange(&best) {
+	}
+	return best
+}
+
+// added brings sizes up to k by those that lower their cost most.
+func (s *search) added(k int, open []int32) []int32 {
+	open = slices.Clone(open)
 	for len(open) < min(k, s.m) {
 		j, ok := s.bestAddition(open)
 		if !ok {
@@ -17,10 +26,7 @@ func (s *search) heuristic(k int, warm []int32) answer {
 		}
 		open = append(open, j)
 	}
-	best := answer{open: open, cost: s.costOf(s.f, open)}
-	for len(s.f.strands) == 0 && s.exchange(&best) {
-	}
-	return best
+	return open
 }
 
 // score orders choices: fewest nodes unserved first, then cost.
@@ -148,18 +154,63 @@ func (s *search) exchangeFor(sizes []int32, best *answer) {
 		better = false
 		for at := range best.open {
 			for _, j := range sizes {
-				if slices.Contains(best.open, j) {
-					continue
-				}
-				open := slices.Clone(best.open)
-				open[at] = j
-				had := best.cost
-				s.improve(s.f, open, best)
-				better = better || best.cost < had
+				better = s.try(best, [2]int{at, at}, [2]int32{j, j}) || better
 			}
 		}
 	}
 }
+
+// exchangePairs replaces two open sizes of the best answer at a time by sizes
+// beside them in a list of sizes by cost, while that lowers the cost: one size
+// up and another down is often better where neither alone is.
+func (s *search) exchangePairs(sizes []int32, best *answer) {
+	for better := true; better; {
+		better = false
+		for a := range best.open {
+			for b := range a {
+				for _, i := range beside(sizes, best.open[a]) {
+					for _, j := range beside(sizes, best.open[b]) {
+						better = s.try(best, [2]int{a, b}, [2]int32{i, j}) || better
+					}
+				}
+			}
+		}
+	}
+}
+
+// beside lists a few sizes before and after one in a rising list.
+func beside(sizes []int32, size int32) []int32 {
+	const few = 3
+	at, _ := slices.BinarySearch(sizes, size)
+	return sizes[max(0, at-few):min(len(sizes), at+few+1)]
+}
+
+// try takes the best answer with two places of it changed, where that costs less.
+func (s *search) try(best *answer, places [2]int, sizes [2]int32) bool {
+	open := slices.Clone(best.open)
+	open[places[0]], open[places[1]] = sizes[0], sizes[1]
+	slices.Sort(open)
+	if len(slices.Compact(open)) < len(best.open) {
+		return false
+	}
+	had := best.cost
+	s.improve(s.f, open, best)
+	return best.cost < had
+}
+
+// polish looks for a better answer among the exchanges of open sizes for some
+// worthy ones and, where few are open, of two of them at a time.
+func (s *search) polish(worthy []int32, best *answer) {
+	s.exchangeFor(worthy, best)
+	if len(best.open) <= mostPairs {
+		slices.Sort(worthy)
+		s.exchangePairs(worthy, best)
+	}
+}
+
+// mostPairs is the number of sizes up to which pairs of them are exchanged: there
+// are few, and better answers are hard to find by one exchange at a time.
+const mostPairs = 6
 
 // improve takes the columns that the relaxation picked as the best answer where
 // they cost less.
