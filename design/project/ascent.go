@@ -38,9 +38,12 @@ func (s *search) ascend(ctx context.Context, k int, node branchNode, best *answe
 		if max(c.top, node.bound) >= cutoff(best.cost) || !c.settle(bound, best.cost) {
 			return outcome{closed: true}
 		}
+		if s.tryAll(c.f, k, c.state, best) {
+			return outcome{closed: true}
+		}
 		c.count()
 		if c.scale < effort.scale/4 || step >= effort.steps/2 {
-			bound = c.freePrices(bound)
+			bound = c.freePrices(bound, best)
 		}
 		if step >= effort.steps || c.scale < 1e-4 || ctx.Err() != nil {
 			break
@@ -49,15 +52,11 @@ func (s *search) ascend(ctx context.Context, k int, node branchNode, best *answe
 			if len(c.at.level) == 0 {
 				break // the relaxation's choice serves every node: its bound is its cost
 			}
-			c.freePrices(bound)
+			c.freePrices(bound, best)
 		}
 		c.shrink()
 	}
 	j := c.branchOn()
-	if j < 0 {
-		s.improveBy(c.f, c.state, best)
-		return outcome{closed: true}
-	}
 	return outcome{bound: max(c.top, node.bound), state: c.state, f: c.f, at: c.keep, branch: j}
 }
 
@@ -126,9 +125,11 @@ func (c *climb) compare(bound float64, best *answer) float64 {
 	c.at.copy(&c.keep)
 	c.direction = c.at.ahead(len(c.s.parts))
 	bound = c.r.bound(c.s, c.state)
-	c.s.polish(c.f.sizesOf(c.r.worthiest(c.k+others)), best)
+	c.polish(best)
 	return bound
 }
+
+func (c *climb) polish(best *answer) { c.s.polish(c.f.sizesOf(c.r.worthiest(c.k+others)), best) }
 
 // others is how many sizes beside the K worthiest are tried for a better answer.
 const others = 16
@@ -145,12 +146,13 @@ func (c *climb) count() {
 
 // freePrices lets every price of a strand's node move on its own, once one level
 // a node has raised the bound as far as it goes.
-func (c *climb) freePrices(bound float64) float64 {
+func (c *climb) freePrices(bound float64, best *answer) float64 {
 	if len(c.at.level) == 0 {
 		return bound
 	}
 	c.at.copy(&c.keep)
 	bound = c.r.bound(c.s, c.state)
+	c.polish(best)
 	c.at.free(c.f)
 	c.keep, c.direction = c.at.clone(), c.at.ahead(len(c.s.parts))
 	c.scale, c.stale = 1.2, 0
@@ -179,17 +181,6 @@ func (c *climb) narrow(part float64) {
 	due := c.r.due
 	c.r = newRelaxation(c.s, c.f, c.k, c.at)
 	c.r.due, c.r.along = due, &c.direction
-}
-
-// improveBy takes the sizes that are settled as open, where all are settled.
-func (s *search) improveBy(f *field, state []int8, best *answer) {
-	var open []int32
-	for j, size := range f.sizes {
-		if state[size] == opened {
-			open = append(open, int32(j))
-		}
-	}
-	s.improve(f, open, best)
 }
 
 // settle closes and opens sizes that a better answer cannot or must have, by
@@ -227,8 +218,7 @@ func (c *climb) settle(bound, cost float64) bool {
 	return true
 }
 
-// branchOn chooses the undecided size about which the ascent was most in doubt,
-// -1 where none is undecided.
+// branchOn chooses the undecided size about which the ascent was most in doubt.
 func (c *climb) branchOn() int {
 	branch, doubt := -1, -1.0
 	for j, st := range c.state {
