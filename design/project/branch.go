@@ -70,9 +70,9 @@ func (s *search) solve(ctx context.Context, k int, warm []int32) answer {
 		if node.bound >= cutoff(best.cost) {
 			continue
 		}
-		effort := ascent{steps: 80, scale: 0.3} // the parent's multipliers are near
+		effort := ascent{steps: 50, scale: 0.8} // the parent's multipliers are near
 		if first {
-			effort = ascent{steps: 300, scale: 1.2}
+			effort = ascent{steps: 200, scale: 1.2}
 		}
 		out := s.ascend(ctx, k, node, &best, effort)
 		first = false

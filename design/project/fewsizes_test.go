@@ -97,6 +97,23 @@ func TestMoreSizesAreNeverHeavier(t *testing.T) {
 	}
 }
 
+// TestWorkersDecideNothing looks for the same answers, to the last bit, with
+// another number of workers: parts are added up in their order.
+func TestWorkersDecideNothing(t *testing.T) {
+	for _, deepest := range []int{1, 6} {
+		p := office(rand.New(rand.NewPCG(9, 9)), 1500, 60, deepest)
+		p.Workers = 1
+		want, err := p.FewSizes(context.Background(), 7)
+		require.NoError(t, err)
+		for _, workers := range []int{2, 5} {
+			p.Workers = workers
+			got, err := p.FewSizes(context.Background(), 7)
+			require.NoError(t, err)
+			require.Equal(t, want, got)
+		}
+	}
+}
+
 func TestNoSizeServes(t *testing.T) {
 	inf := math.Inf(1)
 	p := &Problem{Sizes: 2, Chains: []Chain{
