@@ -62,6 +62,33 @@ func TestBlockStandsRightOfEverything(t *testing.T) {
 	}
 }
 
+// A drawing that has its size, and no cell where it ends, is as wide as its
+// columns are: 5 760 000 parts are 604.7 pixels of 9 525 (ECMA-376, 20.1.2.1),
+// which is 8 columns of 71 pixels and half of another, and of 141 pixels 4.
+func TestBlockStandsRightOfDrawingsThatHaveTheirSize(t *testing.T) {
+	const rels = `<Relationships xmlns="http://schemas.openxmlformats.org/package/2006/relationships"><Relationship Id="rId1" Type="http://schemas.openxmlformats.org/officeDocument/2006/relationships/drawing" Target="../drawings/drawing1.xml"/></Relationships>`
+	const from = `<oneCellAnchor><from><col>6</col><colOff>0</colOff><row>7</row><rowOff>0</rowOff></from><ext cx="5760000" cy="2700000"/></oneCellAnchor>`
+	// 7 columns of 64 pixels and 7 rows of 20 pixels.
+	const at = `<absoluteAnchor><pos x="4267200" y="1333500"/><ext cx="5760000" cy="2700000"/></absoluteAnchor>`
+	const cols = `<cols><col min="7" max="30" width="10.14" customWidth="1"/></cols>`
+	const wide = `<cols><col min="7" max="8" width="20.14" customWidth="1"/><col min="9" max="30" width="20.14" customWidth="1"/></cols>`
+	const above = `<oneCellAnchor><from><col>6</col><colOff>0</colOff><row>0</row><rowOff>0</rowOff></from><ext cx="5760000" cy="190500"/></oneCellAnchor>`
+	for name, c := range map[string]struct{ cols, drawing, want string }{
+		"from a cell":        {cols, from, "P"},
+		"over wide columns":  {wide, from, "L"},
+		"usual columns":      {"", from, "Q"},
+		"from a point":       {"", at, "R"},
+		"above the headings": {cols, above, "F"},
+	} {
+		sheet := strings.Replace(worksheet("", `<drawing r:id="rId1"/>`), "<sheetData>", c.cols+"<sheetData>", 1)
+		p := planFor(t, handmade(sheet, parts{
+			"xl/worksheets/_rels/sheet1.xml.rels": rels,
+			"xl/drawings/drawing1.xml":            `<wsDr xmlns="http://schemas.openxmlformats.org/drawingml/2006/spreadsheetDrawing">` + c.drawing + `</wsDr>`,
+		}).bytes(t), simpleBlock(14))
+		assert.Equal(t, c.want, p.Column(0), name)
+	}
+}
+
 func TestHeadingsFitTheRoomThereIs(t *testing.T) {
 	rows := func(p *Plan) [4]int { return [4]int{p.place.title, p.place.group, p.place.heading, p.place.unit} }
 

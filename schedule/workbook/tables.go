@@ -38,44 +38,6 @@ func (b *Book) tables(s *sheet) ([]table, error) {
 	return out, nil
 }
 
-// drawn returns the cells that drawings on a sheet stand over.
-func (b *Book) drawn(s *sheet) ([]area, error) {
-	rels, err := b.pkg.Rels(s.part)
-	if err != nil {
-		return nil, err
-	}
-	var out []area
-	for _, r := range rels {
-		if !r.Is("drawing") || r.Outside || !b.pkg.Has(r.Target) {
-			continue
-		}
-		root, _, err := b.pkg.Tree(r.Target)
-		if err != nil {
-			return nil, err
-		}
-		for _, anchor := range root.Children {
-			from, to := anchor.Child("from"), anchor.Child("to")
-			if from == nil {
-				continue // placed on the page, not on cells
-			}
-			if to == nil {
-				to = from
-			}
-			out = append(out, area{cornerOf(from, "row") + 1, cornerOf(to, "row") + 1, cornerOf(from, "col"), cornerOf(to, "col")})
-		}
-	}
-	return out, nil
-}
-
-func cornerOf(e *markup.Element, name string) int {
-	c := e.Child(name)
-	if c == nil {
-		return 0
-	}
-	n, _ := strconv.Atoi(strings.TrimSpace(c.Text()))
-	return min(max(n, 0), maxRows)
-}
-
 // widenTables lets the table in which the schedule stands take in the results,
 // so that sorting it keeps them with their rows.
 func (p *Plan) widenTables(d *draft) error {
