@@ -36,6 +36,7 @@ func summarySheet(info *Info, t *Tally) workbook.Sheet {
 
 func (p *page) outcomes(t *Tally) {
 	p.Blank()
+	p.Begin()
 	p.Headings("Outcome", ">Members")
 	for _, s := range []design.Status{design.Passes, design.Fails, design.NoSection, design.NotRead} {
 		name := workbook.TextCell(s.String())
@@ -49,6 +50,7 @@ func (p *page) outcomes(t *Tally) {
 
 func (p *page) steel(t *Tally) {
 	p.Blank()
+	p.Begin()
 	p.Headings("Steel", ">Lengths", ">Length [m]", ">Mass [t]")
 	list := t.Steel()
 	for _, s := range list {
@@ -60,6 +62,7 @@ func (p *page) steel(t *Tally) {
 
 func (p *page) settings(info *Info) {
 	p.Blank()
+	p.Begin()
 	p.Headings("Setting", "Value", "From")
 	for _, s := range info.Settings {
 		p.Row(workbook.TextCell(s.Name), workbook.TextCell(s.Value), workbook.TextCell(s.From))
@@ -70,20 +73,29 @@ func (p *page) settings(info *Info) {
 func (p *page) reading(info *Info) {
 	s := info.Reading
 	p.Blank()
-	p.Headings("Reading", "")
-	p.Row(workbook.TextCell("rows of members"), workbook.TextCell(strconv.Itoa(s.Rows)))
+	p.Begin()
+	p.Headings("Reading", "", "", "", "")
+	p.Span(1, 4)
+	p.read("rows of members", strconv.Itoa(s.Rows))
 	for _, c := range passedOver(s) {
-		p.Row(workbook.TextCell(c.what), workbook.TextCell(strconv.Itoa(c.n)))
+		p.read(c.what, strconv.Itoa(c.n))
 	}
 	for _, h := range s.LeftAlone {
-		p.Row(workbook.TextCell("left alone"), workbook.Cell{Value: fmt.Sprintf("%s %q: %s", h.Cell, h.Heading, h.Why)})
+		p.read("left alone", fmt.Sprintf("%s %q: %s", h.Cell, h.Heading, h.Why))
 	}
 	for _, h := range s.Other {
-		p.Row(workbook.TextCell("not used"), workbook.Cell{Value: fmt.Sprintf("%s %q", h.Cell, h.Heading)})
+		p.read("not used", fmt.Sprintf("%s %q", h.Cell, h.Heading))
 	}
 	for _, n := range s.Notes {
-		p.Row(workbook.TextCell("note"), workbook.Cell{Value: n})
+		p.read("note", n)
 	}
+}
+
+// read adds a line on what the reading came upon, as long as it may be.
+func (p *page) read(what, text string) {
+	none := workbook.TextCell("")
+	p.Row(workbook.TextCell(what), workbook.WordsCell(text), none, none, none)
+	p.Span(1, 4)
 }
 
 // counted is how many rows there are of a kind.
@@ -105,6 +117,7 @@ func passedOver(s *schedule.Summary) []counted {
 
 func (p *page) cautions(info *Info) {
 	p.Blank()
+	p.Begin()
 	p.Row(workbook.LabelCell("Cautions"))
 	for _, c := range info.Cautions {
 		p.Across(5, workbook.Cell{Value: c, Look: workbook.Look{Role: workbook.Remark}})

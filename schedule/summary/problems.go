@@ -91,9 +91,14 @@ func (p *problemsPage) line(i int, l *Line, at, what, do string) {
 		checkCell(l), workbook.WordsCell(what), workbook.WordsCell(do))
 }
 
-// cell names a cell of the schedule and leads to it.
+// cell names a cell of the schedule and leads to it. The sheet is named where
+// it is another than the schedule's own.
 func (p *problemsPage) cell(at string) workbook.Cell {
-	c := workbook.TextCell(at)
+	name := at
+	if i := strings.LastIndexByte(at, '!'); i >= 0 && at[:i] == p.info.Sheet {
+		name = cellOf(at)
+	}
+	c := workbook.TextCell(name)
 	c.Link = workbook.Place(p.info.Sheet, at)
 	return c
 }

@@ -45,6 +45,8 @@ func TestSheets(t *testing.T) {
 
 	failing, unread := own.Problems.Rows[3], own.Problems.Rows[4] // below title, blank, headings
 	assert.Equal(t, "'C''1'!A3", failing[0].Link)
+	assert.Equal(t, "A3", failing[0].Value, "a cell of the schedule's own sheet, which may have a long name")
+	assert.Len(t, own.Summary.Tables, 5, "each kept on one printed page")
 	assert.Equal(t, "'Results'!G6", failing[4].Link)
 	assert.Equal(t, "", failing[5].Value, "an endless utilisation is no number")
 	assert.Equal(t, "outside the rules", failing[7].Value)

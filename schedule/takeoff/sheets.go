@@ -223,12 +223,12 @@ func (p *page) remarks() {
 		}
 		p.Blank()
 		p.Begin()
-		p.Headings(list.heading, "", "Cell", "", "Why", "", "", "", "")
+		p.Headings(list.heading, "", "Cell", "", "", "Why", "", "", "")
 		p.remarkSpans()
 		for i := range list.lines {
 			l := &list.lines[i]
 			none := workbook.TextCell("")
-			p.Row(workbook.TextCell(l.Name), none, workbook.TextCell(l.Cell), none, workbook.WordsCell(l.Why), none, none, none, none)
+			p.Row(workbook.TextCell(l.Name), none, workbook.WordsCell(l.Cell), none, none, workbook.WordsCell(l.Why), none, none, none)
 			p.remarkSpans()
 		}
 	}
@@ -239,8 +239,8 @@ func (p *page) remarks() {
 // said of it.
 func (p *page) remarkSpans() {
 	p.Span(0, 1)
-	p.Span(2, 3)
-	p.Span(4, tableColumns-1)
+	p.Span(2, 4)
+	p.Span(5, tableColumns-1)
 }
 
 // shortList joins marks, as many as a cell shows whole; the CSV has them all.
