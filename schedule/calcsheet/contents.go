@@ -119,13 +119,24 @@ func (d *document) missing(y float64) {
 	if len(d.project.Missing) == 0 {
 		return
 	}
-	y += 3
-	write(d.canvas, marginLeft, y, "Members without a sheet", bold, 8*pt, atLeft)
+	const gap = 0.6 // mm, above each
+	head := func(at float64) float64 {
+		write(d.canvas, marginLeft, at, "Members without a sheet", bold, 8*pt, atLeft)
+		return at
+	}
+	begun := false
 	for _, m := range d.project.Missing {
-		if y > bodyBottom-8 {
+		text := place(m.Column) + ": " + m.Why
+		set := setter{width: textWidth / listSize}
+		high := gap + 1.3*listSize*float64(len(set.fill(words(text, upright), 0, 0)))
+		switch {
+		case !begun && y+3+high > bodyBottom, y+high > bodyBottom:
 			d.page("Contents")
-			y = marginTop + titleHeight + 2
+			y = head(marginTop + titleHeight + 4)
+		case !begun:
+			y = head(y + 3)
 		}
-		y = d.paragraph(marginLeft, y+0.6, textWidth, place(m.Column)+": "+m.Why, upright, listSize)
+		begun = true
+		y = d.paragraph(marginLeft, y+gap, textWidth, text, upright, listSize)
 	}
 }

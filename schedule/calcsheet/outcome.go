@@ -2,6 +2,7 @@ package calcsheet
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"stanchion/design"
@@ -94,7 +95,8 @@ const figures = "Numbers stand to as many figures as those before them support: 
 func closing(s *working.Sheet) []string { return append(beyond(s), figures, caution) }
 
 // beyond is what is known beyond the checks: the rules that do not cover the
-// section, mass, the reserve, the next lighter section.
+// section, mass, the reserve, the next lighter section, what was noted of the
+// column.
 func beyond(s *working.Sheet) []string {
 	r := s.Result
 	var lines []string
@@ -111,5 +113,21 @@ func beyond(s *working.Sheet) []string {
 		lines = append(lines, fmt.Sprintf("Next lighter: %s %s, utilisation %s in %s.", r.NextLighter, r.NextLighterGrade,
 			working.Utilisation(r.NextLighterUtilisation), schedule.CheckName(r.NextLighterCheck.Kind)))
 	}
+	for _, n := range told(s) {
+		lines = append(lines, "Note: "+n+".")
+	}
 	return lines
+}
+
+// told is what the choice of the section and the reading of the row have to
+// say, beside the notes of the working itself: without it nobody sees why a
+// column has the section of the one below.
+func told(s *working.Sheet) []string {
+	var out []string
+	for _, n := range slices.Concat(s.Result.Notes, s.Column.Notes) {
+		if !slices.Contains(s.Notes, n) && !slices.Contains(out, n) {
+			out = append(out, n)
+		}
+	}
+	return out
 }
