@@ -173,8 +173,7 @@ func (m *Member) lateralChecks(c *Candidate, a *Assessment, b *bending) {
 			n += m.ownWeight(c.Section.Mass, s.From)
 		}
 		class, _ := c.CombinedClass(n, true, mz > 0)
-		lt := c.lateral(my, s.Lcr, class, m.Settings)
-		lt.From, lt.To, lt.Combination = s.From, s.To, s.Combination
+		lt := m.lateral(c, s, my, class)
 		if a.Lateral.Class == 0 || exceeds(lt.Utilisation, a.Lateral.Utilisation) {
 			a.Lateral = lt
 		}

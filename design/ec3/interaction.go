@@ -82,8 +82,7 @@ func (m *Member) interact(c *Candidate, y, z, t *Segment, actions *bending) (x I
 	x.ChiY, x.ChiZ = Chi(c.AlphaY, x.LambdaY), Chi(c.AlphaZ, x.LambdaZ)
 	x.RatioY, x.RatioZ = x.NY*c.GammaM1/(x.ChiY*x.NRk), x.NZ*c.GammaM1/(x.ChiZ*x.NRk)
 
-	lt := c.lateral(inLT, t.Lcr, x.Class, m.Settings)
-	lt.From, lt.To, lt.Combination = t.From, t.To, t.Combination
+	lt := m.lateral(c, t, inLT, x.Class)
 	x.LT, x.ChiLT = lt, lt.ChiMod
 	if m.Settings.Interaction == design.AnnexA {
 		x.NcrT = math.Inf(1)

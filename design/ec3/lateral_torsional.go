@@ -29,6 +29,7 @@ type Lateral struct {
 	Class       int
 	MyEd        float64 // greatest in the segment, N mm
 	Psi, C1, Kc float64
+	Beyond      bool    // C1 is not from the table of NCCI SN003a: see C1Free
 	L           float64 // mm
 	Mcr         float64 // N mm; 0: the section does not buckle laterally
 	Mcr0        float64 // under uniform moment, N mm
@@ -94,7 +95,8 @@ func CurveLT(s *catalogue.Section, curves design.LTBCurves, method design.LTBMet
 }
 
 // Kc returns the correction factor for the moment distribution: 1/sqrt(C1) by
-// the UK NA (NA.2.18), else Table 6.6 for a linear diagram.
+// the UK NA (NA.2.18), else Table 6.6 for a linear diagram. Table 6.6 goes with
+// lengths held against twist at both ends: beyond it 1/sqrt(C1) is used too.
 func Kc(psi, c1 float64, fromC1 bool) float64 {
 	if fromC1 {
 		return 1 / math.Sqrt(c1)
@@ -114,15 +116,19 @@ func ChiLT(alpha, lambdaBar float64) (phi, chi float64) {
 	return phi, min(chi, 1, 1/(lambdaBar*lambdaBar))
 }
 
-// lateral works out M_b,Rd of a segment of length l, mm, in which the moment
-// about y-y has the ordinates m, N mm, at the class that the section has.
-// EN 1993-1-1:2005 6.3.2.
-func (c *Candidate) lateral(m design.EndMoments, l float64, class int, set *design.Settings) (x Lateral) {
-	x = Lateral{Class: class, MyEd: greatest(m), Psi: Psi(m), L: l, Chi: 1, F: 1, ChiMod: 1}
+// lateral works out M_b,Rd of a segment of the member at the class that the
+// section has there, the moment about y-y having the ordinates my at the ends
+// of the segment, N mm. EN 1993-1-1:2005 6.3.2.
+func (m *Member) lateral(c *Candidate, s *Segment, my design.EndMoments, class int) (x Lateral) {
+	x = Lateral{From: s.From, To: s.To, Combination: s.Combination, Class: class,
+		MyEd: greatest(my), Psi: Psi(my), L: s.Lcr, Chi: 1, F: 1, ChiMod: 1}
 	x.WY, _ = c.modulus(class)
 	x.C1 = C1(x.Psi)
+	if free, atFree := m.freeEnd(s, my); free {
+		x.C1, x.Beyond = C1Free(x.Psi, atFree), beyondTable(x.Psi, atFree)
+	}
 	if bucklesLaterally(c.Section) {
-		c.reduceLaterally(&x, set)
+		c.reduceLaterally(&x, m.Settings)
 	}
 	x.MbRd = x.ChiMod * x.WY * c.Fy / c.GammaM1 // (6.55)
 	x.Utilisation = x.MyEd / x.MbRd             // (6.54)
@@ -141,7 +147,7 @@ func (c *Candidate) reduceLaterally(x *Lateral, set *design.Settings) {
 		x.ChiMod = x.Chi
 		return
 	}
-	x.Kc = Kc(x.Psi, x.C1, set.National.KcFromC1)
+	x.Kc = Kc(x.Psi, x.C1, set.National.KcFromC1 || x.Beyond)
 	x.Phi, x.Chi = ChiLT(x.Alpha, x.LambdaBar)
 	d := x.LambdaBar - 0.8
 	x.F = min(1, 1-0.5*(1-x.Kc)*(1-2*d*d))

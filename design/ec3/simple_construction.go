@@ -112,9 +112,8 @@ func (m *Member) simplified(c *Candidate, a *Assessment, b *bending) Simple {
 	x.NbMinRd = min(x.NbyRd, m.leastNb(a.SegZ, b.combination, c.EulerZ, c.AlphaZ, nRk)/c.GammaM1)
 	for i := range a.SegT {
 		if s := &a.SegT[i]; s.Combination == b.combination {
-			lt := c.lateral(between(b.my, s.From, s.To, m.Length), s.Lcr, x.Class, m.Settings)
+			lt := m.lateral(c, s, between(b.my, s.From, s.To, m.Length), x.Class)
 			if x.MbRd == 0 || exceeds(lt.Utilisation, x.TermY) {
-				lt.From, lt.To, lt.Combination = s.From, s.To, s.Combination
 				x.TermY, x.MbRd, x.LT = lt.Utilisation, lt.MbRd, lt
 			}
 		}

@@ -37,7 +37,7 @@ func (w *writer) chiLT(x *ec3.Lateral) {
 	}
 	wy, _ := moduli(x.Class)
 	w.add(Values{w.value("L_LT", x.L, Mm), w.noted("ψ_LT", x.Psi, None, "ratio of the moments at its ends"),
-		w.noted("C_1", x.C1, None, "NCCI SN003")})
+		w.noted("C_1", x.C1, None, c1Source(x))})
 	source := "C_1 π^2 E I_z/L_LT^2 √(I_w/I_z + L_LT^2 G I_t/(π^2 E I_z))"
 	if w.c.Section.Iw == 0 {
 		source = "C_1 π^2 E I_z/L_LT^2 √(L_LT^2 G I_t/(π^2 E I_z))"
@@ -54,6 +54,14 @@ func (w *writer) chiLT(x *ec3.Lateral) {
 	w.rolled(x)
 }
 
+// c1Source says where C_1 is from.
+func c1Source(x *ec3.Lateral) string {
+	if x.Beyond {
+		return "an end free to twist: below NCCI SN003"
+	}
+	return "NCCI SN003"
+}
+
 // rolled writes the method for rolled sections. EN 1993-1-1:2005 6.3.2.3.
 func (w *writer) rolled(x *ec3.Lateral) {
 	w.find("Φ_LT", "0.5 (1 + α_LT (λ̄_LT - 0.4) + 0.75 λ̄_LT^2)", x.Phi, None, "6.3.2.3(1)")
@@ -64,8 +72,11 @@ func (w *writer) rolled(x *ec3.Lateral) {
 	}
 	kc := "1/(1.33 - 0.33 ψ_LT)"
 	clause := "Table 6.6"
-	if w.m.Settings.National.KcFromC1 {
+	switch {
+	case w.m.Settings.National.KcFromC1:
 		kc, clause = "1/√(C_1)", "UK NA"
+	case x.Beyond:
+		kc, clause = "1/√(C_1)", ""
 	}
 	w.find("k_c", kc, x.Kc, None, clause)
 	w.find("f", "min(1 - 0.5 (1 - k_c) (1 - 2 (λ̄_LT - 0.8)^2), 1)", x.F, None, "6.3.2.3(2)")
