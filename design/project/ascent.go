@@ -42,17 +42,11 @@ func (s *search) ascend(ctx context.Context, k int, node branchNode, best *answe
 			return outcome{closed: true}
 		}
 		c.count()
-		if c.scale < effort.scale/4 || step >= effort.steps/2 {
-			bound = c.freePrices(bound, best)
-		}
 		if step >= effort.steps || c.scale < 1e-4 || ctx.Err() != nil {
 			break
 		}
-		if !c.r.step(s, &c.direction, c.scale*(aim(best.cost, bound)-bound)) {
-			if len(c.at.level) == 0 {
-				break // the relaxation's choice serves every node: its bound is its cost
-			}
-			c.freePrices(bound, best)
+		if !c.r.step(s, c.state, &c.direction, c.scale*(aim(best.cost, bound)-bound)) {
+			break
 		}
 		c.shrink()
 	}
@@ -142,21 +136,6 @@ func (c *climb) count() {
 			c.often[size] += 0.1
 		}
 	}
-}
-
-// freePrices lets every price of a strand's node move on its own, once one level
-// a node has raised the bound as far as it goes.
-func (c *climb) freePrices(bound float64, best *answer) float64 {
-	if len(c.at.level) == 0 {
-		return bound
-	}
-	c.at.copy(&c.keep)
-	bound = c.r.bound(c.s, c.state)
-	c.polish(best)
-	c.at.free(c.f)
-	c.keep, c.direction = c.at.clone(), c.at.ahead(len(c.s.parts))
-	c.scale, c.stale = 1.2, 0
-	return bound
 }
 
 // shrink leaves closed sizes out of the field once enough are closed to make

@@ -17,6 +17,8 @@ type relaxation struct {
 	pick   []bool    // the K columns that are worth most
 	order  []int32   // the columns that may be picked, the worthiest first
 	picked []int32   // the K first of them
+	share  []float64 // by column, for the next step: how far it is open
+	shared []int32   // the columns that have a share
 	taken  []int32   // by node: the column of the strand's own optimum
 	tasks  []task    // by part
 
@@ -42,6 +44,7 @@ type task struct {
 func newRelaxation(s *search, f *field, k int, m *multipliers) *relaxation {
 	r := &relaxation{multipliers: m, f: f, k: k, at: placement{s.workers, s.parts, f.solvers(s.workers)}}
 	r.worth, r.pick = make([]float64, len(f.sizes)), make([]bool, len(f.sizes))
+	r.share = make([]float64, len(f.sizes))
 	r.taken = make([]int32, f.cost.rows())
 	r.tasks = make([]task, len(s.parts))
 	for i := range r.tasks {
@@ -76,16 +79,11 @@ func (r *relaxation) bound(s *search, state []int8) float64 {
 	return total
 }
 
-// move takes the step that is due for the rows and levels of one part; prices
-// are moved as they are charged.
+// move takes the step that is due for the rows of one part; prices are moved as
+// they are charged.
 func (r *relaxation) move(s *search, p *part) {
 	for i := p.rows[0]; i < p.rows[1]; i++ {
 		r.u[i] += r.due * s.rowScale[i] * r.along.u[i]
-	}
-	if from, to := p.nodes(r.f.strands); len(r.level) > 0 {
-		for i := from; i < to; i++ {
-			r.level[i] += r.due * s.nodeScale[i] * r.along.level[i]
-		}
 	}
 }
 
@@ -121,17 +119,6 @@ func (r *relaxation) evaluate(s *search, solver *chainSolver, p *part, t *task) 
 func (r *relaxation) charge(node int, scale float64, cost, worth []float64) {
 	own := r.f.cost.row(node)
 	cost, worth = cost[:len(own)], worth[:len(own)]
-	if len(r.level) > 0 {
-		level := r.level[node]
-		for j, v := range own {
-			if v < level {
-				worth[j] += level - v
-				v = level
-			}
-			cost[j] = v
-		}
-		return
-	}
 	price := r.price.row(node)[:len(own)]
 	if r.due == 0 {
 		for j, v := range own {

@@ -25,7 +25,7 @@ func (d *direction) only(cols []int32, parts []part, strands []strand) direction
 	o := direction{multipliers: d.multipliers.only(cols), fade: d.fade, square: make([]float64, len(d.square))}
 	for i := range parts {
 		from, to := parts[i].nodes(strands)
-		for n := from; n < to && len(o.price.flat) > 0; n++ {
+		for n := from; n < to; n++ {
 			for _, g := range o.price.row(n) {
 				o.square[i] += g * g * o.fade * o.fade
 			}
@@ -34,10 +34,12 @@ func (d *direction) only(cols []int32, parts []part, strands []strand) direction
 	return o
 }
 
-// step turns the direction by the subgradient, and sets the length of the step
+// step turns the direction by the subgradient where the places are spread over
+// nearly equal columns, and sets the length of the step
 // that the next bound takes along it by Polyak's rule: the distance to the
 // target over the square of the direction. It reports false where that is nil.
-func (r *relaxation) step(s *search, d *direction, distance float64) bool {
+func (r *relaxation) step(s *search, state []int8, d *direction, distance float64) bool {
+	r.spread(state, distance)
 	d.fade *= momentum
 	each(r.at.workers, len(r.tasks), func(_, i int) { r.turn(s, d, i) })
 	square := 0.0
@@ -63,50 +65,25 @@ func (r *relaxation) turn(s *search, d *direction, part int) {
 	d.square[part] *= momentum * momentum
 	from, to := p.nodes(r.f.strands)
 	for i := from; i < to; i++ {
-		if len(r.level) > 0 {
-			g := momentum*d.level[i] + s.nodeScale[i]*r.levelShortOf(i)
-			d.level[i] = g
-			t.square += g * g
-			continue
-		}
 		d.square[part] += r.turnPrices(i, d, s.nodeScale[i])
 	}
 }
 
-// shortOf is a row's subgradient: one, less the open columns that pay it.
+// shortOf is a row's subgradient: one, less the shares of columns that it pays.
 func (r *relaxation) shortOf(row int) float64 {
 	g := 1.0
 	for _, o := range r.f.offers[row] {
 		if o.cost >= r.u[row] {
 			break
 		}
-		if r.pick[o.col] {
-			g--
-		}
+		g -= r.share[o.col]
 	}
 	return g
 }
 
-// levelShortOf is the same for a node of a strand while one level sets its
-// prices: nothing, less the open columns, where it takes a column that it does
-// not pay for.
-func (r *relaxation) levelShortOf(node int) float64 {
-	cost, level, g := r.f.cost.row(node), r.level[node], 0.0
-	if cost[r.taken[node]] < level {
-		g = 1
-	}
-	for _, j := range r.picked {
-		if cost[j] < level {
-			g--
-		}
-	}
-	return g
-}
-
-// turnPrices is the same where every price of a node moves on its own: up where
-// it takes a column that is not among the K, down where a column is open and
-// the node pays for it without taking it. It returns what that adds to the
-// square of the direction.
+// turnPrices turns the prices of a node: up by what is short of the column that
+// it takes, down by the shares of columns that it pays without taking them. It
+// returns what that adds to the square of the direction.
 func (r *relaxation) turnPrices(node int, d *direction, scale float64) (square float64) {
 	turn, price, taken := d.price.row(node), r.price.row(node), r.taken[node]
 	add := func(j int32, g float64) {
@@ -114,13 +91,13 @@ func (r *relaxation) turnPrices(node int, d *direction, scale float64) (square f
 		turn[j] += g / d.fade
 		square += (had+g)*(had+g) - had*had
 	}
-	for _, j := range r.picked {
+	for _, j := range r.shared {
 		if j != taken && price[j] > 0 {
-			add(j, -scale)
+			add(j, -scale*r.share[j])
 		}
 	}
-	if !r.pick[taken] {
-		add(taken, scale)
+	if short := 1 - r.share[taken]; short > 0 {
+		add(taken, scale*short)
 	}
 	return square
 }
