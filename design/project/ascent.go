@@ -105,7 +105,7 @@ const (
 func (c *climb) compare(bound float64, best *answer) float64 {
 	if bound > c.top+1e-12*math.Abs(bound) {
 		c.top, c.stale = bound, 0
-		c.keep.copy(c.at)
+		c.keep.copy(c.at, c.s.workers)
 		if c.streak++; c.streak >= streak {
 			c.scale, c.streak = min(2, c.scale*longer), 0
 		}
@@ -116,8 +116,8 @@ func (c *climb) compare(bound float64, best *answer) float64 {
 		return bound
 	}
 	c.scale, c.stale = c.scale/2, 0
-	c.at.copy(&c.keep)
-	c.direction = c.at.ahead(len(c.s.parts))
+	c.at.copy(&c.keep, c.s.workers)
+	c.direction.rest()
 	bound = c.r.bound(c.s, c.state)
 	c.polish(best)
 	return bound
@@ -154,9 +154,9 @@ func (c *climb) narrow(part float64) {
 	if len(cols) == len(c.f.sizes) || float64(len(cols)) > part*float64(len(c.f.sizes)) {
 		return
 	}
-	c.f = c.f.only(cols)
-	*c.at = c.at.only(cols)
-	c.keep, c.direction = c.keep.only(cols), c.direction.only(cols, c.s.parts, c.f.strands)
+	c.f = c.f.only(cols, c.s.workers)
+	*c.at = c.at.only(cols, c.s.workers)
+	c.keep, c.direction = c.keep.only(cols, c.s.workers), c.direction.only(cols, c.s)
 	due := c.r.due
 	c.r = newRelaxation(c.s, c.f, c.k, c.at)
 	c.r.due, c.r.along = due, &c.direction

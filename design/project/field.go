@@ -20,8 +20,8 @@ type offer struct {
 }
 
 // only is the field with these columns of it, given rising.
-func (f *field) only(cols []int32) *field {
-	o := &field{rows: f.rows.only(cols), cost: f.cost.only(cols), strands: f.strands, longest: f.longest}
+func (f *field) only(cols []int32, workers int) *field {
+	o := &field{rows: f.rows.only(cols, workers), cost: f.cost.only(cols, workers), strands: f.strands, longest: f.longest}
 	place := make([]int32, len(f.sizes))
 	for j := range place {
 		place[j] = -1

@@ -53,9 +53,9 @@ func (m *multipliers) clone() multipliers {
 }
 
 // copy takes the values of from, which has the same shape.
-func (m *multipliers) copy(from *multipliers) {
+func (m *multipliers) copy(from *multipliers, workers int) {
 	copy(m.u, from.u)
-	copy(m.price.flat, from.price.flat)
+	m.price.copy(from.price, workers)
 }
 
 // zero is as many multipliers, all 0.
@@ -64,6 +64,6 @@ func (m *multipliers) zero() multipliers {
 }
 
 // only keeps the prices of these columns.
-func (m *multipliers) only(cols []int32) multipliers {
-	return multipliers{slices.Clone(m.u), m.price.only(cols)}
+func (m *multipliers) only(cols []int32, workers int) multipliers {
+	return multipliers{slices.Clone(m.u), m.price.only(cols, workers)}
 }

@@ -20,17 +20,25 @@ func (m *multipliers) ahead(parts int) direction {
 	return direction{multipliers: m.zero(), fade: 1, square: make([]float64, parts)}
 }
 
+// rest forgets the direction.
+func (d *direction) rest() {
+	clear(d.u)
+	clear(d.price.flat)
+	clear(d.square)
+	d.fade = 1
+}
+
 // only keeps the prices of these columns.
-func (d *direction) only(cols []int32, parts []part, strands []strand) direction {
-	o := direction{multipliers: d.multipliers.only(cols), fade: d.fade, square: make([]float64, len(d.square))}
-	for i := range parts {
-		from, to := parts[i].nodes(strands)
+func (d *direction) only(cols []int32, s *search) direction {
+	o := direction{multipliers: d.multipliers.only(cols, s.workers), fade: d.fade, square: make([]float64, len(d.square))}
+	each(s.workers, len(s.parts), func(_, i int) {
+		from, to := s.parts[i].nodes(s.f.strands)
 		for n := from; n < to; n++ {
 			for _, g := range o.price.row(n) {
 				o.square[i] += g * g * o.fade * o.fade
 			}
 		}
-	}
+	})
 	return o
 }
 
