@@ -127,9 +127,13 @@ func (r *relaxation) charge(node int, scale float64, cost, worth []float64) {
 		}
 		return
 	}
-	turn, far := r.along.price.row(node)[:len(own)], r.due*scale*r.along.fade
+	turn, far, shift := r.along.price.row(node)[:len(own)], r.due*scale*r.along.fade, r.due*scale*r.along.shift[node]
 	for j, v := range own {
-		p := price[j] + far*turn[j]
+		p := price[j]
+		if p > 0 {
+			p += shift
+		}
+		p += far * turn[j]
 		if p < 0 {
 			p = 0
 		}

@@ -5,24 +5,29 @@ package project
 // 26-34): plain subgradients zigzag.
 const momentum = 0.9
 
-// direction is that of the last step. Of the many prices few are turned at a
-// time, while momentum fades all: the prices' part is kept as if nothing had
-// faded, 1/fade times too large, and its square beside it. An ascent takes
-// hundreds of steps, so that fade stays far above the smallest number.
+// direction is that of the last step. Beside a turn of its own, every price of a
+// node that is not nil moves with the node's shift: what is short of columns that
+// the node pays, as with the u of a row, without which each column's price would
+// have to find its way alone. Of the many turns few change at a time, while
+// momentum fades all: they are kept as if nothing had faded, 1/fade times too
+// large, and their square beside them. An ascent takes hundreds of steps, so that
+// fade stays far above the smallest number.
 type direction struct {
-	multipliers
-	fade   float64
-	square []float64 // by part, of the prices
+	multipliers           // u, and the turns of prices
+	shift       []float64 // by node
+	fade        float64
+	square      []float64 // by part, of the turns
 }
 
 // ahead is no direction yet.
 func (m *multipliers) ahead(parts int) direction {
-	return direction{multipliers: m.zero(), fade: 1, square: make([]float64, parts)}
+	return direction{m.zero(), make([]float64, m.price.rows()), 1, make([]float64, parts)}
 }
 
 // rest forgets the direction.
 func (d *direction) rest() {
 	clear(d.u)
+	clear(d.shift)
 	clear(d.price.flat)
 	clear(d.square)
 	d.fade = 1
@@ -30,7 +35,7 @@ func (d *direction) rest() {
 
 // only keeps the prices of these columns.
 func (d *direction) only(cols []int32, s *search) direction {
-	o := direction{multipliers: d.multipliers.only(cols, s.workers), fade: d.fade, square: make([]float64, len(d.square))}
+	o := direction{d.multipliers.only(cols, s.workers), d.shift, d.fade, make([]float64, len(d.square))}
 	each(s.workers, len(s.parts), func(_, i int) {
 		from, to := s.parts[i].nodes(s.f.strands)
 		for n := from; n < to; n++ {
@@ -73,6 +78,9 @@ func (r *relaxation) turn(s *search, d *direction, part int) {
 	d.square[part] *= momentum * momentum
 	from, to := p.nodes(r.f.strands)
 	for i := from; i < to; i++ {
+		g := momentum*d.shift[i] + s.nodeScale[i]*r.nodeShortOf(i)
+		d.shift[i] = g
+		t.square += g * g
 		d.square[part] += r.turnPrices(i, d, s.nodeScale[i])
 	}
 }
@@ -85,6 +93,21 @@ func (r *relaxation) shortOf(row int) float64 {
 			break
 		}
 		g -= r.share[o.col]
+	}
+	return g
+}
+
+// nodeShortOf is the same of a node: one if it pays the column that it takes,
+// less the shares of columns that it pays.
+func (r *relaxation) nodeShortOf(node int) float64 {
+	price, g := r.price.row(node), 0.0
+	if price[r.taken[node]] > 0 {
+		g = 1
+	}
+	for _, j := range r.shared {
+		if price[j] > 0 {
+			g -= r.share[j]
+		}
 	}
 	return g
 }
