@@ -2,6 +2,7 @@ package ec3_test
 
 import (
 	"math"
+	"slices"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
@@ -388,4 +389,37 @@ func TestNotesNameWhatIsOverridden(t *testing.T) {
 	require.Len(t, m.Notes, 2)
 	assert.Contains(t, m.Notes[0], "y-y restraints at 3 m")
 	assert.Contains(t, m.Notes[1], "L_T is given")
+}
+
+// A buckling length that no ends can explain does not go with the diagram of the
+// whole length: the row says so, and what the restraint itself would give is
+// worse.
+func TestNotesWarnOfShortGivenLengths(t *testing.T) {
+	col := loaded(8000, 300e3)
+	col.Combinations[0].My = design.EndMoments{Bottom: 250e6, Top: -250e6}
+	given, held := *col, *col
+	given.Z.Lcr = 4000
+	held.Z.Restraints = []float64{4000}
+	c := candidate(t, section(t, "457x191x67 UKB"), "S355", settings())
+	a := assess(t, &given, c, settings())
+	require.Len(t, a.Notes(), 1)
+	assert.Contains(t, a.Notes()[0], "L_cr,z given below 0.7 L")
+	b := assess(t, &held, c, settings())
+	assert.Empty(t, b.Notes())
+	assert.Greater(t, b.Utilisation, 1.1*a.Utilisation)
+
+	for name, quiet := range map[string]func(*design.Column){
+		"fixed ends":     func(col *design.Column) { col.Z.Lcr = 5600 },
+		"uniform moment": func(col *design.Column) { col.Combinations[0].My.Top = 250e6 },
+		"no moment":      func(col *design.Column) { col.Combinations[0].My = design.EndMoments{} },
+	} {
+		given := given
+		given.Combinations = slices.Clone(given.Combinations)
+		quiet(&given)
+		assert.Empty(t, assess(t, &given, c, settings()).Notes(), name)
+	}
+	tube := candidate(t, section(t, "CHS 323.9x10.0"), "S355H", settings())
+	assert.Empty(t, assess(t, &given, tube, settings()).Notes(), "nothing of a tube rests on L_cr,z")
+	given.Y.K = 0.5
+	assert.Contains(t, assess(t, &given, tube, settings()).Notes()[0], "k_y given")
 }

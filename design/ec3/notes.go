@@ -57,12 +57,18 @@ func (m *Member) reactionsLeftOut() bool {
 
 // Notes says what a person must know of how the checks were chosen in the
 // candidate: where (6.61) and (6.62) stand in the place of the criterion of
-// simple construction, and why; where C1 is not the table's. A rule that does
-// not cover the member is a check of its own, with the reason.
+// simple construction, and why; where C1 is not the table's; where a given
+// length does not go with the moments. A rule that does not cover the member is
+// a check of its own, with the reason.
 func (a *Assessment) Notes() []string {
 	var notes []string
 	if a.Lateral.Beyond && a.Lateral.Alpha > 0 {
 		notes = append(notes, "an end is free to twist: C1 is taken lower than NCCI SN003's, which is for lengths held against twist at both ends")
+	}
+	if a.Interaction.Class > 0 || a.Lateral.Class > 0 || a.Simple.Class > 0 {
+		if text := a.shortened(); text != "" {
+			notes = append(notes, text)
+		}
 	}
 	for i := range a.scopes {
 		reason := a.scopes[i].reason
