@@ -62,6 +62,7 @@ type Assessment struct {
 	Simple      Simple
 
 	interactions []Interaction
+	unchecked    bool          // (6.61) and (6.62) have no factors: Annex A beyond a critical load
 	scopes       []simpleScope // by combination
 
 	segY, segZ, segT *Segment // behind Y, Z, T

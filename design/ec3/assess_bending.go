@@ -151,6 +151,11 @@ func (m *Member) assessBendingBuckling(c *Candidate, a *Assessment) {
 			From: x.FromZ, To: x.ToZ, NEd: x.NZ, Utilisation: x.U662, Reason: a.scopes[x.Combination].reason}, x.Class)
 	}
 	m.assessSimple(c, a)
+	if a.unchecked && Passes(a.Utilisation, Limit(m.Column, m.Settings)) {
+		// The buckling check alone is a little above 1: a limit above 1 must
+		// not let it pass with its moments unchecked.
+		a.refuse("6.3.3", "N_Ed reaches a critical load, where the factors of Annex A do not exist")
+	}
 }
 
 // lateralChecks checks bending about y-y alone in every lateral-torsional
@@ -222,6 +227,7 @@ func (m *Member) interaction(c *Candidate, a *Assessment, y, z, t *Segment, b *b
 	}
 	x := m.interact(c, y, z, t, b)
 	if x.Undefined {
+		a.unchecked = true
 		return
 	}
 	a.interactions = append(a.interactions, x)

@@ -105,7 +105,10 @@ func (f *fireAssessment) criticalTemperature() {
 	pulled, pressed := f.extremes()
 	switch {
 	case !f.hot.AxialOnly:
-		r.Reason = "a moment acts: the axial force alone does not give the critical temperature"
+		// The expressions of 4.2.3.5 for mu_y and mu_z are in circulation in two
+		// forms, of which neither could be confirmed.
+		r.Reason = "moments act: bending with axial force in fire (EN 1993-1-2, 4.2.3.5) is not covered, " +
+			"and the axial force alone would put it too high"
 		return
 	case pulled == 0 && pressed == 0:
 		r.Reason = "no axial force acts"
