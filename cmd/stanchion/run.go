@@ -100,21 +100,24 @@ func (r *run) read(ctx context.Context) error {
 	if r.source, err = openSource(ctx, r.con, r.input); err != nil {
 		return err
 	}
-	if r.isText() && r.flags.sheet != "" {
+	if err = r.checkForm(); err == nil {
+		err = r.scan(ctx, append(assignments, r.more...))
+	}
+	if err != nil {
 		r.source.Close()
+	}
+	return err
+}
+
+// checkForm refuses flags that speak of sheets where the schedule is text.
+func (r *run) checkForm() error {
+	switch {
+	case !r.isText():
+		return nil
+	case r.flags.sheet != "":
 		return usage(r.cmd, "--sheet %q: a text schedule has no sheets", r.flags.sheet)
 	}
-	if r.isText() {
-		if err := r.flags.working.checkText(r.cmd); err != nil {
-			r.source.Close()
-			return err
-		}
-	}
-	if err := r.scan(ctx, append(assignments, r.more...)); err != nil {
-		r.source.Close()
-		return err
-	}
-	return nil
+	return r.flags.working.checkText(r.cmd)
 }
 
 func (r *run) scan(ctx context.Context, assignments []schedule.Assignment) error {

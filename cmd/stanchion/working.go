@@ -3,10 +3,7 @@ package main
 import (
 	"context"
 	"fmt"
-	"slices"
-	"strings"
 
-	"github.com/agnivade/levenshtein"
 	"github.com/spf13/cobra"
 
 	"stanchion/design"
@@ -65,37 +62,6 @@ func (p *pick) put(m *schedule.Member, res *design.Result) error {
 }
 
 func (p *pick) finish(context.Context) error { return nil }
-
-// marked reports whether one of the marks was meant for a member.
-func marked(m *schedule.Member, marks []string) bool {
-	return slices.ContainsFunc(marks, func(mark string) bool { return sameMark(mark, m.Column.Mark) })
-}
-
-// sameMark reports whether a mark was meant, in whatever case.
-func sameMark(given, mark string) bool {
-	return strings.EqualFold(strings.TrimSpace(given), strings.TrimSpace(mark))
-}
-
-// nearest returns up to three different marks that differ least from one.
-func nearest(mark string, marks []string) []string {
-	type near struct {
-		mark string
-		far  int
-	}
-	var list []near
-	for _, m := range marks {
-		far := levenshtein.ComputeDistance(strings.ToLower(mark), strings.ToLower(m))
-		if far <= max(2, len(mark)/3) && !slices.ContainsFunc(list, func(n near) bool { return n.mark == m }) {
-			list = append(list, near{m, far})
-		}
-	}
-	slices.SortStableFunc(list, func(a, b near) int { return a.far - b.far })
-	var names []string
-	for _, n := range list[:min(3, len(list))] {
-		names = append(names, n.mark)
-	}
-	return names
-}
 
 // picked designs the schedule and returns the members with these marks.
 func (r *run) picked(ctx context.Context, marks []string) (*pick, error) {

@@ -3,7 +3,6 @@ package main
 import (
 	"errors"
 	"fmt"
-	"slices"
 	"strings"
 
 	"stanchion/design"
@@ -45,36 +44,4 @@ func (w *workings) sheet(i int) (*working.Sheet, error) {
 		return nil, fmt.Errorf("%s: %w", m.Column.Mark, err)
 	}
 	return sheet, nil
-}
-
-// missing returns an error that names a mark which no member has, and those
-// like it.
-func (w *workings) missing(file string, marks []string) error {
-	seen := w.seen()
-	for _, mark := range marks {
-		if slices.ContainsFunc(seen, func(s string) bool { return sameMark(mark, s) }) {
-			continue
-		}
-		message := fmt.Sprintf("%s: no column is marked %q", file, mark)
-		if near := nearest(mark, seen); len(near) > 0 {
-			message += ": did you mean " + strings.Join(near, ", ") + "?"
-		} else if len(seen) > 0 {
-			const some = 5
-			message += ": its marks are " + strings.Join(seen[:min(some, len(seen))], ", ")
-			if more := len(seen) - some; more > 0 {
-				message += fmt.Sprintf(" and %d more", more)
-			}
-		}
-		return fmt.Errorf("%s", message)
-	}
-	return nil
-}
-
-// seen returns every mark.
-func (w *workings) seen() []string {
-	marks := make([]string, len(w.lines))
-	for i := range w.lines {
-		marks[i] = w.lines[i].Member.Column.Mark
-	}
-	return marks
 }
