@@ -126,7 +126,7 @@ func (c *climb) compare(bound float64, best *answer) float64 {
 func (c *climb) polish(best *answer) { c.s.polish(c.f.sizesOf(c.r.worthiest(c.k+others)), best) }
 
 // others is how many sizes beside the K worthiest are tried for a better answer.
-const others = 16
+const others = 10
 
 // count notes what the relaxation picks.
 func (c *climb) count() {

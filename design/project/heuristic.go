@@ -1,6 +1,7 @@
 package project
 
 import (
+	"cmp"
 	"encoding/binary"
 	"math"
 	"slices"
@@ -90,19 +91,27 @@ func (f *field) scorePart(solver *chainSolver, open []int32, p *part, sc *score)
 	}
 	for c := p.strands[0]; c < p.strands[1]; c++ {
 		st := &f.strands[c]
-		for n := range st.count {
-			own, cost := f.cost.row(st.first+n), solver.cost[n]
-			for k, j := range open {
-				cost[k] = own[j]
-			}
-		}
+		f.openTo(solver, open, st)
 		sc.add(solver.value(st))
 	}
 }
 
+// openTo writes a strand's costs of the open columns to a solver that knows them
+// alone.
+func (f *field) openTo(solver *chainSolver, open []int32, st *strand) {
+	for n := range st.count {
+		own, cost := f.cost.row(st.first+n), solver.cost[n]
+		for k, j := range open {
+			cost[k] = own[j]
+		}
+	}
+}
+
+// bestAddition finds the size that lowers the cost of the open ones most, tried
+// among those that promise most.
 func (s *search) bestAddition(open []int32) (int32, bool) {
 	best, found := int32(-1), score{unserved: math.MaxInt}
-	for j := range int32(s.m) {
+	for _, j := range s.promising(open) {
 		if slices.Contains(open, j) {
 			continue
 		}
@@ -111,6 +120,41 @@ func (s *search) bestAddition(open []int32) (int32, bool) {
 		}
 	}
 	return best, best >= 0
+}
+
+// promising lists the sizes that would lower the cost of the open ones most if
+// each node could have them whatever it stands on, or all sizes where the open
+// ones do not serve every node.
+func (s *search) promising(open []int32) []int32 {
+	const few = 24
+	gain := make([]float64, s.m)
+	add := func(has float64, cost []float64) {
+		for j, v := range cost {
+			gain[j] += max(0, has-v)
+		}
+	}
+	for i, has := range s.served(open) {
+		if math.IsInf(has, 1) {
+			return columns(s.m)
+		}
+		add(has, s.f.rows.row(i))
+	}
+	solver := s.f.solversOf(open, 1)[0]
+	for c := range s.f.strands {
+		st := &s.f.strands[c]
+		s.f.openTo(solver, open, st)
+		_, picks := solver.solve(st)
+		if picks == nil {
+			return columns(s.m)
+		}
+		for n, k := range picks {
+			own := s.f.cost.row(st.first + n)
+			add(own[open[k]], own)
+		}
+	}
+	order := columns(s.m)
+	slices.SortStableFunc(order, func(a, b int32) int { return cmp.Compare(gain[b], gain[a]) })
+	return order[:min(few, len(order))]
 }
 
 // served is the cheapest open size's cost in each row.
