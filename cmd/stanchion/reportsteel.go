@@ -57,7 +57,7 @@ func (r *run) sayAtHand() {
 		r.paragraph("", fmt.Sprintf(what, saving(d.Saved, by), name, proof))
 	}
 	if d.Tied > 0 {
-		r.paragraph("", fmt.Sprintf("%s of groups and stacks, whose sections are decided together, are sized new", plural(d.Tied, "column")))
+		r.paragraph("", fmt.Sprintf("%s of groups and stacks, whose sections are decided together, are sized as if bought: only pieces of the same section and grade are taken for them", plural(d.Tied, "column")))
 	}
 }
 

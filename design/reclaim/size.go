@@ -20,7 +20,7 @@ type Decision struct {
 
 	AtHand int // pieces in the list
 	Used   int // pieces that columns take
-	Tied   int // columns that share or depend on sections, for which none is taken
+	Tied   int // columns that share or depend on sections, decided as if they were bought
 
 	Saved  float64 // what the same columns would cost new: kg, cost or carbon
 	Bound  float64 // no assignment saves more
@@ -30,7 +30,9 @@ type Decision struct {
 // Size assigns pieces of steel at hand to columns so that the least new steel
 // is bought, and sizes the rest new. The pieces are those that the stock list
 // counts; each has its own grade. Columns of groups and of stacks whose lengths
-// share or depend on each other's sections are always sized new.
+// share or depend on each other's sections are sized as if they were bought, and
+// then take pieces of the same section and grade, one through every length
+// between splices.
 //
 // Where lengths depend on each other's sections otherwise (Engine.Coupled), the
 // assignment is made as if they did not, and made again without what fails
@@ -54,7 +56,11 @@ func Size(ctx context.Context, e *search.Engine, cols []design.Column, o buildin
 		if d == nil {
 			return nil, err
 		}
-		if !e.Coupled() || !r.ruleOut(s, d) {
+		again := r.changed(s, d)
+		if e.Coupled() {
+			again = r.ruleOut(s, d) || again
+		}
+		if !again {
 			return r.finish(s, d), err
 		}
 	}
@@ -71,8 +77,15 @@ type run struct {
 	kinds   []search.Offered
 	lots    []catalogue.Piece // by lot
 	problem Problem
-	row     []int // of each row, its column
+	row     []served // of each row
 	tied    int
+}
+
+// served is the columns that one row stands for: one, or the lengths through
+// which a piece runs. A tied one has its section from its group or stack.
+type served struct {
+	cols []int
+	tied bool
 }
 
 // prepare makes the problem.
@@ -105,10 +118,10 @@ func (r *run) prepare(ctx context.Context) error {
 			}
 		}
 		if len(row.Kinds) > 0 {
-			r.problem.Rows, r.row = append(r.problem.Rows, row), append(r.row, i)
+			r.problem.Rows, r.row = append(r.problem.Rows, row), append(r.row, served{cols: []int{i}})
 		}
 	}
-	return nil
+	return r.addTied(ctx, tied, passes)
 }
 
 // readLots makes lots and kinds of the list's pieces.
@@ -144,8 +157,9 @@ func (r *run) readLots() error {
 func (r *run) size(ctx context.Context, s *Solution) (*building.Decision, error) {
 	pinned := append([]design.Column(nil), r.cols...)
 	taken := make([]bool, len(r.cols))
-	for row, i := range r.row {
-		if k := s.Kind[row]; k >= 0 {
+	for row, of := range r.row {
+		if k := s.Kind[row]; k >= 0 && !of.tied {
+			i := of.cols[0]
 			taken[i] = true
 			pinned[i].Given, pinned[i].Grades = r.kinds[k].Section.Name(), []string{r.kinds[k].Grade.Name}
 		}
@@ -193,8 +207,8 @@ func which(taken bool) int {
 // ruleOut takes from the problem what turned out to fail beside its neighbours,
 // and reports whether there was anything.
 func (r *run) ruleOut(s *Solution, d *building.Decision) (found bool) {
-	for row, i := range r.row {
-		if k := s.Kind[row]; k >= 0 && d.Results[i].Status == design.Fails {
+	for row, of := range r.row {
+		if k := s.Kind[row]; k >= 0 && !of.tied && d.Results[of.cols[0]].Status == design.Fails {
 			p := &r.problem.Rows[row]
 			var rest []int
 			for _, other := range p.Kinds {
@@ -214,19 +228,25 @@ func (r *run) finish(s *Solution, d *building.Decision) *Decision {
 	for i := range r.lots {
 		out.AtHand += r.lots[i].Number
 	}
-	for row, i := range r.row {
+	for row, of := range r.row {
 		if s.Kind[row] < 0 {
 			continue
 		}
-		res := &d.Results[i]
-		res.Fixed = r.cols[i].Given != ""
 		var from []string
 		for _, u := range s.Uses[row] {
 			out.Used += u.Number
 			from = append(from, fmt.Sprintf("%d of %.3f m (line %d)", u.Number, r.lots[u.Lot].Length/1000, r.lots[u.Lot].Line))
 		}
-		res.AtHand = strings.Join(from, ", ")
-		res.Notes = append(res.Notes, "of steel at hand: "+res.AtHand)
+		for _, i := range of.cols {
+			res := &d.Results[i]
+			res.Fixed = r.cols[i].Given != ""
+			res.AtHand = strings.Join(from, ", ")
+			note := "of steel at hand: " + res.AtHand
+			if len(of.cols) > 1 {
+				note += fmt.Sprintf(", one through %d lengths of stack %q", len(of.cols), r.cols[i].Stack)
+			}
+			res.Notes = append(res.Notes, note)
+		}
 	}
 	return out
 }

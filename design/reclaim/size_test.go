@@ -109,14 +109,123 @@ func TestWhatARowAllows(t *testing.T) {
 	}
 }
 
-// Columns of a group share a section, so that none of them is served alone.
-func TestGroupsAreSizedNew(t *testing.T) {
-	cols := []design.Column{column("A", 4, 900, 1), column("B", 4, 700, 1)}
+// Columns of a group share a section: they are decided as if they were bought,
+// and pieces of that section and grade serve one or the other.
+func TestGroupsTakeTheirOwnSectionAlone(t *testing.T) {
+	cols := []design.Column{column("A", 4, 900, 1), column("B", 4.5, 700, 1)}
 	cols[0].Group, cols[1].Group = "G", "G"
-	d, err := Size(context.Background(), engine(t, nil), cols, building.Options{}, list(t, "HE 220 B,S235,4,6"), 1)
+	e := engine(t, nil)
+	alone, err := building.Size(context.Background(), e, cols, building.Options{}, 1, nil)
 	require.NoError(t, err)
-	assert.Equal(t, []int{2, 0}, []int{d.Tied, d.Used})
-	assert.Equal(t, d.Results[0].Section, d.Results[1].Section)
+	section := alone.Results[0].Section
+	require.Equal(t, section, alone.Results[1].Section)
+	for name, tc := range map[string]struct {
+		piece string
+		want  []string
+	}{
+		"another section":   {"HE 220 B,S355,4,6", []string{"", ""}},
+		"another grade":     {section + ",S275,4,6", []string{"", ""}},
+		"one for either":    {section + ",S355,1,6", []string{"", "1 of 6.000 m (line 2)"}}, // the longer one saves more
+		"too short for one": {section + ",S355,2,4.2", []string{"1 of 4.200 m (line 2)", ""}},
+	} {
+		t.Run(name, func(t *testing.T) {
+			d, err := Size(context.Background(), e, cols, building.Options{}, list(t, tc.piece), 1)
+			require.NoError(t, err)
+			assert.Equal(t, 2, d.Tied)
+			assert.Equal(t, tc.want, []string{d.Results[0].AtHand, d.Results[1].AtHand})
+			assert.Equal(t, []string{section, section}, []string{d.Results[0].Section, d.Results[1].Section})
+			assert.InDelta(t, bought(cols, alone.Results)-bought(cols, d.Results), d.Saved, 1e-6)
+		})
+	}
+}
+
+// A piece goes through every length of a stack up to a splice, or is not taken.
+func TestOnePieceThroughALength(t *testing.T) {
+	stack := func(splices ...bool) []design.Column {
+		var cols []design.Column
+		for k, splice := range splices {
+			c := column(fmt.Sprint("A", k), 4, 900-200*float64(k), 2)
+			c.Stack, c.From, c.To, c.Splice, c.SpliceSaid = "A", fmt.Sprint("L", k), fmt.Sprint("L", k+1), splice, true
+			cols = append(cols, c)
+		}
+		return cols
+	}
+	e := engine(t, nil)
+	for name, tc := range map[string]struct {
+		splices []bool
+		pieces  []string // length and number
+		want    []bool   // taken
+		used    int
+	}{
+		"through both":         {[]bool{false, false}, []string{"2,8"}, []bool{true, true}, 2},
+		"one would be too few": {[]bool{false, false}, []string{"1,8"}, []bool{false, false}, 0},
+		"too short for both":   {[]bool{false, false}, []string{"4,7.9"}, []bool{false, false}, 0},
+		"up to the splice":     {[]bool{false, true, false}, []string{"2,8"}, []bool{true, true, false}, 2},
+		"a splice between":     {[]bool{true, false}, []string{"2,4.1"}, []bool{true, false}, 2},
+	} {
+		t.Run(name, func(t *testing.T) {
+			cols := stack(tc.splices...)
+			alone, err := building.Size(context.Background(), e, cols, building.Options{}, 1, nil)
+			require.NoError(t, err)
+			var lines []string
+			for _, p := range tc.pieces {
+				lines = append(lines, alone.Results[0].Section+",S355,"+p)
+			}
+			d, err := Size(context.Background(), e, cols, building.Options{}, list(t, lines...), 1)
+			require.NoError(t, err)
+			assert.Equal(t, tc.used, d.Used)
+			for i, taken := range tc.want {
+				assert.Equal(t, taken, d.Results[i].AtHand != "", "length %d", i)
+				assert.Equal(t, alone.Results[i].Section, d.Results[i].Section)
+			}
+			assert.InDelta(t, bought(cols, alone.Results)-bought(cols, d.Results), d.Saved, 1e-6)
+		})
+	}
+}
+
+// Where splices may stand wherever they pay, lengths of one section are one
+// piece.
+func TestOnePieceWhereItPays(t *testing.T) {
+	cols := []design.Column{column("A0", 4, 900, 1), column("A1", 4, 880, 1)}
+	for k := range cols {
+		cols[k].Stack, cols[k].From, cols[k].To = "A", fmt.Sprint("L", k), fmt.Sprint("L", k+1)
+	}
+	e, o := engine(t, nil), building.Options{Splices: building.WhereItPays, SpliceCost: 50}
+	alone, err := building.Size(context.Background(), e, cols, o, 1, nil)
+	require.NoError(t, err)
+	require.Equal(t, alone.Results[0].Section, alone.Results[1].Section)
+	for length, used := range map[string]int{"8": 1, "6": 0} {
+		d, err := Size(context.Background(), e, cols, o, list(t, alone.Results[0].Section+",S355,1,"+length), 1)
+		require.NoError(t, err)
+		assert.Equal(t, used, d.Used)
+	}
+}
+
+// Few sizes are chosen for what is bought: once a column takes a piece, those of
+// a group may have another section, and no piece of the first stands for it.
+func TestFewSizesAndTiedColumns(t *testing.T) {
+	e := engine(t, nil)
+	rapid.Check(t, func(t *rapid.T) {
+		var cols []design.Column
+		for i := range rapid.IntRange(3, 7).Draw(t, "columns") {
+			c := column(fmt.Sprint("C", i), rapid.Float64Range(3, 5).Draw(t, "length"), rapid.Float64Range(300, 1500).Draw(t, "force"), 1)
+			c.Group = rapid.SampledFrom([]string{"", "G", "H"}).Draw(t, "group")
+			cols = append(cols, c)
+		}
+		yard := list(t, "203x203x60 UKC,S355,2,5", "203x203x46 UKC,S355,2,5", "152x152x37 UKC,S355,2,5", "203x203x52 UKC,S355,1,5")
+		d, err := Size(context.Background(), e, cols, building.Options{MostSizes: 2}, yard, 1)
+		require.NoError(t, err)
+		sections := map[string]string{}
+		for i := range d.Results {
+			require.Equal(t, design.Passes, d.Results[i].Status)
+			if g := cols[i].Group; g != "" {
+				if had, ok := sections[g]; ok {
+					require.Equal(t, had, d.Results[i].Section, "group %s", g)
+				}
+				sections[g] = d.Results[i].Section
+			}
+		}
+	})
 }
 
 // A column that nothing new can serve goes before one that saves more.

@@ -78,3 +78,10 @@ func (e *Engine) mayHave(col *design.Column, of *catalogue.Catalogue) func(*Offe
 			!slices.ContainsFunc(e.settings.Exclude, func(name string) bool { return strings.EqualFold(name, o.Section.Name()) })
 	}
 }
+
+// PerMetre returns what a metre of an offered section would cost new, in the
+// units of the objective.
+func (e *Engine) PerMetre(o Offered) float64 {
+	v, _ := e.objective(o.Section, o.Grade)
+	return v
+}
