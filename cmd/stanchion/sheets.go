@@ -7,6 +7,8 @@ import (
 	"io"
 	"os"
 	"path/filepath"
+	"regexp"
+	"strconv"
 	"strings"
 	"unicode"
 	"unicode/utf16"
@@ -142,20 +144,25 @@ func (r *run) sheetsPath(f *sheetsFlags) (string, error) {
 	return path, mayReplace(path, f.force, sheetsEarlier)
 }
 
-// sheetsEarlier reports whether an earlier run wrote a PDF: its title tells.
+// sheetsEarlier reports whether an earlier run wrote a PDF: its title tells. It
+// stands among the last objects of the file, before the table of their places,
+// which is as long as there are objects.
 func sheetsEarlier(path string) bool {
-	const tail = 8 << 10
 	file, err := os.Open(path)
 	if err != nil {
 		return false
 	}
 	defer file.Close()
-	if info, err := file.Stat(); err == nil && info.Size() > tail {
-		if _, err := file.Seek(-tail, io.SeekEnd); err != nil {
-			return false
-		}
+	info, err := file.Stat()
+	if err != nil {
+		return false
 	}
-	data, err := io.ReadAll(io.LimitReader(file, tail))
+	const near = 8 << 10
+	found := tableOfObjects.FindSubmatch(before(file, info.Size(), near))
+	if found == nil {
+		return false
+	}
+	table, err := strconv.ParseInt(string(found[1]), 10, 64)
 	if err != nil {
 		return false
 	}
@@ -163,7 +170,21 @@ func sheetsEarlier(path string) bool {
 	for _, u := range utf16.Encode([]rune(calcsheet.PDFTitle)) {
 		title = append(title, byte(u>>8), byte(u))
 	}
-	return bytes.Contains(data, title)
+	return bytes.Contains(before(file, min(table, info.Size()), near), title)
+}
+
+// tableOfObjects is the end of a PDF, which says where the table of its objects
+// stands (ISO 32000-1, 7.5.5).
+var tableOfObjects = regexp.MustCompile(`startxref\s+(\d{1,18})\s+%%EOF\s*$`)
+
+// before returns what of a file stands before a place, n bytes at most.
+func before(file io.ReaderAt, place, n int64) []byte {
+	n = min(n, place)
+	data := make([]byte, n)
+	if _, err := file.ReadAt(data, place-n); err != nil && err != io.EOF {
+		return nil
+	}
+	return data
 }
 
 // writeElevations writes the elevation of every stack into a folder.

@@ -64,3 +64,31 @@ func TestSheetsHaveTheNumbersOfTheJSON(t *testing.T) {
 	}
 	assert.Equal(t, 60, members)
 }
+
+// Sheets are known again however many there are: the end of a PDF grows with
+// them.
+func TestManySheetsMayBeWrittenAgain(t *testing.T) {
+	dir := t.TempDir()
+	input, pdf := filepath.Join(dir, "loads.csv"), filepath.Join(dir, "loads-sheets.pdf")
+	rows := "Mark,Length,N_Ed\n"
+	for i := range 250 {
+		rows += fmt.Sprintf("C%d,3.6,%d\n", i, 400+i)
+	}
+	require.NoError(t, os.WriteFile(input, []byte(rows), 0o600))
+	for range 2 {
+		con := &console{in: strings.NewReader(""), out: new(bytes.Buffer), err: new(bytes.Buffer)}
+		require.Equal(t, statusPasses, execute(context.Background(), con, []string{"sheets", input}), "%v", con.err)
+	}
+	data, err := os.ReadFile(pdf)
+	require.NoError(t, err)
+	require.Greater(t, len(data)-bytes.LastIndex(data, []byte("\nxref\n")), 8<<10)
+	for name, other := range map[string][]byte{
+		"empty":     {},
+		"cut short": data[:len(data)-100],
+		"another":   bytes.ReplaceAll(data, []byte("\x00c\x00a\x00l\x00c"), []byte("\x00C\x00a\x00l\x00c")),
+		"no place":  []byte("%PDF-1.4\nstartxref\n99999999999\n%%EOF\n"),
+	} {
+		require.NoError(t, os.WriteFile(pdf, other, 0o600))
+		assert.False(t, sheetsEarlier(pdf), name)
+	}
+}
