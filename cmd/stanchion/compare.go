@@ -33,7 +33,8 @@ func compareCommand(con *console) *cobra.Command {
 			settingsHelp() + "\n\n" + compareStatuses + "\n\n" + cautionHelp,
 		Example: `  stanchion compare examples/ottermere-depot.csv examples/ottermere-depot-ordered.csv
   stanchion compare depot-P01-sized.xlsx depot-P02.xlsx
-  stanchion compare P01.csv P02.csv -o changes.csv --renamed "L1=Level 01" --renamed C7=C7A`,
+  stanchion compare P01.csv P02.csv -o changes.csv --renamed "L1=Level 01" --renamed C7=C7A
+  stanchion compare P01.csv P02.csv --renamed "C9 B2 L1 to L2=C9 B3 L1 to L2"`,
 		Args: twoFiles,
 		RunE: func(c *cobra.Command, args []string) error {
 			var err error
@@ -47,7 +48,7 @@ func compareCommand(con *console) *cobra.Command {
 	fl.StringVarP(&f.output, "output", "o", "", "write the annotated new issue to `FILE` (default: beside it, as NAME"+comparedSuffix+")")
 	fl.StringVar(&f.sheet, "sheet", "", "`NAME` of the sheet that holds the new issue (default: chosen by content)")
 	fl.StringVar(&r.oldSheet, "old-sheet", "", "`NAME` of the sheet that holds the old issue (default: chosen by content)")
-	fl.StringArrayVar(&renamed, "renamed", nil, "`OLD=NEW`: a mark, grid reference or level that has another name in the new issue; may be repeated")
+	fl.StringArrayVar(&renamed, "renamed", nil, "`OLD=NEW`: a mark, grid reference or level that has another name in the new issue, or one member by all its names, as it is listed; may be repeated")
 	fl.StringArrayVar(&f.set, "set", nil, "`NAME=VALUE` of a setting, for both issues; may be repeated")
 	fl.StringVar(&f.settings, "settings", "", "`FILE` of settings for both issues: two columns, name and value")
 	fl.StringArrayVar(&f.maps, "map", nil, "`HEADER=FIELD`: what a heading of your own stands for, or ignore; may be repeated")
@@ -130,12 +131,12 @@ func (r *compareRun) compare(ctx context.Context) error {
 	if err != nil {
 		return err
 	}
-	if err := revision.Rename(old.Members, r.renamed); err != nil {
-		return usage(r.new.cmd, "--renamed: %v", err)
-	}
 	new, err := r.new.issue()
 	if err != nil {
 		return err
+	}
+	if err := revision.Rename(old.Members, new.Members, r.renamed); err != nil {
+		return usage(r.new.cmd, "--renamed: %v", err)
 	}
 	r.result, err = revision.Compare(ctx, old, new, r.old.engine, r.new.engine, r.new.plan.Settings.Together.Options, r.flags.workers)
 	return err

@@ -23,7 +23,7 @@ func (f *keepFlags) bind(c *cobra.Command) {
 	fl := c.Flags()
 	fl.StringVar(&f.file, "keep", "", "sections stay as they are in the old issue `OLD` of the schedule, where they still pass")
 	fl.StringVar(&f.sheet, "keep-sheet", "", "`NAME` of the sheet that holds the old issue (default: chosen by content)")
-	fl.StringArrayVar(&f.renamed, "renamed", nil, "`OLD=NEW`: a mark, grid reference or level that has another name than in the old issue; may be repeated")
+	fl.StringArrayVar(&f.renamed, "renamed", nil, "`OLD=NEW`: a mark, grid reference or level that has another name than in the old issue, or one member by all its names, as compare lists it; may be repeated")
 }
 
 // parseRenamings reads what names have become.
@@ -53,6 +53,7 @@ func (f *keepFlags) check(c *cobra.Command) error {
 // keeping is what a run knows of the old issue, and what became of it.
 type keeping struct {
 	old      *revision.Issue
+	renamed  []revision.Renaming
 	unread   []design.Column // of the new issue, which cannot be designed
 	matching *revision.Matching
 	cols     []design.Column
@@ -81,12 +82,9 @@ func (r *run) readOld(ctx context.Context) error {
 	if err != nil {
 		return err
 	}
-	if err := revision.Rename(issue.Members, renamings); err != nil {
-		return usage(r.cmd, "--renamed: %v", err)
-	}
 	for i := range issue.Members {
 		if issue.Members[i].Section != nil {
-			r.keep = &keeping{old: issue}
+			r.keep = &keeping{old: issue, renamed: renamings}
 			return nil
 		}
 	}
@@ -101,6 +99,9 @@ func (r *run) decideKeeping(ctx context.Context, cols []design.Column) (*buildin
 	var members []revision.Member
 	for _, c := range slices.Concat(cols, k.unread) {
 		members = append(members, revision.Member{Column: c})
+	}
+	if err := revision.Rename(k.old.Members, members, k.renamed); err != nil {
+		return nil, usage(r.cmd, "--renamed: %v", err)
 	}
 	k.matching = revision.Match(k.old.Members, members)
 	for _, p := range k.matching.Pairs {
@@ -138,7 +139,7 @@ func (r *run) sayKept() {
 	r.print("")
 	r.paragraph("", fmt.Sprintf("Kept from %s: %s; %s; %d new, %d gone", k.old.File, plural(stay, "section"), strconv.Itoa(len(change))+" changed", len(k.matching.Added), len(k.matching.Removed)))
 	if n := len(k.matching.Candidates); n > 0 {
-		r.paragraph("", fmt.Sprintf("Note: %s of a gone and a new member could be the same: see stanchion compare %s %s", plural(n, "pair"), r.flags.keep.file, r.input))
+		r.paragraph("", fmt.Sprintf("Note: %s of a gone and a new member could be the same: see stanchion compare %s %s", plural(n, "pair"), asTyped(r.flags.keep.file), asTyped(r.input)))
 	}
 	if len(change) == 0 {
 		return

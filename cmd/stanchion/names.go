@@ -1,6 +1,8 @@
 package main
 
 import (
+	"strings"
+
 	"stanchion/catalogue"
 	"stanchion/design"
 	"stanchion/schedule/takeoff"
@@ -38,4 +40,12 @@ func (r *run) familyOf(section string) string {
 		r.families[section] = family
 	}
 	return family
+}
+
+// asTyped returns a name as it can be typed into a command.
+func asTyped(name string) string {
+	if strings.ContainsAny(name, " \t&()[]{};,'`$!#*?<>|~") {
+		return `"` + name + `"`
+	}
+	return name
 }

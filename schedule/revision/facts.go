@@ -37,7 +37,7 @@ func (c *Comparison) Facts() [][2]string {
 		if n == 1 {
 			pairs = "1 pair"
 		}
-		add("perhaps the same", "%s of a gone and a new member, listed with the changes: where they are, say so with --renamed OLD=NEW", pairs)
+		add("perhaps the same", "%s of a gone and a new member, listed with the changes: where they are, say so with --renamed \"OLD=NEW\", named as there", pairs)
 	}
 	if len(c.Ignored) > 0 {
 		add("told apart without", "%s, which only one issue has", strings.Join(c.Ignored, " and "))

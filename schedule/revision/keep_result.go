@@ -44,7 +44,7 @@ func (k *keeper) why(i int) string {
 	case old == nil || old.Status == design.NotRead:
 		return "it cannot be designed"
 	case old.Status == design.Passes:
-		return "it passes, and not for all that share a section"
+		return "it passes, others joined to it do not"
 	}
 	return Failure(old)
 }

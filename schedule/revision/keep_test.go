@@ -130,7 +130,7 @@ func TestKeepGroups(t *testing.T) {
 	k = keep(t, e, cols(500, 2500), "203x203x60 UKC", "203x203x60 UKC")
 	assert.Equal(t, sections(k)[0], sections(k)[1])
 	assert.False(t, k[0].Stays || k[1].Stays)
-	assert.Equal(t, "it passes, and not for all that share a section", k[0].Why)
+	assert.Equal(t, "it passes, others joined to it do not", k[0].Why)
 	// Two had one section, one another: the group takes what most had, if it passes for all.
 	k = keep(t, e, cols(500, 500, 500), "203x203x60 UKC", "203x203x71 UKC", "203x203x71 UKC")
 	assert.Equal(t, "203x203x71 UKC", sections(k)[0])
@@ -276,7 +276,7 @@ func TestKeepStacks(t *testing.T) {
 	k = keep(t, e, stack(2500, 800, 300), "203x203x60 UKC", "203x203x60 UKC", "203x203x46 UKC")
 	assert.Equal(t, k[0].Result.Section, k[1].Result.Section)
 	assert.Equal(t, []bool{false, false, true}, []bool{k[0].Stays, k[1].Stays, k[2].Stays})
-	assert.Equal(t, "it passes, and not for all that share a section", k[1].Why)
+	assert.Equal(t, "it passes, others joined to it do not", k[1].Why)
 	assert.Equal(t, "203x203x46 UKC", k[2].Result.Section)
 	// Without a word of splices every length is on its own.
 	cols := stack(2500, 800, 300)

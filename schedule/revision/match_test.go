@@ -133,13 +133,26 @@ func TestRename(t *testing.T) {
 		require.NoError(t, err)
 		list = append(list, r)
 	}
-	require.NoError(t, Rename(old, list))
+	require.NoError(t, Rename(old, new, list))
 	assert.Len(t, Match(old, new).Pairs, 2)
-	assert.ErrorContains(t, Rename(old, []Renaming{{"X", "Y"}}), `no mark, grid reference or level of the old issue is "X"`)
+	assert.ErrorContains(t, Rename(old, new, []Renaming{{"X", "01"}}), `no mark, grid reference or level of the old issue is "X"`)
+	assert.ErrorContains(t, Rename(old, new, []Renaming{{"C2", "C3"}}), `no mark, grid reference or level of the new issue is "C3"`)
+	assert.ErrorContains(t, Rename(old, new, []Renaming{{"C2", "C2 A 02 to L3"}}), "not of one kind")
 	for _, s := range []string{"", "=", "a=", "=b", "ab"} {
 		_, err := ParseRenaming(s)
 		assert.Error(t, err, s)
 	}
+}
+
+// A member that stands elsewhere is named whole: its level keeps its name for
+// all others.
+func TestRenameOneMember(t *testing.T) {
+	old := issue("C1 A L1 L2 900", "C2 A L2 L3 900", "C2 B L2 L3 900")
+	new := issue("C1 A L1 L2 900", "C2 A L2 Roof 900", "C2 B L2 L3 900")
+	require.Len(t, Match(old, new).Pairs, 2)
+	require.NoError(t, Rename(old, new, []Renaming{{old[1].Name(), new[1].Name()}}))
+	assert.Len(t, Match(old, new).Pairs, 3)
+	assert.Equal(t, "C2 B L2 to L3", old[2].Name())
 }
 
 func TestBareMark(t *testing.T) {

@@ -2,12 +2,13 @@ package revision
 
 import (
 	"fmt"
-	"slices"
-	"strings"
+		"strings"
+
+	"stanchion/design"
 )
 
 // Renaming says that a mark, a grid reference or a level has another name in
-// the new issue.
+// the new issue, or that a member has, all its names said.
 type Renaming struct{ Old, New string }
 
 // ParseRenaming reads OLD=NEW.
@@ -20,21 +21,59 @@ func ParseRenaming(s string) (Renaming, error) {
 	return r, nil
 }
 
-// Rename gives the members of the old issue the names of the new one. A name
-// that no member has is an error.
-func Rename(members []Member, list []Renaming) error {
-	used := make([]bool, len(list))
-	for i := range members {
-		col := &members[i].Column
+// Rename gives the members of the old issue the names of the new one. A
+// renaming is of a mark, grid reference or level wherever it stands or, if none
+// is called so, of the one member with that Name. Names that no member has are
+// errors.
+func Rename(old, new []Member, list []Renaming) error {
+	n := namesOf(new)
+	before := namesOf(old)
+	parts := map[string]string{}
+	members := map[string]*design.Column{}
+	for _, r := range list {
+		a, b := fold(r.Old), fold(r.New)
+		switch {
+		case before.parts[a] && n.parts[b]:
+			parts[a] = r.New
+		case before.members[a] != nil && n.members[b] != nil:
+			members[a] = n.members[b]
+		case !before.parts[a] && before.members[a] == nil:
+			return fmt.Errorf("no mark, grid reference or level of the old issue is %q, and no member by all its names", r.Old)
+		case !n.parts[b] && n.members[b] == nil:
+			return fmt.Errorf("no mark, grid reference or level of the new issue is %q, and no member by all its names", r.New)
+		default:
+			return fmt.Errorf("%q and %q are not of one kind: give two marks, grid references or levels, or two members by all their names", r.Old, r.New)
+		}
+	}
+	for i := range old {
+		col := &old[i].Column
+		if to := members[fold(old[i].Name())]; to != nil {
+			col.Mark, col.Stack, col.From, col.To = to.Mark, to.Stack, to.From, to.To
+			continue
+		}
 		for _, name := range []*string{&col.Mark, &col.Stack, &col.From, &col.To} {
-			k := slices.IndexFunc(list, func(r Renaming) bool { return fold(r.Old) == fold(*name) })
-			if k >= 0 {
-				*name, used[k] = list[k].New, true
+			if to, ok := parts[fold(*name)]; ok {
+				*name = to
 			}
 		}
 	}
-	if k := slices.Index(used, false); k >= 0 {
-		return fmt.Errorf("no mark, grid reference or level of the old issue is %q", list[k].Old)
-	}
 	return nil
+}
+
+// names are those that an issue has, folded.
+type names struct {
+	parts   map[string]bool           // marks, grid references, levels
+	members map[string]*design.Column // by all names
+}
+
+func namesOf(members []Member) names {
+	n := names{map[string]bool{}, map[string]*design.Column{}}
+	for i := range members {
+		col := &members[i].Column
+		for _, name := range []string{col.Mark, col.Stack, col.From, col.To} {
+			n.parts[fold(name)] = true
+		}
+		n.members[fold(members[i].Name())] = col
+	}
+	return n
 }
