@@ -21,7 +21,7 @@ func (r *run) sayRead() {
 	for _, c := range []struct {
 		n    int
 		what string
-	}{{s.Totals, "total row"}, {s.Repeated, "repeated header"}, {s.Footnotes, "footnote"}} {
+	}{{s.Totals, "total row"}, {s.Repeated, "repeated header"}, {s.Footnotes, "other text"}} {
 		if c.n > 0 {
 			over = append(over, plural(c.n, c.what))
 		}

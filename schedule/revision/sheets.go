@@ -93,7 +93,7 @@ func (t *Tonnage) Remark() string {
 // changesSheet lists what changed, what is weak or has steel to spare, what is
 // new, what is gone, and what could be the same.
 func (c *Comparison) changesSheet(info *Info) workbook.Sheet {
-	p := workbook.NewPage(ChangesSheet, "Changes, and what they mean for the sections of the old issue", 13, 13, 9, 13, 22, 12, 18, 24, 22, 12, 56)
+	p := workbook.NewPage(ChangesSheet, "Changes, and what they mean for the sections of the old issue", 13, 13, 9, 16, 22, 12, 18, 24, 22, 12, 56)
 	p.Landscape, p.Footer = true, info.NewFile
 	p.Row(workbook.Cell{Value: info.OldFile + " → " + info.NewFile, Look: workbook.Look{Role: workbook.Remark}})
 	p.Blank()
@@ -144,7 +144,7 @@ func lookOf(word string) workbook.Cell {
 }
 
 func memberCells(first workbook.Cell, m *Member, mark workbook.Cell) []workbook.Cell {
-	return []workbook.Cell{first, mark, workbook.TextCell(m.Column.Stack), workbook.TextCell(m.Level())}
+	return []workbook.Cell{first, mark, workbook.TextCell(m.Column.Stack), workbook.WordsCell(m.Level())}
 }
 
 // linked is a member's mark with a link to its row.

@@ -107,7 +107,7 @@ type counted struct {
 // passedOver counts what is worth a look among the rows.
 func passedOver(s *schedule.Summary) []counted {
 	var out []counted
-	for _, c := range []counted{{"hidden rows, designed too", s.Hidden}, {"total rows passed over", s.Totals}, {"repeated headers passed over", s.Repeated}, {"footnotes passed over", s.Footnotes}} {
+	for _, c := range []counted{{"hidden rows, designed too", s.Hidden}, {"total rows passed over", s.Totals}, {"repeated headers passed over", s.Repeated}, {"other texts passed over", s.Footnotes}} {
 		if c.n > 0 {
 			out = append(out, c)
 		}

@@ -87,7 +87,7 @@ func (p *problemsPage) line(i int, l *Line, at, what, do string) {
 	if r.Section != "" {
 		section.Link = ResultsPlace(p.info.sheetName(ResultsSheet), i)
 	}
-	p.Row(cell, workbook.TextCell(c.Mark), workbook.TextCell(Level(c)), workbook.OutcomeCell(r.Status), section, utilisationCell(r),
+	p.Row(cell, workbook.TextCell(c.Mark), workbook.WordsCell(Level(c)), workbook.OutcomeCell(r.Status), section, utilisationCell(r),
 		checkCell(l), workbook.WordsCell(what), workbook.WordsCell(do))
 }
 
