@@ -176,8 +176,8 @@ func (s *scenariosRun) try(ctx context.Context, sc *schedule.Scenario) error {
 		return err
 	}
 	if err := r.read(ctx); err != nil {
-		if len(sc.Settings) > 0 {
-			err = fmt.Errorf("scenario %q: %w", sc.Name, err)
+		if where := fmt.Sprintf("scenario %q", sc.Name); len(sc.Settings) > 0 && !strings.HasPrefix(err.Error(), where) {
+			err = fmt.Errorf("%s: %w", where, err)
 		}
 		return err
 	}

@@ -140,7 +140,10 @@ func (p *takeoffText) cuts() {
 	t := newTable("Cutting list", "grade", ">number", ">length m", ">tonnes", "marks")
 	for i := range p.t.Cuts {
 		c := &p.t.Cuts[i]
-		marks := strings.Split(wrap(strings.Join(c.Marks, ", "), marksWide, ""), "\n")
+		var marks []string
+		for _, line := range wrapList(c.Marks, marksWide) { // of a piece, its marks stay together where they can
+			marks = append(marks, strings.Split(wrap(line, marksWide, "  "), "\n")...)
+		}
 		t.add(c.Section.Name(), c.Grade, count(c.Number), takeoff.Metres(c.Length), tonnes(c.Mass), marks[0])
 		for _, more := range marks[1:] {
 			t.add("", "", "", "", "", more)

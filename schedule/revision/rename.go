@@ -2,7 +2,7 @@ package revision
 
 import (
 	"fmt"
-		"strings"
+	"strings"
 
 	"stanchion/design"
 )

@@ -139,32 +139,45 @@ func counted(n int, one, more string) string {
 	return fmt.Sprintf("%d %s", n, more)
 }
 
-// Remarks say what the numbers do not.
+// Remarks say what the numbers do not; what holds for every scenario, once.
 func (t *Table) Remarks() []string {
-	var list []string
+	of := make([][]string, len(t.Rows))
+	count := map[string]int{}
 	for i := range t.Rows {
-		r := &t.Rows[i]
-		if r.Why != "" {
-			list = append(list, r.Name+": "+r.Why)
-		}
-		if r.Failing > 0 {
-			list = append(list, r.Name+": "+counted(r.Failing, "member fails", "members fail"))
-		}
-		if r.NoSection > 0 {
-			list = append(list, r.Name+": "+counted(r.NoSection, "member has no section, and its steel is not counted", "members have no section, and their steel is not counted"))
-		}
-		if r.NotRead > 0 {
-			list = append(list, r.Name+": "+counted(r.NotRead, "member could not be read, and its steel is not counted", "members could not be read, and their steel is not counted"))
-		}
-		if r.AtHand && (r.HasCost || r.HasCarbon) {
-			list = append(list, r.Name+": steel at hand is counted at the rates of new steel")
-		}
-		if r.HasCost && r.Unpriced {
-			list = append(list, r.Name+": some of its steel has no cost rate")
-		}
-		if r.HasCarbon && r.Unrated {
-			list = append(list, r.Name+": some of its steel has no carbon factor")
+		of[i] = t.Rows[i].remarks()
+		for _, s := range of[i] {
+			count[s]++
 		}
 	}
+	common := func(s string) bool { return len(t.Rows) > 1 && count[s] == len(t.Rows) }
+	var list []string
+	for i := range t.Rows {
+		for _, s := range of[i] {
+			switch {
+			case !common(s):
+				list = append(list, t.Rows[i].Name+": "+s)
+			case i == 0:
+				list = append(list, "every scenario: "+s)
+			}
+		}
+	}
+	return list
+}
+
+// remarks say what the numbers of a scenario do not.
+func (r *Row) remarks() []string {
+	var list []string
+	add := func(is bool, s string) {
+		if is {
+			list = append(list, s)
+		}
+	}
+	add(r.Why != "", r.Why)
+	add(r.Failing > 0, counted(r.Failing, "member fails", "members fail"))
+	add(r.NoSection > 0, counted(r.NoSection, "member has no section, and its steel is not counted", "members have no section, and their steel is not counted"))
+	add(r.NotRead > 0, counted(r.NotRead, "member could not be read, and its steel is not counted", "members could not be read, and their steel is not counted"))
+	add(r.AtHand && (r.HasCost || r.HasCarbon), "steel at hand is counted at the rates of new steel")
+	add(r.HasCost && r.Unpriced, "some of its steel has no cost rate")
+	add(r.HasCarbon && r.Unrated, "some of its steel has no carbon factor")
 	return list
 }

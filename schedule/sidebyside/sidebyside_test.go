@@ -31,6 +31,21 @@ func TestText(t *testing.T) {
 	assert.Equal(t, []string{"weak: 1 member has no section, and its steel is not counted", "weak: some of its steel has no cost rate", "one: it cannot be"}, table().Remarks())
 }
 
+// What holds for every scenario is said once.
+func TestRemarksOnEveryScenario(t *testing.T) {
+	t1 := table()
+	t1.Rows = t1.Rows[:2]
+	t1.Rows[0].NoSection, t1.Rows[0].NotRead, t1.Rows[1].NotRead = 2, 6, 6
+	assert.Equal(t, []string{
+		"as given: 2 members have no section, and their steel is not counted",
+		"every scenario: 6 members could not be read, and their steel is not counted",
+		"weak: 1 member has no section, and its steel is not counted",
+		"weak: some of its steel has no cost rate",
+	}, t1.Remarks())
+	t1.Rows = t1.Rows[:1]
+	assert.Equal(t, "as given: 6 members could not be read, and their steel is not counted", t1.Remarks()[1])
+}
+
 func TestForms(t *testing.T) {
 	var b bytes.Buffer
 	require.NoError(t, table().WriteCSV(&b, '.'))
