@@ -173,7 +173,7 @@ func (h *headerScan) bind(l *layout, c *headerColumn) (vetoed bool) {
 		}
 		l.other = append(l.other, seen)
 	case m.vetoed:
-		seen.Why = "it does not speak of design values"
+		seen.Why = "it speaks of loads that are not design values (dead, live, G, Q, SLS ...): map it if its values are"
 		l.left = append(l.left, seen)
 		return true
 	case m.unclear != "":

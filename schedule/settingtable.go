@@ -91,6 +91,46 @@ func paperSetting() setting {
 type SettingInfo struct {
 	Name, Values string
 	Initial      string // the default; empty: from the national set, or none
+	What         string // it is; empty: name and values say so
+}
+
+// Explained returns the values of a setting, the default first, and what it
+// is.
+func (i *SettingInfo) Explained() string {
+	text := i.Values
+	if i.Initial != "" && !strings.HasPrefix(text, i.Initial) {
+		text = i.Initial + ", or " + text
+	}
+	if i.What != "" {
+		text += ": " + i.What
+	}
+	return text
+}
+
+// settingMeanings say what settings are where their values do not.
+var settingMeanings = map[string]string{
+	"gamma_M0":                "in place of the national set's",
+	"gamma_M1":                "in place of the national set's",
+	"gamma_M,fi":              "in place of the national set's",
+	"strength":                "f_y by thickness from the product standard or from Table 3.1, in place of the national set's",
+	"grade":                   "of rows that give none",
+	"families":                "what is chosen from, for rows that do not say",
+	"compression":             "the sign that compression has in the schedule",
+	"limit":                   "the greatest utilisation that passes",
+	"effective length":        "of each length between restraints by its ends, or from the elastic critical load of the whole column",
+	"moments":                 "those given, or nominal ones of the beam reactions (simple construction)",
+	"interaction":             "the factors of (6.61) and (6.62)",
+	"LTB":                     "6.3.2.3 for rolled sections, or 6.3.2.2",
+	"self-weight":             "the load factor of the columns' own weight",
+	"growth":                  "multiplies every given action",
+	"fire":                    "the load ratio eta_fi, by which critical temperatures are found",
+	"fire period":             "min, compared with the time until an unprotected column is as hot",
+	"shadow factor":           "k_sh of every section, in place of EN 1993-1-2, 4.2.5.1",
+	"objective":               "what the lightest is the least of",
+	"splices":                 "where the section of a stack may change",
+	"splice cost":             "of one splice, as the objective counts: kg of steel, cost or kg of carbon",
+	"cost [FAMILY] [GRADE]":   "the objective cost and the take-off go by it",
+	"carbon [FAMILY] [GRADE]": "the objective carbon and the take-off go by it",
 }
 
 // SettingInfos returns the settings in their order, those that are given for a
@@ -98,12 +138,16 @@ type SettingInfo struct {
 func SettingInfos() []SettingInfo {
 	var list []SettingInfo
 	for i := range settingTable {
-		list = append(list, SettingInfo{settingTable[i].name, settingTable[i].values, settingTable[i].initial})
+		list = append(list, SettingInfo{Name: settingTable[i].name, Values: settingTable[i].values, Initial: settingTable[i].initial})
 	}
-	return append(list,
+	list = append(list,
 		SettingInfo{Name: "cost [FAMILY] [GRADE]", Values: "cost per tonne"},
 		SettingInfo{Name: "carbon [FAMILY] [GRADE]", Values: "embodied carbon, kg per kg"},
 		SettingInfo{Name: "map HEADING", Values: "the field that a heading of the user's stands for, or " + ignored})
+	for i := range list {
+		list[i].What = settingMeanings[list[i].Name]
+	}
+	return list
 }
 
 func settingNames() []string {

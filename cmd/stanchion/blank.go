@@ -46,7 +46,7 @@ func writeBlank(ctx context.Context, con *console, c *cobra.Command, path string
 		return blank.CSV(con.out, all)
 	case ext == ".xlsx":
 		write = blank.Workbook
-	case isWorkbookName(ext):
+	case ext != ".csv" && ext != ".txt":
 		return usage(c, "%s: an empty schedule is written as .xlsx or .csv", path)
 	}
 	if err := writeNewFile(ctx, path, force, func(w io.Writer) error { return write(w, all) }); err != nil {

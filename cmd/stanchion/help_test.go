@@ -43,3 +43,12 @@ func typed(line string) (words []string) {
 	}
 	return words
 }
+
+// The help of the settings fits a screen, and says what numbers are by default.
+func TestHelpOfTheSettings(t *testing.T) {
+	help := settingsHelp()
+	for _, line := range strings.Split(help, "\n") {
+		assert.LessOrEqual(t, len(line), screenWidth, line)
+	}
+	assert.Contains(t, help, "\n  limit                   1.00, or a number from 0.01 to 1.50: the greatest utilisation that passes\n")
+}

@@ -47,9 +47,11 @@ func rootCommand(con *console) *cobra.Command {
 		Example: `  stanchion size examples/ottermere-depot.xlsx
   stanchion check examples/ottermere-depot-ordered.csv
   stanchion sections 203x203 UKC`,
+		Version:       versionText(),
 		SilenceUsage:  true,
 		SilenceErrors: true,
 	}
+	root.SetVersionTemplate("{{.Name}} {{.Version}}\n")
 	root.CompletionOptions.HiddenDefaultCmd = true
 	root.SetFlagErrorFunc(func(c *cobra.Command, err error) error { return usage(c, "%v", err) })
 	root.AddCommand(sizeCommand(con), checkCommand(con), workingCommand(con), sheetsCommand(con), blankCommand(con), sectionsCommand(con), nationalCommand(con), versionCommand(con))

@@ -77,13 +77,11 @@ func (f *runFlags) check(c *cobra.Command) error {
 // settingsHelp lists the settings for the help of a command.
 func settingsHelp() string {
 	var b strings.Builder
-	b.WriteString("Settings, for --set, a sheet named Settings or a file given with --settings:\n")
-	t := newTable("", "")
+	b.WriteString("Settings, the default first, for --set, a sheet named Settings or a file given with --settings:\n")
+	const wide = 26 // of the names
 	for _, s := range schedule.SettingInfos() {
-		t.add("  "+s.Name, s.Values)
-	}
-	for _, line := range t.lines()[1:] {
-		fmt.Fprintln(&b, line)
+		text := strings.Replace(wrap(s.Explained(), screenWidth-wide, "  "), "\n", "\n"+strings.Repeat(" ", wide), -1)
+		fmt.Fprintf(&b, "  %-*s%s\n", wide-2, s.Name, text)
 	}
 	return strings.TrimRight(b.String(), "\n")
 }

@@ -137,7 +137,7 @@ func lines(row []workbook.Cell, widths []float64) int {
 
 // settingsSheet holds the settings of a run, blank where the default holds.
 func settingsSheet() workbook.Sheet {
-	s := workbook.Sheet{Name: "Settings", FreezeRows: 1, PagesWide: 1, Widths: []float64{24, 24, 70}}
+	s := workbook.Sheet{Name: "Settings", FreezeRows: 1, PagesWide: 1, Widths: []float64{24, 24, 110}}
 	for i, text := range []string{"Name", "Value", "Values, the default first"} {
 		if i == 0 {
 			s.Rows = append(s.Rows, nil)
@@ -151,7 +151,7 @@ func settingsSheet() workbook.Sheet {
 		s.Rows = append(s.Rows, []workbook.Cell{
 			{Value: info.Name, Look: workbook.Look{Role: workbook.Label}},
 			{Look: workbook.Look{Role: workbook.Input}},
-			{Value: info.Values, Look: workbook.Look{Role: workbook.Remark}},
+			{Value: info.Explained(), Look: workbook.Look{Role: workbook.Remark}},
 		})
 	}
 	return s
