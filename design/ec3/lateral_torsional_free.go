@@ -49,3 +49,6 @@ func (m *Member) freeEnd(s *Segment, my design.EndMoments) (free, atFree bool) {
 	b, t := math.Abs(my.Bottom), math.Abs(my.Top)
 	return bottom || top, bottom && b > t || top && t > b
 }
+
+// beyond reports whether M_b,Rd rests on a C1 that is not the table's.
+func (x *Lateral) beyond() bool { return x.Beyond && x.Alpha > 0 }

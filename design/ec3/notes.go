@@ -62,7 +62,7 @@ func (m *Member) reactionsLeftOut() bool {
 // a check of its own, with the reason.
 func (a *Assessment) Notes() []string {
 	var notes []string
-	if a.Lateral.Beyond && a.Lateral.Alpha > 0 {
+	if a.Lateral.beyond() || a.Interaction.LT.beyond() || a.Simple.LT.beyond() {
 		notes = append(notes, "an end is free to twist: C1 is taken lower than NCCI SN003's, which is for lengths held against twist at both ends")
 	}
 	if a.Interaction.Class > 0 || a.Lateral.Class > 0 || a.Simple.Class > 0 {
