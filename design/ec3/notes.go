@@ -19,7 +19,7 @@ func (m *Member) note() {
 	}
 	if m.Eccentric() {
 		m.Notes = append(m.Notes, "z-z is held off the shear centre: between torsion restraints an open section turns "+
-			"about the line that holds it (Timoshenko and Gere, art. 5.7)")
+			"about the line that holds it (Timoshenko and Gere, art. 5.7); that line is taken as held all along, and held at points N_cr can be up to 7 % lower")
 	}
 	if m.reactionsLeftOut() {
 		m.Notes = append(m.Notes, "beam reactions are given and do not count: the setting moments is analysis, and nominal moments need simple")
