@@ -93,7 +93,7 @@ func newClimb(s *search, k int, node branchNode, effort ascent) *climb {
 // patience is how many steps may fail to raise the bound before they are
 // halved; so many that raise it one after the other make them longer.
 const (
-	patience = 12
+	patience = 6
 	streak   = 4
 	longer   = 1.3
 )
