@@ -59,7 +59,7 @@ func never(string) bool { return false }
 // writeNewFile writes a file that replaces none, unless the user insists.
 func writeNewFile(ctx context.Context, path string, force bool, write func(io.Writer) error) error {
 	if err := mayReplace(path, force, never); err != nil {
-		return err
+		return fmt.Errorf("%s exists: name another file, or give --force to replace it", path)
 	}
 	return outfile.Write(ctx, path, write)
 }

@@ -94,10 +94,14 @@ func (r *run) sheets(ctx context.Context, f *sheetsFlags, marks []string) error 
 		}
 	}
 	stacks := calcsheet.Stacks(sheets, project.Missing, r.plan.Settings.Together.Options)
+	elevations, err := elevationFiles(f, stacks)
+	if err != nil {
+		return err
+	}
 	if err := outfile.Write(ctx, path, func(w io.Writer) error { return calcsheet.PDF(w, project, sheets, stacks) }); err != nil {
 		return err
 	}
-	if err := writeElevations(ctx, f, stacks); err != nil {
+	if err := writeElevations(ctx, f, elevations, stacks); err != nil {
 		return err
 	}
 	r.con.say("%s: %s", path, plural(len(sheets), "sheet"))
@@ -187,14 +191,13 @@ func before(file io.ReaderAt, place, n int64) []byte {
 	return data
 }
 
-// writeElevations writes the elevation of every stack into a folder.
-func writeElevations(ctx context.Context, f *sheetsFlags, stacks []*calcsheet.Stack) error {
+// elevationFiles names the file of every stack's elevation. What no earlier run
+// wrote is not replaced.
+func elevationFiles(f *sheetsFlags, stacks []*calcsheet.Stack) ([]string, error) {
 	if f.elevations == "" {
-		return nil
+		return nil, nil
 	}
-	if err := os.MkdirAll(f.elevations, 0o777); err != nil {
-		return fmt.Errorf("--elevations: %w", plainCause(err))
-	}
+	var files []string
 	taken := map[string]bool{}
 	for _, s := range stacks {
 		name := fileName(s.Name)
@@ -202,7 +205,30 @@ func writeElevations(ctx context.Context, f *sheetsFlags, stacks []*calcsheet.St
 			name = fmt.Sprintf("%s-%d", fileName(s.Name), n)
 		}
 		taken[strings.ToLower(name)] = true
-		if err := outfile.Write(ctx, filepath.Join(f.elevations, name+".svg"), s.SVG); err != nil {
+		path := filepath.Join(f.elevations, name+".svg")
+		if err := mayReplace(path, f.force, elevationEarlier); err != nil {
+			return nil, fmt.Errorf("--elevations: %s exists, and no earlier run wrote it: name another folder, or give --force to replace it", path)
+		}
+		files = append(files, path)
+	}
+	return files, nil
+}
+
+// elevationEarlier reports whether an earlier run wrote an elevation.
+func elevationEarlier(path string) bool {
+	return beginsWith(path, func(line string) bool { return strings.TrimSpace(line) == calcsheet.SVGBegins })
+}
+
+// writeElevations writes the elevation of every stack into its file.
+func writeElevations(ctx context.Context, f *sheetsFlags, files []string, stacks []*calcsheet.Stack) error {
+	if len(files) == 0 {
+		return nil
+	}
+	if err := os.MkdirAll(f.elevations, 0o777); err != nil {
+		return fmt.Errorf("--elevations: %w", plainCause(err))
+	}
+	for i, s := range stacks {
+		if err := outfile.Write(ctx, files[i], s.SVG); err != nil {
 			return err
 		}
 	}

@@ -5,6 +5,7 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"os"
 	"path/filepath"
 	"strconv"
 	"strings"
@@ -145,12 +146,22 @@ func sizesLines(table *tradeoff.Table, indent string) []string {
 	return lines
 }
 
-// sizesEarlier reports whether an earlier run wrote such a file. A picture
-// cannot be told.
+// sizesEarlier reports whether an earlier run wrote such a file.
 func sizesEarlier(path string) bool {
 	return workbook.WrittenByUs(path) || beginsWith(path, func(line string) bool {
 		return tradeoff.IsCSV(line) || strings.HasPrefix(line, sizesTitle)
-	})
+	}) || isPicture(path)
+}
+
+// isPicture reports whether an earlier run drew a picture.
+func isPicture(path string) bool {
+	file, err := os.Open(path)
+	if err != nil {
+		return false
+	}
+	defer file.Close()
+	begins, err := io.ReadAll(io.LimitReader(file, 1<<10))
+	return err == nil && tradeoff.IsPicture(begins)
 }
 
 // say tells a person what became of the run where the table went to a file,

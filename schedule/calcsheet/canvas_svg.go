@@ -60,9 +60,12 @@ func (c *svgCanvas) text(x, y float64, s string, f face, size float64) {
 
 func (c *svgCanvas) link(x, y, w, h float64, to int) {}
 
+// SVGBegins is the first line of every SVG that this package writes.
+const SVGBegins = `<?xml version="1.0" encoding="UTF-8"?><!--written by stanchion-->`
+
 // bytes returns the file, of a size in mm.
 func (c *svgCanvas) bytes(w, h float64, title string) []byte {
-	return fmt.Appendf(nil, `<?xml version="1.0" encoding="UTF-8"?>
+	return fmt.Appendf(nil, SVGBegins+`
 <svg xmlns="http://www.w3.org/2000/svg" width="%smm" height="%smm" viewBox="0 0 %s %s" font-family="Go, Arial, Helvetica, sans-serif">
 <title>%s</title>
 <rect width="100%%" height="100%%" fill="#fff"/>

@@ -1,6 +1,7 @@
 package tradeoff
 
 import (
+	"bytes"
 	"fmt"
 	"image/color"
 	"io"
@@ -43,7 +44,11 @@ func (t *Table) WritePicture(w io.Writer, format string) error {
 	}
 	const edge = 5 * vg.Millimeter
 	p.Draw(draw.Crop(draw.New(out), edge, -edge, edge, -edge))
-	_, err = out.WriteTo(w)
+	var picture bytes.Buffer
+	if _, err := out.WriteTo(&picture); err != nil {
+		return err
+	}
+	_, err = w.Write(marked(picture.Bytes(), format))
 	return err
 }
 

@@ -2,6 +2,10 @@ package tradeoff
 
 import (
 	"bytes"
+	"encoding/xml"
+	"image"
+	"image/png"
+	"io"
 	"math"
 	"strings"
 	"testing"
@@ -108,6 +112,21 @@ func TestPictures(t *testing.T) {
 		require.NoError(t, table(design.ByMass).WritePicture(&b, format))
 		assert.True(t, strings.HasPrefix(a.String(), begins), format)
 		assert.Equal(t, a.Bytes(), b.Bytes(), "the same table gives the same bytes")
+		assert.True(t, IsPicture(a.Bytes()), "it is known again")
+		if format == "png" {
+			_, err := png.Decode(&a)
+			require.NoError(t, err)
+			continue
+		}
+		d := xml.NewDecoder(&a)
+		for err := error(nil); err != io.EOF; _, err = d.Token() {
+			require.NoError(t, err)
+		}
+	}
+	var other bytes.Buffer
+	require.NoError(t, png.Encode(&other, image.NewGray(image.Rect(0, 0, 2, 2))))
+	for _, begins := range []string{"", "<?xml", other.String(), svgMark} {
+		assert.False(t, IsPicture([]byte(begins)))
 	}
 	assert.Error(t, Of("x", nil, nil, design.ByMass).WritePicture(&bytes.Buffer{}, "svg"))
 }
