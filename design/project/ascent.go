@@ -29,7 +29,7 @@ type ascent struct {
 func (s *search) ascend(ctx context.Context, k int, node branchNode, best *answer, effort ascent) outcome {
 	c := newClimb(s, k, node, effort)
 	for step := 0; ; step++ {
-		bound := c.r.bound(c.s, c.state)
+		bound := c.r.bound(c.state)
 		if impossible(bound) {
 			return outcome{closed: true}
 		}
@@ -45,7 +45,7 @@ func (s *search) ascend(ctx context.Context, k int, node branchNode, best *answe
 		if step >= effort.steps || c.scale < 1e-4 || ctx.Err() != nil {
 			break
 		}
-		if !c.r.step(s, c.state, &c.direction, c.scale*(aim(best.cost, bound)-bound)) {
+		if !c.r.step(c.state, &c.direction, c.scale*(aim(best.cost, bound)-bound)) {
 			break
 		}
 		c.shrink()
@@ -118,7 +118,7 @@ func (c *climb) compare(bound float64, best *answer) float64 {
 	c.scale, c.stale = c.scale/2, 0
 	c.at.copy(&c.keep, c.s.workers)
 	c.direction.rest()
-	bound = c.r.bound(c.s, c.state)
+	bound = c.r.bound(c.state)
 	c.polish(best)
 	return bound
 }

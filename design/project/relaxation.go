@@ -9,9 +9,10 @@ import (
 // relaxed, and what its optimum comes to at the multipliers as they stand.
 type relaxation struct {
 	*multipliers
-	f  *field
-	k  int
-	at placement
+	s       *search
+	f       *field
+	k       int
+	solvers []*chainSolver // by worker
 
 	worth  []float64 // by column: what all nodes would pay for it to be open
 	pick   []bool    // the K columns that are worth most
@@ -27,13 +28,6 @@ type relaxation struct {
 	along *direction
 }
 
-// placement is what the workers of a relaxation share.
-type placement struct {
-	workers int
-	parts   []part
-	solvers []*chainSolver // by worker
-}
-
 // task is what one part comes to.
 type task struct {
 	total  float64
@@ -42,7 +36,7 @@ type task struct {
 }
 
 func newRelaxation(s *search, f *field, k int, m *multipliers) *relaxation {
-	r := &relaxation{multipliers: m, f: f, k: k, at: placement{s.workers, s.parts, f.solvers(s.workers)}}
+	r := &relaxation{multipliers: m, f: f, s: s, k: k, solvers: f.solvers(s.workers)}
 	r.worth, r.pick = make([]float64, len(f.sizes)), make([]bool, len(f.sizes))
 	r.share = make([]float64, len(f.sizes))
 	r.taken = make([]int32, f.cost.rows())
@@ -53,14 +47,15 @@ func newRelaxation(s *search, f *field, k int, m *multipliers) *relaxation {
 	return r
 }
 
-// bound takes the step that is due and evaluates the relaxation: the sum over nodes at their prices, less the
-// worth of the K best columns. +Inf: no column of the field serves some node.
-func (r *relaxation) bound(s *search, state []int8) float64 {
-	each(r.at.workers, len(r.tasks), func(w, i int) {
+// bound takes the step that is due and evaluates the relaxation: the sum over
+// nodes at their prices, less the worth of the K best columns. +Inf: no column
+// of the field serves some node.
+func (r *relaxation) bound(state []int8) float64 {
+	each(r.s.workers, len(r.tasks), func(w, i int) {
 		if r.due != 0 {
-			r.move(s, &r.at.parts[i])
+			r.move(&r.s.parts[i])
 		}
-		r.evaluate(s, r.at.solvers[w], &r.at.parts[i], &r.tasks[i])
+		r.evaluate(r.solvers[w], &r.s.parts[i], &r.tasks[i])
 	})
 	r.due = 0
 	clear(r.worth)
@@ -81,14 +76,14 @@ func (r *relaxation) bound(s *search, state []int8) float64 {
 
 // move takes the step that is due for the rows of one part; prices are moved as
 // they are charged.
-func (r *relaxation) move(s *search, p *part) {
+func (r *relaxation) move(p *part) {
 	for i := p.rows[0]; i < p.rows[1]; i++ {
-		r.u[i] += r.due * s.rowScale[i] * r.along.u[i]
+		r.u[i] += r.due * r.s.rowScale[i] * r.along.u[i]
 	}
 }
 
 // evaluate computes one part.
-func (r *relaxation) evaluate(s *search, solver *chainSolver, p *part, t *task) {
+func (r *relaxation) evaluate(solver *chainSolver, p *part, t *task) {
 	clear(t.worth)
 	t.total = 0
 	for i := p.rows[0]; i < p.rows[1]; i++ {
@@ -104,7 +99,7 @@ func (r *relaxation) evaluate(s *search, solver *chainSolver, p *part, t *task) 
 	for c := p.strands[0]; c < p.strands[1]; c++ {
 		st := &r.f.strands[c]
 		for n := range st.count {
-			r.charge(st.first+n, s.nodeScale[st.first+n], solver.cost[n], t.worth)
+			r.charge(st.first+n, r.s.nodeScale[st.first+n], solver.cost[n], t.worth)
 		}
 		v, picks := solver.solve(st)
 		if t.total += v; picks == nil {

@@ -48,13 +48,13 @@ func (d *direction) only(cols []int32, s *search) direction {
 }
 
 // step turns the direction by the subgradient where the places are spread over
-// nearly equal columns, and sets the length of the step
-// that the next bound takes along it by Polyak's rule: the distance to the
-// target over the square of the direction. It reports false where that is nil.
-func (r *relaxation) step(s *search, state []int8, d *direction, distance float64) bool {
+// nearly equal columns, and sets the length of the step that the next bound takes
+// along it by Polyak's rule: the distance to the target over the square of the
+// direction. It reports false where that is nil.
+func (r *relaxation) step(state []int8, d *direction, distance float64) bool {
 	r.spread(state, distance)
 	d.fade *= momentum
-	each(r.at.workers, len(r.tasks), func(_, i int) { r.turn(s, d, i) })
+	each(r.s.workers, len(r.tasks), func(_, i int) { r.turn(d, i) })
 	square := 0.0
 	for i := range r.tasks {
 		square += r.tasks[i].square + d.square[i]
@@ -67,21 +67,21 @@ func (r *relaxation) step(s *search, state []int8, d *direction, distance float6
 }
 
 // turn adds the subgradient of one part to the direction, and takes its square.
-func (r *relaxation) turn(s *search, d *direction, part int) {
-	p, t := &r.at.parts[part], &r.tasks[part]
+func (r *relaxation) turn(d *direction, part int) {
+	p, t := &r.s.parts[part], &r.tasks[part]
 	t.square = 0
 	for i := p.rows[0]; i < p.rows[1]; i++ {
-		g := momentum*d.u[i] + s.rowScale[i]*r.shortOf(i)
+		g := momentum*d.u[i] + r.s.rowScale[i]*r.shortOf(i)
 		d.u[i] = g
 		t.square += g * g
 	}
 	d.square[part] *= momentum * momentum
 	from, to := p.nodes(r.f.strands)
 	for i := from; i < to; i++ {
-		g := momentum*d.shift[i] + s.nodeScale[i]*r.nodeShortOf(i)
+		g := momentum*d.shift[i] + r.s.nodeScale[i]*r.nodeShortOf(i)
 		d.shift[i] = g
 		t.square += g * g
-		d.square[part] += r.turnPrices(i, d, s.nodeScale[i])
+		d.square[part] += r.turnPrices(i, d, r.s.nodeScale[i])
 	}
 }
 
