@@ -25,13 +25,23 @@ func (r *run) sayFailing(ctx context.Context) {
 	t.limit(4, 26)
 	for i := range lines {
 		l := &lines[i]
-		t.add("  "+l.Member.Column.Mark, summary.Level(&l.Member.Column), l.Result.Section, utilisation(&l.Result, ec3.Limit(&l.Member.Column, &r.plan.Settings.Design)), schedule.CheckName(l.Result.Governing.Kind), instead[i])
+		limit := ec3.Limit(&l.Member.Column, &r.plan.Settings.Design)
+		t.add("  "+l.Member.Column.Mark, summary.Level(&l.Member.Column), l.Result.Section, utilisation(&l.Result, limit), failing(&l.Result, limit), instead[i])
 	}
 	r.print("", "Members that fail:")
 	r.print(t.lines()...)
 	if more := r.tally.Count[design.Fails] + r.tally.Count[design.NoSection] - len(lines); more > 0 {
 		r.print(fmt.Sprintf("  and %d more: see the result column \"status\"", more))
 	}
+}
+
+// failing says what a member fails in. One that passes itself has no section
+// because another of its stack or group has none.
+func failing(res *design.Result, limit float64) string {
+	if res.Status == design.NoSection && res.Section != "" && schedule.Round(res.Utilisation) <= limit {
+		return "joined to one that fails"
+	}
+	return schedule.CheckName(res.Governing.Kind)
 }
 
 // utilisation writes the utilisation of a result: to three decimals, as a
