@@ -2,6 +2,7 @@ package main
 
 import (
 	"context"
+	"errors"
 	"fmt"
 	"io"
 	"slices"
@@ -122,17 +123,23 @@ func (f *sectionsFlags) search(c *cobra.Command, cat *catalogue.Catalogue, words
 	if len(list) > 0 {
 		return list, nil
 	}
-	return noneFound(cat, words)
+	return f.noneFound(cat, words, parts)
 }
 
 // noneFound reads the words as the whole name of a section, in a spelling that
-// no part of its name has; the error names the nearest.
-func noneFound(cat *catalogue.Catalogue, words []string) ([]*catalogue.Section, error) {
+// no part of its name has; the error names the nearest. Where names hold the
+// parts, it is the ranges and families that leave none.
+func (f *sectionsFlags) noneFound(cat *catalogue.Catalogue, words, parts []string) ([]*catalogue.Section, error) {
 	name := strings.Join(words, " ")
-	if name == "" {
+	narrowed := len(parts) == 0 || f.depth+f.width+f.thickness+f.mass != "" || len(f.families) > 0
+	if narrowed && slices.ContainsFunc(cat.Sections(), func(s *catalogue.Section) bool { return holdsAll(compactName(s.Name()), parts) }) {
 		return nil, fmt.Errorf("no section is like that: widen a range, or leave a family out")
 	}
 	s, err := cat.Find(name, catalogue.FindOptions{})
+	var unknown *catalogue.UnknownSectionError
+	if errors.As(err, &unknown) && unknown.Reason == "" && len(unknown.Nearest) == 0 {
+		return nil, fmt.Errorf("%q is in no section's name: give a part of one (203x203), or a family: %s", name, strings.Join(catalogue.FamilyNames(), ", "))
+	}
 	if err != nil {
 		return nil, err
 	}
