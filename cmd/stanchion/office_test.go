@@ -175,6 +175,9 @@ func TestChartsPointAtCellsThatHoldSomething(t *testing.T) {
 }
 
 func TestAnotherProgramReadsTheSameResults(t *testing.T) {
+	if testing.Short() {
+		t.Skip("another program opens what was written: long, and nothing runs side by side")
+	}
 	path, members := sizedDepot(t)
 	f := openBook(t, office(t, path, "xlsx"))
 	assert.Equal(t, []string{"Columns", "Settings", "Summary", "Problems", "Results", "Working", "Sizes used", "Take-off", "Splices", "Cutting list", "Charts", "Chart data"}, f.GetSheetList())
@@ -208,6 +211,9 @@ func TestAnotherProgramReadsTheSameResults(t *testing.T) {
 }
 
 func TestThePrintedWorkbook(t *testing.T) {
+	if testing.Short() {
+		t.Skip("another program opens what was written: long, and nothing runs side by side")
+	}
 	path, members := sizedDepot(t)
 	pdf := office(t, path, "pdf")
 	program, err := exec.LookPath("pdftotext")
@@ -274,6 +280,9 @@ func below(t *testing.T, rows [][]string, heading string) string {
 }
 
 func TestMembersAndWorkingsLeadToEachOther(t *testing.T) {
+	if testing.Short() {
+		t.Skip("another program opens what was written: long, and nothing runs side by side")
+	}
 	path, members := sizedDepot(t)
 	for _, path := range []string{path, office(t, path, "xlsx")} {
 		f := openBook(t, path)

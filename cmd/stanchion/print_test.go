@@ -55,6 +55,9 @@ func TestChangesAreSeenOnPaper(t *testing.T) {
 }
 
 func TestThePaperIsChosen(t *testing.T) {
+	if testing.Short() {
+		t.Skip("another program opens what was written: long, and nothing runs side by side")
+	}
 	for paper, size := range map[string]string{"A4": "595.304 x 841.89", "A3": "841.89 x 1190.55"} {
 		path := filepath.Join(t.TempDir(), "sized.xlsx")
 		runOf(t, 0, "size", depot, "-o", path, "--set", "paper="+paper, "--quiet")

@@ -68,6 +68,9 @@ func TestSheetsHaveTheNumbersOfTheJSON(t *testing.T) {
 // Sheets are known again however many there are: the end of a PDF grows with
 // them.
 func TestManySheetsMayBeWrittenAgain(t *testing.T) {
+	if testing.Short() {
+		t.Skip("long, and nothing runs side by side")
+	}
 	dir := t.TempDir()
 	input, pdf := filepath.Join(dir, "loads.csv"), filepath.Join(dir, "loads-sheets.pdf")
 	rows := "Mark,Length,N_Ed\n"

@@ -111,6 +111,9 @@ func rated(s *design.Settings) {
 // Where a splice may stand above any length, a change of grade is one: the
 // total is the least of every combination of sections and grades.
 func TestAChangeOfGradeIsASplice(t *testing.T) {
+	if testing.Short() {
+		t.Skip("tries every combination: long, and nothing runs side by side")
+	}
 	for name, change := range map[string]func(*design.Settings){
 		"mass": func(s *design.Settings) { s.Grades, s.Families = []string{"S275", "S355"}, []string{"UKC"} },
 		"cost": rated,

@@ -43,6 +43,9 @@ func splices(ru *rules, d *Decision, o *Options) float64 {
 // Stacks, splices, groups and given sections: the total is the least of every
 // combination, and no rule is broken.
 func TestAgainstEveryCombination(t *testing.T) {
+	if testing.Short() {
+		t.Skip("tries every combination: long, and nothing runs side by side")
+	}
 	e := engineOf(t, nil)
 	served := 0
 	for seed := range uint64(80) {
@@ -65,6 +68,9 @@ func TestAgainstEveryCombination(t *testing.T) {
 
 // The same with few sizes, proven for every number of them.
 func TestFewSizesAgainstEveryCombination(t *testing.T) {
+	if testing.Short() {
+		t.Skip("tries every combination: long, and nothing runs side by side")
+	}
 	e := engineOf(t, nil)
 	served := 0
 	for seed := range uint64(60) {

@@ -101,13 +101,13 @@ func TestMoreSizesAreNeverHeavier(t *testing.T) {
 // another number of workers: parts are added up in their order.
 func TestWorkersDecideNothing(t *testing.T) {
 	for _, deepest := range []int{1, 6} {
-		p := office(rand.New(rand.NewPCG(9, 9)), 1500, 60, deepest)
+		p := office(rand.New(rand.NewPCG(9, 9)), 900, 60, deepest)
 		p.Workers = 1
-		want, err := p.FewSizes(context.Background(), 7)
+		want, err := p.FewSizes(context.Background(), 5)
 		require.NoError(t, err)
-		for _, workers := range []int{2, 5} {
+		for _, workers := range [...]int{2, 5} {
 			p.Workers = workers
-			got, err := p.FewSizes(context.Background(), 7)
+			got, err := p.FewSizes(context.Background(), 5)
 			require.NoError(t, err)
 			require.Equal(t, want, got)
 		}
