@@ -140,7 +140,24 @@ func ordered(cols []design.Column, line []int) (parts [][]int, note string) {
 	if byHeight, ok := sortedByHeight(cols, line); ok {
 		return [][]int{byHeight}, ""
 	}
-	return parts, "its levels do not join: each part is sized by itself"
+	return parts, "its levels do not join: " + spans(cols, parts) + " are sized each by itself"
+}
+
+// spans names parts of a stack by the levels from which to which they go.
+func spans(cols []design.Column, parts [][]int) string {
+	var names []string
+	for _, part := range parts {
+		names = append(names, fmt.Sprintf("%s to %s", named(cols[part[0]].From), named(cols[part[len(part)-1]].To)))
+	}
+	return strings.Join(names[:len(names)-1], ", ") + " and " + names[len(names)-1]
+}
+
+// named is a level, or what stands for one that is not given.
+func named(level string) string {
+	if level == "" {
+		return "no level"
+	}
+	return level
 }
 
 // level makes names of levels comparable.

@@ -33,7 +33,7 @@ func TestLengthsAreOrderedByLevel(t *testing.T) {
 		"heights, no tops": {[][2]string{{"+7.200", ""}, {"0.000", ""}, {"+3.6", ""}}, [][]int{{1, 2, 0}}, ""},
 		"heights and gap":  {[][2]string{{"10", "14"}, {"0", "4"}, {"4", "8"}}, [][]int{{1, 2, 0}}, ""},
 		"no levels":        {[][2]string{{"", ""}, {"", ""}}, [][]int{{0, 1}}, "as listed"},
-		"a gap":            {[][2]string{{"GF", "L1"}, {"L3", "L4"}, {"L1", "L2"}}, [][]int{{0, 2}, {1}}, "do not join"},
+		"a gap":            {[][2]string{{"GF", "L1"}, {"L3", "L4"}, {"L1", "L2"}}, [][]int{{0, 2}, {1}}, "its levels do not join: GF to L2 and L3 to L4 are sized each by itself"},
 		"one level twice":  {[][2]string{{"GF", "L1"}, {"GF", "L1"}}, nil, "A1 and A2 stand at one level"},
 		"a ring of levels": {[][2]string{{"L1", "L2"}, {"L2", "L1"}}, [][]int{{0}, {1}}, "do not join"},
 	} {
