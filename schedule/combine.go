@@ -79,6 +79,7 @@ func (p *combinationPlan) one(m *memberData, d *rowData, g int, name string) {
 	}
 	c := design.Combination{Name: name}
 	own := false // something beside N_Ed belongs to this combination alone
+	var given endsGiven
 	for _, i := range p.parts {
 		v := &d.values[i]
 		if !v.set || p.own[i] >= 0 && p.own[i] != g {
@@ -86,6 +87,7 @@ func (p *combinationPlan) one(m *memberData, d *rowData, g int, name string) {
 		}
 		own = own || p.own[i] == g
 		m.action(&c, i, v)
+		given.mark(&m.r.bindings[i])
 	}
 	if !ok {
 		if m.r.plan.loadsOptional {
@@ -95,12 +97,46 @@ func (p *combinationPlan) one(m *memberData, d *rowData, g int, name string) {
 		c.NEd = v.num
 		slices.SortFunc(c.Steps, func(a, b design.Step) int { return cmp.Compare(a.Height, b.Height) })
 		m.combinations = append(m.combinations, c)
+		m.oneEnd("M_y,Ed", &c.My, given[0])
+		m.oneEnd("M_z,Ed", &c.Mz, given[1])
 		return
 	} else if m.failed(d, axial) {
 		return // reported with its cell
 	}
 	if own && (ok || g >= 0) {
 		m.noAxial(d, name)
+	}
+}
+
+// endsGiven says by axis at which ends a combination has a moment: bottom, top.
+type endsGiven [2][2]bool
+
+func (g *endsGiven) mark(b *Binding) {
+	if b.key.field != momentField {
+		return
+	}
+	axis, end := 0, 0
+	if b.key.axis == zAxis {
+		axis = 1
+	}
+	if b.key.end == topEnd {
+		end = 1
+	}
+	g[axis][end] = true
+}
+
+// oneEnd notes that a moment is given at one end alone: a blank is absent, and
+// the diagram that falls to nothing there is more favourable than most.
+func (m *memberData) oneEnd(name string, at *design.EndMoments, given [2]bool) {
+	if given[0] == given[1] || at.Zero() {
+		return
+	}
+	here, there := "bottom", "top"
+	if given[1] {
+		here, there = there, here
+	}
+	if note := fmt.Sprintf("%s is given at the %s alone: 0 is taken at the %s", name, here, there); !slices.Contains(m.notes, note) {
+		m.notes = append(m.notes, note)
 	}
 }
 
