@@ -1,6 +1,7 @@
 package schedule
 
 import (
+	"math"
 	"strings"
 
 	"stanchion/design"
@@ -116,7 +117,8 @@ func reserveColumns() []ResultColumn {
 
 func fireColumns() []ResultColumn {
 	return []ResultColumn{
-		number("critical temperature", "C", 0, 9, func(_ *Member, r *design.Result) float64 { return r.Fire.CriticalTemperature }),
+		// Rounded down: the next degree up has not been shown to be borne.
+		number("critical temperature", "C", 0, 9, func(_ *Member, r *design.Result) float64 { return math.Floor(r.Fire.CriticalTemperature) }),
 		number("A_m/V", "1/m", 0, 7, func(_ *Member, r *design.Result) float64 { return r.Fire.SectionFactor }),
 		number("time to critical, unprotected", "min", 1, 9, func(_ *Member, r *design.Result) float64 { return r.Fire.TimeToCritical }),
 	}
