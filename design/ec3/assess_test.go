@@ -30,7 +30,8 @@ func loaded(length float64, forces ...float64) *design.Column {
 
 // Access Steel SX002a-EN-EU, pinned column with intermediate restraints, from
 // memory: S235, N_cr,y 1964.5 kN, chi_y 0.585, N_b,y,Rd 1193 kN, N_cr,z
-// 6206 kN, chi_z 0.800; 0.5 % covers the example's own rounding.
+// 6206 kN, chi_z 0.800. The figures that it prints are rounded by up to 0.1 %,
+// chi_z, found from a rounded slenderness, by 0.14 %.
 func TestPinnedColumnWithIntermediateRestraints(t *testing.T) {
 	set := settings()
 	c := candidate(t, he260a(), "S235", set)
@@ -38,11 +39,11 @@ func TestPinnedColumnWithIntermediateRestraints(t *testing.T) {
 	col.Z.Restraints = []float64{3500, 7000}
 	a := assess(t, col, c, set)
 	a.Explain()
-	assert.InEpsilon(t, 1964.5e3, a.Y.Ncr, 0.005)
-	assert.InEpsilon(t, 0.585, a.Y.Chi, 0.005)
-	assert.InEpsilon(t, 1193e3, a.Y.NbRd, 0.005)
-	assert.InEpsilon(t, 6206e3, a.Z.Ncr, 0.005)
-	assert.InEpsilon(t, 0.800, a.Z.Chi, 0.005)
+	assert.InEpsilon(t, 1964.5e3, a.Y.Ncr, 0.001)
+	assert.InEpsilon(t, 0.585, a.Y.Chi, 0.001)
+	assert.InEpsilon(t, 1193e3, a.Y.NbRd, 0.001)
+	assert.InEpsilon(t, 6206e3, a.Z.Ncr, 0.001)
+	assert.InEpsilon(t, 0.800, a.Z.Chi, 0.002)
 	assert.Equal(t, "b", a.Y.Curve)
 	assert.Equal(t, "c", a.Z.Curve)
 	assert.Equal(t, 10500.0, a.Y.Lcr)
@@ -67,7 +68,7 @@ func TestPinnedColumnWithIntermediateRestraints(t *testing.T) {
 
 // Steel Buildings in Europe, Single-Storey Part 5, p. 5-33 and 5-34: IPE 330
 // in S355, class 4 web, A_eff 60.95 cm2, N_b,Rd 1720 kN over 8504 mm about y-y
-// (read; 0.5 % covers the rounding of the example). EN values: fy 355.
+// (read; 0.1 % covers the rounding of the example). EN values: fy 355.
 func TestClass4ColumnOfPublishedTruss(t *testing.T) {
 	set := settings()
 	set.National = ec3.NationalSets()[1]
@@ -75,11 +76,11 @@ func TestClass4ColumnOfPublishedTruss(t *testing.T) {
 	s.A, s.Iy = 6260, 11770e4 // as the example prints them
 	c := candidate(t, s, "S355", set)
 	assert.Equal(t, 4, c.Class)
-	assert.InEpsilon(t, 6095, c.AEff, 0.005)
+	assert.InEpsilon(t, 6095, c.AEff, 0.001)
 	a := assess(t, loaded(8504, 100e3), c, set)
-	assert.InEpsilon(t, 3373e3, a.Y.Ncr, 0.005)
-	assert.InEpsilon(t, 0.8009, a.Y.LambdaBar, 0.005)
-	assert.InEpsilon(t, 1720e3, a.Y.NbRd, 0.005)
+	assert.InEpsilon(t, 3373e3, a.Y.Ncr, 0.001)
+	assert.InEpsilon(t, 0.8009, a.Y.LambdaBar, 0.001)
+	assert.InEpsilon(t, 1720e3, a.Y.NbRd, 0.001)
 	assert.Equal(t, s.A*355, c.NplRd, "tension has the gross section")
 }
 
