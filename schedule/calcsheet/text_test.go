@@ -2,10 +2,7 @@ package calcsheet
 
 import (
 	"bytes"
-	"flag"
 	"math"
-	"os"
-	"path/filepath"
 	"regexp"
 	"strconv"
 	"strings"
@@ -15,9 +12,8 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"stanchion/design/working/formula"
+	"stanchion/schedule/internal/golden"
 )
-
-var update = flag.Bool("update", false, "rewrite the expected text")
 
 func textOf(t *testing.T, e *example) string {
 	var b bytes.Buffer
@@ -30,13 +26,7 @@ func TestText(t *testing.T) {
 		e := &examples[i]
 		t.Run(e.name, func(t *testing.T) {
 			got := textOf(t, e)
-			file := filepath.Join("testdata", e.name+".txt")
-			if *update {
-				require.NoError(t, os.WriteFile(file, []byte(got), 0o644))
-			}
-			want, err := os.ReadFile(file)
-			require.NoError(t, err)
-			assert.Equal(t, string(want), got)
+			golden.Equal(t, e.name+".txt", got)
 			for _, l := range strings.Split(got, "\n") {
 				assert.LessOrEqual(t, columns(l), TextWidth, l)
 			}

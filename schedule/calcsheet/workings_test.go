@@ -3,8 +3,6 @@ package calcsheet
 import (
 	"cmp"
 	"fmt"
-	"os"
-	"path/filepath"
 	"strings"
 	"testing"
 
@@ -13,6 +11,7 @@ import (
 
 	"stanchion/design"
 	"stanchion/design/working"
+	"stanchion/schedule/internal/golden"
 	"stanchion/schedule/workbook"
 )
 
@@ -65,13 +64,7 @@ func TestWorkings(t *testing.T) {
 			for _, row := range shownRows(&sheet) {
 				fmt.Fprintln(&b, strings.TrimRight(strings.Join(row, " | "), " |"))
 			}
-			file := filepath.Join("testdata", e.name+".cells.txt")
-			if *update {
-				require.NoError(t, os.WriteFile(file, []byte(b.String()), 0o644))
-			}
-			want, err := os.ReadFile(file)
-			require.NoError(t, err)
-			assert.Equal(t, string(want), b.String())
+			golden.Equal(t, e.name+".cells.txt", b.String())
 		})
 	}
 }

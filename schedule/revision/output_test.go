@@ -2,10 +2,8 @@ package revision
 
 import (
 	"bytes"
-	"flag"
 	"fmt"
 	"math"
-	"os"
 	"strings"
 	"testing"
 
@@ -15,10 +13,9 @@ import (
 
 	"stanchion/design"
 	"stanchion/schedule"
+	"stanchion/schedule/internal/golden"
 	"stanchion/schedule/workbook"
 )
-
-var update = flag.Bool("update", false, "rewrite the golden files")
 
 // twoIssues are issues with one member of every kind.
 func twoIssues(t testing.TB) *Comparison {
@@ -50,17 +47,6 @@ func twoIssues(t testing.TB) *Comparison {
 	return compared(t, old, new)
 }
 
-func golden(t *testing.T, name, got string) {
-	t.Helper()
-	path := "testdata/" + name
-	if *update {
-		require.NoError(t, os.WriteFile(path, []byte(got), 0o600))
-	}
-	want, err := os.ReadFile(path)
-	require.NoError(t, err)
-	assert.Equal(t, string(want), got)
-}
-
 func TestSheets(t *testing.T) {
 	c := twoIssues(t)
 	info := &Info{Program: "stanchion", Standard: "EN 1993-1-1", National: "UK", OldFile: "P01.xlsx", NewFile: "P02.xlsx", Sheet: "Columns",
@@ -88,7 +74,7 @@ func TestSheets(t *testing.T) {
 			}
 		}
 	}
-	golden(t, "sheets.txt", strings.Join(lines, "\n")+"\n")
+	golden.Equal(t, "sheets.txt", strings.Join(lines, "\n")+"\n")
 }
 
 // The columns beside the new issue, row by row.
@@ -106,7 +92,7 @@ func TestColumns(t *testing.T) {
 		}
 		lines = append(lines, c.Rows[i].New.Name()+"\n  "+strings.Join(cells, "\n  "))
 	}
-	golden(t, "columns.txt", strings.Join(lines, "\n")+"\n")
+	golden.Equal(t, "columns.txt", strings.Join(lines, "\n")+"\n")
 }
 
 // Each word that needs a look of its own has one.

@@ -3,7 +3,6 @@ package takeoff
 import (
 	"bytes"
 	"encoding/csv"
-	"flag"
 	"fmt"
 	"math/big"
 	"os"
@@ -18,10 +17,9 @@ import (
 	"pgregory.net/rapid"
 
 	"stanchion/design"
+	"stanchion/schedule/internal/golden"
 	"stanchion/schedule/workbook"
 )
-
-var update = flag.Bool("update", false, "rewrite the golden files")
 
 // small is a schedule with splices, quantities, a member that fails, one that
 // is left out, and steel without a rate.
@@ -42,21 +40,10 @@ func small(t testing.TB) *TakeOff {
 	})
 }
 
-func golden(t *testing.T, name, got string) {
-	t.Helper()
-	path := "testdata/" + name
-	if *update {
-		require.NoError(t, os.WriteFile(path, []byte(got), 0o600))
-	}
-	want, err := os.ReadFile(path)
-	require.NoError(t, err)
-	assert.Equal(t, string(want), got)
-}
-
 func TestCSV(t *testing.T) {
 	var b bytes.Buffer
 	require.NoError(t, small(t).WriteCSV(&b, '.'))
-	golden(t, "small.csv", strings.ReplaceAll(b.String(), "\r\n", "\n"))
+	golden.Equal(t, "small.csv", strings.ReplaceAll(b.String(), "\r\n", "\n"))
 	first, _, _ := strings.Cut(b.String(), "\n")
 	assert.True(t, IsCSV(first))
 	assert.False(t, IsCSV("Mark,Length"))
@@ -116,7 +103,7 @@ func TestSheets(t *testing.T) {
 			}
 		}
 	}
-	golden(t, "small.txt", strings.Join(lines, "\n")+"\n")
+	golden.Equal(t, "small.txt", strings.Join(lines, "\n")+"\n")
 }
 
 // Another program reads the same numbers, to the last gram.

@@ -2,10 +2,7 @@ package workbook
 
 import (
 	"bytes"
-	"flag"
 	"fmt"
-	"os"
-	"path/filepath"
 	"sort"
 	"strings"
 	"testing"
@@ -13,21 +10,6 @@ import (
 	"github.com/stretchr/testify/require"
 	"github.com/xuri/excelize/v2"
 )
-
-var update = flag.Bool("update", false, "rewrite the golden files")
-
-// golden compares a text with a file in testdata; -update rewrites it.
-func golden(t *testing.T, name, got string) {
-	t.Helper()
-	path := filepath.Join("testdata", name+".txt")
-	if *update {
-		require.NoError(t, os.MkdirAll("testdata", 0o755))
-		require.NoError(t, os.WriteFile(path, []byte(got+"\n"), 0o644))
-	}
-	want, err := os.ReadFile(path)
-	require.NoError(t, err)
-	require.Equal(t, strings.Split(strings.TrimSuffix(string(want), "\n"), "\n"), strings.Split(got, "\n"))
-}
 
 // dump returns a workbook as sorted lines "Sheet!Cell = value | style", so that
 // what is compared is what a person would see.

@@ -9,6 +9,7 @@ import (
 	"github.com/xuri/excelize/v2"
 
 	"stanchion/schedule"
+	"stanchion/schedule/internal/golden"
 )
 
 // Result columns as the program writes them, in short.
@@ -93,5 +94,5 @@ func annotate(t testing.TB, data []byte, block Block, sheets ...Sheet) []byte {
 }
 
 func TestAnnotatedSchedule(t *testing.T) {
-	golden(t, "simple", dump(t, annotate(t, packed(t, simple(t, 9)), simpleBlock(9), ownSheets()...)))
+	golden.Equal(t, "simple.txt", dump(t, annotate(t, packed(t, simple(t, 9)), simpleBlock(9), ownSheets()...))+"\n")
 }
