@@ -45,6 +45,9 @@ func (r *run) sayAtHand() {
 	by := r.plan.Settings.Design.Rates.Objective
 	name := [...]string{design.ByMass: "new steel", design.ByCost: "the cost of new steel", design.ByCarbon: "the CO2e of new steel"}[by]
 	proof := "proven the most that can be saved"
+	if d.Tied > 0 {
+		proof += " with the sections of groups and stacks as they are"
+	}
 	if d.Bound > d.Saved {
 		proof = fmt.Sprintf("the most that can be saved is proven to be within %.2g %% of it", 100*(d.Bound/d.Saved-1))
 	}

@@ -105,6 +105,9 @@ func (r *run) sheets(ctx context.Context, f *sheetsFlags, marks []string) error 
 		return err
 	}
 	r.con.say("%s: %s", path, plural(len(sheets), "sheet"))
+	if f.elevations != "" && len(elevations) == 0 {
+		r.con.say("--elevations: none is written, since of the members chosen no two stand on each other in a stack")
+	}
 	return verdict(&count)
 }
 

@@ -95,14 +95,9 @@ func newRules(t *testing.T, e *search.Engine, cols []design.Column, o *Options) 
 		ru.sections = append(ru.sections, c.Section)
 	}
 	for i := range cols {
-		m, err := ec3.NewMember(&cols[i], &set)
-		require.NoError(t, err)
-		var a ec3.Assessment
-		row := make([]bool, len(l.Candidates))
-		for j, c := range l.Candidates {
-			m.Assess(c, &a)
-			row[j] = ec3.Passes(a.Utilisation, 1)
-			if cols[i].Given != "" {
+		row := passing(t, &cols[i], &set, l.Candidates)
+		if cols[i].Given != "" {
+			for j, c := range l.Candidates {
 				row[j] = c.Section.Name() == cols[i].Given
 			}
 		}
@@ -116,6 +111,20 @@ func newRules(t *testing.T, e *search.Engine, cols []design.Column, o *Options) 
 		ru.above = append(ru.above, up)
 	}
 	return ru
+}
+
+// passing says which candidates a column may have.
+func passing(t *testing.T, col *design.Column, set *design.Settings, candidates []*ec3.Candidate) []bool {
+	t.Helper()
+	m, err := ec3.NewMember(col, set)
+	require.NoError(t, err)
+	var a ec3.Assessment
+	out := make([]bool, len(candidates))
+	for j, c := range candidates {
+		m.Assess(c, &a)
+		out[j] = ec3.Passes(a.Utilisation, 1)
+	}
+	return out
 }
 
 // splice says whether the section may change above a length.

@@ -30,15 +30,7 @@ func newGraded(t *testing.T, e *search.Engine, cols []design.Column) *graded {
 	require.NoError(t, err)
 	g := &graded{cols: cols, candidates: l.Candidates, objective: e.Objective}
 	for i := range cols {
-		m, err := ec3.NewMember(&cols[i], &set)
-		require.NoError(t, err)
-		var a ec3.Assessment
-		row := make([]bool, len(l.Candidates))
-		for j, c := range l.Candidates {
-			m.Assess(c, &a)
-			row[j] = ec3.Passes(a.Utilisation, 1)
-		}
-		g.passes = append(g.passes, row)
+		g.passes = append(g.passes, passing(t, &cols[i], &set, l.Candidates))
 	}
 	return g
 }

@@ -24,7 +24,7 @@ type Decision struct {
 
 	Saved  float64 // what the same columns would cost new: kg, cost or carbon
 	Bound  float64 // no assignment saves more
-	Proven bool    // Saved is the most
+	Proven bool    // Saved is the most; where columns are tied, with the sections decided for them
 }
 
 // Size assigns pieces of steel at hand to columns so that the least new steel

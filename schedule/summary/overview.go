@@ -14,7 +14,7 @@ type page struct{ *workbook.Page }
 
 // summarySheet is the page that says what was run, and what came of it.
 func summarySheet(info *Info, t *Tally) workbook.Sheet {
-	p := &page{workbook.NewPage(SummarySheet, "Column design: summary", 26, 30, 18, 14, 36)}
+	p := &page{workbook.NewPage(SummarySheet, "Column design: summary", 26, 30, 28, 14, 26)}
 	p.Footer = info.File
 	p.Blank()
 	for _, pair := range [][2]string{
