@@ -29,7 +29,7 @@ func tie(cols []design.Column, all []stack) *plan {
 	b := newBonds(len(cols))
 	byGroup := map[string]int{}
 	for i := range cols {
-		if g := cols[i].Group; g != "" {
+		if g := design.FoldName(cols[i].Group); g != "" {
 			if k, ok := byGroup[g]; ok {
 				b.join(k, i)
 			} else {

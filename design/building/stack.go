@@ -48,10 +48,11 @@ func lines(cols []design.Column, o *Options) [][]int {
 		if c.Stack == "" || o.Splices == AsScheduled && !c.SpliceSaid {
 			continue
 		}
-		k, ok := place[c.Stack]
+		name := design.FoldName(c.Stack)
+		k, ok := place[name]
 		if !ok {
 			k = len(all)
-			place[c.Stack] = k
+			place[name] = k
 			all = append(all, nil)
 		}
 		all[k] = append(all[k], i)
@@ -160,9 +161,6 @@ func named(level string) string {
 	return level
 }
 
-// level makes names of levels comparable.
-func level(name string) string { return strings.ToLower(strings.Join(strings.Fields(name), " ")) }
-
 // double names two lengths that begin or end at the same level.
 func double(cols []design.Column, line []int) string {
 	for _, of := range []func(*design.Column) string{
@@ -171,7 +169,7 @@ func double(cols []design.Column, line []int) string {
 	} {
 		first := map[string]int{}
 		for _, i := range line {
-			l := level(of(&cols[i]))
+			l := design.FoldLevel(of(&cols[i]))
 			if l == "" {
 				continue
 			}
@@ -189,22 +187,22 @@ func double(cols []design.Column, line []int) string {
 func joined(cols []design.Column, line []int) [][]int {
 	from, to := map[string]int{}, map[string]bool{}
 	for _, i := range line {
-		if l := level(cols[i].From); l != "" {
+		if l := design.FoldLevel(cols[i].From); l != "" {
 			from[l] = i
 		}
-		to[level(cols[i].To)] = true
+		to[design.FoldLevel(cols[i].To)] = true
 	}
 	seen := map[int]bool{}
 	var parts [][]int
 	for _, i := range line {
-		if l := level(cols[i].From); l != "" && to[l] {
+		if l := design.FoldLevel(cols[i].From); l != "" && to[l] {
 			continue // stands on another
 		}
 		var part []int
 		for next, ok := i, true; ok && !seen[next]; {
 			seen[next] = true
 			part = append(part, next)
-			l := level(cols[next].To)
+			l := design.FoldLevel(cols[next].To)
 			next, ok = from[l]
 			ok = ok && l != ""
 		}
@@ -246,11 +244,11 @@ func Tied(cols []design.Column, o *Options, set *design.Settings) []bool {
 	members := map[string]int{}
 	for i := range cols {
 		if g := cols[i].Group; g != "" {
-			members[g]++
+			members[design.FoldName(g)]++
 		}
 	}
 	for i := range cols {
-		out[i] = members[cols[i].Group] > 1
+		out[i] = members[design.FoldName(cols[i].Group)] > 1
 	}
 	all, _ := stacks(cols, o, set)
 	for _, s := range all {

@@ -30,6 +30,7 @@ func TestLengthsAreOrderedByLevel(t *testing.T) {
 		"bottom up":        {[][2]string{{"GF", "L1"}, {"L1", "L2"}, {"L2", "Roof"}}, [][]int{{0, 1, 2}}, ""},
 		"top down":         {[][2]string{{"L2", "Roof"}, {"L1", "L2"}, {"GF", "L1"}}, [][]int{{2, 1, 0}}, ""},
 		"any order":        {[][2]string{{"l1", "L2"}, {"L2 ", "roof"}, {"GF", "L1"}}, [][]int{{2, 0, 1}}, ""},
+		"one height":       {[][2]string{{"0", "+3.90"}, {"3.9", "Roof"}}, [][]int{{0, 1}}, ""},
 		"heights, no tops": {[][2]string{{"+7.200", ""}, {"0.000", ""}, {"+3.6", ""}}, [][]int{{1, 2, 0}}, ""},
 		"heights and gap":  {[][2]string{{"10", "14"}, {"0", "4"}, {"4", "8"}}, [][]int{{1, 2, 0}}, ""},
 		"no levels":        {[][2]string{{"", ""}, {"", ""}}, [][]int{{0, 1}}, "as listed"},
@@ -52,6 +53,18 @@ func TestLengthsAreOrderedByLevel(t *testing.T) {
 			}
 		})
 	}
+}
+
+// A stack is one however it is spelled, as in the take-off and where own weight
+// goes down it.
+func TestSpellingsOfAStack(t *testing.T) {
+	cols := levels([2]string{"GF", "L1"}, [2]string{"L1", "L2"})
+	cols[0].Stack, cols[1].Stack = "A 1", "a  1"
+	all, _ := stacks(cols, &Options{}, &design.Settings{})
+	require.Len(t, all, 1)
+	assert.Equal(t, []int{0, 1}, all[0].lengths)
+	cols[0].Group, cols[1].Group = "Edge", "edge"
+	assert.Len(t, tie(cols, nil).sets, 1)
 }
 
 // Only stacks for which the schedule speaks of splices are joined, unless the

@@ -4,8 +4,6 @@ import (
 	"cmp"
 	"fmt"
 	"slices"
-	"strconv"
-	"strings"
 
 	"stanchion/design"
 )
@@ -34,9 +32,9 @@ func stand(cols []design.Column) standing {
 			lines[name] = append(lines[name], i)
 		}
 	}
-	for name, line := range lines {
+	for _, line := range lines {
 		if len(line) > 1 {
-			s.order(cols, name, line)
+			s.order(cols, nameOf(&cols[line[0]]), line)
 		}
 	}
 	return s
@@ -50,25 +48,20 @@ func Stand(cols []design.Column) (below, above []int) {
 	return s.below, s.above
 }
 
-// lineOf names the column line of a length; empty where it is in none.
+// lineOf tells the column line of a length; empty where it is in none.
 func lineOf(col *design.Column) string {
-	switch {
-	case col.Stack != "":
-		return "stack " + col.Stack
-	case col.Mark != "" && col.From != "" && col.To != "":
-		return "mark " + col.Mark
+	if col.Stack == "" && (col.Mark == "" || col.From == "" || col.To == "") {
+		return ""
 	}
-	return ""
+	return design.LineOf(col.Stack, col.Mark)
 }
 
-// level makes two spellings of a level alike: "Level 1" and "level  1", "+3.90"
-// and "3.9".
-func level(name string) string {
-	name = strings.Join(strings.Fields(strings.ToLower(name)), " ")
-	if v, err := strconv.ParseFloat(strings.TrimPrefix(name, "+"), 64); err == nil {
-		return strconv.FormatFloat(v, 'g', -1, 64)
+// nameOf names the column line of a length as the schedule does.
+func nameOf(col *design.Column) string {
+	if col.Stack != "" {
+		return "stack " + col.Stack
 	}
-	return name
+	return "mark " + col.Mark
 }
 
 // order joins the lengths of one line.
@@ -80,15 +73,15 @@ func (s *standing) order(cols []design.Column, name string, line []int) {
 			s.byForce(cols, name, line)
 			return
 		}
-		if _, taken := ends[level(c.To)]; taken {
+		if _, taken := ends[design.FoldLevel(c.To)]; taken {
 			s.apart(line, fmt.Sprintf("%s: two lengths end at level %s: each is designed on its own", name, c.To))
 			return
 		}
-		ends[level(c.To)] = i
+		ends[design.FoldLevel(c.To)] = i
 	}
 	bases := 0
 	for _, i := range line {
-		j, ok := ends[level(cols[i].From)]
+		j, ok := ends[design.FoldLevel(cols[i].From)]
 		if !ok {
 			bases++
 			continue

@@ -91,7 +91,7 @@ func parts(sets []Chosen, s *standing) (alone []Chosen, clusters [][]Chosen) {
 // compareColumns is an order of lengths that does not depend on the order of
 // the schedule, as far as their names tell them apart.
 func compareColumns(a, b *design.Column) int {
-	return cmp.Or(cmp.Compare(lineOf(a), lineOf(b)), cmp.Compare(level(a.From), level(b.From)),
+	return cmp.Or(cmp.Compare(lineOf(a), lineOf(b)), cmp.Compare(design.FoldLevel(a.From), design.FoldLevel(b.From)),
 		cmp.Compare(a.Mark, b.Mark), cmp.Compare(a.Length, b.Length))
 }
 

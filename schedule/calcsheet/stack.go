@@ -66,12 +66,7 @@ func Stacks(sheets []*working.Sheet, missing []Missing, rule building.Options) [
 }
 
 // lineOf tells the columns apart that may stand on each other.
-func lineOf(c *design.Column) string {
-	if c.Stack != "" {
-		return "stack " + c.Stack
-	}
-	return "mark " + c.Mark
-}
+func lineOf(c *design.Column) string { return design.LineOf(c.Stack, c.Mark) }
 
 // standing puts the lengths of a column line, those with a sheet first, on each
 // other. Gaps are left out that would take apart what stands together without

@@ -92,7 +92,7 @@ func (c *changes) number(k Kind, name, unit string, a, b float64) {
 }
 
 func (c *changes) words(k Kind, name, a, b string) {
-	if fold(a) == fold(b) {
+	if design.FoldName(a) == design.FoldName(b) {
 		return
 	}
 	if a == "" {

@@ -84,7 +84,7 @@ func likeness(col *design.Column) string {
 		heights(col.Y.Restraints), heights(col.Z.Restraints), heights(col.Torsion.Restraints), col.Y.Lcr, col.Z.Lcr, col.Y.K, col.Z.K, float64(col.Quantity))
 	for i := range col.Combinations {
 		c := &col.Combinations[i]
-		fmt.Fprintf(&b, "|%s %.6g %s %.6g %.6g %.6g %.6g %.6g %.6g %.6g %.6g", fold(c.Name), c.NEd, stepsOf(c), c.My.Bottom, c.My.Top, c.Mz.Bottom, c.Mz.Top,
+		fmt.Fprintf(&b, "|%s %.6g %s %.6g %.6g %.6g %.6g %.6g %.6g %.6g %.6g", design.FoldName(c.Name), c.NEd, stepsOf(c), c.My.Bottom, c.My.Top, c.Mz.Bottom, c.Mz.Top,
 			c.FlangeA, c.FlangeB, c.WebA, c.WebB)
 	}
 	return b.String()

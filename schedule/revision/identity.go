@@ -21,10 +21,10 @@ func identityOf(col *design.Column, p parts) identity {
 		id.mark = markOf(col)
 	}
 	if p.stack {
-		id.stack = fold(col.Stack)
+		id.stack = design.FoldName(col.Stack)
 	}
 	if p.levels {
-		id.from, id.to = fold(col.From), fold(col.To)
+		id.from, id.to = design.FoldLevel(col.From), design.FoldLevel(col.To)
 	}
 	return id
 }
@@ -39,11 +39,8 @@ func markOf(col *design.Column) string {
 	if col.Mark == col.Cell {
 		return ""
 	}
-	return fold(col.Mark)
+	return design.FoldName(col.Mark)
 }
-
-// fold brings a name into the form under which two of them are the same.
-func fold(s string) string { return strings.ToLower(strings.Join(strings.Fields(s), " ")) }
 
 // commonParts finds which parts of the identity both issues have: a column that
 // only one of them keeps tells nothing.

@@ -22,7 +22,7 @@ func (c *changes) loads(a, b []design.Combination) {
 		return
 	}
 	for i := range b {
-		j := slices.IndexFunc(a, func(o design.Combination) bool { return fold(o.Name) == fold(b[i].Name) })
+		j := slices.IndexFunc(a, func(o design.Combination) bool { return design.FoldName(o.Name) == design.FoldName(b[i].Name) })
 		if j < 0 {
 			c.add(Load, "combination %s is new: N_Ed %s kN", named(b[i].Name), figures(b[i].NEd/1e3))
 			continue
@@ -30,14 +30,14 @@ func (c *changes) loads(a, b []design.Combination) {
 		c.combination(b[i].Name, &a[j], &b[i])
 	}
 	for i := range a {
-		if !slices.ContainsFunc(b, func(o design.Combination) bool { return fold(o.Name) == fold(a[i].Name) }) {
+		if !slices.ContainsFunc(b, func(o design.Combination) bool { return design.FoldName(o.Name) == design.FoldName(a[i].Name) }) {
 			c.add(Load, "combination %s is gone: N_Ed was %s kN", named(a[i].Name), figures(a[i].NEd/1e3))
 		}
 	}
 }
 
 func nameOfBoth(a, b *design.Combination) string {
-	if fold(a.Name) == fold(b.Name) {
+	if design.FoldName(a.Name) == design.FoldName(b.Name) {
 		return b.Name
 	}
 	return ""

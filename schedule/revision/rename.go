@@ -31,7 +31,7 @@ func Rename(old, new []Member, list []Renaming) error {
 	parts := map[string]string{}
 	members := map[string]*design.Column{}
 	for _, r := range list {
-		a, b := fold(r.Old), fold(r.New)
+		a, b := design.FoldName(r.Old), design.FoldName(r.New)
 		switch {
 		case before.parts[a] && n.parts[b]:
 			parts[a] = r.New
@@ -47,12 +47,12 @@ func Rename(old, new []Member, list []Renaming) error {
 	}
 	for i := range old {
 		col := &old[i].Column
-		if to := members[fold(old[i].Name())]; to != nil {
+		if to := members[design.FoldName(old[i].Name())]; to != nil {
 			col.Mark, col.Stack, col.From, col.To = to.Mark, to.Stack, to.From, to.To
 			continue
 		}
 		for _, name := range []*string{&col.Mark, &col.Stack, &col.From, &col.To} {
-			if to, ok := parts[fold(*name)]; ok {
+			if to, ok := parts[design.FoldName(*name)]; ok {
 				*name = to
 			}
 		}
@@ -71,9 +71,9 @@ func namesOf(members []Member) names {
 	for i := range members {
 		col := &members[i].Column
 		for _, name := range []string{col.Mark, col.Stack, col.From, col.To} {
-			n.parts[fold(name)] = true
+			n.parts[design.FoldName(name)] = true
 		}
-		n.members[fold(members[i].Name())] = col
+		n.members[design.FoldName(members[i].Name())] = col
 	}
 	return n
 }

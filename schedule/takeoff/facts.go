@@ -5,6 +5,8 @@ import (
 	"fmt"
 	"slices"
 	"strings"
+
+	"stanchion/design"
 )
 
 // Facts are what there is to say of the whole beside its amounts, as pairs of
@@ -70,7 +72,7 @@ func (t *TakeOff) SpliceKinds() []Splice {
 	place := map[kind]int{}
 	var list []Splice
 	for _, s := range t.Splices {
-		k := kind{fold(s.Level), s.Lower, s.Upper}
+		k := kind{design.FoldLevel(s.Level), s.Lower, s.Upper}
 		n, ok := place[k]
 		if !ok {
 			n = len(list)
@@ -81,10 +83,10 @@ func (t *TakeOff) SpliceKinds() []Splice {
 	}
 	rank := map[string]int{}
 	for i := range t.Levels {
-		rank[fold(t.Levels[i].To)] = i
+		rank[design.FoldLevel(t.Levels[i].To)] = i
 	}
 	slices.SortStableFunc(list, func(a, b Splice) int {
-		return cmp.Or(cmp.Compare(rank[fold(a.Level)], rank[fold(b.Level)]), strings.Compare(a.Lower, b.Lower), strings.Compare(a.Upper, b.Upper))
+		return cmp.Or(cmp.Compare(rank[design.FoldLevel(a.Level)], rank[design.FoldLevel(b.Level)]), strings.Compare(a.Lower, b.Lower), strings.Compare(a.Upper, b.Upper))
 	})
 	return list
 }

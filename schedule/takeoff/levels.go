@@ -3,7 +3,8 @@ package takeoff
 import (
 	"cmp"
 	"slices"
-	"strings"
+
+	"stanchion/design"
 )
 
 // levelOrder ranks the names of levels from the lowest to the highest, as the
@@ -14,9 +15,6 @@ type levelOrder struct {
 	rank  []int
 }
 
-// fold brings a name into the form under which two of them are the same.
-func fold(s string) string { return strings.ToLower(strings.Join(strings.Fields(s), " ")) }
-
 func newLevelOrder(items []Item) *levelOrder {
 	o := &levelOrder{index: map[string]int{}}
 	var above [][]int // by level: those at the tops of lengths that stand on it
@@ -25,7 +23,7 @@ func newLevelOrder(items []Item) *levelOrder {
 	for i := range items {
 		var ends [2]int
 		for k, name := range [...]string{items[i].From, items[i].To} {
-			key := fold(name)
+			key := design.FoldLevel(name)
 			n, ok := o.index[key]
 			if !ok {
 				n = len(o.index)
@@ -78,8 +76,8 @@ func (o *levelOrder) climb(above [][]int, below []int) {
 // compare orders two pairs of levels: by the lower one, then by the upper one,
 // then by name.
 func (o *levelOrder) compare(fromA, toA, fromB, toB string) int {
-	a, b := o.index[fold(fromA)], o.index[fold(fromB)]
-	c, d := o.index[fold(toA)], o.index[fold(toB)]
+	a, b := o.index[design.FoldLevel(fromA)], o.index[design.FoldLevel(fromB)]
+	c, d := o.index[design.FoldLevel(toA)], o.index[design.FoldLevel(toB)]
 	return cmp.Or(
 		cmp.Compare(o.rank[a], o.rank[b]), cmp.Compare(o.rank[c], o.rank[d]),
 		cmp.Compare(a, b), cmp.Compare(c, d),

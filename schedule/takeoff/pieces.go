@@ -6,6 +6,7 @@ import (
 	"strings"
 
 	"stanchion/catalogue"
+	"stanchion/design"
 	"stanchion/design/building"
 )
 
@@ -112,12 +113,7 @@ func storeys(above []int) []int {
 
 // line names the column line that a length belongs to: its stack or, where
 // there is none, its mark.
-func (it *Item) line() string {
-	if it.Stack != "" {
-		return "stack " + fold(it.Stack)
-	}
-	return "mark " + fold(it.Mark)
-}
+func (it *Item) line() string { return design.LineOf(it.Stack, it.Mark) }
 
 // stackLinks finds, for every length, the one that stands on it: of the same
 // column line, and starting at the level where this one ends. -1: none. Where
@@ -135,16 +131,16 @@ func stackLinks(items []Item) []int {
 	}
 	for i := range items {
 		it := &items[i]
-		if it.From == "" || it.To == "" || fold(it.From) == fold(it.To) {
+		if it.From == "" || it.To == "" || design.FoldLevel(it.From) == design.FoldLevel(it.To) {
 			continue
 		}
-		count(feet, foot{it.line(), fold(it.From)}, i)
-		count(heads, foot{it.line(), fold(it.To)}, i)
+		count(feet, foot{it.line(), design.FoldLevel(it.From)}, i)
+		count(heads, foot{it.line(), design.FoldLevel(it.To)}, i)
 	}
 	above := make([]int, len(items))
 	for i := range items {
 		above[i] = -1
-		place := foot{items[i].line(), fold(items[i].To)}
+		place := foot{items[i].line(), design.FoldLevel(items[i].To)}
 		if j, ok := feet[place]; ok && j >= 0 && heads[place] == i {
 			above[i] = j
 		}

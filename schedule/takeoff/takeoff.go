@@ -162,7 +162,7 @@ func (t *TakeOff) byLevel(items []Item, one []Amounts) {
 	place := map[key]int{}
 	for i := range items {
 		it := &items[i]
-		k := key{fold(it.From), fold(it.To)}
+		k := key{design.FoldLevel(it.From), design.FoldLevel(it.To)}
 		n, ok := place[k]
 		if !ok {
 			n = len(t.Levels)
